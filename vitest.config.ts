@@ -1,0 +1,32 @@
+import react from '@vitejs/plugin-react';
+import { defineConfig } from 'vitest/config';
+
+/** Packages are read from their sources, so no build is needed before a test. */
+const conditions = ['@cairnstep/source'];
+const shared = { resolve: { conditions }, ssr: { resolve: { conditions, externalConditions: conditions } } };
+
+/** Tests against real servers: one file at a time per worker, longer limits because a database is cloned first. */
+const integration = { environment: 'node' as const, testTimeout: 60_000, hookTimeout: 120_000, maxWorkers: 2 };
+
+export default defineConfig({
+  test: {
+    projects: [
+      {
+        ...shared,
+        test: {
+          name: 'unit',
+          include: ['packages/*/src/**/*.test.ts', 'services/{api,fake-oidc,mail-catcher}/src/**/*.test.ts', 'infra/**/*.test.ts'],
+          testTimeout: 60_000,
+        },
+      },
+      {
+        ...shared,
+        plugins: [react()],
+        test: { name: 'web', include: ['services/web/src/**/*.test.{ts,tsx}'], environment: 'happy-dom', testTimeout: 30_000 },
+      },
+      { ...shared, test: { name: 'api', include: ['tests/api/**/*.test.ts'], ...integration } },
+      { ...shared, test: { name: 'database', include: ['tests/database/**/*.test.ts'], ...integration } },
+      { ...shared, test: { name: 'sign-in', include: ['tests/sign-in/**/*.test.ts'], ...integration } },
+    ],
+  },
+});
