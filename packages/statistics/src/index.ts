@@ -1,1 +1,4 @@
-export {};
+/** Estimates, intervals and tests for the registry. Every function is pure and answers with n, what was left out and the method used. */
+export * from './result.ts';
+export * from './samples.ts';
+export * from './method-pages/index.ts';
