@@ -1,1 +1,11 @@
-export {};
+export * from './account.ts';
+export * from './audit.ts';
+export * from './endpoint.ts';
+export * from './endpoints.ts';
+export * from './explore.ts';
+export * from './health.ts';
+export * from './people.ts';
+export * from './problems.ts';
+export * from './requests.ts';
+export * from './submissions.ts';
+export * from './vocabulary.ts';
