@@ -27,6 +27,11 @@ export const verifyAudit = endpoint({
   path: '/api/audit/verification',
   summary: 'Recompute the chain and say whether it holds',
   body: z.strictObject({}),
-  response: z.strictObject({ entries: z.number().int(), holds: z.boolean(), firstBrokenSeq: z.number().int().nullable(), head: z.string().nullable() }),
+  response: z.strictObject({
+    entries: z.number().int(),
+    holds: z.boolean(),
+    firstBrokenSeq: z.number().int().nullable(),
+    head: z.string().nullable(),
+  }),
   problems: [],
 });

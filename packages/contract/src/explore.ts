@@ -1,9 +1,10 @@
 /** Cohort statistics from a frozen release, disclosure-controlled. */
 import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
-import { Id, Instant } from './vocabulary.ts';
+import { Id, Instant, Site } from './vocabulary.ts';
 
-export const grades = ['A', 'B', 'C', 'D', 'E'] as const;
+/** ND: the grade, or whether the person counts as A to E at all, cannot be determined. */
+export const grades = ['A', 'B', 'C', 'D', 'E', 'ND'] as const;
 export const Grade = z.enum(grades);
 
 export const Release = z.strictObject({
@@ -22,10 +23,11 @@ export const Cell = z.discriminatedUnion('state', [
   z.strictObject({
     state: z.literal('shown'),
     n: z.number().int(),
-    /** Mean change from baseline to end of course in the outcome's unit, with a two-sided 95 % interval from the t distribution. */
+    /** Mean of the chosen statistic in the outcome's unit. */
     mean: z.number(),
-    sd: z.number(),
-    interval: z.strictObject({ lower: z.number(), upper: z.number() }),
+    /** Sample SD and two-sided 95 % t interval; null where n = 1 or all values are equal. */
+    sd: z.number().nullable(),
+    interval: z.strictObject({ lower: z.number(), upper: z.number() }).nullable(),
   }),
 ]);
 export type Cell = z.output<typeof Cell>;
@@ -39,8 +41,15 @@ export const Outcome = z.strictObject({
   inDevice: z.boolean(),
 });
 
+/** `change` is end of course minus baseline in people with both. */
+export const GridStatistic = z.enum(['change', 'baseline', 'end']);
+
 export const Grid = z.strictObject({
-  release: Release,
+  /** The release the figures come from; null for a site's own, live figures. */
+  release: Release.nullable(),
+  /** Set when these are the exact, live figures of one's own site. */
+  site: Site.nullable(),
+  statistic: GridStatistic,
   outcome: Outcome,
   grades: z.array(Grade),
   rows: z.array(z.strictObject({ levelGroup: z.string(), label: z.string(), cells: z.array(Cell), total: Cell })),
@@ -64,7 +73,14 @@ export const getGrid = endpoint({
   method: 'GET',
   path: '/api/explore/grid',
   summary: 'Mean change by level group and AIS grade for one outcome',
-  query: z.strictObject({ outcome: z.string().max(40), inDevice: z.enum(['yes', 'no']).default('no'), release: z.coerce.number().int().min(1).optional() }),
+  query: z.strictObject({
+    outcome: z.string().max(40),
+    inDevice: z.enum(['yes', 'no']).default('no'),
+    statistic: GridStatistic.default('change'),
+    release: z.coerce.number().int().min(1).optional(),
+    /** Own site's exact live figures instead of the registry's. */
+    siteId: Id.optional(),
+  }),
   response: Grid,
   problems: ['not-found'],
 });

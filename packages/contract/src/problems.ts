@@ -9,7 +9,7 @@ export const problems = {
   'invalid-input': { status: 400, title: 'Some of what was sent cannot be used' },
   'too-large': { status: 413, title: 'The request is larger than is accepted' },
   'too-many-requests': { status: 429, title: 'Too many requests in a short time' },
-  'busy': { status: 503, title: 'The registry is busy or being restarted' },
+  busy: { status: 503, title: 'The registry is busy or being restarted' },
   'internal-error': { status: 500, title: 'Something failed on our side' },
   'provider-unavailable': { status: 503, title: 'The sign-in service of your organisation does not answer' },
   'sign-in-failed': { status: 400, title: 'Signing in did not work' },

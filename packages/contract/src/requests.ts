@@ -155,7 +155,9 @@ export const getReach = endpoint({
     inCohort: z.number().int().nullable(),
     consenting: z.number().int().nullable(),
     /** For stewards: refused and open counts by reason. */
-    reasons: z.array(z.strictObject({ reason: z.string(), verdict: z.enum(['not_permitted', 'manual_review']), participants: z.number().int() })),
+    reasons: z.array(
+      z.strictObject({ reason: z.string(), verdict: z.enum(['not_permitted', 'manual_review']), participants: z.number().int() }),
+    ),
   }),
   problems: ['not-found'],
 });

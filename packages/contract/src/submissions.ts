@@ -224,7 +224,14 @@ export const commitSubmission = endpoint({
   params: SubmissionParams,
   body: z.strictObject({ previewDigest: Digest }),
   response: SubmissionReceipt,
-  problems: ['not-found', 'submission-closed', 'submission-busy', 'submission-stale', 'submission-has-errors', 'submission-has-open-warnings'],
+  problems: [
+    'not-found',
+    'submission-closed',
+    'submission-busy',
+    'submission-stale',
+    'submission-has-errors',
+    'submission-has-open-warnings',
+  ],
 });
 
 export const getReceipt = endpoint({
