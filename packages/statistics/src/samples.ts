@@ -23,7 +23,8 @@ export interface PairedSample {
 
 type Fitness = 'usable' | keyof LeftOut;
 
-function fitness(value: Observation): Fitness {
+/** Whether a recorded value can be computed with, and if not, why. */
+export function fitness(value: Observation): Fitness {
   if (value === null || value === undefined) return 'missing';
   if (value === 'unable') return 'unable';
   return Number.isFinite(value) ? 'usable' : 'nonFinite';
