@@ -1,16 +1,28 @@
 /**
- * Chooses the further places to hide.
+ * Chooses the further places to hide, at the least number of people hidden.
  *
- * A place that is still too exposed is cut off from wider values by a smallest cut of the network; at least one more place on that
- * cut has to be hidden. The cheapest chain of places across the cut is hidden, until nothing is exposed; then every choice that turns
- * out not to be needed is shown again, dearest first.
+ * A place that is still exposed is cut off from wider values by a smallest cut of the network, and every safe pattern must hide at
+ * least one more place across that cut. Two steps use this:
+ *
+ * 1. A good pattern: hide the cheapest chain across the cut, until nothing is exposed; then show again, dearest first, what turns out
+ *    not to be needed.
+ * 2. The best pattern: collect the cuts as sets of which one place each must go, take the cheapest choice that satisfies all sets
+ *    collected so far, and add the cuts of whatever that choice leaves exposed. The first choice that leaves nothing exposed is the
+ *    cheapest pattern there is, since every safe pattern satisfies all sets. A fixed number of branches ends hard cases with the
+ *    best pattern met.
+ *
+ * Source of the cuts: Fischetti M, Salazar JJ (1999), Models and algorithms for the 2-dimensional cell suppression problem in
+ * statistical disclosure control, Math Program 84:283-312.
  */
 import type { TableWithTotals } from './count-table.ts';
 import { placeAt } from './count-table.ts';
+import { cheapestChain } from './cheapest-chain.ts';
 import type { Knowledge } from './interval-audit.ts';
-import type { ProtectionRule, Weakness } from './protection-rule.ts';
-import { weaknesses } from './protection-rule.ts';
-import type { TableNetwork } from './table-network.ts';
+import type { SearchBudget } from './least-cost-cover.ts';
+import { leastCostCover } from './least-cost-cover.ts';
+import type { ProtectionProblem, Weakness } from './protection-problem.ts';
+import { hasRoom, weaknesses } from './protection-problem.ts';
+import type { Flow } from './table-network.ts';
 import { endOf, tableNetwork } from './table-network.ts';
 
 export interface Complement {
@@ -18,16 +30,9 @@ export interface Complement {
   readonly provenLeast: boolean;
 }
 
-/** What the choice works on. */
-interface Problem {
-  readonly table: TableWithTotals;
-  readonly network: TableNetwork;
-  readonly required: readonly boolean[];
-  readonly knowledgeAt: (position: number) => Knowledge;
-  readonly rule: ProtectionRule;
-  /** People hidden, per place that may be hidden besides the required ones. */
-  readonly costs: (number | undefined)[];
-}
+/** Enough for every table of the size of a published page; larger ones end with the best pattern met. */
+const BRANCHES = 20_000;
+const ROUNDS = 60;
 
 /**
  * @param required places that are hidden in any case
@@ -37,11 +42,11 @@ export function chooseComplement(
   table: TableWithTotals,
   required: readonly boolean[],
   knowledgeAt: (position: number) => Knowledge,
-  rule: ProtectionRule,
+  smallestShown: number,
 ): Complement | undefined {
-  const problem: Problem = { table, network: tableNetwork(table), required, knowledgeAt, rule, costs: hidingCosts(table, required) };
-  if (!dropHopeless(problem)) return undefined;
-  return { hidden: withoutNeedless(problem, greedily(problem)), provenLeast: false };
+  const network = tableNetwork(table);
+  const problem = withoutHopeless({ table, network, smallestShown, required, knowledgeAt, costs: hidingCosts(table, required) });
+  return problem === undefined ? undefined : cheapest(problem, goodPattern(problem, required));
 }
 
 /** A total costs more than all cells together, so totals go only when cells cannot do it. */
@@ -55,120 +60,109 @@ function hidingCosts(table: TableWithTotals, required: readonly boolean[]): (num
   });
 }
 
-function exposed(problem: Problem, hidden: readonly boolean[], onlyFirst: boolean): Weakness[] {
-  return weaknesses(problem.table, problem.network, hidden, problem.knowledgeAt, problem.rule, onlyFirst);
+/** Hiding more only widens intervals: what is exposed with everything hidden can never be hidden safely, so it must stay shown. */
+function withoutHopeless(problem: ProtectionProblem): ProtectionProblem | undefined {
+  const everything = problem.required.map((isRequired, position) => isRequired || problem.costs[position] !== undefined);
+  const hopeless = new Set(weaknesses(problem, everything).map(({ position }) => position));
+  if (hopeless.size === 0) return problem;
+  if (problem.required.some((isRequired, position) => isRequired && hopeless.has(position))) return undefined;
+  return withoutHopeless({ ...problem, costs: problem.costs.map((cost, position) => (hopeless.has(position) ? undefined : cost)) });
 }
 
-/** Hiding more only widens intervals: what is exposed with everything hidden can never be hidden safely. False if a required one is. */
-function dropHopeless(problem: Problem): boolean {
+/** Adds cheapest chains until nothing is exposed, then takes back what is not needed. */
+function goodPattern(problem: ProtectionProblem, start: readonly boolean[]): boolean[] {
+  const hidden = [...start];
   for (;;) {
-    const everything = problem.required.map((isRequired, position) => isRequired || problem.costs[position] !== undefined);
-    const hopeless = exposed(problem, everything, false);
-    if (hopeless.length === 0) return true;
-    if (hopeless.some(({ position }) => problem.required[position] === true)) return false;
-    for (const { position } of hopeless) problem.costs[position] = undefined;
-  }
-}
-
-function greedily(problem: Problem): boolean[] {
-  const hidden = [...problem.required];
-  for (;;) {
-    const [weakness] = exposed(problem, hidden, true);
-    if (weakness === undefined) return hidden;
+    const [weakness] = weaknesses(problem, hidden, true);
+    if (weakness === undefined) return withoutNeedless(problem, hidden);
     for (const position of cheapestChain(problem, weakness, hidden)) hidden[position] = true;
   }
 }
 
-/** Shown places whose hiding lets the exposed place widen further; growing is preferred to shrinking at equal cost. */
-function cheapestChain(problem: Problem, weakness: Weakness, hidden: readonly boolean[]): readonly number[] {
-  const { position, up, down, mustGrow } = weakness;
+function withoutNeedless(problem: ProtectionProblem, hidden: readonly boolean[]): boolean[] {
+  const kept = [...hidden];
+  const chosen = kept.flatMap((isHidden, position) => (isHidden && problem.required[position] !== true ? [position] : []));
+  chosen.sort((a, b) => costAt(problem, b) - costAt(problem, a) || b - a);
+  for (const position of chosen) {
+    kept[position] = false;
+    if (weaknesses(problem, kept, true).length > 0) kept[position] = true;
+  }
+  return kept;
+}
+
+function cheapest(problem: ProtectionProblem, good: readonly boolean[]): Complement {
+  const budget: SearchBudget = { branches: BRANCHES };
+  const sets: (readonly number[])[] = [];
+  let best = good;
+  for (let round = 0; round < ROUNDS; round++) {
+    const cover = leastCostCover(sets, (position) => costAt(problem, position), costOf(problem, best), budget);
+    if (cover === 'out-of-budget') break;
+    if (cover === undefined) return { hidden: best, provenLeast: true };
+    const hidden = [...problem.required];
+    for (const position of cover.items) hidden[position] = true;
+    const exposed = weaknesses(problem, hidden);
+    if (exposed.length === 0) return { hidden, provenLeast: true };
+    sets.push(...exposed.flatMap((weakness) => cutsAround(problem, weakness, hidden)));
+    const repaired = goodPattern(problem, hidden);
+    if (costOf(problem, repaired) < costOf(problem, best)) best = repaired;
+  }
+  return { hidden: best, provenLeast: false };
+}
+
+function costAt(problem: ProtectionProblem, position: number): number {
+  return problem.costs[position] ?? 0;
+}
+
+function costOf(problem: ProtectionProblem, hidden: readonly boolean[]): number {
+  return hidden.reduce((sum, isHidden, position) => sum + (isHidden ? costAt(problem, position) : 0), 0);
+}
+
+/** Sets of shown places of which at least one must be hidden: those across the cuts nearest to either end of the exposed place. */
+function cutsAround(problem: ProtectionProblem, weakness: Weakness, hidden: readonly boolean[]): number[][] {
+  const { position, up, down, canGrow, canShrink } = weakness;
   const from = problem.network.from[position] ?? 0;
   const to = problem.network.to[position] ?? 0;
-  const grow = shortestChain(problem, hidden, position, up.residual, to, from);
-  const shrink = mustGrow ? undefined : shortestChain(problem, hidden, position, down.residual, from, to);
-  const best = grow !== undefined && (shrink === undefined || grow.cost <= shrink.cost) ? grow : shrink;
-  if (best === undefined) throw new Error('A place is exposed although hiding everything would protect it.');
-  return best.positions;
+  const [growNear, growFar] = canGrow ? [nearSide(up), farSide(problem, up, from)] : [undefined, undefined];
+  const [shrinkNear, shrinkFar] = canShrink ? [nearSide(down), farSide(problem, down, to)] : [undefined, undefined];
+  return [
+    [growNear, shrinkFar],
+    [growFar, shrinkNear],
+  ].map((sides) => [...new Set(sides.flatMap((side) => (side === undefined ? [] : across(problem, side, position, hidden))))]);
 }
 
-interface Chain {
-  readonly cost: number;
-  readonly positions: readonly number[];
+function nearSide(flow: Flow): readonly boolean[] {
+  return flow.reachable;
 }
 
-/** Dijkstra over half-arcs: hidden places with room left cost nothing, shown ones what hiding them costs. */
-function shortestChain(
-  problem: Problem,
-  hidden: readonly boolean[],
-  around: number,
-  residual: Float64Array,
-  source: number,
-  sink: number,
-): Chain | undefined {
+/** Nodes from which the sink can no longer be reached. */
+function farSide(problem: ProtectionProblem, flow: Flow, sink: number): readonly boolean[] {
   const { network } = problem;
-  const distance = new Array<number>(network.nodes).fill(Number.POSITIVE_INFINITY);
-  const cameBy = new Int32Array(network.nodes).fill(-1);
-  const settled = new Array<boolean>(network.nodes).fill(false);
-  distance[source] = 0;
-  for (;;) {
-    const node = nearest(distance, settled);
-    if (node === undefined || node === sink) break;
-    settled[node] = true;
-    for (const halfArc of network.leaving[node] ?? []) {
-      const position = halfArc >> 1;
-      if (position === around) continue;
-      const length = hidden[position] === true ? lengthIfHidden(residual, halfArc) : lengthIfShown(problem, halfArc);
-      const next = endOf(network, halfArc);
-      const through = (distance[node] ?? 0) + length;
-      if (through < (distance[next] ?? 0)) {
-        distance[next] = through;
-        cameBy[next] = halfArc;
+  const reaches = new Array<boolean>(network.nodes).fill(false);
+  reaches[sink] = true;
+  const queue = [sink];
+  for (const node of queue) {
+    for (const leaving of network.leaving[node] ?? []) {
+      const towards = leaving ^ 1;
+      const before = endOf(network, leaving);
+      if (reaches[before] !== true && (flow.residual[towards] ?? 0) > 0) {
+        reaches[before] = true;
+        queue.push(before);
       }
     }
   }
-  const cost = distance[sink] ?? Number.POSITIVE_INFINITY;
-  if (cost === Number.POSITIVE_INFINITY) return undefined;
-  const positions: number[] = [];
-  for (let node = sink; node !== source;) {
-    const halfArc = cameBy[node] ?? -1;
-    if (hidden[halfArc >> 1] !== true) positions.push(halfArc >> 1);
-    node = endOf(network, halfArc ^ 1);
-  }
-  return { cost, positions };
+  return reaches.map((reached) => !reached);
 }
 
-function nearest(distance: readonly number[], settled: readonly boolean[]): number | undefined {
-  let best: number | undefined;
-  let bestDistance = Number.POSITIVE_INFINITY;
-  distance.forEach((far, node) => {
-    if (settled[node] !== true && far < bestDistance) {
-      best = node;
-      bestDistance = far;
-    }
-  });
-  return best;
-}
-
-function lengthIfHidden(residual: Float64Array, halfArc: number): number {
-  return (residual[halfArc] ?? 0) > 0 ? 0 : Number.POSITIVE_INFINITY;
-}
-
-/** What hiding a shown place costs, if it then has room to move in this direction. */
-function lengthIfShown(problem: Problem, halfArc: number): number {
-  const position = halfArc >> 1;
-  const value = problem.table.values[position] ?? 0;
-  const { least, most } = problem.knowledgeAt(position);
-  const hasRoom = (halfArc & 1) === 0 ? value < most : value > least;
-  return hasRoom ? (problem.costs[position] ?? Number.POSITIVE_INFINITY) : Number.POSITIVE_INFINITY;
-}
-
-function withoutNeedless(problem: Problem, hidden: readonly boolean[]): boolean[] {
-  const kept = [...hidden];
-  const chosen = kept.flatMap((isHidden, position) => (isHidden && problem.required[position] !== true ? [position] : []));
-  chosen.sort((a, b) => (problem.costs[b] ?? 0) - (problem.costs[a] ?? 0) || b - a);
-  for (const position of chosen) {
-    kept[position] = false;
-    if (exposed(problem, kept, true).length > 0) kept[position] = true;
-  }
-  return kept;
+/** Shown places that may be hidden and would then carry people from the inside of a cut to its outside. */
+function across(problem: ProtectionProblem, inside: readonly boolean[], around: number, hidden: readonly boolean[]): number[] {
+  const { network } = problem;
+  return network.leaving.flatMap((halfArcs, node) =>
+    inside[node] !== true
+      ? []
+      : halfArcs.flatMap((halfArc) => {
+          const position = halfArc >> 1;
+          const leads = inside[endOf(network, halfArc)] !== true && position !== around && hidden[position] !== true;
+          return leads && problem.costs[position] !== undefined && hasRoom(problem, halfArc) ? [position] : [];
+        }),
+  );
 }

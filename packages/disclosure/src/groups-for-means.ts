@@ -3,7 +3,7 @@
  *
  * The people with the outcome measured (n) are fewer than the people counted, and n is printed beside every mean, so the n's are a
  * table of counts of their own. They get the same protection, on top of what is hidden in the table of people: a group whose size is
- * hidden shows no figure either, and no total's mean may leave a hidden rest of 1 to 10 measured people (why: `protection-rule.ts`).
+ * hidden shows no figure either, and no total's mean may leave a hidden rest of 1 to 10 measured people (why: `protection-problem.ts`).
  * A reader also knows that nobody is measured who is not counted, which the protection takes into account.
  *
  * The number of people without the outcome is the count minus n. Where both are shown, so is that difference; it says that somebody

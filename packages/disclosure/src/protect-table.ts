@@ -10,7 +10,7 @@ import { flagsOf, perPlace, placeAt, positionOf, withTotals } from './count-tabl
 import type { HiddenInterval, Knowledge } from './interval-audit.ts';
 import { intervalAudit } from './interval-audit.ts';
 import { chooseComplement } from './choose-complement.ts';
-import { weaknesses } from './protection-rule.ts';
+import { weaknesses } from './protection-problem.ts';
 import { tableNetwork } from './table-network.ts';
 
 /** The one mark for every hidden figure: it does not tell a small count from one hidden to protect it. */
@@ -82,7 +82,7 @@ export function protectTable(table: CountTable, options: ProtectionOptions = {})
   const zerosShown = (position: number): Knowledge => ({ least: asked[position] === true ? 0 : 1, most: mostAt(position) });
   const zerosHidden = (position: number): Knowledge => ({ least: 0, most: mostAt(position) });
 
-  const choice = required[grand] === true ? undefined : chooseComplement(full, required, zerosShown, { smallestShown });
+  const choice = required[grand] === true ? undefined : chooseComplement(full, required, zerosShown, smallestShown);
   const flags = choice?.hidden ?? withholding(full, required[grand] === true, zerosHidden, smallestShown);
   const knowledgeAt = choice === undefined ? zerosHidden : zerosShown;
   const hidden = perPlace(full, (position) => flags[position] === true);
@@ -113,8 +113,9 @@ function withholding(
   smallestShown: number,
 ): boolean[] {
   const allButGrand = full.values.map((_, position) => position !== full.values.length - 1 || grandRequired);
-  const exposed = weaknesses(full, tableNetwork(full), allButGrand, knowledgeAt, { smallestShown }, true);
-  return exposed.length === 0 ? allButGrand : full.values.map(() => true);
+  const costs = full.values.map(() => undefined);
+  const problem = { table: full, network: tableNetwork(full), smallestShown, required: allButGrand, knowledgeAt, costs };
+  return weaknesses(problem, allButGrand, true).length === 0 ? allButGrand : full.values.map(() => true);
 }
 
 function placesWhere(full: TableWithTotals, flags: readonly boolean[]): Place[] {

@@ -1,0 +1,72 @@
+/**
+ * When a hidden place is safe, and what may be hidden to make it so.
+ *
+ * With `smallestShown` = 11 (counts 1 to 10 are not shown): the interval a reader can derive is at least 10 wide, and it reaches 11,
+ * so that the reader can neither pin the count down nor even tell that it is a small one.
+ *
+ * Why this also keeps means safe. A published mean or SD (with its n) of a total is a sum over its cells, so a reader can subtract the
+ * shown cells and is left with the mean of the hidden ones together; the same works for any rows minus any columns. Suppose such
+ * arithmetic isolates a set of hidden cells with s people in all. Then their counts add up to s in every table the reader considers,
+ * so none of them can exceed s. But every hidden cell's interval reaches at least `smallestShown`; hence s is at least
+ * `smallestShown`, and no set of 1 to 10 people stands alone. The argument needs every hidden place to be audited, the complementary
+ * ones as well, and it is why `protectTable` does so.
+ *
+ * What it does not cover: weighted differences that isolate nobody (the mean of one hidden cell minus the mean of another), and a
+ * reader who re-runs the choice of complementary cells in the head.
+ */
+import type { TableWithTotals } from './count-table.ts';
+import type { Knowledge } from './interval-audit.ts';
+import { hiddenCapacities, wideningFlows } from './interval-audit.ts';
+import type { Flow, TableNetwork } from './table-network.ts';
+
+export interface ProtectionProblem {
+  readonly table: TableWithTotals;
+  readonly network: TableNetwork;
+  /** Smallest count shown; 1 to one less are hidden. */
+  readonly smallestShown: number;
+  /** Places that are hidden in any case. */
+  readonly required: readonly boolean[];
+  /** What a reader knows about a place once it is hidden. */
+  readonly knowledgeAt: (position: number) => Knowledge;
+  /** What hiding a place costs; `undefined` where it must stay shown or is required anyway. */
+  readonly costs: readonly (number | undefined)[];
+}
+
+/** A hidden place that fails, with the flows that show why. */
+export interface Weakness {
+  readonly position: number;
+  readonly up: Flow;
+  readonly down: Flow;
+  /** Hiding more places can help by letting this one grow, or shrink. */
+  readonly canGrow: boolean;
+  readonly canShrink: boolean;
+}
+
+/** Hidden places that a reader could work out too closely; only the first if that is enough. Empty when the pattern is safe. */
+export function weaknesses(problem: ProtectionProblem, hidden: readonly boolean[], onlyFirst = false): Weakness[] {
+  const { table, network, smallestShown } = problem;
+  const capacities = hiddenCapacities(table, hidden, problem.knowledgeAt);
+  const found: Weakness[] = [];
+  for (const [position, isHidden] of hidden.entries()) {
+    if (!isHidden) continue;
+    const roomUp = capacities[2 * position] ?? 0;
+    const roomDown = capacities[2 * position + 1] ?? 0;
+    const { up, down } = wideningFlows(network, capacities, position, smallestShown);
+    const high = (table.values[position] ?? 0) + Math.min(up.amount, roomUp);
+    const width = Math.min(up.amount, roomUp) + Math.min(down.amount, roomDown);
+    const tooLow = high < smallestShown;
+    if (tooLow || width < smallestShown - 1) {
+      found.push({ position, up, down, canGrow: up.amount < roomUp, canShrink: !tooLow && down.amount < roomDown });
+      if (onlyFirst) return found;
+    }
+  }
+  return found;
+}
+
+/** Whether a place, once hidden, could grow (even half-arc) or shrink (odd half-arc). */
+export function hasRoom(problem: ProtectionProblem, halfArc: number): boolean {
+  const position = halfArc >> 1;
+  const value = problem.table.values[position] ?? 0;
+  const { least, most } = problem.knowledgeAt(position);
+  return (halfArc & 1) === 0 ? value < most : value > least;
+}
