@@ -1,0 +1,46 @@
+/**
+ * The registry's rows and their staging twins. Their columns come from the dictionary, one database column per variable,
+ * so that a variable is written down once.
+ */
+import { dictionary, type Table, type Variable } from '@cairnstep/dictionary';
+import { EntitySchema, type EntitySchemaColumnOptions } from 'typeorm';
+
+/** Numbers as PostgreSQL's own; everything else is text checked by the dictionary before it comes here. */
+const sqlTypes = { integer: 'integer', decimal: 'double precision', code: 'text', flag: 'text', pseudonym: 'text' } as const;
+const sqlType = (variable: Variable) => sqlTypes[variable.type];
+
+const requiredAlways = (variable: Variable): boolean => variable.required.when === 'always';
+
+function columnsOf(table: Table, staged: boolean): Record<string, EntitySchemaColumnOptions> {
+  const columns: Record<string, EntitySchemaColumnOptions> = {};
+  if (staged) columns['submission_id'] = { type: 'uuid', primary: true };
+  columns['site_id'] = staged ? { type: 'uuid' } : { type: 'uuid', primary: true };
+  for (const variable of table.variables) {
+    const primary = table.rowKey.includes(variable.key);
+    columns[variable.key] = primary
+      ? { type: sqlType(variable), primary: true }
+      : { type: sqlType(variable), nullable: staged || !requiredAlways(variable) };
+  }
+  if (staged) columns['line'] = { type: 'integer' };
+  else {
+    columns['month'] = { type: 'text' };
+    columns['submission_id'] = { type: 'uuid' };
+  }
+  if (table.key === 'exams') {
+    columns['class_nli'] = { type: 'text', array: true };
+    columns['class_ais'] = { type: 'text', array: true };
+    columns['class_level_group'] = { type: 'text' };
+    columns['class_uems'] = { type: 'integer', nullable: true };
+    columns['class_lems'] = { type: 'integer', nullable: true };
+  }
+  return columns;
+}
+
+const schemaOf = (table: Table, staged: boolean) =>
+  new EntitySchema({ name: `${staged ? 'staged_' : ''}${table.key}`, tableName: `${staged ? 'staged_' : ''}${table.key}`, columns: columnsOf(table, staged) });
+
+/** Computed from an exam's cells when it is checked; stored beside them. `class_nli` and `class_ais` list every possible value. */
+export const classColumns = ['class_nli', 'class_ais', 'class_level_group', 'class_uems', 'class_lems'] as const;
+
+export const registrySchemas = dictionary.tables.map((table) => schemaOf(table, false));
+export const stagedSchemas = dictionary.tables.map((table) => schemaOf(table, true));

@@ -1,0 +1,13 @@
+import type { Site } from '@cairnstep/contract';
+import type { Tx } from '../../database/as-actor.ts';
+
+/** The sites row-level security lets this actor see. */
+export const listVisibleSites = async (tx: Tx): Promise<Site[]> => (await tx.query('select id, code, name from sites order by code')) as Site[];
+
+export async function readSite(tx: Tx, siteId: string): Promise<(Site & { firstMonth: string; revision: number }) | null> {
+  const [site] = (await tx.query('select id, code, name, first_month as "firstMonth", revision from sites where id = $1', [siteId])) as (Site & {
+    firstMonth: string;
+    revision: number;
+  })[];
+  return site ?? null;
+}

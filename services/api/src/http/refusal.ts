@@ -1,0 +1,18 @@
+/** A use case that must stop throws this. Facts go into the sentence the person reads; none of them may come from a participant. */
+import type { ProblemCode } from '@cairnstep/contract';
+
+export interface LocatedIssue {
+  readonly pointer: string;
+  readonly detail: string;
+}
+
+export class Refusal extends Error {
+  constructor(
+    readonly code: ProblemCode,
+    readonly detail: string,
+    readonly errors?: readonly LocatedIssue[],
+  ) {
+    super(code);
+    this.name = 'Refusal';
+  }
+}

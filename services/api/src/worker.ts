@@ -1,0 +1,64 @@
+/** The door for background work: takes jobs from PostgreSQL, one after another. Several may run beside each other. */
+import PgBoss from 'pg-boss';
+import { readConfig, SettingsError } from './config.ts';
+import { makeDataSource } from './database/data-source.ts';
+import { buildExport } from './features/exports/build-export.ts';
+import { checkSubmission } from './features/submissions/check-submission.ts';
+import { errorFacts, makeLogger } from './http/log.ts';
+import { queues, type Payloads, type QueueName } from './jobs/queues.ts';
+import { tidyUp } from './jobs/tidy-up.ts';
+import { makeTransport, sendMail } from './mail/send-mail.ts';
+
+try {
+  const config = readConfig(process.env);
+  const log = makeLogger(config.LOG_LEVEL, 'worker');
+  const database = await makeDataSource({ url: config.DATABASE_APP_URL, poolSize: 6 }).initialize();
+  const context = { config, database, log, clock: () => new Date() };
+  const transport = makeTransport(config.SMTP_URL);
+  const boss = new PgBoss({ connectionString: jobsUrl(config.DATABASE_APP_URL), max: 4, migrate: false });
+  boss.on('error', (error) => log.error(errorFacts(error), 'queue fault'));
+  await boss.start();
+
+  const work: { readonly [Name in QueueName]: (payload: Payloads[Name]) => Promise<void> } = {
+    'check-submission': ({ submissionId }) => checkSubmission(context, submissionId),
+    'send-mail': ({ mailId }) => sendMail(context, transport, mailId),
+    'build-export': ({ exportId }) => buildExport(context, exportId),
+    'tidy-up': () => tidyUp(context),
+  };
+  for (const queue of queues) {
+    await boss.work<Payloads[typeof queue]>(queue, { pollingIntervalSeconds: 0.5, batchSize: 1 }, async ([job]) => {
+      if (!job) return;
+      try {
+        await (work[queue] as (payload: unknown) => Promise<void>)(job.data);
+      } catch (error) {
+        log.error({ ...errorFacts(error), queue, job: job.id }, 'job failed');
+        // pg-boss keeps what is thrown; only its kind may be kept.
+        throw new Error(errorFacts(error).kind);
+      }
+    });
+  }
+  await boss.schedule('tidy-up', '*/10 * * * *', {});
+  log.info('ready');
+  process.send?.('ready');
+
+  const stop = () => {
+    log.info('stopping');
+    void boss
+      .stop({ graceful: true, timeout: 10_000 })
+      .then(() => database.destroy())
+      .then(() => process.exit(0));
+    setTimeout(() => process.exit(1), 15_000).unref();
+  };
+  process.once('SIGTERM', stop);
+  process.once('SIGINT', stop);
+} catch (error) {
+  process.stderr.write(`${error instanceof SettingsError ? error.message : String(error)}\n`);
+  process.exit(1);
+}
+
+/** The same login, acting as the role that reaches the queues and nothing else. */
+function jobsUrl(url: string): string {
+  const address = new URL(url);
+  address.searchParams.set('options', '-c role=cairnstep_jobs');
+  return address.href;
+}
