@@ -7,3 +7,6 @@ export type { ExamErrorCode, ExamIssue, ExamWarningCode } from './exam-issue.ts'
 export { aisGrades, completenessValues } from './classification.ts';
 export type { AisGrade, Classification, Completeness, Determined, Total, Totals, Zone } from './classification.ts';
 export type { TraceStep } from './trace-step.ts';
+export { classify } from './classify.ts';
+export { examTotals } from './totals.ts';
+export { UnreadableCellError } from './read-side.ts';

@@ -1,0 +1,94 @@
+/**
+ * Seeded random exams for tests and benchmarks. Two kinds: `noise` draws every cell alone; `levelled` draws a level on
+ * each side, normal above it, altered in a zone below it and mostly absent further down, as real exams look.
+ */
+import type { Exam, Observation, SideExam } from '../src/exam.ts';
+import { keyMuscles, levels, sensorySegments } from '../src/segments.ts';
+
+/** A small generator of repeatable fractions in [0, 1) (mulberry32, public domain, by Tommy Ettinger). */
+export function seededRandom(seed: number): () => number {
+  let state = seed >>> 0;
+  return () => {
+    state = (state + 0x6d2b79f5) >>> 0;
+    let mixed = Math.imul(state ^ (state >>> 15), state | 1);
+    mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), mixed | 61)) ^ mixed;
+    return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296;
+  };
+}
+
+type Random = () => number;
+type Cells<Segment extends string> = Record<Segment, string>;
+interface OpenSide {
+  lightTouch: Cells<(typeof sensorySegments)[number]>;
+  pinPrick: Cells<(typeof sensorySegments)[number]>;
+  motor: Cells<(typeof keyMuscles)[number]>;
+  nonKey?: (typeof keyMuscles)[number];
+}
+
+function pick<T>(random: Random, from: readonly T[]): T {
+  return from[Math.floor(random() * from.length)] as T;
+}
+
+function observation(random: Random, yes: number): Observation {
+  return random() < yes ? 'Yes' : 'No';
+}
+
+function addNonKey(random: Random, side: OpenSide): SideExam {
+  return random() < 0.15 ? { ...side, nonKey: pick(random, keyMuscles) } : side;
+}
+
+function noiseSide(random: Random): SideExam {
+  const normal = random() < 0.5 ? 0.6 : 0.97;
+  const sense = () => (random() < normal ? '2' : pick(random, ['0', '1', '2']));
+  const grade = () => (random() < normal ? '5' : pick(random, ['0', '1', '2', '3', '4', '5']));
+  return addNonKey(random, {
+    lightTouch: Object.fromEntries(sensorySegments.map((s) => [s, sense()])) as OpenSide['lightTouch'],
+    pinPrick: Object.fromEntries(sensorySegments.map((s) => [s, sense()])) as OpenSide['pinPrick'],
+    motor: Object.fromEntries(keyMuscles.map((m) => [m, grade()])) as OpenSide['motor'],
+  });
+}
+
+function levelledSide(random: Random, level: number, spared: number): SideExam {
+  const zone = Math.floor(random() * 5);
+  const sense = (index: number) => {
+    if (index < level) return '2';
+    if (index === level) return pick(random, ['0', '1', '1']);
+    if (index <= level + zone) return pick(random, ['0', '1', '1', '2']);
+    return random() < spared ? pick(random, ['1', '2']) : '0';
+  };
+  const motorFloor = level + Math.floor(random() * 3) - 1;
+  const grade = (muscle: (typeof keyMuscles)[number]) => {
+    const distance = levels.indexOf(muscle) - motorFloor;
+    if (distance < 0) return '5';
+    if (distance <= 2) return pick(random, ['1', '2', '3', '3', '4', '5']);
+    return random() < spared ? pick(random, ['1', '2', '3', '4', '5']) : '0';
+  };
+  return addNonKey(random, {
+    lightTouch: Object.fromEntries(sensorySegments.map((s, i) => [s, sense(i)])) as OpenSide['lightTouch'],
+    pinPrick: Object.fromEntries(sensorySegments.map((s, i) => [s, sense(i)])) as OpenSide['pinPrick'],
+    motor: Object.fromEntries(keyMuscles.map((m) => [m, grade(m)])) as OpenSide['motor'],
+  });
+}
+
+/** One determinate exam. An earlier deficit is on record, as it is for anyone in a registry of injuries. */
+export function randomExam(random: Random, kind: 'noise' | 'levelled'): Exam {
+  if (kind === 'noise') {
+    return {
+      right: noiseSide(random),
+      left: noiseSide(random),
+      vac: observation(random, 0.5),
+      dap: observation(random, 0.5),
+      earlierDeficit: true,
+    };
+  }
+  const level = Math.floor(random() * 29);
+  const other = Math.max(0, Math.min(28, level + pick(random, [0, 0, 0, 1, -1, 2, -3, 6])));
+  const spared = pick(random, [0, 0.1, 0.5, 0.95]);
+  return {
+    right: levelledSide(random, level, spared),
+    left: levelledSide(random, other, spared),
+    vac: observation(random, spared),
+    dap: observation(random, spared),
+    earlierDeficit: true,
+  };
+}
