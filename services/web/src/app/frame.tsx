@@ -1,0 +1,61 @@
+/** What stands around every page: the name, the ways to go, the account, the cautions. */
+import { useEffect, useRef } from 'react';
+import { Link, Outlet, ScrollRestoration, useLocation, useNavigation } from 'react-router-dom';
+import { useAccount } from '../lib/account.ts';
+import { Announcer } from '../ui/announcer.tsx';
+import { Mark } from '../ui/mark.tsx';
+import { AccountMenu } from './account-menu.tsx';
+import { Cautions } from './cautions.tsx';
+import { Navigation } from './navigation.tsx';
+
+export function Frame() {
+  const account = useAccount();
+  const main = useFocusOnArrival();
+  const arriving = useNavigation().state === 'loading';
+  return (
+    <div className="mx-auto flex min-h-dvh max-w-[1200px] flex-col">
+      <a
+        href="#main"
+        className="not-printed sr-only rounded-sm bg-sheet px-4 py-2 font-semibold text-lake focus:not-sr-only focus:absolute focus:top-2 focus:left-2 focus:z-30"
+      >
+        Skip to the content
+      </a>
+      <header className="not-printed">
+        {account?.demonstration === true && (
+          <p className="border-b border-hairline px-4 py-1 text-small md:px-8">
+            <strong className="font-semibold text-amber">Demonstration: invented data.</strong> No person, clinic or result here is real.
+          </p>
+        )}
+        <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2 px-4 pt-4 pb-2 md:px-8">
+          <Link to="/" className="flex items-center gap-3 text-ink">
+            <Mark size={36} />
+            <span className="text-section leading-none font-bold tracking-tight">Cairnstep</span>
+          </Link>
+          <AccountMenu account={account} />
+        </div>
+        <Navigation account={account} />
+      </header>
+      <main ref={main} id="main" tabIndex={-1} aria-busy={arriving} className="sheet flex-1 border-y border-hairline bg-sheet lg:border-x">
+        <Outlet />
+      </main>
+      <footer className="not-printed px-4 py-6 text-small text-quiet md:px-8">
+        <Cautions />
+      </footer>
+      <Announcer />
+      <ScrollRestoration />
+    </div>
+  );
+}
+
+/** A new page takes the focus, so that the keyboard and a screen reader begin where its content begins. */
+function useFocusOnArrival() {
+  const main = useRef<HTMLElement>(null);
+  const { pathname } = useLocation();
+  const shown = useRef(pathname);
+  useEffect(() => {
+    if (shown.current === pathname) return;
+    shown.current = pathname;
+    main.current?.focus({ preventScroll: true });
+  }, [pathname]);
+  return main;
+}

@@ -1,0 +1,42 @@
+import type { Account } from '@cairnstep/contract';
+import { useState } from 'react';
+import { NavLink, useLocation } from 'react-router-dom';
+import { navigationFor } from './audience.ts';
+
+/** The pages this person can open. On narrow screens it folds behind one button. */
+export function Navigation({ account }: { readonly account: Account | undefined }) {
+  const { pathname } = useLocation();
+  const [openAt, setOpenAt] = useState<string | null>(null);
+  // Going somewhere closes it.
+  const open = openAt === pathname;
+  return (
+    <nav aria-label="Pages" className="px-4 md:px-8">
+      <button
+        type="button"
+        aria-expanded={open}
+        aria-controls="pages"
+        onClick={() => setOpenAt(open ? null : pathname)}
+        className="mb-2 min-h-10 rounded-sm border border-edge px-4 font-semibold md:hidden"
+      >
+        {open ? 'Close the pages' : 'Pages'}
+      </button>
+      <ul id="pages" className={`${open ? 'grid pb-2' : 'hidden'} md:flex md:flex-wrap md:gap-x-6 md:pb-0`}>
+        {navigationFor(account).map(({ path, nav }) => (
+          <li key={path}>
+            <NavLink
+              to={path}
+              end={path === '/'}
+              className={({ isActive }) =>
+                `block border-l-3 py-2 pl-3 md:border-b-3 md:border-l-0 md:pl-0 ${
+                  isActive ? 'border-lichen font-semibold text-ink' : 'border-transparent text-quiet hover:text-ink hover:underline'
+                }`
+              }
+            >
+              {nav}
+            </NavLink>
+          </li>
+        ))}
+      </ul>
+    </nav>
+  );
+}

@@ -1,0 +1,27 @@
+/**
+ * Every page of the client, in the order of the navigation: its address, who it is for, what it is called there, and the
+ * module that holds it. Modules are fetched when first visited.
+ */
+import type { Role } from '@cairnstep/contract';
+import type { ComponentType } from 'react';
+
+/** `anyone`: public. `signed-in`: any role. A list: one of these roles. */
+export type Audience = 'anyone' | 'signed-in' | readonly Role[];
+
+export interface PageEntry {
+  readonly path: string;
+  readonly audience: Audience;
+  /** Its word in the navigation; a page without one is reached from others. */
+  readonly nav?: string;
+  readonly load: () => Promise<{ readonly default: ComponentType }>;
+}
+
+export const pages: readonly PageEntry[] = [
+  { path: '/', audience: 'anyone', nav: 'At a glance', load: () => import('../features/public/glance-page.tsx') },
+  { path: '/participants', audience: 'anyone', nav: 'For participants', load: () => import('../features/public/participants-page.tsx') },
+  { path: '/sign-in', audience: 'anyone', load: () => import('../features/account/sign-in-page.tsx') },
+  { path: '/invitation/:token', audience: 'anyone', load: () => import('../features/account/invitation-page.tsx') },
+  { path: '/whom-to-ask', audience: 'anyone', load: () => import('../features/account/whom-to-ask-page.tsx') },
+  { path: '/problems/:code', audience: 'anyone', load: () => import('../features/public/problem-page.tsx') },
+  { path: '/developers', audience: 'anyone', load: () => import('../features/public/developers-page.tsx') },
+];

@@ -1,0 +1,58 @@
+/** Things to press. Primary: the one act a page is for. Danger: cannot be taken back. Quiet: beside other things. */
+import type { ReactNode, Ref } from 'react';
+import { Button as AriaButton } from 'react-aria-components/Button';
+import type { ButtonProps as AriaButtonProps } from 'react-aria-components/Button';
+import { Link } from 'react-router-dom';
+import type { LinkProps } from 'react-router-dom';
+
+export type ButtonVariant = 'primary' | 'secondary' | 'quiet' | 'danger';
+
+const shape =
+  'inline-flex min-h-10 items-center justify-center gap-2 rounded-sm border px-4 py-1.5 text-center font-semibold no-underline transition-colors';
+const variants: Record<ButtonVariant, string> = {
+  primary: 'border-lichen bg-lichen text-sheet hover:border-ink hover:bg-ink',
+  secondary: 'border-edge bg-transparent text-ink hover:border-ink hover:bg-paper',
+  danger: 'border-oxide bg-transparent text-oxide hover:bg-oxide hover:text-sheet',
+  quiet: 'border-transparent bg-transparent px-2 text-lake underline decoration-1 underline-offset-3 hover:decoration-2',
+};
+const resting = 'disabled:border-hairline disabled:bg-transparent disabled:text-quiet data-[pending]:cursor-progress';
+
+export interface ButtonProps extends Omit<AriaButtonProps, 'className' | 'style' | 'children'> {
+  readonly variant?: ButtonVariant;
+  readonly children: ReactNode;
+  readonly ref?: Ref<HTMLButtonElement>;
+}
+
+/** While `isPending` the button keeps its focus and words, takes no further press, and says so to assistive technology. */
+export function Button({ variant = 'secondary', children, ...rest }: ButtonProps) {
+  return (
+    <AriaButton {...rest} className={`${shape} ${variants[variant]} ${resting}`}>
+      {children}
+      {rest.isPending === true && <span aria-hidden="true">…</span>}
+    </AriaButton>
+  );
+}
+
+export interface LinkButtonProps extends Omit<LinkProps, 'className' | 'style'> {
+  readonly variant?: ButtonVariant;
+}
+
+/** Looks like a button, is a link: it leads to another page of the client. */
+export function LinkButton({ variant = 'secondary', ...rest }: LinkButtonProps) {
+  return <Link {...rest} className={`${shape} ${variants[variant]}`} />;
+}
+
+export interface DownloadButtonProps {
+  readonly href: string;
+  readonly variant?: ButtonVariant;
+  readonly children: ReactNode;
+}
+
+/** Leaves the client: a file, or the sign-in service. */
+export function AddressButton({ href, variant = 'secondary', children }: DownloadButtonProps) {
+  return (
+    <a href={href} className={`${shape} ${variants[variant]}`}>
+      {children}
+    </a>
+  );
+}

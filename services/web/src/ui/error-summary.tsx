@@ -1,0 +1,62 @@
+/**
+ * All that is wrong with a form, on top of it, in the words that stand beside the fields, each a link to its field
+ * (after the error summary of the GOV.UK design system). Takes the focus when it appears or when `attempt` changes.
+ */
+import { useEffect, useRef } from 'react';
+import { formatCount } from '../lib/format.ts';
+
+export interface FieldProblem {
+  /** The `id` of the field; absent when no field on this page can mend it. */
+  readonly fieldId?: string;
+  readonly message: string;
+}
+
+export function ErrorSummary({ problems, attempt = 0 }: { readonly problems: readonly FieldProblem[]; readonly attempt?: number }) {
+  const box = useRef<HTMLDivElement>(null);
+  const any = problems.length > 0;
+  useEffect(() => {
+    if (any) box.current?.focus();
+  }, [any, attempt]);
+  if (!any) return null;
+  return (
+    <div
+      ref={box}
+      tabIndex={-1}
+      role="alert"
+      aria-labelledby="error-summary-title"
+      className="max-w-2xl rounded-sm border-2 border-oxide p-4"
+    >
+      <h2 id="error-summary-title" className="text-section font-semibold text-oxide">
+        {formatCount(problems.length, 'thing needs', 'things need')} mending
+      </h2>
+      <ul className="mt-2 grid gap-1">
+        {problems.map(({ fieldId, message }) => (
+          <li key={`${fieldId}:${message}`}>
+            {fieldId === undefined ? (
+              message
+            ) : (
+              <a
+                href={`#${fieldId}`}
+                className="link"
+                onClick={(event) => {
+                  event.preventDefault();
+                  goTo(fieldId);
+                }}
+              >
+                {message}
+              </a>
+            )}
+          </li>
+        ))}
+      </ul>
+    </div>
+  );
+}
+
+function goTo(fieldId: string): void {
+  const field = document.getElementById(fieldId);
+  const input = 'input, textarea, select, button, [tabindex]';
+  const target = field?.matches(input) === true ? field : field?.querySelector<HTMLElement>(input);
+  field?.scrollIntoView({ block: 'center' });
+  target?.focus();
+}

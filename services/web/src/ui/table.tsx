@@ -1,0 +1,251 @@
+/**
+ * Rows and columns to read: a caption, the unit in the header, sorting kept in the address, a header that stays in sight,
+ * copying as text and downloading as CSV. Sorts the rows it is given; paged lists keep the server's order (`isSortable={false}`).
+ */
+import { useEffect, useId, useRef, useState } from 'react';
+import type { ReactNode, RefObject } from 'react';
+import { useAddressParam } from '../lib/address-state.ts';
+import { toCsv, toTabSeparated } from '../lib/csv.ts';
+import type { CsvValue } from '../lib/csv.ts';
+import { formatCount, formatNumber } from '../lib/format.ts';
+import { announce } from './announcer.tsx';
+import { Button } from './button.tsx';
+
+export interface Column<Row> {
+  readonly key: string;
+  readonly header: string;
+  /** Stands in the header, so that cells hold bare numbers. */
+  readonly unit?: string;
+  /** What the column sorts by, copies and downloads. Null: nothing known, always last. */
+  readonly value: (row: Row) => CsvValue;
+  /** How it shows, where that differs from the plain value. */
+  readonly cell?: (row: Row) => ReactNode;
+  /** Digits after the point for numbers shown plainly. */
+  readonly decimals?: number;
+  /** `number` aligns at the right with tabular figures. */
+  readonly kind?: 'text' | 'number';
+  /** The column that names the row. */
+  readonly isRowHeader?: boolean;
+}
+
+export interface TableProps<Row> {
+  /** Unique on the page; also the name of the sort parameter in the address (`sort-<id>`). */
+  readonly id: string;
+  readonly caption: string;
+  readonly columns: readonly Column<Row>[];
+  readonly rows: readonly Row[];
+  readonly rowKey: (row: Row) => string;
+  /** Shown instead of an empty body: says what to do next. */
+  readonly empty: ReactNode;
+  readonly isSortable?: boolean;
+  /** Name of the CSV file, without its ending; no file name, no copying and downloading. */
+  readonly fileName?: string;
+}
+
+interface Sort {
+  readonly key: string;
+  readonly descending: boolean;
+}
+
+export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortable = true, fileName }: TableProps<Row>) {
+  const captionId = useId();
+  const frame = useRef<HTMLDivElement>(null);
+  const overflows = useOverflow(frame);
+  const [sortText, setSortText] = useAddressParam(`sort-${id}`);
+  const sort = isSortable ? readSort(sortText, columns) : null;
+  const ordered = sort === null ? rows : sorted(rows, columns, sort);
+
+  if (rows.length === 0) return <div className="py-4 text-quiet">{empty}</div>;
+  return (
+    <div className="grid gap-2">
+      <div
+        ref={frame}
+        className="scrolls max-h-[80vh] overflow-auto"
+        {...(overflows && { tabIndex: 0, role: 'region', 'aria-labelledby': captionId })}
+      >
+        <table className="w-full border-separate border-spacing-0">
+          <caption id={captionId} className="pb-2 text-left font-semibold">
+            {caption}
+          </caption>
+          <thead>
+            <tr>
+              {columns.map((column) => (
+                <HeaderCell
+                  key={column.key}
+                  column={column}
+                  direction={sort?.key === column.key ? (sort.descending ? 'descending' : 'ascending') : undefined}
+                  onSort={isSortable ? () => setSortText(nextSort(column, sort)) : undefined}
+                />
+              ))}
+            </tr>
+          </thead>
+          <tbody>
+            {ordered.map((row) => (
+              <tr key={rowKey(row)} className="hover:bg-paper">
+                {columns.map((column) => (
+                  <BodyCell key={column.key} column={column} row={row} />
+                ))}
+              </tr>
+            ))}
+          </tbody>
+        </table>
+      </div>
+      {fileName !== undefined && <Takeaway columns={columns} rows={ordered} fileName={fileName} />}
+    </div>
+  );
+}
+
+const cellLook = 'border-b border-hairline px-3 py-2 align-top first:pl-0 last:pr-0';
+
+function HeaderCell<Row>({
+  column,
+  direction,
+  onSort,
+}: {
+  readonly column: Column<Row>;
+  readonly direction: 'ascending' | 'descending' | undefined;
+  readonly onSort: (() => void) | undefined;
+}) {
+  const words = (
+    <>
+      {column.header}
+      {column.unit !== undefined && <span className="font-normal text-quiet">, {column.unit}</span>}
+    </>
+  );
+  return (
+    <th
+      scope="col"
+      aria-sort={direction}
+      className={`${cellLook} sticky top-0 border-b-edge bg-sheet align-bottom font-semibold ${column.kind === 'number' ? 'text-right' : 'text-left'}`}
+    >
+      {onSort === undefined ? (
+        words
+      ) : (
+        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-end gap-1 text-left hover:underline">
+          <span>{words}</span>
+          <SortMark direction={direction} />
+        </button>
+      )}
+    </th>
+  );
+}
+
+function SortMark({ direction }: { readonly direction: 'ascending' | 'descending' | undefined }) {
+  return (
+    <svg
+      aria-hidden="true"
+      width="9"
+      height="16"
+      viewBox="0 0 9 16"
+      className="not-printed shrink-0 text-edge"
+      fill="none"
+      stroke="currentColor"
+      strokeWidth="1.5"
+    >
+      {direction !== 'descending' && <path d="M1 6 4.5 2 8 6" className={direction === undefined ? '' : 'stroke-ink'} />}
+      {direction !== 'ascending' && <path d="M1 10 4.5 14 8 10" className={direction === undefined ? '' : 'stroke-ink'} />}
+    </svg>
+  );
+}
+
+function BodyCell<Row>({ column, row }: { readonly column: Column<Row>; readonly row: Row }) {
+  const look = `${cellLook} text-left font-normal ${column.kind === 'number' ? 'numbers text-right' : ''}`;
+  const shown = column.cell === undefined ? plain(column, row) : column.cell(row);
+  if (column.isRowHeader === true) {
+    return (
+      <th scope="row" className={look}>
+        {shown}
+      </th>
+    );
+  }
+  return <td className={look}>{shown}</td>;
+}
+
+function plain<Row>(column: Column<Row>, row: Row): ReactNode {
+  const value = column.value(row);
+  if (value === null) return <span className="text-quiet">none</span>;
+  return typeof value === 'number' ? formatNumber(value, column.decimals ?? 0) : value;
+}
+
+function Takeaway<Row>({
+  columns,
+  rows,
+  fileName,
+}: {
+  readonly columns: readonly Column<Row>[];
+  readonly rows: readonly Row[];
+  readonly fileName: string;
+}) {
+  const cells = () => [
+    columns.map(({ header, unit }) => (unit === undefined ? header : `${header}, ${unit}`)),
+    ...rows.map((row) => columns.map(({ value }) => value(row))),
+  ];
+  async function copy(): Promise<void> {
+    try {
+      await navigator.clipboard.writeText(toTabSeparated(cells()));
+      announce(`Copied ${formatCount(rows.length, 'row')}.`);
+    } catch {
+      announce('The browser did not allow copying. Download the CSV file instead.');
+    }
+  }
+  return (
+    <div className="not-printed -ml-2 flex flex-wrap gap-x-2">
+      <Button variant="quiet" onPress={() => void copy()}>
+        Copy as text
+      </Button>
+      <Button variant="quiet" onPress={() => saveFile(`${fileName}.csv`, toCsv(cells()), 'text/csv;charset=utf-8')}>
+        Download CSV
+      </Button>
+    </div>
+  );
+}
+
+function saveFile(name: string, text: string, type: string): void {
+  const address = URL.createObjectURL(new Blob([text], { type }));
+  const link = document.createElement('a');
+  link.href = address;
+  link.download = name;
+  link.click();
+  URL.revokeObjectURL(address);
+}
+
+function readSort<Row>(text: string | null, columns: readonly Column<Row>[]): Sort | null {
+  if (text === null) return null;
+  const descending = text.startsWith('-');
+  const key = descending ? text.slice(1) : text;
+  return columns.some((column) => column.key === key) ? { key, descending } : null;
+}
+
+/** First press: numbers from the largest, words from A. Second: the other way. Third: the order they came in. */
+function nextSort<Row>(column: Column<Row>, current: Sort | null): string | null {
+  const firstDescending = column.kind === 'number';
+  const write = (descending: boolean) => (descending ? `-${column.key}` : column.key);
+  if (current?.key !== column.key) return write(firstDescending);
+  return current.descending === firstDescending ? write(!firstDescending) : null;
+}
+
+function sorted<Row>(rows: readonly Row[], columns: readonly Column<Row>[], sort: Sort): readonly Row[] {
+  const value = columns.find(({ key }) => key === sort.key)?.value;
+  if (value === undefined) return rows;
+  const sign = sort.descending ? -1 : 1;
+  return [...rows].sort((a, b) => {
+    const [left, right] = [value(a), value(b)];
+    if (left === null || right === null) return left === right ? 0 : left === null ? 1 : -1;
+    if (typeof left === 'number' && typeof right === 'number') return sign * (left - right);
+    return sign * String(left).localeCompare(String(right), 'en', { numeric: true });
+  });
+}
+
+/** Whether there is more than the frame shows: only then is it a stop for the keyboard, which must be able to scroll it. */
+function useOverflow(frame: RefObject<HTMLDivElement | null>): boolean {
+  const [overflows, setOverflows] = useState(false);
+  useEffect(() => {
+    const element = frame.current;
+    if (element === null) return;
+    const look = () => setOverflows(element.scrollWidth > element.clientWidth || element.scrollHeight > element.clientHeight);
+    const observer = new ResizeObserver(look);
+    observer.observe(element);
+    return () => observer.disconnect();
+  }, [frame]);
+  return overflows;
+}
