@@ -3,4 +3,7 @@ export * from './result.ts';
 export * from './samples.ts';
 export * from './root.ts';
 export * from './distributions/index.ts';
+export * from './means/one-sample.ts';
+export * from './means/paired-change.ts';
+export * from './means/welch.ts';
 export * from './method-pages/index.ts';

@@ -46,7 +46,7 @@ export interface NotEstimable extends Basis {
   readonly pointEstimate?: number;
 }
 
-export type StatisticName = 't' | 'F' | 'z' | 'chi-square' | 'V' | 'U' | 'J' | 'H' | 'r' | 'rho' | 'tau' | 'count';
+export type StatisticName = 't' | 'F' | 'z' | 'chi-square' | 'V' | 'U' | 'J' | 'H' | 'r' | 'rho' | 'tau' | 'count' | 'table probability';
 
 /** `df` lists the degrees of freedom in the order of print: none for a rank or exact test, two for F. */
 export interface TestFigures {
@@ -97,6 +97,7 @@ export const reasons = {
   singleValue: 'n = 1, SD not defined',
   allEqual: 'all values equal',
   noComparison: 'no comparison possible',
+  tooLarge: 'values too large to compute with',
 } as const;
 
 /** An interval from fewer than five values is shown, but marked. */
