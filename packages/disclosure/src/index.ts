@@ -6,3 +6,7 @@ export type { ProtectedTable, ProtectionAudit, ProtectionOptions, PublishedCount
 export { HIDDEN, protectTable, SMALLEST_SHOWN } from './protect-table.ts';
 export type { GroupsForMeans } from './groups-for-means.ts';
 export { groupsForMeans } from './groups-for-means.ts';
+export type { LinearSolver, LinkedAuditOptions, LinkedFigure, LinkedInterval, LinkedTables } from './linked-audit.ts';
+export { linkedIntervalAudit, loadLinearSolver } from './linked-audit.ts';
+export type { Slice, SlicePlace } from './linked-slices.ts';
+export { linkSlices } from './linked-slices.ts';
