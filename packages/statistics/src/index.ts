@@ -3,6 +3,8 @@ export * from './result.ts';
 export * from './samples.ts';
 export * from './root.ts';
 export * from './distributions/index.ts';
+export * from './description/quantile.ts';
+export * from './multiplicity/adjusted-p-values.ts';
 export * from './means/one-sample.ts';
 export * from './means/paired-change.ts';
 export * from './means/welch.ts';
