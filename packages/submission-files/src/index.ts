@@ -1,6 +1,21 @@
+/** Submission files: bytes to typed rows and findings, the same in the browser and on the server. */
 export { defaultLimits } from './limits.ts';
 export type { ReadLimits } from './limits.ts';
 export type { Finding, RuleFindings, RuleText, Severity } from './finding.ts';
+export { FindingLog } from './finding-log.ts';
+export type { KeptFindings, Report } from './finding-log.ts';
+export { fileRules } from './file-rules.ts';
+export { ruleText } from './rule-book.ts';
+export { decode } from './reading/decode.ts';
+export type { Decoded } from './reading/decode.ts';
+export type { Encoding } from './reading/byte-decoder.ts';
+export { readCsv, readTable } from './reading/read-csv.ts';
+export type { ByteSource } from './reading/read-csv.ts';
+export { isFormulaLike } from './table/formula-like.ts';
+export { TableBuilder } from './table/table-builder.ts';
+export { tableFromRows } from './table/table-from-rows.ts';
 export { TypedColumn, TypedTable } from './table/typed-table.ts';
 export type { Cell } from './table/typed-table.ts';
+export { formatNumber } from './writing/format-number.ts';
+export { csvHeader, writeCsv } from './writing/write-csv.ts';
 export type { RegistryContext, TypedTables } from './registry-context.ts';

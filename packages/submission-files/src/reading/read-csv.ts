@@ -1,0 +1,79 @@
+/** CSV files to typed tables, in batches of rows and in memory that does not grow with the file. */
+import type { TableKey } from '@cairnstep/dictionary';
+import type { FindingLog } from '../finding-log.ts';
+import { defaultLimits } from '../limits.ts';
+import type { ReadLimits } from '../limits.ts';
+import { HeaderNames } from '../table/header-names.ts';
+import { TableBuilder } from '../table/table-builder.ts';
+import type { TypedTable } from '../table/typed-table.ts';
+import { ByteDecoder } from './byte-decoder.ts';
+import { countLineBreaks } from './count-line-breaks.ts';
+import { detectDelimiter } from './detect-delimiter.ts';
+import { gatherBytes } from './gather-bytes.ts';
+import { RecordScanner } from './record-scanner.ts';
+import { UnreadableFile } from './unreadable-file.ts';
+
+export type ByteSource = Uint8Array | AsyncIterable<Uint8Array>;
+
+const batchRows = 10_000;
+
+/**
+ * Reads the CSV file of one table.
+ *
+ * Yields the rows in batches, in the order of the file. Everything that is wrong goes to `findings`; where a file cannot
+ * be read any further, what was read so far is still yielded and the findings say why (rules F01 to F05).
+ */
+export async function* readCsv(
+  table: TableKey,
+  source: ByteSource,
+  findings: FindingLog,
+  limits: ReadLimits = defaultLimits,
+): AsyncGenerator<TypedTable> {
+  const builder = new TableBuilder(table, findings, limits);
+  for await (const { ended } of fillFromCsv(builder, source)) {
+    if (builder.length >= batchRows || (ended && builder.length > 0)) yield builder.take();
+  }
+}
+
+/** Reads the CSV file of one table as a whole; the same as `readCsv` with all batches in one. */
+export async function readTable(
+  table: TableKey,
+  source: ByteSource,
+  findings: FindingLog,
+  limits: ReadLimits = defaultLimits,
+): Promise<TypedTable> {
+  const builder = new TableBuilder(table, findings, limits);
+  for await (const _ of fillFromCsv(builder, source));
+  return builder.take();
+}
+
+/** Fills the builder; stops at each piece of the file, so that rows can be taken, and a last time at its end. */
+async function* fillFromCsv(builder: TableBuilder, source: ByteSource): AsyncGenerator<{ readonly ended: boolean }> {
+  const { table, findings, limits } = builder;
+  const decoder = new ByteDecoder();
+  let scanner: RecordScanner | null = null;
+  let commaSeparated = true;
+  const onRecord = (cells: readonly string[], count: number, line: number, strayQuote: boolean): void => {
+    if (builder.hasHeader) builder.row(cells, count, line);
+    else builder.header(cells, count, line, { commaSeparated });
+    if (strayQuote) findings.add({ rule: 'F04', table, line, column: null, found: 'Text follows a closing quotation mark.' });
+  };
+
+  try {
+    for await (const { bytes, last } of gatherBytes(source, limits)) {
+      const text = decoder.decode(bytes, last, (before) => scanner?.lineAfter(before) ?? 1 + countLineBreaks(before));
+      if (!scanner) {
+        const delimiter = detectDelimiter(text, new HeaderNames(table));
+        commaSeparated = delimiter === ',';
+        scanner = new RecordScanner(delimiter, limits, onRecord);
+      }
+      scanner.push(text, last);
+      yield { ended: false };
+    }
+    if (!builder.hasHeader) throw new UnreadableFile('F05', 'The file is empty.', 'Begin with the header row of the template.', null);
+  } catch (error) {
+    if (!(error instanceof UnreadableFile)) throw error;
+    findings.add({ rule: error.rule, table, line: error.line, column: null, found: error.found, mend: error.mend });
+  }
+  yield { ended: true };
+}

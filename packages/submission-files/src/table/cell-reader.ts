@@ -1,0 +1,37 @@
+import type { TableKey } from '@cairnstep/dictionary';
+import type { FindingLog } from '../finding-log.ts';
+import type { ColumnStore } from './column-store.ts';
+import { isFormulaLike } from './formula-like.ts';
+
+/** Turns the cells of one column into numbers or words, stores them, and reports the cells it cannot read. */
+export interface CellReader {
+  /** @param text The cell as the file has it, never empty. A cell of blanks only counts as empty. */
+  read(text: string, row: number, line: number): void;
+}
+
+/** Where a reader stores and reports. */
+export interface CellPlace {
+  readonly table: TableKey;
+  readonly store: ColumnStore;
+  readonly findings: FindingLog;
+}
+
+/** Reports a cell that could not be read, or that it looks like a formula, which is the more urgent thing to say. */
+export function rejectCell(
+  place: CellPlace,
+  at: { row: number; line: number; text: string },
+  rule: string,
+  found: string,
+  mend: string,
+): void {
+  const { store, findings, table } = place;
+  store.setUnreadable(at.row);
+  const where = { table, line: at.line, column: store.variable.key };
+  if (isFormulaLike(at.text)) findings.add({ rule: 'F13', ...where, found: 'The cell begins like a spreadsheet formula.' });
+  else findings.add({ rule, ...where, found, mend });
+}
+
+/** The cell without surrounding blanks. A leading tab stays: spreadsheets use it to hide a formula. */
+export function trimmed(text: string): string {
+  return text.startsWith('\t') ? text : text.trim();
+}

@@ -1,0 +1,68 @@
+import { rejectCell, trimmed } from './cell-reader.ts';
+import type { CellPlace, CellReader } from './cell-reader.ts';
+import type { UnitFactor } from './header-names.ts';
+import { readNumber } from './read-number.ts';
+import type { ReadNumber } from './read-number.ts';
+
+/** How a file writes its decimals; shared by the readers of all its columns. */
+export interface DecimalManner {
+  /** Whether cells are separated by commas, so that `1,234` may be a thousand as well as a decimal number. */
+  readonly commaSeparated: boolean;
+  /** Character code of the first decimal mark met; 0 until then. */
+  mark: number;
+}
+
+const COMMA = 44;
+const perhapsThousands = /^\D?\d{1,3},\d{3}$/;
+
+export class NumberReader implements CellReader {
+  private readonly into: ReadNumber = { value: 0, mark: 0 };
+  private readonly whole: boolean;
+
+  constructor(
+    private readonly place: CellPlace,
+    private readonly factor: UnitFactor,
+    private readonly manner: DecimalManner,
+  ) {
+    this.whole = place.store.variable.type === 'integer';
+  }
+
+  read(cell: string, row: number, line: number): void {
+    const { into, manner } = this;
+    let text = cell;
+    let failure = readNumber(text, this.factor, into);
+    if (failure) {
+      text = trimmed(cell);
+      if (text === '') return;
+      failure = readNumber(text, this.factor, into);
+    }
+    const at = { row, line, text };
+    if (failure === 'not-a-number') {
+      const example = this.whole ? 'a whole number such as 12' : 'a number such as 12.5';
+      rejectCell(this.place, at, 'F10', 'Something other than a number.', `Write ${example}, without a unit, or leave the cell empty.`);
+    } else if (failure === 'too-many-digits') {
+      rejectCell(this.place, at, 'F10', 'A number with more digits than can be kept.', 'Write at most 15 digits.');
+    } else if (this.whole && !Number.isInteger(into.value)) {
+      rejectCell(this.place, at, 'F10', 'A number with a fraction where only whole numbers stand.', 'Write a whole number.');
+    } else if (into.mark === COMMA && manner.commaSeparated && perhapsThousands.test(text)) {
+      rejectCell(
+        this.place,
+        at,
+        'F14',
+        'A comma that could mark thousands or decimals.',
+        'Write a decimal point, or no mark at all when the number is whole.',
+      );
+    } else if (into.mark !== 0 && manner.mark !== 0 && into.mark !== manner.mark) {
+      rejectCell(
+        this.place,
+        at,
+        'F14',
+        'Decimals with a point and with a comma in the same file.',
+        'Write all numbers of the file with the same decimal mark.',
+      );
+    } else {
+      if (into.mark !== 0) manner.mark = into.mark;
+      this.place.store.setNumber(row, into.value);
+    }
+  }
+}
