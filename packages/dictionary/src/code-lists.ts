@@ -45,6 +45,7 @@ export const walkingAids = list({
 
 export const postures = list({ supine: 'supine', sitting: 'sitting', standing: 'standing', in_device: 'upright in the device' });
 
+/** Each code is the measure's key without its beginning `rpe_`. */
 export const exertionScales = list({ cr10: '0-10 category-ratio scale', '6_20': '6-20 scale' });
 
 export const decisions = list({ present: 'present', absent: 'absent', not_assessed: 'not assessed' });

@@ -206,7 +206,7 @@ export const measures: readonly Measure[] = [
     key: 'wisci2',
     name: 'Walking Index for Spinal Cord Injury II',
     definition: 'Level that names the aid, brace and help a person needs to walk 10 metres, from 0 (cannot) to 20 (needs none).',
-    unit: 'level',
+    unit: 'levels',
     better: 'higher',
     timing: courseTiming,
     thresholds: {
@@ -331,7 +331,7 @@ export const measures: readonly Measure[] = [
     name: 'Modified Ashworth Scale',
     definition:
       'Resistance of one muscle group on one side to passive stretch. The grade 1+ lies between 1 and 2 and is stored as 1.5, for order only.',
-    unit: 'grade',
+    unit: 'grades',
     scale: 'ordinal',
     hard: { min: 0, max: 4, step: 0.5 },
     plausible: { min: 0, max: 4 },
@@ -358,7 +358,7 @@ export const measures: readonly Measure[] = [
     key: 'psfs_freq',
     name: 'Penn Spasm Frequency Scale, frequency',
     definition: 'How often spasms occur, in the words of the person.',
-    unit: 'grade',
+    unit: 'grades',
     better: 'lower',
     timing: courseTiming,
     licence: noLicence,
@@ -368,7 +368,7 @@ export const measures: readonly Measure[] = [
     key: 'psfs_severity',
     name: 'Penn Spasm Frequency Scale, severity',
     definition: 'How severe spasms are. Not asked when there are none.',
-    unit: 'grade',
+    unit: 'grades',
     better: 'lower',
     timing: courseTiming,
     licence: noLicence,
@@ -415,7 +415,7 @@ export const measures: readonly Measure[] = [
     key: 'fim_locomotion',
     name: 'FIM, locomotion item',
     definition: 'Help needed to walk or to use a wheelchair, from 1 (total) to 7 (none). Optional.',
-    unit: 'grade',
+    unit: 'grades',
     better: 'higher',
     timing: courseTiming,
     licence: 'Proprietary; only licensed sites may record it (from memory).',
@@ -444,7 +444,7 @@ export const measures: readonly Measure[] = [
     key: 'sci_fai_mobility',
     name: 'SCI Functional Ambulation Inventory, walking mobility',
     definition: 'Usual walking in daily life. Optional.',
-    unit: 'grade',
+    unit: 'grades',
     cautions: ['A report may print only this part as the whole instrument.'],
   }),
   score(0, 10, {
@@ -541,9 +541,14 @@ export const measures: readonly Measure[] = [
 
 const byKey = new Map(measures.map((each) => [each.key, each]));
 
+/** The measure with this key, if there is one. */
+export function findMeasure(key: string): Measure | undefined {
+  return byKey.get(key);
+}
+
 /** The measure with this key. Throws a RangeError when there is none. */
 export function measureOf(key: string): Measure {
-  const found = byKey.get(key);
+  const found = findMeasure(key);
   if (!found) throw new RangeError('no measure has this key');
   return found;
 }

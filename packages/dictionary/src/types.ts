@@ -42,6 +42,12 @@ export type Requirement =
   | ({ readonly when: 'if'; readonly and?: Condition } & Condition)
   | { readonly when: 'with'; readonly column: string };
 
+/** The measure's key is `prefix` followed by the code in `column`. */
+export interface MeasuredBy {
+  readonly column: string;
+  readonly prefix: string;
+}
+
 /** What a value could tell an outsider; decides what an export does with the column (governance rules). */
 export type Exposure = 'identifier' | 'quasi-identifier' | 'time' | 'measurement';
 
@@ -66,8 +72,8 @@ export interface Variable {
   readonly required: Requirement;
   /** The cell must be empty unless this holds. */
   readonly emptyUnless?: Condition;
-  /** Set on the one column whose unit, limits and step are those of the measure named in this other column. */
-  readonly measuredBy?: string;
+  /** Set where unit, limits and step are those of a measure that another column of the row names. */
+  readonly measuredBy?: MeasuredBy;
   readonly better?: Direction;
   readonly exposure: Exposure;
   readonly acceptedUnits?: readonly AcceptedUnit[];
@@ -140,6 +146,26 @@ export interface Measure {
   readonly thresholds: { readonly mdc: readonly Threshold[]; readonly mcid: readonly Threshold[] };
   readonly licence: string;
   readonly cautions: readonly string[];
+  readonly source: string;
+  readonly since: string;
+}
+
+export type Severity = 'error' | 'warning';
+
+/** What a rule looks at: one row; the rows of one participant on one day; all rows of one participant; or a statistic over many. */
+export type RuleScope = 'row' | 'day' | 'participant' | 'statistic';
+
+/** A check across fields. What it says stands here; that it holds is worked out elsewhere, with the limits given here. */
+export interface Rule {
+  readonly id: string;
+  readonly severity: Severity;
+  readonly scope: RuleScope;
+  readonly tables: readonly TableKey[];
+  readonly statement: string;
+  readonly why: string;
+  readonly mend: string;
+  /** Numbers of the statement that a registry may want to set otherwise. */
+  readonly limits?: Readonly<Record<string, number>>;
   readonly source: string;
   readonly since: string;
 }

@@ -115,7 +115,7 @@ export const exams = defineTable({
       name: 'Day of the exam',
       definition: 'Study day of the exam. Days before the first training day are negative.',
       type: 'integer',
-      unit: 'study day',
+      unit: 'days',
       hard: studyDayRange,
       plausible: { min: -365, max: 3_650 },
       required: { when: 'always' },

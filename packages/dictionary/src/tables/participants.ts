@@ -21,7 +21,7 @@ export const participants = defineTable({
       required: { when: 'always' },
       exposure: 'quasi-identifier',
       aliases: ['age', 'age_years'],
-      source: `${sources.safeHarbor}; the neurological examination is not usable under 6 years (Mulcahey MJ et al. Arch Phys Med Rehabil 2011;92:1264-9)`,
+      source: `${sources.safeHarbor}; the neurological examination is not usable under 6 years (Mulcahey et al. Arch Phys Med Rehabil 2011;92:1264-9)`,
     },
     {
       key: 'sex',
@@ -39,7 +39,6 @@ export const participants = defineTable({
       name: 'Year of injury',
       definition: 'Calendar year of the injury, or of the first signs when the cause is not traumatic. Never a month or a day.',
       type: 'integer',
-      unit: 'year',
       hard: { min: 1930, max: 2100 },
       plausible: { min: 1960, max: 2060 },
       required: { when: 'always' },
