@@ -51,7 +51,8 @@ function encode(labels: ArrayLike<Label>, kept: Int32Array): LabelColumn {
 /** Columns and labels of different length are a mistake of the caller. */
 export function completeRows(columns: readonly ArrayLike<Observation>[], labels: readonly ArrayLike<Label>[] = []): CompleteRows {
   const length = columns[0]?.length ?? labels[0]?.length ?? 0;
-  if ([...columns, ...labels].some((column) => column.length !== length)) throw new RangeError('The columns of a model need the same length.');
+  if ([...columns, ...labels].some((column) => column.length !== length))
+    throw new RangeError('The columns of a model need the same length.');
   const leftOut = { missing: 0, nonFinite: 0, unable: 0 };
   const kept = new Int32Array(length);
   let n = 0;

@@ -29,14 +29,13 @@ export interface FittedLeastSquares {
   readonly throughOrigin: boolean;
 }
 
-/** `column`: the first predictor that does not vary, or that the predictors before it determine. */
-export interface UnfitLeastSquares {
-  readonly kind: 'constant-predictor' | 'dependent-predictor' | 'constant-outcome';
-  readonly column: number;
-}
+/** Why there is no fit. `column`: the first predictor that does not vary, or that the predictors before it determine. */
+export type UnfitLeastSquares =
+  | { readonly kind: 'constant-predictor' | 'dependent-predictor'; readonly column: number }
+  | { readonly kind: 'constant-outcome' | 'too-large' };
 
 /** A predictor whose part not explained by those before it is below this share of its length counts as determined by them (R uses the same). */
-const rankTolerance = 1e-7;
+export const rankTolerance = 1e-7;
 
 /** Residuals of this many units of rounding of the largest outcome are taken as none. */
 const roundingUnits = 64;
@@ -49,8 +48,9 @@ export function fitLeastSquares(
   const n = outcome.length;
   const order = predictors.length;
   const y = centredColumn(outcome, !throughOrigin);
-  if (y.norm === 0) return { kind: 'constant-outcome', column: -1 };
   const columns = predictors.map((predictor) => centredColumn(predictor, !throughOrigin));
+  if (![y, ...columns].every((column) => Number.isFinite(column.norm) && Number.isFinite(column.norm ** 2))) return { kind: 'too-large' };
+  if (y.norm === 0) return { kind: 'constant-outcome' };
   const flat = columns.findIndex((column) => column.norm === 0);
   if (flat >= 0) return { kind: 'constant-predictor', column: flat };
 

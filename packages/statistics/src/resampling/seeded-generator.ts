@@ -10,6 +10,8 @@ export interface SeededGenerator {
   readonly nextBits: () => number;
   /** Integer from 0 to `count - 1`, each equally likely (draws that would favour some are thrown away). */
   readonly nextIndex: (count: number) => number;
+  /** Number from 0 up to but not 1, with 53 random bits. */
+  readonly nextFraction: () => number;
 }
 
 const words = 2 ** 32;
@@ -55,7 +57,9 @@ export function generatorFromState(state: readonly [number, number, number, numb
     return bits % count;
   }
 
-  return { nextBits, nextIndex };
+  const nextFraction = (): number => ((nextBits() >>> 5) * 2 ** 26 + (nextBits() >>> 6)) / 2 ** 53;
+
+  return { nextBits, nextIndex, nextFraction };
 }
 
 /** `seed`: integer from 0 to 2^32 - 1. */

@@ -1,0 +1,10 @@
+export * from './predictor.ts';
+export type { Coefficient } from './coefficient.ts';
+export { linearRegression, predictedMean } from './linear-regression.ts';
+export type { LinearModel, LinearRegressionInput, Prediction } from './linear-regression.ts';
+export { ancova } from './ancova.ts';
+export type { AdjustedDifference, AdjustedMean, Ancova, AncovaInput } from './ancova.ts';
+export { logisticRegression } from './logistic-regression.ts';
+export type { LogisticCoefficient, LogisticModel, LogisticRegressionInput } from './logistic-regression.ts';
+export { randomInterceptModel } from './random-intercept-model.ts';
+export type { ClusterEffect, MixedCoefficient, RandomInterceptInput, RandomInterceptModel } from './random-intercept-model.ts';

@@ -1,0 +1,4 @@
+export type { EventCount } from './counts.ts';
+export * from './wilson-proportion.ts';
+export * from './clopper-pearson-proportion.ts';
+export * from './newcombe-difference.ts';
