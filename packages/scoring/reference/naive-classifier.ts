@@ -5,6 +5,7 @@
  * Takes exams without NT and without tags only.
  */
 import type { Exam, SideExam } from '../src/exam.ts';
+import type { ResultName } from './flat-results.ts';
 
 const order = 'C1 C2 C3 C4 C5 C6 C7 C8 T1 T2 T3 T4 T5 T6 T7 T8 T9 T10 T11 T12 L1 L2 L3 L4 L5 S1 S2 S3 INT'.split(' ');
 const dermatomes = order.slice(1, 28);
@@ -75,19 +76,7 @@ function motorZone(side: SideExam, level: string, vac: string, ais: string): str
   return order[Math.max(...reached.map(place))] as string;
 }
 
-export interface NaiveClassification {
-  sensoryRight: string;
-  sensoryLeft: string;
-  motorRight: string;
-  motorLeft: string;
-  nli: string;
-  completeness: string;
-  ais: string;
-  zppSensoryRight: string;
-  zppSensoryLeft: string;
-  zppMotorRight: string;
-  zppMotorLeft: string;
-}
+export type NaiveClassification = Record<ResultName, string>;
 
 export function classifyNaively(exam: Exam): NaiveClassification {
   const { right, left, vac, dap } = exam;

@@ -2,8 +2,10 @@
  * Seeded random exams for tests and benchmarks. Two kinds: `noise` draws every cell alone; `levelled` draws a level on
  * each side, normal above it, altered in a zone below it and mostly absent further down, as real exams look.
  */
+import { cellPlaces } from '../src/cell-key.ts';
 import type { Exam, Observation, SideExam } from '../src/exam.ts';
 import { keyMuscles, levels, sensorySegments } from '../src/segments.ts';
+import { motorTags, sensoryTags, withCell } from './open-cells.ts';
 
 /** A small generator of repeatable fractions in [0, 1) (mulberry32, public domain, by Tommy Ettinger). */
 export function seededRandom(seed: number): () => number {
@@ -17,6 +19,7 @@ export function seededRandom(seed: number): () => number {
 }
 
 type Random = () => number;
+const motorPlaces = cellPlaces.filter((place) => place.modality === 'motor');
 type Cells<Segment extends string> = Record<Segment, string>;
 interface OpenSide {
   lightTouch: Cells<(typeof sensorySegments)[number]>;
@@ -91,4 +94,26 @@ export function randomExam(random: Random, kind: 'noise' | 'levelled'): Exam {
     dap: observation(random, spared),
     earlierDeficit: true,
   };
+}
+
+/** The same exam with one to four cells not tested, VAC and DAP among them. */
+export function withUntested(random: Random, exam: Exam): Exam {
+  let opened = exam;
+  for (let count = 1 + Math.floor(random() * 4); count > 0; count--) {
+    const draw = random();
+    if (draw < 0.06) opened = { ...opened, vac: 'NT' };
+    else if (draw < 0.12) opened = { ...opened, dap: 'NT' };
+    else opened = withCell(opened, pick(random, draw < 0.55 ? motorPlaces : cellPlaces), 'NT');
+  }
+  return opened;
+}
+
+/** The same exam with one or two cells tagged. */
+export function withTagged(random: Random, exam: Exam): Exam {
+  let tagged = exam;
+  for (let count = 1 + Math.floor(random() * 2); count > 0; count--) {
+    const place = pick(random, random() < 0.5 ? motorPlaces : cellPlaces);
+    tagged = withCell(tagged, place, pick(random, place.modality === 'motor' ? motorTags : sensoryTags));
+  }
+  return tagged;
 }
