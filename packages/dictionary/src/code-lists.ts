@@ -1,17 +1,13 @@
 /** Code lists that more than one column uses. */
 import type { Code } from './types.ts';
 
-const list = <const T extends Readonly<Record<string, string>>>(
-  labels: T,
-): readonly { readonly code: keyof T & string; readonly label: string }[] =>
-  Object.entries(labels).map(([code, label]) => ({ code: code as keyof T & string, label }));
+/** A code list from codes and their labels. */
+export const codeList = (labels: Readonly<Record<string, string>>): readonly Code[] =>
+  Object.entries(labels).map(([code, label]) => ({ code, label }));
 
-export const flagCodes: readonly Code[] = [
-  { code: 'yes', label: 'yes' },
-  { code: 'no', label: 'no' },
-];
+export const flagCodes = codeList({ yes: 'yes', no: 'no' });
 
-export const deviceClasses = list({
+export const deviceClasses = codeList({
   treadmill_driven_orthosis: 'driven orthosis on a treadmill with weight support',
   overground_powered_exoskeleton: 'powered exoskeleton overground, steps triggered by weight shift or button',
   signal_driven_exoskeleton: "exoskeleton whose torque follows the wearer's surface muscle signal",
@@ -23,7 +19,7 @@ export const deviceClasses = list({
   conventional_overground: 'conventional overground walking',
 });
 
-export const jointControls = list({
+export const jointControls = codeList({
   volitional: "follows the person's own muscle signal",
   volitional_threshold: 'own muscle signal starts a preset step',
   programmed: 'preset trajectory',
@@ -34,7 +30,7 @@ export const jointControls = list({
   absent: 'joint not in the device',
 });
 
-export const walkingAids = list({
+export const walkingAids = codeList({
   none: 'none',
   bars: 'parallel bars',
   walker: 'walker',
@@ -43,21 +39,21 @@ export const walkingAids = list({
   stick: 'one stick',
 });
 
-export const postures = list({ supine: 'supine', sitting: 'sitting', standing: 'standing', in_device: 'upright in the device' });
+export const postures = codeList({ supine: 'supine', sitting: 'sitting', standing: 'standing', in_device: 'upright in the device' });
 
 /** Each code is the measure's key without its beginning `rpe_`. */
-export const exertionScales = list({ cr10: '0-10 category-ratio scale', '6_20': '6-20 scale' });
+export const exertionScales = codeList({ cr10: '0-10 category-ratio scale', '6_20': '6-20 scale' });
 
-export const decisions = list({ present: 'present', absent: 'absent', not_assessed: 'not assessed' });
+export const decisions = codeList({ present: 'present', absent: 'absent', not_assessed: 'not assessed' });
 
-export const skinChecks = list({
+export const skinChecks = codeList({
   intact: 'intact',
   redness_fades: 'redness that fades within 30 minutes',
   redness_stays: 'redness that stays longer than 30 minutes',
   broken: 'skin broken',
 });
 
-export const bodySites = list({
+export const bodySites = codeList({
   shoulder: 'shoulder',
   upper_arm: 'upper arm',
   elbow: 'elbow',
@@ -78,5 +74,3 @@ export const bodySites = list({
   foot_toes: 'foot or toes',
   other: 'other',
 });
-
-export { list as codeList };

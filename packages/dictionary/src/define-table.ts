@@ -1,13 +1,11 @@
 import { flagCodes } from './code-lists.ts';
-import type { Table, TableKey, Variable } from './types.ts';
+import type { Table, Variable } from './types.ts';
 
 /** A variable as a table file writes it: the table and the first version are filled in, and a flag needs no code list. */
 export type VariableDraft = Omit<Variable, 'table' | 'since'> & { readonly since?: string };
 
 /** Makes a table of the dictionary from drafts. Variables are of version 1.0 unless they say otherwise. */
-export function defineTable(
-  draft: Omit<Table, 'variables'> & { readonly key: TableKey; readonly variables: readonly VariableDraft[] },
-): Table {
+export function defineTable(draft: Omit<Table, 'variables'> & { readonly variables: readonly VariableDraft[] }): Table {
   const variables = draft.variables.map((variable): Variable => ({
     ...variable,
     ...(variable.type === 'flag' ? { codes: flagCodes } : {}),

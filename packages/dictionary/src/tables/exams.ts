@@ -1,4 +1,4 @@
-import { codeList } from '../code-lists.ts';
+import { codeList, flagCodes } from '../code-lists.ts';
 import { defineTable } from '../define-table.ts';
 import type { VariableDraft } from '../define-table.ts';
 import { dermatomes, keyMuscles, segmentKey, spinalLevels } from '../neurological-levels.ts';
@@ -12,8 +12,8 @@ const sides = [
 ] as const;
 
 const modalities = [
-  { key: 'lt', name: 'Light touch', alias: 'lt' },
-  { key: 'pp', name: 'Pin prick', alias: 'pp' },
+  { key: 'lt', name: 'Light touch' },
+  { key: 'pp', name: 'Pin prick' },
 ] as const;
 
 const asNotNormal = 'affected by another condition, treated as not normal';
@@ -61,7 +61,7 @@ const sensoryCells: readonly VariableDraft[] = modalities.flatMap((modality) =>
       required: { when: 'always' },
       better: 'higher',
       exposure: 'quasi-identifier',
-      aliases: [`${modality.alias}${side.key}_${segmentKey(dermatome)}`],
+      aliases: [`${modality.key}${side.key}_${segmentKey(dermatome)}`],
       source: sources.isncsci,
     })),
   ),
@@ -97,7 +97,6 @@ const nonKeyMuscles: readonly VariableDraft[] = sides.map((side) => ({
   source: sources.isncsci,
 }));
 
-const yesNo = codeList({ yes: 'yes', no: 'no' });
 const answerNotTestable = codeList({ NT: 'not testable' });
 const notDetermined = codeList({ ND: 'could not be determined' });
 
@@ -130,7 +129,7 @@ export const exams = defineTable({
       name: 'Voluntary anal contraction',
       definition: 'Whether the anal sphincter contracts at will.',
       type: 'code',
-      codes: yesNo,
+      codes: flagCodes,
       missingCodes: answerNotTestable,
       required: { when: 'always' },
       exposure: 'quasi-identifier',
@@ -142,7 +141,7 @@ export const exams = defineTable({
       name: 'Deep anal pressure',
       definition: 'Whether pressure inside the anus is felt. It may be left untested when touch or pin prick is felt at S4-5.',
       type: 'code',
-      codes: yesNo,
+      codes: flagCodes,
       missingCodes: answerNotTestable,
       required: { when: 'always' },
       exposure: 'quasi-identifier',
