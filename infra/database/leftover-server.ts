@@ -1,6 +1,6 @@
 /** What a killed run leaves in a cluster's folder: a server without a master, or the note of one that is gone. */
-import { execFileSync } from 'node:child_process';
-import { existsSync, readFileSync, rmSync } from 'node:fs';
+import { execFileSync, spawnSync } from 'node:child_process';
+import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import type { ServerUser } from './server-user.ts';
 
@@ -29,7 +29,11 @@ export function runningServerPort(clusterFolder: string): number | undefined {
   return Number.isInteger(port) && port > 0 ? port : undefined;
 }
 
-/** Ends a server that still runs on `clusterFolder`, and removes a note whose process is gone or is another program. */
+/**
+ * Ends a server that still runs on `clusterFolder`. The note of a dead one is left for PostgreSQL, which reads in its
+ * other lines whether processes of the dead server still write; only a number that now belongs to another program, and
+ * would stop PostgreSQL from starting, is replaced by one that belongs to nobody.
+ */
 export function clearLeftovers(clusterFolder: string, binaries: string, user: ServerUser | undefined): void {
   const pid = notedServer(clusterFolder);
   if (pid === undefined) return;
@@ -39,6 +43,9 @@ export function clearLeftovers(clusterFolder: string, binaries: string, user: Se
       stdio: 'pipe',
       ...user,
     });
+  } else if (existsSync(`/proc/${pid}`)) {
+    const file = join(clusterFolder, 'postmaster.pid');
+    const [, ...others] = readFileSync(file, 'utf8').split('\n');
+    writeFileSync(file, [spawnSync('true').pid, ...others].join('\n'));
   }
-  rmSync(join(clusterFolder, 'postmaster.pid'), { force: true });
 }

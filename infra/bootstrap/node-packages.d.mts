@@ -1,0 +1,2 @@
+export function areNodePackagesCurrent(root: string): boolean;
+export function ensureNodePackages(root: string): void;

@@ -1,0 +1,74 @@
+/** From a prepared place to a running product: database, migrations, demonstration data, services, readiness. */
+import { join } from 'node:path';
+import { projectRoot } from '../project-root.ts';
+import { runCommand } from './command.ts';
+import type { DataFolder } from './data-folder.ts';
+import { identityOf, openDatabase } from './database.ts';
+import { adminEnvironment, addressOf, apiEnvironment, mailEnvironment, providerEnvironment } from './environment.ts';
+import type { Place } from './environment.ts';
+import type { Programs } from './programs.ts';
+import { untilReady } from './ready.ts';
+import { isSeeded, noteSeeded } from './seeded.ts';
+import { supervise } from './supervise.ts';
+import type { Supervised } from './supervise.ts';
+
+export interface ProductNeeds {
+  readonly place: Place;
+  readonly folder: DataFolder;
+  /** For migration, seed, provider and mail catcher. */
+  readonly once: Programs;
+  /** For API and worker. */
+  readonly lasting: Programs;
+  readonly report: (sentence: string) => void;
+  /** Called with what ends each thing that was started, right after it was; to be called in reverse. */
+  readonly onStarted: (end: () => Promise<void>) => void;
+  readonly signal: AbortSignal;
+}
+
+export async function runProduct({ place, folder, once, lasting, report, onStarted, signal }: ProductNeeds): Promise<void> {
+  const log = (name: string): string => join(folder.logs, `${name}.log`);
+
+  const database = await openDatabase({
+    givenUrl: place.settings.databaseUrl,
+    folder,
+    secrets: place.secrets,
+    preferredPort: place.ports.database,
+    report,
+  });
+  onStarted(() => database.stop());
+
+  const asAdministrator = (title: string, name: string, source: string): Promise<void> =>
+    runCommand({
+      title,
+      program: process.execPath,
+      arguments: once(source),
+      cwd: projectRoot,
+      environment: adminEnvironment(place, database),
+      logFile: log(name),
+      signal,
+    });
+  await asAdministrator('Bringing the database up to date', 'migrate', 'services/api/src/database/migrate.ts');
+  const identity = await identityOf(database.databaseUrl);
+  if (!isSeeded(folder.path, identity)) {
+    report('Filling in the demonstration data (first start) …');
+    await asAdministrator('Filling in the demonstration data', 'seed', 'services/api/src/demo/seed.ts');
+    noteSeeded(folder.path, identity);
+  }
+
+  const start = (title: string, name: string, programArguments: readonly string[], environment: NodeJS.ProcessEnv): Supervised => {
+    const supervised = supervise({ title, arguments: programArguments, cwd: projectRoot, environment, logFile: log(name) }, report);
+    onStarted(() => supervised.stop());
+    return supervised;
+  };
+  signal.throwIfAborted();
+  const provider = start('The local sign-in service', 'provider', once('services/fake-oidc/src/main.ts'), providerEnvironment(place));
+  const mail = start('The mail catcher', 'mail', once('services/mail-catcher/src/main.ts'), mailEnvironment(place));
+  const api = start('The API', 'api', lasting('services/api/src/main.ts'), apiEnvironment(place, database));
+  const worker = start('The worker', 'worker', lasting('services/api/src/worker.ts'), apiEnvironment(place, database));
+
+  await untilReady(provider, `${addressOf(place.ports.provider)}/.well-known/openid-configuration`, signal);
+  await untilReady(mail, addressOf(place.ports.mailPages), signal);
+  await untilReady(api, `${addressOf(place.apiPort)}/api/health/ready`, signal);
+  // The worker answers nothing; that it has not died by now is what can be known.
+  await untilReady(worker, `${addressOf(place.apiPort)}/api/health/ready`, signal);
+}
