@@ -4,6 +4,8 @@ export * from './samples.ts';
 export * from './root.ts';
 export * from './distributions/index.ts';
 export * from './description/quantile.ts';
+export * from './description/describe.ts';
+export * from './description/prefers-ranks.ts';
 export * from './multiplicity/adjusted-p-values.ts';
 export * from './means/one-sample.ts';
 export * from './means/paired-change.ts';

@@ -67,6 +67,17 @@ export interface TestedEstimate extends Estimate {
   readonly test: TestFigures;
 }
 
+/** One figure among several of an answer: its value, or why it is not there, in words to print in its place. */
+export type Figure<T = number> = { readonly kind: 'figure'; readonly value: T } | { readonly kind: 'no-figure'; readonly reason: string };
+
+export function figure<T>(value: T): Figure<T> {
+  return { kind: 'figure', value };
+}
+
+export function noFigure(reason: string): { readonly kind: 'no-figure'; readonly reason: string } {
+  return { kind: 'no-figure', reason };
+}
+
 export type EstimateResult = Estimate | NotEstimable;
 export type TestedEstimateResult = TestedEstimate | NotEstimable;
 export type TestOutcome = TestResult | NotEstimable;

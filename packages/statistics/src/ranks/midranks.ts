@@ -12,7 +12,7 @@ export function midranks(values: ArrayLike<number>): Midranks {
   const order = Uint32Array.from(values, (_, i) => i).sort((a, b) => (values[a] as number) - (values[b] as number));
   const ranks = new Float64Array(values.length);
   const tieSizes: number[] = [];
-  for (let start = 0; start < order.length; ) {
+  for (let start = 0; start < order.length;) {
     let end = start + 1;
     while (end < order.length && values[order[end] as number] === values[order[start] as number]) end++;
     for (let i = start; i < end; i++) ranks[order[i] as number] = (start + end + 1) / 2;
