@@ -1,14 +1,13 @@
 /** The cheapest way to let an exposed place widen: a chain of places that ends where the exposed one begins. */
-import type { ProtectionProblem } from './protection-problem.ts';
-import type { Weakness } from './protection-problem.ts';
+import type { ProtectionProblem, Weakness } from './protection-problem.ts';
 import { hasRoom } from './protection-problem.ts';
-import { endOf } from './table-network.ts';
+import { endOf, startOf } from './table-network.ts';
 
 /** Shown places whose hiding lets the exposed place widen further; growing is preferred to shrinking at equal cost. */
 export function cheapestChain(problem: ProtectionProblem, weakness: Weakness, hidden: readonly boolean[]): readonly number[] {
   const { position, up, down } = weakness;
-  const from = problem.network.from[position] ?? 0;
-  const to = problem.network.to[position] ?? 0;
+  const from = startOf(problem.network, 2 * position);
+  const to = endOf(problem.network, 2 * position);
   const grow = weakness.canGrow ? shortestChain(problem, hidden, position, up.residual, to, from) : undefined;
   const shrink = weakness.canShrink ? shortestChain(problem, hidden, position, down.residual, from, to) : undefined;
   const best = grow !== undefined && (shrink === undefined || grow.cost <= shrink.cost) ? grow : shrink;
@@ -56,7 +55,7 @@ function shortestChain(
   for (let node = sink; node !== source;) {
     const halfArc = cameBy[node] ?? -1;
     if (hidden[halfArc >> 1] !== true) positions.push(halfArc >> 1);
-    node = endOf(network, halfArc ^ 1);
+    node = startOf(network, halfArc);
   }
   return { cost, positions };
 }

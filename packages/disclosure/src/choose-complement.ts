@@ -21,9 +21,9 @@ import type { Knowledge } from './interval-audit.ts';
 import type { SearchBudget } from './least-cost-cover.ts';
 import { leastCostCover } from './least-cost-cover.ts';
 import type { ProtectionProblem, Weakness } from './protection-problem.ts';
-import { hasRoom, weaknesses } from './protection-problem.ts';
+import { capacitiesOf, hasRoom, isSafe, weaknessAt, weaknesses } from './protection-problem.ts';
 import type { Flow } from './table-network.ts';
-import { endOf, tableNetwork } from './table-network.ts';
+import { endOf, startOf, tableNetwork } from './table-network.ts';
 
 export interface Complement {
   readonly hidden: readonly boolean[];
@@ -69,14 +69,23 @@ function withoutHopeless(problem: ProtectionProblem): ProtectionProblem | undefi
   return withoutHopeless({ ...problem, costs: problem.costs.map((cost, position) => (hopeless.has(position) ? undefined : cost)) });
 }
 
-/** Adds cheapest chains until nothing is exposed, then takes back what is not needed. */
+/** Adds cheapest chains until nothing is exposed, then takes back what is not needed. A place once safe stays so as more is hidden. */
 function goodPattern(problem: ProtectionProblem, start: readonly boolean[]): boolean[] {
   const hidden = [...start];
-  for (;;) {
-    const [weakness] = weaknesses(problem, hidden, true);
-    if (weakness === undefined) return withoutNeedless(problem, hidden);
-    for (const position of cheapestChain(problem, weakness, hidden)) hidden[position] = true;
+  const toCheck = hidden.flatMap((isHidden, position) => (isHidden ? [position] : []));
+  let capacities = capacitiesOf(problem, hidden);
+  for (const position of toCheck) {
+    for (;;) {
+      const weakness = weaknessAt(problem, capacities, position);
+      if (weakness === undefined) break;
+      for (const added of cheapestChain(problem, weakness, hidden)) {
+        hidden[added] = true;
+        toCheck.push(added);
+      }
+      capacities = capacitiesOf(problem, hidden);
+    }
   }
+  return withoutNeedless(problem, hidden);
 }
 
 function withoutNeedless(problem: ProtectionProblem, hidden: readonly boolean[]): boolean[] {
@@ -85,7 +94,7 @@ function withoutNeedless(problem: ProtectionProblem, hidden: readonly boolean[])
   chosen.sort((a, b) => costAt(problem, b) - costAt(problem, a) || b - a);
   for (const position of chosen) {
     kept[position] = false;
-    if (weaknesses(problem, kept, true).length > 0) kept[position] = true;
+    if (!isSafe(problem, kept)) kept[position] = true;
   }
   return kept;
 }
@@ -120,8 +129,8 @@ function costOf(problem: ProtectionProblem, hidden: readonly boolean[]): number 
 /** Sets of shown places of which at least one must be hidden: those across the cuts nearest to either end of the exposed place. */
 function cutsAround(problem: ProtectionProblem, weakness: Weakness, hidden: readonly boolean[]): number[][] {
   const { position, up, down, canGrow, canShrink } = weakness;
-  const from = problem.network.from[position] ?? 0;
-  const to = problem.network.to[position] ?? 0;
+  const from = startOf(problem.network, 2 * position);
+  const to = endOf(problem.network, 2 * position);
   const [growNear, growFar] = canGrow ? [nearSide(up), farSide(problem, up, from)] : [undefined, undefined];
   const [shrinkNear, shrinkFar] = canShrink ? [nearSide(down), farSide(problem, down, to)] : [undefined, undefined];
   return [
@@ -131,7 +140,7 @@ function cutsAround(problem: ProtectionProblem, weakness: Weakness, hidden: read
 }
 
 function nearSide(flow: Flow): readonly boolean[] {
-  return flow.reachable;
+  return Array.from(flow.reachable, (reached) => reached === 1);
 }
 
 /** Nodes from which the sink can no longer be reached. */
@@ -159,7 +168,7 @@ function across(problem: ProtectionProblem, inside: readonly boolean[], around: 
   return network.leaving.flatMap((halfArcs, node) =>
     inside[node] !== true
       ? []
-      : halfArcs.flatMap((halfArc) => {
+      : [...halfArcs].flatMap((halfArc) => {
           const position = halfArc >> 1;
           const leads = inside[endOf(network, halfArc)] !== true && position !== around && hidden[position] !== true;
           return leads && problem.costs[position] !== undefined && hasRoom(problem, halfArc) ? [position] : [];

@@ -1,8 +1,7 @@
 /** What a reader can work out about each hidden place of one two-way table. */
 import type { CountTable, HiddenPattern, Place, TableWithTotals } from './count-table.ts';
 import { flagsOf, placeAt, withTotals } from './count-table.ts';
-import type { TableNetwork } from './table-network.ts';
-import { maximumFlow, tableNetwork } from './table-network.ts';
+import { flowRound, tableNetwork } from './table-network.ts';
 
 /** The smallest and largest number of people a hidden place can hold, given everything published. `high` is `Infinity` if unbounded. */
 export interface HiddenInterval {
@@ -42,19 +41,6 @@ export function hiddenCapacities(
   return capacities;
 }
 
-/** Flows that widen one hidden place upwards and downwards through the other hidden places. */
-export function wideningFlows(network: TableNetwork, capacities: Float64Array, position: number, enough?: number) {
-  const others = Float64Array.from(capacities);
-  others[2 * position] = 0;
-  others[2 * position + 1] = 0;
-  const from = network.from[position] ?? 0;
-  const to = network.to[position] ?? 0;
-  return {
-    up: maximumFlow(network, others, to, from, enough),
-    down: maximumFlow(network, others, from, to, enough),
-  };
-}
-
 /**
  * Exact integer intervals of all hidden places, in the order of the table (row by row, totals last in their line).
  *
@@ -72,7 +58,8 @@ export function intervalAudit(table: CountTable, hidden: HiddenPattern, options:
   return flags.flatMap((isHidden, position) => {
     if (!isHidden) return [];
     const value = full.values[position] ?? 0;
-    const { up, down } = wideningFlows(network, capacities, position);
+    const up = flowRound(network, capacities, 2 * position);
+    const down = flowRound(network, capacities, 2 * position + 1);
     return [
       {
         place: placeAt(full, position),

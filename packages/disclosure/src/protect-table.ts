@@ -10,7 +10,8 @@ import { flagsOf, perPlace, placeAt, positionOf, withTotals } from './count-tabl
 import type { HiddenInterval, Knowledge } from './interval-audit.ts';
 import { intervalAudit } from './interval-audit.ts';
 import { chooseComplement } from './choose-complement.ts';
-import { weaknesses } from './protection-problem.ts';
+import { isSafe } from './protection-problem.ts';
+import { requireSmallestShown, SMALLEST_SHOWN } from './smallest-shown.ts';
 import { tableNetwork } from './table-network.ts';
 
 /** The one mark for every hidden figure: it does not tell a small count from one hidden to protect it. */
@@ -51,17 +52,6 @@ export interface ProtectionOptions {
   readonly alsoHide?: HiddenPattern;
   /** Most people a place can hold as far as the reader knows, from figures outside this table; without it, no limit. */
   readonly atMost?: (place: Place) => number;
-}
-
-/** Counts of 1 to 10 are hidden. Source: US CMS cell size suppression policy (resdac.org, "CMS cell size suppression policy"). */
-export const SMALLEST_SHOWN = 11;
-
-/** Checks a policy value: a whole number, at least `SMALLEST_SHOWN`. */
-export function requireSmallestShown(value: number): number {
-  if (!Number.isSafeInteger(value) || value < SMALLEST_SHOWN) {
-    throw new RangeError(`The smallest count shown must be a whole number of at least ${String(SMALLEST_SHOWN)}.`);
-  }
-  return value;
 }
 
 /**
@@ -115,7 +105,7 @@ function withholding(
   const allButGrand = full.values.map((_, position) => position !== full.values.length - 1 || grandRequired);
   const costs = full.values.map(() => undefined);
   const problem = { table: full, network: tableNetwork(full), smallestShown, required: allButGrand, knowledgeAt, costs };
-  return weaknesses(problem, allButGrand, true).length === 0 ? allButGrand : full.values.map(() => true);
+  return isSafe(problem, allButGrand) ? allButGrand : full.values.map(() => true);
 }
 
 function placesWhere(full: TableWithTotals, flags: readonly boolean[]): Place[] {

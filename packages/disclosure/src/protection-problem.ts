@@ -16,8 +16,9 @@
  */
 import type { TableWithTotals } from './count-table.ts';
 import type { Knowledge } from './interval-audit.ts';
-import { hiddenCapacities, wideningFlows } from './interval-audit.ts';
+import { hiddenCapacities } from './interval-audit.ts';
 import type { Flow, TableNetwork } from './table-network.ts';
+import { flowRound } from './table-network.ts';
 
 export interface ProtectionProblem {
   readonly table: TableWithTotals;
@@ -42,25 +43,33 @@ export interface Weakness {
   readonly canShrink: boolean;
 }
 
-/** Hidden places that a reader could work out too closely; only the first if that is enough. Empty when the pattern is safe. */
-export function weaknesses(problem: ProtectionProblem, hidden: readonly boolean[], onlyFirst = false): Weakness[] {
+/** Room of each half-arc under a pattern. */
+export function capacitiesOf(problem: ProtectionProblem, hidden: readonly boolean[]): Float64Array {
+  return hiddenCapacities(problem.table, hidden, problem.knowledgeAt);
+}
+
+/** Whether a reader could work out one hidden place too closely, and why; `undefined` when it is safe. */
+export function weaknessAt(problem: ProtectionProblem, capacities: Float64Array, position: number): Weakness | undefined {
   const { table, network, smallestShown } = problem;
-  const capacities = hiddenCapacities(table, hidden, problem.knowledgeAt);
-  const found: Weakness[] = [];
-  for (const [position, isHidden] of hidden.entries()) {
-    if (!isHidden) continue;
-    const roomUp = capacities[2 * position] ?? 0;
-    const roomDown = capacities[2 * position + 1] ?? 0;
-    const { up, down } = wideningFlows(network, capacities, position, smallestShown);
-    const high = (table.values[position] ?? 0) + Math.min(up.amount, roomUp);
-    const width = Math.min(up.amount, roomUp) + Math.min(down.amount, roomDown);
-    const tooLow = high < smallestShown;
-    if (tooLow || width < smallestShown - 1) {
-      found.push({ position, up, down, canGrow: up.amount < roomUp, canShrink: !tooLow && down.amount < roomDown });
-      if (onlyFirst) return found;
-    }
-  }
-  return found;
+  const roomUp = capacities[2 * position] ?? 0;
+  const roomDown = capacities[2 * position + 1] ?? 0;
+  const up = flowRound(network, capacities, 2 * position, smallestShown);
+  const tooLow = (table.values[position] ?? 0) + Math.min(up.amount, roomUp) < smallestShown;
+  if (!tooLow && Math.min(up.amount, roomUp) >= smallestShown - 1) return undefined;
+  const down = flowRound(network, capacities, 2 * position + 1, smallestShown);
+  if (!tooLow && Math.min(up.amount, roomUp) + Math.min(down.amount, roomDown) >= smallestShown - 1) return undefined;
+  return { position, up, down, canGrow: up.amount < roomUp, canShrink: !tooLow && down.amount < roomDown };
+}
+
+/** All hidden places that a reader could work out too closely. */
+export function weaknesses(problem: ProtectionProblem, hidden: readonly boolean[]): Weakness[] {
+  const capacities = capacitiesOf(problem, hidden);
+  return hidden.flatMap((isHidden, position) => (isHidden ? (weaknessAt(problem, capacities, position) ?? []) : []));
+}
+
+export function isSafe(problem: ProtectionProblem, hidden: readonly boolean[]): boolean {
+  const capacities = capacitiesOf(problem, hidden);
+  return hidden.every((isHidden, position) => !isHidden || weaknessAt(problem, capacities, position) === undefined);
 }
 
 /** Whether a place, once hidden, could grow (even half-arc) or shrink (odd half-arc). */

@@ -11,41 +11,42 @@
  */
 import type { TableWithTotals } from './count-table.ts';
 
+/** Half-arc 2a follows arc a (the place grows), half-arc 2a + 1 runs against it (the place shrinks). */
 export interface TableNetwork {
   readonly nodes: number;
-  /** Per arc (same order as the table's places): where it starts and ends. */
-  readonly from: readonly number[];
-  readonly to: readonly number[];
-  /** Per node: the half-arcs that leave it. Half-arc 2a follows arc a (the place grows), 2a+1 runs against it (the place shrinks). */
-  readonly leaving: readonly (readonly number[])[];
+  /** Per half-arc: the node it leads to. */
+  readonly head: Int32Array;
+  /** Per node: the half-arcs that leave it. */
+  readonly leaving: readonly Int32Array[];
 }
 
 export function tableNetwork(table: TableWithTotals): TableNetwork {
   const nodes = table.rows + table.columns + 2;
-  const from: number[] = [];
-  const to: number[] = [];
+  const head = new Int32Array(2 * table.values.length);
   const leaving: number[][] = Array.from({ length: nodes }, () => []);
   for (let i = 0; i <= table.rows; i++) {
     for (let j = 0; j <= table.columns; j++) {
-      const rowNode = i;
+      const arc = i * table.width + j;
       const columnNode = table.rows + 1 + j;
-      const rowToColumn = (i === table.rows) === (j === table.columns);
-      const arc = from.length;
-      from.push(rowToColumn ? rowNode : columnNode);
-      to.push(rowToColumn ? columnNode : rowNode);
-      leaving[rowToColumn ? rowNode : columnNode]?.push(2 * arc);
-      leaving[rowToColumn ? columnNode : rowNode]?.push(2 * arc + 1);
+      const runsToColumn = (i === table.rows) === (j === table.columns);
+      const [from, to] = runsToColumn ? [i, columnNode] : [columnNode, i];
+      head[2 * arc] = to;
+      head[2 * arc + 1] = from;
+      leaving[from]?.push(2 * arc);
+      leaving[to]?.push(2 * arc + 1);
     }
   }
-  return { nodes, from, to, leaving };
+  return { nodes, head, leaving: leaving.map((halfArcs) => Int32Array.from(halfArcs)) };
 }
 
 /** The node a half-arc leads to. */
 export function endOf(network: TableNetwork, halfArc: number): number {
-  const arc = halfArc >> 1;
-  const end = (halfArc & 1) === 0 ? network.to[arc] : network.from[arc];
-  if (end === undefined) throw new RangeError('No such arc.');
-  return end;
+  return network.head[halfArc] ?? -1;
+}
+
+/** The node a half-arc leaves. */
+export function startOf(network: TableNetwork, halfArc: number): number {
+  return endOf(network, halfArc ^ 1);
 }
 
 export interface Flow {
@@ -53,48 +54,65 @@ export interface Flow {
   readonly amount: number;
   /** What is left of each half-arc. */
   readonly residual: Float64Array;
-  /** Nodes still reachable from the source: the near side of a smallest cut. */
-  readonly reachable: readonly boolean[];
+  /** Per node, 1 where the source still reaches: the near side of a smallest cut, unless the flow was stopped early. */
+  readonly reachable: Uint8Array;
 }
 
-/** Largest flow from one node to another by shortest augmenting paths (Edmonds and Karp). Stops early once `enough` is reached. */
-export function maximumFlow(
-  network: TableNetwork,
-  capacities: Float64Array,
-  source: number,
-  sink: number,
-  enough: number = Number.POSITIVE_INFINITY,
-): Flow {
+/**
+ * How many people can be pushed round through one half-arc, by shortest augmenting paths from its end back to its start (Edmonds and
+ * Karp). The place of the half-arc itself is left out of the paths.
+ *
+ * @param enough stop as soon as so many are reached
+ */
+export function flowRound(network: TableNetwork, capacities: Float64Array, halfArc: number, enough = Number.POSITIVE_INFINITY): Flow {
+  const source = endOf(network, halfArc);
+  const sink = startOf(network, halfArc);
   const residual = Float64Array.from(capacities);
+  residual[halfArc] = 0;
+  residual[halfArc ^ 1] = 0;
+  const cameBy = new Int32Array(network.nodes);
+  const queue = new Int32Array(network.nodes);
   let amount = 0;
   for (;;) {
-    const cameBy = new Int32Array(network.nodes).fill(-1);
-    const seen = new Array<boolean>(network.nodes).fill(false);
-    seen[source] = true;
-    const queue = [source];
-    for (let head = 0; head < queue.length && seen[sink] !== true; head++) {
-      for (const halfArc of network.leaving[queue[head] ?? -1] ?? []) {
-        const next = endOf(network, halfArc);
-        if (seen[next] !== true && (residual[halfArc] ?? 0) > 0) {
-          seen[next] = true;
-          cameBy[next] = halfArc;
-          queue.push(next);
-        }
-      }
-    }
-    if (seen[sink] !== true || amount >= enough) return { amount, residual, reachable: seen };
-    const path: number[] = [];
-    for (let node = sink; node !== source;) {
-      const halfArc = cameBy[node] ?? -1;
-      path.push(halfArc);
-      node = endOf(network, halfArc ^ 1);
-    }
-    const bottleneck = Math.min(...path.map((halfArc) => residual[halfArc] ?? 0));
-    if (bottleneck === Number.POSITIVE_INFINITY) return { amount: bottleneck, residual, reachable: seen };
-    for (const halfArc of path) {
-      residual[halfArc] = (residual[halfArc] ?? 0) - bottleneck;
-      residual[halfArc ^ 1] = (residual[halfArc ^ 1] ?? 0) + bottleneck;
+    const reachable = search(network, residual, source, sink, cameBy, queue);
+    if (reachable[sink] !== 1 || amount >= enough) return { amount, residual, reachable };
+    let bottleneck = Number.POSITIVE_INFINITY;
+    for (let node = sink; node !== source; node = startOf(network, cameBy[node] ?? -1)) {
+      bottleneck = Math.min(bottleneck, residual[cameBy[node] ?? -1] ?? 0);
     }
     amount += bottleneck;
+    if (amount === Number.POSITIVE_INFINITY) return { amount, residual, reachable };
+    for (let node = sink; node !== source; node = startOf(network, cameBy[node] ?? -1)) {
+      const step = cameBy[node] ?? -1;
+      residual[step] = (residual[step] ?? 0) - bottleneck;
+      residual[step ^ 1] = (residual[step ^ 1] ?? 0) + bottleneck;
+    }
   }
+}
+
+/** Breadth first from the source until the sink is met; notes by which half-arc each node was reached. */
+function search(
+  network: TableNetwork,
+  residual: Float64Array,
+  source: number,
+  sink: number,
+  cameBy: Int32Array,
+  queue: Int32Array,
+): Uint8Array {
+  const seen = new Uint8Array(network.nodes);
+  seen[source] = 1;
+  queue[0] = source;
+  let waiting = 1;
+  for (let at = 0; at < waiting; at++) {
+    for (const halfArc of network.leaving[queue[at] ?? -1] ?? []) {
+      if ((residual[halfArc] ?? 0) <= 0) continue;
+      const next = endOf(network, halfArc);
+      if (seen[next] === 1) continue;
+      seen[next] = 1;
+      cameBy[next] = halfArc;
+      if (next === sink) return seen;
+      queue[waiting++] = next;
+    }
+  }
+  return seen;
 }
