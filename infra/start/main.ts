@@ -7,9 +7,9 @@ import { prepare } from './prepare.ts';
 import { compiled } from './programs.ts';
 import { removeRun, writeRun } from './run-note.ts';
 import { runProduct } from './run-product.ts';
-import { runUntilToldToEnd } from './session.ts';
+import { runSession, untilToldToEnd } from './session.ts';
 
-await runUntilToldToEnd(async (session) => {
+await runSession(async (session) => {
   const { folder, place } = await prepare(session);
   const { report, onStarted, signal } = session;
   await buildIfChanged({ logFile: join(folder.logs, 'build.log'), onWork: (what) => report(`${what} …`), signal });
@@ -23,4 +23,7 @@ await runUntilToldToEnd(async (session) => {
   writeRun(folder.path, run);
   onStarted(async () => removeRun(folder.path));
   report(announcement(run, folder.path));
-});
+  await untilToldToEnd(session);
+  report('Ending …');
+  return 0;
+}, 0);

@@ -1,8 +1,8 @@
-/** The frame of a command that runs until it is told to end: signals, order of ending, exit code. */
+/** The frame of a command that starts things: signals, the order of ending, the exit code. */
 import { StartError } from './start-error.ts';
 
 export interface Session {
-  /** Aborted when the command is told to end. */
+  /** Aborted when the command is told to end: Ctrl-C, SIGTERM, a closed terminal, the end of what started it. */
   readonly signal: AbortSignal;
   /** Prints a sentence. */
   readonly report: (sentence: string) => void;
@@ -10,17 +10,19 @@ export interface Session {
   readonly onStarted: (end: () => Promise<void>) => void;
 }
 
-const untilAborted = (signal: AbortSignal): Promise<void> =>
+/** Resolves when the command is told to end. */
+export const untilToldToEnd = ({ signal }: Session): Promise<void> =>
   new Promise((resolve) => {
     if (signal.aborted) resolve();
     else signal.addEventListener('abort', () => resolve(), { once: true });
   });
 
 /**
- * Runs `work`, then waits for Ctrl-C, SIGTERM, a closed terminal, or the end of the process that started this one, then
- * ends everything that `work` started, last first. Exit code 0 when told to end, 1 when `work` failed.
+ * Runs `work`, then ends everything that it started, last first, and this process.
+ * @param work resolves with the exit code
+ * @param codeWhenToldToEnd the exit code when `work` breaks off because it was told to end; when it fails, the code is 1
  */
-export async function runUntilToldToEnd(work: (session: Session) => Promise<void>): Promise<never> {
+export async function runSession(work: (session: Session) => Promise<number>, codeWhenToldToEnd: number): Promise<never> {
   const ending = new AbortController();
   const end = (): void => ending.abort();
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) process.on(signal, end);
@@ -28,17 +30,13 @@ export async function runUntilToldToEnd(work: (session: Session) => Promise<void
 
   const ends: (() => Promise<void>)[] = [];
   const report = (sentence: string): void => void process.stdout.write(`${sentence}\n`);
-  let code = 0;
+  let code = 1;
   try {
-    await work({ signal: ending.signal, report, onStarted: (one) => ends.push(one) });
-    await untilAborted(ending.signal);
+    code = await work({ signal: ending.signal, report, onStarted: (one) => ends.push(one) });
   } catch (error) {
-    if (!ending.signal.aborted) {
-      code = 1;
-      process.stderr.write(`${error instanceof StartError ? error.message : ((error as Error).stack ?? String(error))}\n`);
-    }
+    if (ending.signal.aborted) code = codeWhenToldToEnd;
+    else process.stderr.write(`${error instanceof StartError ? error.message : ((error as Error).stack ?? String(error))}\n`);
   }
-  if (ending.signal.aborted) report('Ending …');
   for (const one of ends.reverse()) {
     await one().catch((error: unknown) => {
       code = 1;
