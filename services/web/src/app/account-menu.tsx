@@ -13,7 +13,7 @@ export function AccountMenu({ account }: { readonly account: Account | undefined
   const signedIn = account?.signedIn === true;
   const returnTo = pathname === '/' || pathname === '/sign-in' ? '/start' : pathname + search;
   return (
-    <div className="flex flex-wrap items-center gap-x-5 gap-y-1">
+    <div className="flex w-full flex-wrap items-center justify-between gap-x-5 py-1 md:order-1 md:w-auto md:py-0">
       {account !== undefined && !signedIn && (
         <Link to={signInAddress(returnTo)} className="link font-semibold">
           Sign in

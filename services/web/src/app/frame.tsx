@@ -26,14 +26,14 @@ export function Frame() {
             <strong className="font-semibold text-amber">Demonstration: invented data.</strong> No person, clinic or result here is real.
           </p>
         )}
-        <div className="flex flex-wrap items-center justify-between gap-x-6 gap-y-2 px-4 pt-4 pb-2 md:px-8">
+        <div className="flex flex-wrap items-center justify-between gap-x-6 px-4 pt-4 md:px-8">
           <Link to="/" className="flex items-center gap-3 text-ink">
             <Mark size={36} />
             <span className="text-section leading-none font-bold tracking-tight">Cairnstep</span>
           </Link>
+          <Navigation account={account} />
           <AccountMenu account={account} />
         </div>
-        <Navigation account={account} />
       </header>
       <main ref={main} id="main" tabIndex={-1} aria-busy={arriving} className="sheet flex-1 border-y border-hairline bg-sheet lg:border-x">
         <Outlet />

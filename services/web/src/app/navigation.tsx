@@ -10,17 +10,17 @@ export function Navigation({ account }: { readonly account: Account | undefined 
   // Going somewhere closes it.
   const open = openAt === pathname;
   return (
-    <nav aria-label="Pages" className="px-4 md:px-8">
+    <nav aria-label="Pages" className="contents">
       <button
         type="button"
         aria-expanded={open}
         aria-controls="pages"
         onClick={() => setOpenAt(open ? null : pathname)}
-        className="mb-2 min-h-10 rounded-sm border border-edge px-4 font-semibold md:hidden"
+        className="min-h-10 rounded-sm border border-edge px-4 font-semibold md:hidden"
       >
-        {open ? 'Close the pages' : 'Pages'}
+        {open ? 'Close' : 'Pages'}
       </button>
-      <ul id="pages" className={`${open ? 'grid pb-2' : 'hidden'} md:flex md:flex-wrap md:gap-x-6 md:pb-0`}>
+      <ul id="pages" className={`w-full ${open ? 'grid pb-2' : 'hidden'} md:order-2 md:flex md:flex-wrap md:gap-x-6 md:pt-2 md:pb-0`}>
         {navigationFor(account).map(({ path, nav }) => (
           <li key={path}>
             <NavLink

@@ -39,7 +39,7 @@ export function BarTable({ caption, rowHeader, counted, rows }: BarTableProps) {
               {label}
             </th>
             <td className="numbers w-16 py-2 pr-3 text-right">{count === null ? <HiddenMark /> : formatNumber(count)}</td>
-            <td className="w-1/2 py-2">{count !== null && <Bar share={count / largest} />}</td>
+            <td className="w-1/3 py-2 sm:w-1/2">{count !== null && <Bar share={count / largest} />}</td>
           </tr>
         ))}
       </tbody>

@@ -7,13 +7,12 @@ import type { LinkProps } from 'react-router-dom';
 
 export type ButtonVariant = 'primary' | 'secondary' | 'quiet' | 'danger';
 
-const shape =
-  'inline-flex min-h-10 items-center justify-center gap-2 rounded-sm border px-4 py-1.5 text-center font-semibold no-underline transition-colors';
+const shape = 'inline-flex min-h-10 items-center justify-center gap-2 rounded-sm border py-1.5 text-center font-semibold transition-colors';
 const variants: Record<ButtonVariant, string> = {
-  primary: 'border-lichen bg-lichen text-sheet hover:border-ink hover:bg-ink',
-  secondary: 'border-edge bg-transparent text-ink hover:border-ink hover:bg-paper',
-  danger: 'border-oxide bg-transparent text-oxide hover:bg-oxide hover:text-sheet',
-  quiet: 'border-transparent bg-transparent px-2 text-lake underline decoration-1 underline-offset-3 hover:decoration-2',
+  primary: 'border-lichen bg-lichen px-4 text-sheet hover:border-ink hover:bg-ink',
+  secondary: 'border-edge bg-transparent px-4 text-ink hover:border-ink hover:bg-paper',
+  danger: 'border-oxide bg-transparent px-4 text-oxide hover:bg-oxide hover:text-sheet',
+  quiet: 'border-transparent bg-transparent text-lake underline decoration-1 underline-offset-3 hover:decoration-2',
 };
 const resting = 'disabled:border-hairline disabled:bg-transparent disabled:text-quiet data-[pending]:cursor-progress';
 

@@ -14,14 +14,14 @@ export interface FigureItem {
 
 export function Figures({ items }: { readonly items: readonly FigureItem[] }) {
   return (
-    <dl className="grid gap-x-8 border-y border-hairline sm:grid-cols-2 md:grid-cols-4">
+    <dl className="grid grid-cols-2 gap-x-6 border-y border-hairline md:grid-cols-4">
       {items.map(({ label, value, decimals = 0, unit, remark }) => (
         <div key={label} className="flex flex-col-reverse justify-end py-3">
           <dt className="text-small text-quiet">
             {label}
             {remark !== undefined && <span className="block">{remark}</span>}
           </dt>
-          <dd className="numbers text-title font-semibold">
+          <dd className="text-title font-semibold">
             {value === null ? <HiddenMark /> : formatNumber(value, decimals)}
             {value !== null && unit !== undefined && <span className="text-base font-normal"> {unit}</span>}
           </dd>

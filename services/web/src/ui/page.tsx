@@ -36,14 +36,16 @@ export interface SectionProps {
   /** For links to this section. */
   readonly id?: string;
   readonly note?: ReactNode;
+  /** For what needs the whole width of the sheet; the note then stands under it. */
+  readonly wide?: boolean;
   readonly children: ReactNode;
 }
 
-export function Section({ title, id, note, children }: SectionProps) {
+export function Section({ title, id, note, wide = false, children }: SectionProps) {
   const titleId = id === undefined ? undefined : `${id}-title`;
   return (
     <section id={id} aria-labelledby={title === undefined ? undefined : titleId} className="border-t border-hairline">
-      <Row note={note}>
+      <Row note={note} wide={wide}>
         {title !== undefined && (
           <h2 id={titleId} className="mb-3 text-section font-semibold">
             {title}
@@ -55,14 +57,16 @@ export function Section({ title, id, note, children }: SectionProps) {
   );
 }
 
-function Row({ note, children }: { readonly note?: ReactNode; readonly children: ReactNode }) {
+function Row({ note, wide = false, children }: Pick<SectionProps, 'note' | 'wide' | 'children'>) {
+  const besides = wide ? 'relative bg-sheet' : 'lg:grid lg:grid-cols-[minmax(0,1fr)_240px]';
   return (
-    <div className="lg:grid lg:grid-cols-[minmax(0,1fr)_240px]">
+    <div className={besides}>
       <div className="min-w-0 px-4 py-6 md:px-8 lg:py-8">{children}</div>
-      {/* The margin's rule runs the whole sheet, so the cell stands even where it is empty. */}
-      <div className="px-4 pb-6 empty:pb-0 md:px-8 lg:border-l lg:border-hairline lg:px-5 lg:py-8">
-        {note !== undefined && note !== null && <MarginNote>{note}</MarginNote>}
-      </div>
+      {note !== undefined && note !== null && (
+        <div className={`px-4 pb-6 md:px-8 ${wide ? 'lg:pb-8' : 'lg:px-5 lg:py-8'}`}>
+          <MarginNote>{note}</MarginNote>
+        </div>
+      )}
     </div>
   );
 }

@@ -121,7 +121,7 @@ function HeaderCell<Row>({
       {onSort === undefined ? (
         words
       ) : (
-        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-end gap-1 text-left hover:underline">
+        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-center gap-1 text-left hover:underline">
           <span>{words}</span>
           <SortMark direction={direction} />
         </button>
@@ -189,7 +189,7 @@ function Takeaway<Row>({
     }
   }
   return (
-    <div className="not-printed -ml-2 flex flex-wrap gap-x-2">
+    <div className="not-printed flex flex-wrap gap-x-6">
       <Button variant="quiet" onPress={() => void copy()}>
         Copy as text
       </Button>

@@ -79,7 +79,7 @@ function Offer({ token, offered }: { readonly token: string; readonly offered: R
               <p>Sign in with your organisation’s account first. You come back to this page.</p>
               <div>
                 <AddressButton variant="primary" href={providerAddress(`/invitation/${token}`)}>
-                  Go to your organisation’s sign-in
+                  Sign in with your organisation
                 </AddressButton>
               </div>
             </>

@@ -30,7 +30,7 @@ export default function SignInPage() {
       note={<p>The sign-in service says who you are. What you may do here was decided by the registry’s administrators.</p>}
       actions={
         <AddressButton variant="primary" href={providerAddress(returnTo)}>
-          Go to your organisation’s sign-in
+          Sign in with your organisation
         </AddressButton>
       }
     >

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { Navigate } from 'react-router-dom';
-import { accountQuery } from '../../lib/account.ts';
+import { accountQuery, signInAddress } from '../../lib/account.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { Page, Section } from '../../ui/page.tsx';
@@ -9,6 +9,7 @@ import { Page, Section } from '../../ui/page.tsx';
 export default function WhomToAskPage() {
   const query = useQuery(accountQuery());
   const account = query.data;
+  if (account?.signedIn === false) return <Navigate to={signInAddress('/start')} replace />;
   if (account !== undefined && account.grants.length > 0) return <Navigate to="/start" replace />;
   return (
     <Page title="Nobody has given this account a role yet">

@@ -19,9 +19,7 @@ export default function DevelopersPage() {
     >
       <Section title="What every request needs" id="rules">
         <ul className="grid max-w-2xl list-disc gap-2 pl-5">
-          <li>
-            A session of a signed-in person, or an access token of a site’s own client. What either may do is decided at every request.
-          </li>
+          <li>The session of a signed-in person, except for the public figures. What the person may do is decided at every request.</li>
           <li>
             For changes, the header <code>X-Cairnstep-Request: 1</code>. Requests without it are refused.
           </li>
