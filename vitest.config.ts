@@ -6,7 +6,7 @@ const conditions = ['@cairnstep/source'];
 const shared = { resolve: { conditions }, ssr: { resolve: { conditions, externalConditions: conditions } } };
 
 /** Tests against real servers: one file at a time per worker, longer limits because a database is cloned first. */
-const integration = { environment: 'node' as const, testTimeout: 60_000, hookTimeout: 120_000, maxWorkers: 2 };
+const integration = { environment: 'node' as const, testTimeout: 60_000, hookTimeout: 120_000, maxWorkers: 2, globalSetup: ['tests/support/global-setup.ts'] };
 
 export default defineConfig({
   test: {

@@ -20,8 +20,17 @@ export interface ChainVerdict {
   readonly head: string | null;
 }
 
-/** Walks the chain in order. Notices a changed, removed, inserted or swapped entry; an end cut off shows only against an outside copy of the head. */
-export function verifyChain(entries: Iterable<ChainEntry>): ChainVerdict {
+/** A head of the chain copied to a place the application cannot write. */
+export interface Anchor {
+  readonly seq: number;
+  readonly hash: string;
+}
+
+/**
+ * Walks the chain in order. Notices a changed, removed, inserted or swapped entry. An end cut off, or a chain rewritten as a whole, shows only
+ * against an anchor, and an event that was never written shows nowhere.
+ */
+export function verifyChain(entries: Iterable<ChainEntry>, anchor?: Anchor): ChainVerdict {
   let previous = firstPrevious;
   let count = 0;
   for (const entry of entries) {
@@ -32,8 +41,10 @@ export function verifyChain(entries: Iterable<ChainEntry>): ChainVerdict {
       entry.hash === chainHash(previous, entry.event) &&
       (JSON.parse(entry.event) as { seq?: unknown }).seq === expectedSeq;
     if (!sound) return { entries: count, holds: false, firstBrokenSeq: expectedSeq, head: null };
+    if (anchor?.seq === expectedSeq && anchor.hash !== entry.hash) return { entries: count, holds: false, firstBrokenSeq: expectedSeq, head: null };
     previous = entry.hash;
     count += 1;
   }
+  if (anchor && count < anchor.seq) return { entries: count, holds: false, firstBrokenSeq: count + 1, head: null };
   return { entries: count, holds: true, firstBrokenSeq: null, head: count === 0 ? null : previous };
 }

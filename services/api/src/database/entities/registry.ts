@@ -2,12 +2,8 @@
  * The registry's rows and their staging twins. Their columns come from the dictionary, one database column per variable,
  * so that a variable is written down once.
  */
-import { dictionary, type Table, type Variable } from '@cairnstep/dictionary';
+import { dictionary, sqlType, type Table, type Variable } from '@cairnstep/dictionary';
 import { EntitySchema, type EntitySchemaColumnOptions } from 'typeorm';
-
-/** Numbers as PostgreSQL's own; everything else is text checked by the dictionary before it comes here. */
-const sqlTypes = { integer: 'integer', decimal: 'double precision', code: 'text', flag: 'text', pseudonym: 'text' } as const;
-const sqlType = (variable: Variable) => sqlTypes[variable.type];
 
 const requiredAlways = (variable: Variable): boolean => variable.required.when === 'always';
 

@@ -157,11 +157,15 @@ export class Reach1796083200001 implements MigrationInterface {
       end $$`);
     await runner.query(`create function account_name(account uuid) returns text language sql stable security definer set search_path = public as
       $$ select name from accounts where id = account $$`);
+    await runner.query(`create function account_institution(account uuid) returns text language sql stable security definer set search_path = public as
+      $$ select institution from accounts where id = account $$`);
+    await runner.query(`create function next_request_number(prefix text) returns text language sql stable security definer set search_path = public as
+      $$ select prefix || lpad((coalesce(max(substr(number, length(prefix) + 1)::int), 0) + 1)::text, 4, '0') from access_requests where number like prefix || '%' $$`);
     await runner.query(`create function prune_web_sessions() returns void language sql security definer set search_path = public as
       $$ delete from web_sessions where expire < (now() at time zone current_setting('TimeZone')) $$`);
     for (const signature of [
       'actor_list(text)', 'actor_has(text[])', 'actor_sites(text)', 'actor_account()', 'actor_leads(uuid)', 'actor_is_member(uuid)', 'audit_head()',
-      'queue_mail(uuid, text, text, text, text)', 'account_name(uuid)', 'prune_web_sessions()',
+      'queue_mail(uuid, text, text, text, text)', 'account_name(uuid)', 'account_institution(uuid)', 'next_request_number(text)', 'prune_web_sessions()',
     ]) { // prettier-ignore
       await runner.query(`revoke all on function ${signature} from public`);
       await runner.query(`grant execute on function ${signature} to cairnstep_app`);
@@ -179,7 +183,7 @@ export class Reach1796083200001 implements MigrationInterface {
       await runner.query(`alter table ${table} no force row level security`);
       await runner.query(`alter table ${table} disable row level security`);
     }
-    for (const name of ['prune_web_sessions', 'account_name', 'queue_mail', 'refuse_change', 'audit_head', 'actor_is_member', 'actor_leads', 'actor_account', 'actor_sites', 'actor_has', 'actor_list']) {
+    for (const name of ['prune_web_sessions', 'next_request_number', 'account_institution', 'account_name', 'queue_mail', 'refuse_change', 'audit_head', 'actor_is_member', 'actor_leads', 'actor_account', 'actor_sites', 'actor_has', 'actor_list']) {
       await runner.query(`drop function ${name}`);
     }
   }

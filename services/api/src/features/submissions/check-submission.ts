@@ -1,0 +1,107 @@
+/** The job that reads and checks a submission and works out what a commit would change. What it writes, it writes in one transaction at its end. */
+import { tableKeys, type TableKey } from '@cairnstep/dictionary';
+import { checkSubmission as checkTables, FindingLog, readTable, type Finding, type RuleFindings, type TypedTable } from '@cairnstep/submission-files';
+import { recordAudit } from '../../audit/record-audit.ts';
+import { registry } from '../../authority/actor.ts';
+import type { Context } from '../../context.ts';
+import { asActor, type Tx } from '../../database/as-actor.ts';
+import { countChanges } from './apply-changes.ts';
+import { previewDigest } from './preview-digest.ts';
+import { loadRegistryContext } from './registry-context.repository.ts';
+import { clearStaged, stageRows } from './stage-rows.ts';
+import { clearCheck, finishCheck, lockSubmission, readContent, readFiles, readSubmission, setFileRows, setProgress, type SubmissionRecord } from './submissions.repository.ts';
+
+type Step = NonNullable<SubmissionRecord['progress']>['step'];
+
+interface Checked {
+  readonly tables: Readonly<Partial<Record<TableKey, TypedTable>>>;
+  readonly groups: readonly RuleFindings[];
+  readonly errors: number;
+}
+
+const findingsPerInsert = 2_000;
+
+async function insertFindings(tx: Tx, submission: SubmissionRecord, findings: readonly Finding[]): Promise<void> {
+  for (let start = 0; start < findings.length; start += findingsPerInsert) {
+    const part = findings.slice(start, start + findingsPerInsert);
+    await tx.query(
+      `insert into submission_findings (submission_id, site_id, ordinal, rule, severity, table_key, line, column_key, found, mend)
+       select $1, $2, * from unnest($3::int[], $4::text[], $5::text[], $6::text[], $7::int[], $8::text[], $9::text[], $10::text[])`,
+      [
+        submission.id,
+        submission.siteId,
+        part.map((_, index) => start + index + 1),
+        part.map((one) => one.rule),
+        part.map((one) => one.severity),
+        part.map((one) => one.table),
+        part.map((one) => one.line),
+        part.map((one) => one.column),
+        part.map((one) => one.found),
+        part.map((one) => one.mend),
+      ],
+    );
+  }
+}
+
+/** A reason given for the same warnings before is kept while their number stays the same. */
+function groupsOf(checked: Checked, earlier: SubmissionRecord['findings']): SubmissionRecord['findings'] {
+  return checked.groups.map(({ id, severity, statement, why, mend, count }) => ({
+    rule: id,
+    severity,
+    statement,
+    why,
+    mend,
+    count,
+    acknowledgedReason: earlier.find((group) => group.rule === id && group.severity === severity && group.count === count)?.acknowledgedReason ?? null,
+  }));
+}
+
+export async function checkSubmission({ database, clock }: Context, submissionId: string): Promise<void> {
+  const start = await asActor(database, registry, async (tx) => ({ submission: await readSubmission(tx, submissionId), files: await readFiles(tx, submissionId) }));
+  const { submission, files } = start;
+  if (submission?.status !== 'checking') return;
+  const startedAt = submission.progress?.startedAt ?? clock().toISOString();
+  const progress = (step: Step, done: number, of: number) =>
+    asActor(database, registry, (tx) => setProgress(tx, submissionId, { step, done, of, startedAt }));
+
+  const log = new FindingLog();
+  const tables: Partial<Record<TableKey, TypedTable>> = {};
+  for (const [index, file] of files.entries()) {
+    await progress('read', index, files.length);
+    const content = await asActor(database, registry, (tx) => readContent(tx, submissionId, file.table));
+    tables[file.table] = await readTable(file.table, content ?? new Uint8Array(), log);
+  }
+  await progress('check', 0, 1);
+  const context = await asActor(database, registry, (tx) => loadRegistryContext(tx, submission.siteId, submission.month, tables, clock().getUTCFullYear()));
+  checkTables(tables, context, log);
+  const checked: Checked = { tables, groups: log.byRule(), errors: log.counts.errors };
+  await progress('compare', 0, 1);
+  await asActor(database, registry, (tx) => writeOutcome(tx, submission, checked));
+}
+
+async function writeOutcome(tx: Tx, before: SubmissionRecord, { tables, ...checked }: Checked): Promise<void> {
+  const submission = await lockSubmission(tx, before.id);
+  // Another run of this job has finished, or the files have changed since.
+  if (submission?.status !== 'checking') return;
+  await clearCheck(tx, submission.id);
+  await clearStaged(tx, tableKeys, submission.id);
+  await insertFindings(tx, submission, checked.groups.flatMap((group) => group.kept));
+  for (const table of Object.values(tables)) await setFileRows(tx, submission.id, table.key, table.length);
+  const findings = groupsOf({ tables, ...checked }, submission.findings);
+  if (checked.errors > 0) {
+    await finishCheck(tx, submission.id, { findings, preview: null, previewDigest: null, siteRevision: null });
+  } else {
+    for (const table of Object.values(tables)) await stageRows(tx, table, submission.id, submission.siteId);
+    const [{ revision }] = (await tx.query('select revision from sites where id = $1', [submission.siteId])) as [{ revision: number }];
+    const files = await readFiles(tx, submission.id);
+    const changes = await countChanges(tx, { submission: submission.id, site: submission.siteId, month: submission.month, tables: files.map((file) => file.table) });
+    const digest = previewDigest({ submission: submission.id, revision, files, tables: changes });
+    await finishCheck(tx, submission.id, { findings, preview: { tables: changes }, previewDigest: digest, siteRevision: revision });
+  }
+  await recordAudit(tx, registry, {
+    act: 'submission.checked',
+    object: submission.id,
+    site: submission.siteId,
+    detail: { errors: checked.errors, warnings: findings.filter((group) => group.severity === 'warning').reduce((sum, group) => sum + group.count, 0) },
+  });
+}

@@ -1,0 +1,82 @@
+/** Commits just what was previewed. One transaction, one site at a time: either all of it is in the registry or none. */
+import type { InputOf, SubmissionReceipt } from '@cairnstep/contract';
+import type { commitSubmission as Commit } from '@cairnstep/contract';
+import { recordAudit } from '../../audit/record-audit.ts';
+import type { Actor, Person } from '../../authority/actor.ts';
+import { requirePerson } from '../../authority/require-may.ts';
+import type { Context } from '../../context.ts';
+import { asActor, type Tx } from '../../database/as-actor.ts';
+import { Refusal } from '../../http/refusal.ts';
+import { queueMail } from '../../mail/queue-mail.ts';
+import { applyChanges } from './apply-changes.ts';
+import { lockOwnSubmission } from './lock-own-submission.ts';
+import { readFiles, settle, supersedeEarlier, type SubmissionRecord } from './submissions.repository.ts';
+
+/** Waits for a commit of the same site that is under way, then says what the site's state has become. */
+async function lockSite(tx: Tx, siteId: string): Promise<number> {
+  const [site] = (await tx.query('select revision from sites where id = $1 for update', [siteId])) as [{ revision: number }];
+  return site.revision;
+}
+
+export async function accept(tx: Tx, person: Person, submission: SubmissionRecord, digest: string, now: Date): Promise<SubmissionReceipt> {
+  const revision = await lockSite(tx, submission.siteId);
+  const { preview } = submission;
+  if (submission.findings.some((group) => group.severity === 'error')) {
+    throw new Refusal('submission-has-errors', 'Mend what the findings name, add the corrected files and check again. Nothing was committed.');
+  }
+  const stale = preview === null || submission.previewDigest === null || submission.previewDigest !== digest || submission.siteRevision !== revision;
+  if (stale) throw new Refusal('submission-stale', 'Nothing was committed. Check again to see a fresh preview; your files are still here.');
+  if (submission.findings.some((group) => group.acknowledgedReason === null)) {
+    throw new Refusal('submission-has-open-warnings', 'Say why each of these warnings stands, or mend the rows. Nothing was committed.');
+  }
+  const files = await readFiles(tx, submission.id);
+  await applyChanges(tx, { submission: submission.id, site: submission.siteId, month: submission.month, tables: files.map((file) => file.table) });
+  await tx.query('update sites set revision = revision + 1 where id = $1', [submission.siteId]);
+  await supersedeEarlier(tx, submission.id, submission.siteId, submission.month);
+  const receipt: SubmissionReceipt = {
+    submissionId: submission.id,
+    site: { id: submission.siteId, code: submission.siteCode, name: submission.siteName },
+    month: submission.month,
+    acceptedAt: now.toISOString(),
+    acceptedBy: person.name,
+    digest,
+    tables: preview.tables,
+    files: files.map(({ table, fileName, sha256, rows }) => ({ table, fileName, sha256, rows: rows ?? 0 })),
+    acknowledged: submission.findings.map(({ rule, count, acknowledgedReason }) => ({ rule, count, reason: acknowledgedReason ?? '' })),
+  };
+  await settle(tx, submission.id, 'accepted', person.accountId, receipt);
+  return receipt;
+}
+
+const receiptText = (receipt: SubmissionReceipt, address: string): string =>
+  [
+    `${receipt.site.name} (${receipt.site.code}), ${receipt.month}: accepted on ${receipt.acceptedAt}.`,
+    '',
+    ...receipt.tables.map((one) => `${one.table}: ${one.added} new, ${one.changed} changed, ${one.unchanged} unchanged, ${one.removed} removed`),
+    '',
+    `Digest of what was committed: ${receipt.digest}`,
+    `Receipt: ${address}`,
+  ].join('\n');
+
+export const commitSubmission = (
+  { config, database, clock }: Context,
+  actor: Actor,
+  { submissionId, previewDigest }: InputOf<typeof Commit>,
+  requestId: string,
+): Promise<SubmissionReceipt> =>
+  asActor(database, actor, async (tx) => {
+    const person = requirePerson(actor);
+    const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
+    const receipt = await accept(tx, person, submission, previewDigest, clock());
+    const [account] = (await tx.query('select email from accounts where id = $1', [person.accountId])) as { email: string | null }[];
+    if (account?.email) {
+      await queueMail(tx, {
+        event: `submission-accepted:${submissionId}`,
+        recipient: account.email,
+        subject: `Cairnstep: ${receipt.month} accepted`,
+        body: receiptText(receipt, `${config.PUBLIC_URL}/submissions/${submissionId}/receipt`),
+      });
+    }
+    await recordAudit(tx, actor, { act: 'submission.commit', object: submissionId, site: submission.siteId, requestId, detail: { digest: receipt.digest, month: receipt.month } });
+    return receipt;
+  });

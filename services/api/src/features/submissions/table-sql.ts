@@ -1,0 +1,81 @@
+/**
+ * The set-based SQL that compares and applies one table of a submission, built from the dictionary so that every table travels the same way.
+ * Parameters: :submission, :site, :month, :tables (the tables that came with a file), :limit, :offset. Names of columns come from the
+ * dictionary, never from a request.
+ */
+import { tableOf, type TableKey } from '@cairnstep/dictionary';
+import { classColumns } from '../../database/entities/registry.ts';
+
+/** Rows of these belong to a month: one that the month's new file no longer has is removed. People and consents are only added or changed. */
+export const monthTables: readonly TableKey[] = ['exams', 'assessments', 'sessions', 'bouts', 'adverse_events'];
+
+export interface TableSql {
+  /** Columns of the staged rows in the order COPY sends them. */
+  readonly stagedColumns: readonly string[];
+  readonly counts: string;
+  readonly list: { readonly added: string; readonly changed: string; readonly unchanged: string; readonly removed: string };
+  /** In this order: history of what goes, removal, history of what changes, change, new rows. */
+  readonly apply: readonly string[];
+}
+
+const columns = (names: readonly string[], alias: string): string => names.map((name) => `${alias}.${name}`).join(', ');
+
+/** Rows of `key` (alias r) that a commit removes. A bout goes with its session, whether or not a file of bouts came along. */
+function removedRows(key: TableKey, sameKey: string): string {
+  if (!monthTables.includes(key)) return 'false';
+  const notStaged = `not exists (select from staged_${key} s where s.submission_id = :submission and ${sameKey})`;
+  const missing = `(r.site_id = :site and r.month = :month and '${key}' = any(:tables::text[]) and ${notStaged})`;
+  if (key !== 'bouts') return missing;
+  const ofSession = (alias: string, other: string) =>
+    ['participant', 'session_day', 'session_no'].map((column) => `${alias}.${column} = ${other}.${column}`).join(' and ');
+  const sessionGone = `(r.site_id = :site and 'sessions' = any(:tables::text[]) and ${notStaged} and exists (
+      select from sessions g where g.site_id = :site and g.month = :month and ${ofSession('g', 'r')}
+         and not exists (select from staged_sessions t where t.submission_id = :submission and ${ofSession('t', 'g')})))`;
+  return `(${missing} or ${sessionGone})`;
+}
+
+function build(key: TableKey): TableSql {
+  const table = tableOf(key);
+  const keys = table.rowKey;
+  const values = table.variables.map((variable) => variable.key).filter((name) => !keys.includes(name));
+  const derived: readonly string[] = key === 'exams' ? classColumns : [];
+  const all = [...keys, ...values, ...derived];
+  const sameKey = keys.map((name) => `r.${name} = s.${name}`).join(' and ');
+  const differs = `(${columns(values, 's')}) is distinct from (${columns(values, 'r')})`;
+  const known = `from staged_${key} s join ${key} r on r.site_id = :site and ${sameKey} where s.submission_id = :submission`;
+  const added = `from staged_${key} s where s.submission_id = :submission and not exists (select from ${key} r where r.site_id = :site and ${sameKey})`;
+  const removed = `from ${key} r where ${removedRows(key, sameKey)}`;
+  const rowKey = `jsonb_build_object(${keys.map((name) => `'${name}', r.${name}`).join(', ')})`;
+  const keep = (change: string, rows: string) =>
+    `insert into row_history (site_id, table_key, row_key, change, before, submission_id)
+     select r.site_id, '${key}', ${rowKey}, '${change}', to_jsonb(r), :submission::uuid ${rows}`;
+  const byLine = 'order by s.line limit :limit offset :offset';
+  const page = (before: string, after: string, rows: string, order: string) => `select ${before} as before, ${after} as after ${rows} ${order}`;
+  return {
+    stagedColumns: ['submission_id', 'site_id', ...all, 'line'],
+    counts: `select (select count(*)::int from staged_${key} where submission_id = :submission) as staged,
+      (select count(*)::int ${known}) as known, (select count(*)::int ${known} and ${differs}) as changed, (select count(*)::int ${removed}) as removed`,
+    list: {
+      added: page('null::jsonb', 'to_jsonb(s)', added, byLine),
+      changed: page('to_jsonb(r)', 'to_jsonb(s)', `${known} and ${differs}`, byLine),
+      unchanged: page('to_jsonb(r)', 'to_jsonb(s)', `${known} and not (${differs})`, byLine),
+      removed: page('to_jsonb(r)', 'null::jsonb', removed, `order by ${columns(keys, 'r')} limit :limit offset :offset`),
+    },
+    apply: [
+      ...(monthTables.includes(key) ? [keep('removed', removed), `delete ${removed}`] : []),
+      keep('changed', `${known} and ${differs}`),
+      `update ${key} r set ${[...values, ...derived].map((name) => `${name} = s.${name}`).join(', ')}, submission_id = :submission
+         from staged_${key} s where s.submission_id = :submission and r.site_id = :site and ${sameKey} and ${differs}`,
+      `insert into ${key} (site_id, ${all.join(', ')}, month, submission_id)
+       select :site::uuid, ${columns(all, 's')}, :month::text, :submission::uuid ${added}`,
+    ],
+  };
+}
+
+const built = new Map<TableKey, TableSql>();
+
+export function tableSql(key: TableKey): TableSql {
+  const found = built.get(key) ?? build(key);
+  built.set(key, found);
+  return found;
+}
