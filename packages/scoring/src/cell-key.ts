@@ -29,7 +29,7 @@ export const cellPlaces: readonly CellPlace[] = sides.flatMap((side) =>
 );
 
 /** What is written in a cell. */
-export function writtenIn(exam: Exam, place: CellPlace): string {
+export function writtenIn(exam: Pick<Exam, Side>, place: CellPlace): string {
   const side: SideExam = exam[place.side];
   return place.modality === 'motor' ? side.motor[place.segment as KeyMuscle] : side[place.modality][place.segment as SensorySegment];
 }

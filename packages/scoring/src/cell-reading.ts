@@ -64,7 +64,8 @@ export const motorReadings = readingsUpTo(5);
 const digitZero = 48;
 
 /** The reading of a written cell, or undefined when the sheet does not allow it. */
-export function readCell(readings: CellReadings, written: string): number | undefined {
+export function readCell(readings: CellReadings, written: string | undefined): number | undefined {
+  if (written === undefined) return undefined;
   // Nearly every cell is one digit, and indexing is faster than hashing.
   if (written.length === 1) return readings.plain[written.charCodeAt(0) - digitZero];
   return readings.byText.get(written);

@@ -2,7 +2,7 @@ import type { Modality, SensorySegment, Side } from './segments.ts';
 
 // prettier-ignore
 export const examErrorCodes = [
-  'not-an-exam', 'missing', 'not-text', 'not-listed', 'tag-on-normal', 'tag-without-cause', 'unknown-segment', 'not-a-number',
+  'not-an-exam', 'missing', 'not-text', 'not-listed', 'tag-on-normal', 'tag-without-cause', 'unknown-segment', 'unknown-field', 'out-of-range',
 ] as const;
 export type ExamErrorCode = (typeof examErrorCodes)[number];
 
@@ -22,6 +22,6 @@ export interface ExamIssue {
   readonly modality?: Modality;
   /** As written in the input when it is not a known segment. */
   readonly segment?: SensorySegment | (string & {});
-  /** The field, where the issue is not about one cell: `vac`, `dap`, `nonKey`, `earlierDeficit`, `reasons`, … */
+  /** The field, where the issue is not about one cell: such as `vac`, `nonKey` or `earlierDeficit` */
   readonly field?: string;
 }

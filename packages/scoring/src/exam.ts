@@ -20,6 +20,9 @@ export type Observation = (typeof observations)[number];
 /** The column key of a cell, such as `lt_r_c2`, `pp_l_s4_5`, `m_r_c5`, `vac`, `dap`. */
 export type CellKey = `${'lt' | 'pp'}_${'r' | 'l'}_${Lowercase<SensorySegment>}` | `m_${'r' | 'l'}_${Lowercase<KeyMuscle>}` | 'vac' | 'dap';
 
+/** A coded remark on all cells it concerns, or on each by its key. Codes, never free text. */
+export type Remark = string | Readonly<Partial<Record<CellKey, string>>>;
+
 export interface Exam {
   readonly right: SideExam;
   readonly left: SideExam;
@@ -29,11 +32,10 @@ export interface Exam {
   readonly dap: Observation;
   /** Whether an earlier examination of this person recorded a deficit. A normal exam is graded E only then. */
   readonly earlierDeficit?: boolean;
-  /**
-   * Why a cell is NT or tagged, by cell key. `kept-by-site` when the clinic keeps these remarks and sends none
-   * (they are free text and can identify a person).
-   */
-  readonly reasons?: 'kept-by-site' | Readonly<Partial<Record<CellKey, string>>>;
+  /** Why cells are NT: one reason for all of them, or one for each. A warning asks for it where it is missing. */
+  readonly ntReason?: Remark;
+  /** Which condition is behind the tags: one for all of them, or one for each. A tag without it is refused. */
+  readonly tagCause?: Remark;
   /** Completed years at the exam. The exam is not usable under six. */
   readonly ageYears?: number;
   /** Hours from injury to exam; negative when the record puts the exam before the injury. */

@@ -85,8 +85,8 @@ export function readSide(exam: SideExam, side: Side, ignoreTags: boolean): SideF
   let touchMarks = 0;
   let prickMarks = 0;
   for (let index = 0; index < sensorySegments.length; index++) {
-    const touch = readCell(sensoryReadings, touchCells[index]!);
-    const prick = readCell(sensoryReadings, prickCells[index]!);
+    const touch = readCell(sensoryReadings, touchCells[index]);
+    const prick = readCell(sensoryReadings, prickCells[index]);
     if (touch === undefined) throw new UnreadableCellError(side, 'light touch', sensorySegments[index]!);
     if (prick === undefined) throw new UnreadableCellError(side, 'pin prick', sensorySegments[index]!);
     const either = scoresOf(touch, ignoreTags) | scoresOf(prick, ignoreTags);
@@ -112,7 +112,7 @@ export function readSide(exam: SideExam, side: Side, ignoreTags: boolean): SideF
   let armMarks = 0;
   let legMarks = 0;
   for (let index = 0; index < keyMuscles.length; index++) {
-    const reading = readCell(motorReadings, gradeCells[index]!);
+    const reading = readCell(motorReadings, gradeCells[index]);
     if (reading === undefined) throw new UnreadableCellError(side, 'key muscle', keyMuscles[index]!);
     const grades = scoresOf(reading, ignoreTags);
     const bit = keyMuscleBit[index]!;
