@@ -69,11 +69,11 @@ export function clusteredDesign(outcome: Float64Array, predictors: readonly Floa
   const within = orthogonalTriangle([constant, ...columns.map((column) => column.unit)]);
   const sizes = [...new Set(clusterSizes)].sort((a, b) => a - b);
   const between = sizes.map((size): SizeClass => {
-    const members = Array.from(clusterSizes.keys()).filter((c) => clusterSizes[c] === size);
     const scale = Math.sqrt(size);
-    const columnsOfMeans = means.map((mean) => Float64Array.from(members, (c) => (mean[c] as number) * scale));
-    const ones = new Float64Array(members.length).fill(scale / Math.sqrt(rows));
-    return { size, clusters: members.length, triangle: orthogonalTriangle([ones, ...columnsOfMeans]) };
+    const columnsOfMeans = means.map((mean) => mean.filter((_, c) => clusterSizes[c] === size).map((value) => value * scale));
+    const members = (columnsOfMeans[0] as Float64Array).length;
+    const ones = new Float64Array(members).fill(scale / Math.sqrt(rows));
+    return { size, clusters: members, triangle: orthogonalTriangle([ones, ...columnsOfMeans]) };
   });
 
   const describe = (j: number) => ({ mean: columns[j]?.mean as number, norm: columns[j]?.norm as number });

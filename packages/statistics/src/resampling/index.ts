@@ -1,1 +1,2 @@
 export * from './seeded-generator.ts';
+export * from './bootstrap-percentile.ts';
