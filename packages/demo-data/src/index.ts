@@ -1,1 +1,2 @@
-export {};
+/** The demonstration registry: invented from beginning to end, and the same for the same seed. */
+export type { DemoCell, DemoFiles, DemoMonth, DemoOptions, DemoRegistry, DemoRow, DemoSite, PlantedMistake } from './types.ts';
