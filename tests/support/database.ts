@@ -22,7 +22,7 @@ export async function cloneDatabase(): Promise<TestDatabase> {
   await server.connect();
   // Two files may clone at once; PostgreSQL wants the template for itself.
   await server.query('select pg_advisory_lock(4120)');
-  await server.query(`create database ${name} template ${templateDatabase}`);
+  await server.query(`create database ${name} template ${templateDatabase} owner cairnstep_owner`);
   await server.query(`revoke all on database ${name} from public`);
   await server.query(`grant connect on database ${name} to cairnstep_login`);
   await server.query('select pg_advisory_unlock(4120)');

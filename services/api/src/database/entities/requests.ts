@@ -12,7 +12,7 @@ export class AccessRequestRow {
   /** SHA-256 over number, version and form: what a vote is bound to. */
   @Column({ type: 'text', name: 'version_hash' }) versionHash: string;
   @Column({ type: 'integer', name: 'votes_needed', default: 1 }) votesNeeded: number;
-  @Column({ type: 'jsonb', name: 'votes_needed_because', default: () => "'[]'::jsonb" }) votesNeededBecause: object;
+  @Column({ type: 'jsonb', name: 'votes_needed_because' }) votesNeededBecause: object;
   @Column({ type: 'integer', name: 'release_number', nullable: true }) releaseNumber: number | null;
   @Column({ type: 'timestamptz', name: 'created_at', default: () => 'now()' }) createdAt: Date;
   @Column({ type: 'timestamptz', name: 'updated_at', default: () => 'now()' }) updatedAt: Date;

@@ -14,7 +14,7 @@ export class SubmissionRow {
   /** {step, done, of} while checking. */
   @Column({ type: 'jsonb', nullable: true }) progress: object | null;
   /** Groups of findings by rule with counts and acknowledgements, written by the check. */
-  @Column({ type: 'jsonb', default: () => "'[]'::jsonb" }) findings: object;
+  @Column({ type: 'jsonb' }) findings: object;
   /** Counts per table and what the preview was computed against; null until checked without errors. */
   @Column({ type: 'jsonb', nullable: true }) preview: object | null;
   @Column({ type: 'text', name: 'preview_digest', nullable: true }) previewDigest: string | null;

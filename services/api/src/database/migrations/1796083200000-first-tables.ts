@@ -94,9 +94,9 @@ export class FirstTables1796083200000 implements MigrationInterface {
     await runner.query(`create table access_requests (
       id uuid not null, number text not null, status text not null, version integer not null default '1',
       lead_id uuid not null, form jsonb not null, version_hash text not null, votes_needed integer not null default '1',
-      votes_needed_because jsonb not null default '[]'::jsonb, release_number integer,
-      created_at timestamptz not null default now(), updated_at timestamptz not null default now(),
-      submitted_at timestamptz, decided_at timestamptz, access_ends_on date,
+      votes_needed_because jsonb not null, release_number integer, created_at timestamptz not null default now(),
+      updated_at timestamptz not null default now(), submitted_at timestamptz,
+      decided_at timestamptz, access_ends_on date,
       constraint access_requests_pkey primary key (id)
     )`);
     await runner.query(`create unique index access_requests_number_key on access_requests (number)`);
@@ -125,8 +125,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
     await runner.query(`create table submissions (
       id uuid not null, site_id uuid not null, month text not null, status text not null, created_by uuid not null,
       created_at timestamptz not null default now(), settled_by uuid, settled_at timestamptz,
-      progress jsonb, findings jsonb not null default '[]'::jsonb, preview jsonb, preview_digest text, site_revision integer,
-      receipt jsonb,
+      progress jsonb, findings jsonb not null, preview jsonb, preview_digest text, site_revision integer, receipt jsonb,
       constraint submissions_pkey primary key (id)
     )`);
     await runner.query(`create index submissions_site_month_idx on submissions (site_id, month)`);

@@ -63,7 +63,7 @@ export async function insertRequest(tx: Tx, leadId: string, form: Form, year: nu
   await tx.query("select pg_advisory_xact_lock(hashtext('access-request-number'))");
   const [{ next }] = (await tx.query('select next_request_number($1) as next', [`AR-${year}-`])) as [{ next: string }];
   const id = randomUUID();
-  await tx.query("insert into access_requests (id, number, status, lead_id, form, version_hash) values ($1, $2, 'draft', $3, $4, $5)", [
+  await tx.query("insert into access_requests (id, number, status, lead_id, form, version_hash, votes_needed_because) values ($1, $2, 'draft', $3, $4, $5, '[]')", [
     id,
     next,
     leadId,

@@ -49,7 +49,7 @@ export async function findUnsettled(tx: Tx, siteId: string, month: string): Prom
 
 export async function insertSubmission(tx: Tx, siteId: string, month: string, createdBy: string): Promise<string> {
   const id = randomUUID();
-  await tx.query("insert into submissions (id, site_id, month, status, created_by) values ($1, $2, $3, 'open', $4)", [id, siteId, month, createdBy]);
+  await tx.query("insert into submissions (id, site_id, month, status, created_by, findings) values ($1, $2, $3, 'open', $4, '[]')", [id, siteId, month, createdBy]);
   return id;
 }
 
