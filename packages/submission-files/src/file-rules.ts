@@ -198,8 +198,15 @@ export const fileRules: readonly RuleText[] = [
   {
     id: 'F36',
     severity: 'error',
-    statement: 'The year of injury is not in the future and fits the age.',
-    why: 'The year, or the age, is mistyped.',
-    mend: 'Correct the year of injury or the age.',
+    statement: 'Neither the year of injury nor the first training day that follows from it lies in the future.',
+    why: 'The year, or the days from injury, is mistyped.',
+    mend: 'Correct the year of injury or the days from injury to the first training day.',
+  },
+  {
+    id: 'F37',
+    severity: 'error',
+    statement: 'A consent does not end before it was signed.',
+    why: 'One of the two study days is wrong.',
+    mend: 'Correct the day of signing or the last day on which the consent holds.',
   },
 ];

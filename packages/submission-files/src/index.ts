@@ -19,3 +19,4 @@ export type { Cell } from './table/typed-table.ts';
 export { formatNumber } from './writing/format-number.ts';
 export { csvHeader, writeCsv } from './writing/write-csv.ts';
 export type { RegistryContext, TypedTables } from './registry-context.ts';
+export { checkSubmission } from './check-submission.ts';

@@ -36,11 +36,36 @@ export class TypedColumn {
     return this.number(row) ?? this.word(row);
   }
 
+  /** Whether the file left the cell blank. A cell that could not be read is not empty, though it has no value. */
   isEmpty(row: number): boolean {
-    return this.number(row) === null && !this.words?.[row];
+    return this.number(row) === null && !this.words?.[row] && !this.isUnreadable(row);
   }
 
-  /** Whether the file held something here that could not be read; the cell then counts as empty and its finding is already made. */
+  /** This column with the given rows of another one of the same variable behind its own. */
+  followedBy(other: TypedColumn, length: number, rows: readonly number[]): TypedColumn {
+    const whole = length + rows.length;
+    const numbers = this.numbers || other.numbers ? new Float64Array(whole).fill(Number.NaN) : null;
+    const words = this.words || other.words ? new Uint32Array(whole) : null;
+    const vocabulary = [...this.vocabulary];
+    const own = new Map(vocabulary.map((word, index) => [word, index]));
+    const translate = (index: number): number => {
+      const word = other.vocabulary[index] ?? '';
+      let number = own.get(word);
+      if (number === undefined) own.set(word, (number = vocabulary.push(word) - 1));
+      return number;
+    };
+    if (numbers && this.numbers) numbers.set(this.numbers);
+    if (words && this.words) words.set(this.words);
+    rows.forEach((row, offset) => {
+      if (numbers && other.numbers) numbers[length + offset] = other.numbers[row] ?? Number.NaN;
+      if (words && other.words) words[length + offset] = translate(other.words[row] ?? 0);
+    });
+    const unreadable = this.unreadable && new Uint8Array(whole);
+    if (unreadable && this.unreadable) unreadable.set(this.unreadable);
+    return new TypedColumn(this.variable, numbers, words, vocabulary, unreadable);
+  }
+
+  /** Whether the file held something here that could not be read; its finding is already made. */
   isUnreadable(row: number): boolean {
     return this.unreadable?.[row] === 1;
   }
@@ -67,6 +92,15 @@ export class TypedTable {
     const column = this.byKey.get(key);
     if (!column) throw new Error(`The dictionary has no column ${key} in ${this.key}.`);
     return column;
+  }
+
+  /** This table with the given rows of another one of the same kind behind its own. */
+  followedBy(other: TypedTable, rows: readonly number[]): TypedTable {
+    if (rows.length === 0) return this;
+    const columns = this.columns.map((column) => column.followedBy(other.column(column.variable.key), this.length, rows));
+    const lines = new Uint32Array(this.length + rows.length);
+    lines.set(this.lines);
+    return new TypedTable(this.key, lines.length, lines, columns, this.present);
   }
 
   /** One row as an array in the dictionary's order of columns. */
