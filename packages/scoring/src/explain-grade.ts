@@ -109,7 +109,7 @@ function motorCompleteReason(sheet: Sheet): Reason {
     return keyMuscles.filter((muscle) => farBelow(highest) & (1 << place[muscle])).map((muscle) => cellKey(side, 'motor', muscle));
   });
   return {
-    because: `${preserved.because} Voluntary anal contraction is absent and nothing moves more than three levels ${listed(nothing)}, so only sensation is preserved.`,
+    because: `${preserved.because} Voluntary anal contraction is absent and nothing moves more than three levels ${listed(nothing)}, so the injury is motor complete: B.`,
     cells: ['vac', ...preserved.cells, ...far],
   };
 }
