@@ -93,8 +93,8 @@ export function LevelColumn({ label, counts, range, onRangeChange }: LevelColumn
                 if (dragging.current) choose(anchor, segment);
               }}
               className={`grid min-h-6 cursor-pointer grid-cols-[44px_40px_1fr] items-center gap-2 border-l-4 pl-2 focus-visible:-outline-offset-2 ${
-                selected ? 'border-lichen bg-chosen font-semibold' : 'border-transparent hover:bg-paper'
-              } ${startsRegion(index) ? 'mt-1 pt-1' : ''}`}
+                selected ? 'border-l-lichen bg-chosen font-semibold' : 'border-l-transparent hover:bg-paper'
+              } ${startsRegion(index) ? 'border-t border-t-hairline' : ''}`}
             >
               <SegmentRow segment={segment} count={counts.get(segment) ?? (counts.has(segment) ? null : 0)} largest={largest} />
             </li>
@@ -153,7 +153,7 @@ function TypedRange({ range, onRangeChange }: Pick<LevelColumnProps, 'range' | '
         <TextField
           id="level-range"
           label="Levels"
-          hint="One or a range, such as C5-T6"
+          hint="For example C5-T6"
           value={text}
           onChange={setText}
           error={error}

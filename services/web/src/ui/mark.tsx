@@ -46,8 +46,8 @@ export function StackProgress({ label, steps }: { readonly label: string; readon
           <svg
             aria-hidden="true"
             width="136"
-            height="32"
-            viewBox="0 0 136 32"
+            height="44"
+            viewBox="0 0 136 44"
             className={state === 'done' || state === 'current' ? 'stone-settles' : ''}
           >
             <StepStone width={widths[index] ?? 40} offset={index % 2 === 0 ? 0 : 3} look={stoneLooks[state]} />
@@ -65,5 +65,5 @@ export function StackProgress({ label, steps }: { readonly label: string; readon
 }
 
 function StepStone({ width, offset, look }: { readonly width: number; readonly offset: number; readonly look: string }) {
-  return <rect x={(136 - width) / 2 + offset} y="2" width={width} height="28" rx="14" className={look} />;
+  return <rect x={(136 - width) / 2 + offset} y="2" width={width} height="40" rx="20" className={look} />;
 }

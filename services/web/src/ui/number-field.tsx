@@ -1,5 +1,4 @@
 import type { Ref } from 'react';
-import { Group } from 'react-aria-components/Group';
 import { Input } from 'react-aria-components/Input';
 import { NumberField as AriaNumberField } from 'react-aria-components/NumberField';
 import { FieldParts, inputLook } from './field.tsx';
@@ -13,7 +12,7 @@ export interface NumberFieldProps extends FieldProps {
   readonly minValue?: number;
   readonly maxValue?: number;
   readonly step?: number;
-  /** Written behind the input and read with its label. */
+  /** Written behind the label. */
   readonly unit?: string;
   readonly ref?: Ref<HTMLInputElement>;
 }
@@ -30,14 +29,7 @@ export function NumberField({ label, hint, error, value, onChange, unit, ref, ..
       className="grid max-w-xl gap-1"
     >
       <FieldParts label={unit === undefined ? label : `${label}, ${unit}`} hint={hint} error={error} isRequired={rest.isRequired ?? false}>
-        <Group className="flex max-w-40 items-center gap-2">
-          <Input {...(ref !== undefined && { ref })} className={`${inputLook} numbers`} />
-          {unit !== undefined && (
-            <span aria-hidden="true" className="text-quiet">
-              {unit}
-            </span>
-          )}
-        </Group>
+        <Input {...(ref !== undefined && { ref })} className={`${inputLook} numbers max-w-40`} />
       </FieldParts>
     </AriaNumberField>
   );

@@ -1,0 +1,20 @@
+/** From a refusal's JSON pointers to the fields of a form. */
+import { ProblemError } from './problem-error.ts';
+
+export interface PlacedProblem {
+  readonly fieldId?: string;
+  readonly message: string;
+}
+
+/**
+ * `fieldIds`: the id of the field for each pointer the form can mend, for example `{ '/form/title': 'title' }`; a pointer deeper
+ * than a key belongs to it. Anything else that was refused is told without a field.
+ */
+export function problemsOf(error: unknown, fieldIds: Readonly<Record<string, string>>): PlacedProblem[] {
+  if (!(error instanceof ProblemError)) return [];
+  return error.errors.map(({ pointer, detail }) => {
+    const key = Object.keys(fieldIds).find((known) => pointer === known || pointer.startsWith(`${known}/`));
+    const fieldId = key === undefined ? undefined : fieldIds[key];
+    return { ...(fieldId !== undefined && { fieldId }), message: detail };
+  });
+}
