@@ -95,7 +95,8 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
   );
 }
 
-const cellLook = 'border-b border-hairline px-3 py-2 align-top first:pl-0 last:pr-0';
+const cellLook = 'border-b px-3 py-2 font-normal first:pl-0 last:pr-0';
+const alignment = (kind: 'text' | 'number' = 'text') => (kind === 'number' ? 'numbers text-right' : 'text-left');
 
 function HeaderCell<Row>({
   column,
@@ -108,20 +109,20 @@ function HeaderCell<Row>({
 }) {
   const words = (
     <>
-      {column.header}
-      {column.unit !== undefined && <span className="font-normal text-quiet">, {column.unit}</span>}
+      <span className="font-semibold">{column.header}</span>
+      {column.unit !== undefined && <span className="text-quiet">, {column.unit}</span>}
     </>
   );
   return (
     <th
       scope="col"
       aria-sort={direction}
-      className={`${cellLook} sticky top-0 border-b-edge bg-sheet align-bottom font-semibold ${column.kind === 'number' ? 'text-right' : 'text-left'}`}
+      className={`${cellLook} sticky top-0 border-edge bg-sheet align-bottom ${alignment(column.kind)}`}
     >
       {onSort === undefined ? (
         words
       ) : (
-        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-center gap-1 text-left hover:underline">
+        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-center gap-1 hover:underline">
           <span>{words}</span>
           <SortMark direction={direction} />
         </button>
@@ -149,7 +150,7 @@ function SortMark({ direction }: { readonly direction: 'ascending' | 'descending
 }
 
 function BodyCell<Row>({ column, row }: { readonly column: Column<Row>; readonly row: Row }) {
-  const look = `${cellLook} text-left font-normal ${column.kind === 'number' ? 'numbers text-right' : ''}`;
+  const look = `${cellLook} border-hairline align-top ${alignment(column.kind)}`;
   const shown = column.cell === undefined ? plain(column, row) : column.cell(row);
   if (column.isRowHeader === true) {
     return (
