@@ -34,6 +34,8 @@ const functions: Readonly<Record<string, (a: number, b: number, c: number, d: nu
   binomial: (x, trials, probability) => statistics.binomialTails(x, trials, probability),
   logGamma: (x) => statistics.logGamma(x),
   hypergeometric: (x, marked, unmarked, draws) => statistics.hypergeometricTails(x, marked, unmarked, draws),
+  signedRank: (v, n) => statistics.signedRankTails(v, n),
+  rankSum: (u, m, n) => statistics.rankSumTails(u, m, n),
 };
 
 /** Tighter than needed for any printed figure; values below the smallest normal double may be answered by 0. */

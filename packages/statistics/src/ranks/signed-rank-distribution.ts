@@ -1,0 +1,64 @@
+/**
+ * Exact null distribution of the signed rank statistic V (sum of the ranks of positive differences) by counting all 2^n sign patterns.
+ * Source: Wilcoxon (1945) Biometrics Bulletin 1:80-83; counting with midranks as in Streitberg & Röhmel (1986) Statistical Software
+ * Newsletter 12:10-17.
+ */
+
+import type { Tails } from '../distributions/tails.ts';
+import { noneAbove, noneBelow } from '../distributions/tails.ts';
+
+/**
+ * Shares of the sign patterns whose sum is 0, 1, …, `limit`. `scores` are whole numbers: ranks, or doubled midranks when there are ties.
+ * Work: number of scores × limit.
+ */
+export function signedSumShares(scores: ArrayLike<number>, limit: number): Float64Array {
+  const shares = new Float64Array(limit + 1);
+  shares[0] = 1;
+  let reached = 0;
+  for (let i = 0; i < scores.length; i++) {
+    const score = scores[i] as number;
+    reached = Math.min(limit, reached + score);
+    // Halved as it goes, so that the counts stay within doubles however many scores there are.
+    for (let sum = reached; sum >= score; sum--) shares[sum] = ((shares[sum] as number) + (shares[sum - score] as number)) / 2;
+    for (let sum = Math.min(score - 1, reached); sum >= 0; sum--) shares[sum] = (shares[sum] as number) / 2;
+  }
+  return shares;
+}
+
+/** Share of the sign patterns whose sum is at most `limit`. */
+export function shareOfSumsUpTo(scores: ArrayLike<number>, limit: number): number {
+  return limit < 0 ? 0 : signedSumShares(scores, limit).reduce((sum, share) => sum + share, 0);
+}
+
+function ranksTo(n: number): Float64Array {
+  return Float64Array.from({ length: n }, (_, i) => i + 1);
+}
+
+/** P(V <= v) and P(V > v) for n differences without ties. */
+export function signedRankTails(v: number, n: number): Tails {
+  const greatest = (n * (n + 1)) / 2;
+  const whole = Math.floor(v);
+  if (whole < 0) return noneBelow;
+  if (whole >= greatest) return noneAbove;
+  // The distribution is symmetric, so the smaller tail serves for both sides.
+  const lowerIsSmall = whole < greatest / 2;
+  const small = shareOfSumsUpTo(ranksTo(n), lowerIsSmall ? whole : greatest - whole - 1);
+  const [lower, upper] = lowerIsSmall ? [small, 1 - small] : [1 - small, small];
+  return { lower, upper, logLower: Math.log(lower), logUpper: Math.log(upper) };
+}
+
+/** Smallest v with P(V <= v) >= p, and P(V < v), for n differences without ties; 0 < p <= 1/2. */
+export function signedRankQuantile(p: number, n: number): { readonly v: number; readonly below: number } {
+  const shares = signedSumShares(ranksTo(n), Math.floor((n * (n + 1)) / 4));
+  return smallestReaching(shares, p);
+}
+
+/** Smallest index whose running sum of shares reaches p, and the sum before it. Rounding must not push it one further. */
+export function smallestReaching(shares: Float64Array, p: number): { readonly v: number; readonly below: number } {
+  let below = 0;
+  for (const [v, share] of shares.entries()) {
+    if (below + share >= p * (1 - 1e-12)) return { v, below };
+    below += share;
+  }
+  return { v: shares.length - 1, below: below - (shares.at(-1) ?? 0) };
+}
