@@ -17,8 +17,11 @@ const scopeOf = (actor: Actor) => ({
 const scopeQuery = `select set_config('role', 'cairnstep_app', true), set_config('cairnstep.account', $1, true),
   set_config('cairnstep.roles', $2, true), set_config('cairnstep.reads', $3, true), set_config('cairnstep.writes', $4, true)`;
 
-export async function asActor<T>(database: DataSource, actor: Actor, work: (tx: Tx) => Promise<T>): Promise<T> {
-  return database.transaction(async (tx) => {
+/** `one-moment`: every statement sees the registry as it was at the first (repeatable read). */
+export type View = 'each-statement' | 'one-moment';
+
+export async function asActor<T>(database: DataSource, actor: Actor, work: (tx: Tx) => Promise<T>, view: View = 'each-statement'): Promise<T> {
+  return database.transaction(view === 'one-moment' ? 'REPEATABLE READ' : 'READ COMMITTED', async (tx) => {
     const scope = scopeOf(actor);
     await tx.query(scopeQuery, [scope.account, scope.roles, scope.reads, scope.writes]);
     return work(tx);

@@ -23,7 +23,8 @@ export interface FileAnswer {
   readonly bytes: Buffer;
 }
 
-type Answer<E> = E extends { download: object } ? FileAnswer : ResponseOf<E>;
+/** An endpoint that sends a file promises nothing else. */
+type Answer<E> = undefined extends ResponseOf<E> ? FileAnswer : ResponseOf<E>;
 export type UseCase<E> = (actor: Actor, input: InputOf<E>, facts: RequestFacts) => Promise<Answer<E>> | Answer<E>;
 
 export interface Route {

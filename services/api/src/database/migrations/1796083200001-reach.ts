@@ -107,7 +107,7 @@ export class Reach1796083200001 implements MigrationInterface {
       $$ select exists (select from access_requests where id = request and lead_id = actor_account()) $$`);
     await runner.query(`create function actor_is_member(request uuid) returns boolean language sql stable security definer set search_path = public as
       $$ select actor_leads(request) or exists (select from access_request_members where request_id = request and account_id = actor_account()) $$`);
-    for (const table of ['access_requests', 'access_request_members', 'accounts', 'mail_messages', 'audit_entries']) await ownerMay(table);
+    for (const table of ['access_requests', 'access_request_members', 'exports', 'accounts', 'mail_messages', 'audit_entries']) await ownerMay(table);
     await allow('access_requests', {
       select: `lead_id = ${self} or actor_is_member(id) or (${has('steward')} and status <> 'draft') or ${has('registry')}`,
       insert: `(${has('researcher')} and lead_id = ${self}) or ${has('registry')}`,
@@ -161,11 +161,13 @@ export class Reach1796083200001 implements MigrationInterface {
       $$ select institution from accounts where id = account $$`);
     await runner.query(`create function next_request_number(prefix text) returns text language sql stable security definer set search_path = public as
       $$ select prefix || lpad((coalesce(max(substr(number, length(prefix) + 1)::int), 0) + 1)::text, 4, '0') from access_requests where number like prefix || '%' $$`);
+    await runner.query(`create function next_export_number(prefix text) returns text language sql stable security definer set search_path = public as
+      $$ select prefix || lpad((coalesce(max(substr(number, length(prefix) + 1)::int), 0) + 1)::text, 4, '0') from exports where number like prefix || '%' $$`);
     await runner.query(`create function prune_web_sessions() returns void language sql security definer set search_path = public as
       $$ delete from web_sessions where expire < (now() at time zone current_setting('TimeZone')) $$`);
     for (const signature of [
       'actor_list(text)', 'actor_has(text[])', 'actor_sites(text)', 'actor_account()', 'actor_leads(uuid)', 'actor_is_member(uuid)', 'audit_head()',
-      'queue_mail(uuid, text, text, text, text)', 'account_name(uuid)', 'account_institution(uuid)', 'next_request_number(text)', 'prune_web_sessions()',
+      'queue_mail(uuid, text, text, text, text)', 'account_name(uuid)', 'account_institution(uuid)', 'next_request_number(text)', 'next_export_number(text)', 'prune_web_sessions()',
     ]) { // prettier-ignore
       await runner.query(`revoke all on function ${signature} from public`);
       await runner.query(`grant execute on function ${signature} to cairnstep_app`);
@@ -183,7 +185,7 @@ export class Reach1796083200001 implements MigrationInterface {
       await runner.query(`alter table ${table} no force row level security`);
       await runner.query(`alter table ${table} disable row level security`);
     }
-    for (const name of ['prune_web_sessions', 'next_request_number', 'account_institution', 'account_name', 'queue_mail', 'refuse_change', 'audit_head', 'actor_is_member', 'actor_leads', 'actor_account', 'actor_sites', 'actor_has', 'actor_list']) {
+    for (const name of ['prune_web_sessions', 'next_export_number', 'next_request_number', 'account_institution', 'account_name', 'queue_mail', 'refuse_change', 'audit_head', 'actor_is_member', 'actor_leads', 'actor_account', 'actor_sites', 'actor_has', 'actor_list']) {
       await runner.query(`drop function ${name}`);
     }
   }

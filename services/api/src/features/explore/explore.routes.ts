@@ -59,7 +59,7 @@ function notesOf(view: View, outcome: OutcomeOut): string[] {
 }
 
 /** Level groups top down, then people without a deficit's level and people whose level cannot be determined. */
-const gridRows = [...levelGroups.groups.map(({ id, label }) => ({ id, label })), { id: 'ND', label: 'Not determinable' }];
+const gridRows: readonly { readonly id: string; readonly label: string }[] = [...levelGroups.groups, { id: 'ND', label: 'Not determinable' }];
 
 function levelColumn(courses: readonly CourseFact[], view: View): Grid['levels'] {
   return spinalLevels.map((level) => {

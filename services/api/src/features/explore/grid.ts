@@ -1,6 +1,6 @@
 /** The grid: one statistic of one outcome by level group and AIS grade. Pure: facts in, cells out. */
 import { grades, type Cell } from '@cairnstep/contract';
-import { protectTable, type HiddenPattern, type Place } from '@cairnstep/disclosure';
+import { protectTable, siteDominance, type HiddenPattern, type Place } from '@cairnstep/disclosure';
 import { meanWithInterval } from '@cairnstep/statistics';
 import { publicCount } from './public-count.ts';
 import type { OutcomeFact } from './facts.ts';
@@ -49,10 +49,8 @@ function valueOf(fact: OutcomeFact, statistic: Statistic, view: View): number | 
   return statistic === 'change' ? settle(end - baseline) : statistic === 'baseline' ? baseline : end;
 }
 
-/** At least three sites, none with more than three quarters of the people: otherwise a figure is one clinic's figure. Methods reference: dominance, common practice. */
-function isOneClinics(sites: ReadonlyMap<string, number>, n: number): boolean {
-  return n > 0 && (sites.size < 3 || Math.max(...sites.values()) > 0.75 * n);
-}
+/** A group that comes mostly from one clinic is that clinic's figure; an empty one needs no protection. */
+const isOneClinics = (sites: ReadonlyMap<string, number>): boolean => sites.size > 0 && siteDominance([...sites.values()]).unsafe;
 
 class Group {
   readonly values: number[] = [];
@@ -111,7 +109,7 @@ export function gridCells(facts: readonly OutcomeFact[], options: Options): Grid
   let hidden: HiddenPattern | null = null;
   if (view === 'registry') {
     const counts = rows.map((_, row) => grades.map((_grade, column) => groupAt(row, column).values.length));
-    const alsoHide = perPlace((place) => isOneClinics(at(place).sites, at(place).values.length));
+    const alsoHide = perPlace((place) => isOneClinics(at(place).sites));
     hidden = protectTable({ counts }, { alsoHide }).hidden;
   }
   const isHidden = ({ row, column }: Place): boolean => {

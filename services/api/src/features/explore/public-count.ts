@@ -1,4 +1,4 @@
 /** Counts as anyone may see them: 1 to 10 hidden (null), the others to the nearest 5. */
-import { SMALLEST_SHOWN } from '@cairnstep/disclosure';
+import { nearestFive, SMALLEST_SHOWN } from '@cairnstep/disclosure';
 
-export const publicCount = (count: number): number | null => (count > 0 && count < SMALLEST_SHOWN ? null : Math.round(count / 5) * 5);
+export const publicCount = (count: number): number | null => (count > 0 && count < SMALLEST_SHOWN ? null : nearestFive(count));

@@ -1,5 +1,5 @@
 /** The class of an exam as the registry stores it beside the cells. Every possible value is kept, so that "not determinable" stays exact. */
-import { classify, examFromCells, levelGroups, validateExam } from '@cairnstep/scoring';
+import { classify, examFromCells, levelGroups, notDeterminable, validateExam } from '@cairnstep/scoring';
 import type { TypedTable } from '@cairnstep/submission-files';
 
 /** In the order of `classColumns`: possible levels, possible grades, level group, upper and lower extremity motor score. */
@@ -17,5 +17,6 @@ export function classOfExam(table: TypedTable, row: number): ExamClass {
   );
   if (!('exam' in read)) throw new Error('An exam that cannot be classified reached staging.');
   const { nli, ais, totals } = classify(read.exam);
-  return [nli.values, ais.values, levelGroups.groupOfAll(nli.values) ?? 'ND', scoreOrNull(totals.uems), scoreOrNull(totals.lems)];
+  const group = levelGroups.assign(nli.values);
+  return [nli.values, ais.values, group === notDeterminable ? 'ND' : group, scoreOrNull(totals.uems), scoreOrNull(totals.lems)];
 }

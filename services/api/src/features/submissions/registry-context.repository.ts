@@ -1,7 +1,10 @@
 /** What the registry already holds of the people in a submission, as the checks need it. */
-import { tableOf, type TableKey } from '@cairnstep/dictionary';
-import { tableFromRows, type Cell, type RegistryContext, type TypedTable, type TypedTables } from '@cairnstep/submission-files';
+import { tableOf, type Row, type TableKey } from '@cairnstep/dictionary';
+import { tableFromRows, type RegistryContext, type TypedTable, type TypedTables } from '@cairnstep/submission-files';
 import type { Tx } from '../../database/as-actor.ts';
+
+type StoredRow = Readonly<Record<string, string | number | null>>;
+const withoutNulls = (row: StoredRow): Row => Object.fromEntries(Object.entries(row).filter((entry): entry is [string, string | number] => entry[1] !== null));
 
 async function readHeld(tx: Tx, key: TableKey, siteId: string, month: string, people: readonly string[], only: string | null): Promise<TypedTable | null> {
   const columns = tableOf(key).variables.map((variable) => variable.key);
@@ -9,8 +12,8 @@ async function readHeld(tx: Tx, key: TableKey, siteId: string, month: string, pe
     `select ${columns.map((column) => `t.${column}`).join(', ')} from ${key} t
       where t.site_id = $1 and t.month <> $2 and t.participant = any($3::text[])${only === null ? '' : ` and ${only}`}`,
     [siteId, month, people],
-  )) as Record<string, Cell>[];
-  return rows.length === 0 ? null : tableFromRows(key, rows.map((row) => columns.map((column) => row[column] ?? null)));
+  )) as StoredRow[];
+  return rows.length === 0 ? null : tableFromRows(key, rows.map(withoutNulls));
 }
 
 /** Bouts are needed only of sessions that occur in the files. */
@@ -53,6 +56,6 @@ export async function loadRegistryContext(tx: Tx, siteId: string, month: string,
 
 async function readOthers(tx: Tx, siteId: string, codes: readonly string[]): Promise<TypedTable | null> {
   const columns = tableOf('participants').variables.map((variable) => variable.key);
-  const rows = (await tx.query(`select ${columns.join(', ')} from participants where site_id = $1 and not participant = any($2::text[])`, [siteId, codes])) as Record<string, Cell>[];
-  return rows.length === 0 ? null : tableFromRows('participants', rows.map((row) => columns.map((column) => row[column] ?? null)));
+  const rows = (await tx.query(`select ${columns.join(', ')} from participants where site_id = $1 and not participant = any($2::text[])`, [siteId, codes])) as StoredRow[];
+  return rows.length === 0 ? null : tableFromRows('participants', rows.map(withoutNulls));
 }
