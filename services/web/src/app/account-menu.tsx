@@ -13,7 +13,7 @@ export function AccountMenu({ account }: { readonly account: Account | undefined
   const signedIn = account?.signedIn === true;
   const returnTo = pathname === '/' || pathname === '/sign-in' ? '/start' : pathname + search;
   return (
-    <div className="flex w-full flex-wrap items-center justify-between gap-x-5 py-1 md:order-1 md:w-auto md:py-0">
+    <div className="relative flex w-full flex-wrap items-center justify-between gap-x-5 py-1 md:order-1 md:w-auto md:py-0">
       {account !== undefined && !signedIn && (
         <Link to={signInAddress(returnTo)} className="link font-semibold">
           Sign in
@@ -109,7 +109,6 @@ function Foldout({ label, children }: { readonly label: string; readonly childre
   return (
     <div
       ref={box}
-      className="relative"
       onKeyDown={(event) => {
         if (event.key !== 'Escape' || !open) return;
         setOpen(false);
@@ -132,7 +131,11 @@ function Foldout({ label, children }: { readonly label: string; readonly childre
           <path d={open ? 'M1 6.5 6 1.5 11 6.5' : 'M1 1.5 6 6.5 11 1.5'} />
         </svg>
       </button>
-      <div id={panelId} hidden={!open} className="absolute right-0 z-20 mt-1 w-64 rounded-sm border border-edge bg-sheet p-4">
+      <div
+        id={panelId}
+        hidden={!open}
+        className="absolute inset-x-0 top-full z-20 rounded-sm border border-edge bg-sheet p-4 md:left-auto md:w-64"
+      >
         <div className="grid gap-3">{children}</div>
       </div>
     </div>

@@ -16,7 +16,7 @@ export function Frame() {
     <div className="mx-auto flex min-h-dvh max-w-[1200px] flex-col">
       <a
         href="#main"
-        className="not-printed sr-only rounded-sm bg-sheet px-4 py-2 font-semibold text-lake focus:not-sr-only focus:absolute focus:top-2 focus:left-2 focus:z-30"
+        className="not-printed sr-only rounded-sm bg-sheet font-semibold text-lake focus:not-sr-only focus:absolute focus:px-4 focus:py-2 focus:top-2 focus:left-2 focus:z-30"
       >
         Skip to the content
       </a>

@@ -20,7 +20,7 @@ export function Navigation({ account }: { readonly account: Account | undefined 
       >
         {open ? 'Close' : 'Pages'}
       </button>
-      <ul id="pages" className={`w-full ${open ? 'grid pb-2' : 'hidden'} md:order-2 md:flex md:flex-wrap md:gap-x-6 md:pt-2 md:pb-0`}>
+      <ul id="pages" className={`w-full ${open ? 'grid pt-2' : 'hidden'} md:order-2 md:flex md:flex-wrap md:gap-x-6 md:pt-2 md:pb-0`}>
         {navigationFor(account).map(({ path, nav }) => (
           <li key={path}>
             <NavLink
