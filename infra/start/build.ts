@@ -79,19 +79,20 @@ async function bundleClient({ logFile, signal }: BuildOptions): Promise<void> {
   });
 }
 
-/** Brings dist folders up to date with the sources. */
-export async function buildIfChanged(options: BuildOptions): Promise<void> {
-  const steps: readonly [Part, string, (options: BuildOptions) => Promise<void>][] = [
-    ['servers', 'Compiling the servers', compileServers],
-    ['client', 'Building the client', bundleClient],
-  ];
-  for (const [part, what, build] of steps) {
+const steps: Readonly<Record<Part, { readonly what: string; readonly build: (options: BuildOptions) => Promise<void> }>> = {
+  servers: { what: 'Compiling the servers', build: compileServers },
+  client: { what: 'Building the client', build: bundleClient },
+};
+
+/** Brings the dist folders of the named parts up to date with their sources. */
+export async function buildIfChanged(parts: readonly Part[], options: BuildOptions): Promise<void> {
+  for (const part of parts) {
     const hash = contentHash(projectRoot, madeOf[part], isLeftOut);
     if (readStamps()[part] === hash && isBuilt[part]()) continue;
-    options.onWork(what);
+    options.onWork(steps[part].what);
     // A build that fails half-way must not count as the one before it.
     writeStamp(part, undefined);
-    await build(options);
+    await steps[part].build(options);
     writeStamp(part, hash);
   }
 }

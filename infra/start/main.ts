@@ -4,7 +4,6 @@ import { announcement } from './announce.ts';
 import { buildIfChanged } from './build.ts';
 import { addressOf, publicUrlOf } from './environment.ts';
 import { prepare } from './prepare.ts';
-import { compiled } from './programs.ts';
 import { removeRun, writeRun } from './run-note.ts';
 import { runProduct } from './run-product.ts';
 import { runSession, untilToldToEnd } from './session.ts';
@@ -12,9 +11,9 @@ import { runSession, untilToldToEnd } from './session.ts';
 await runSession(async (session) => {
   const { folder, place } = await prepare(session);
   const { report, onStarted, signal } = session;
-  await buildIfChanged({ logFile: join(folder.logs, 'build.log'), onWork: (what) => report(`${what} …`), signal });
+  await buildIfChanged(['servers', 'client'], { logFile: join(folder.logs, 'build.log'), onWork: (what) => report(`${what} …`), signal });
   report('Starting …');
-  await runProduct({ place, folder, once: compiled, lasting: compiled, report, onStarted, signal });
+  await runProduct({ place, folder, fromSources: false, report, onStarted, signal });
   const run = {
     address: publicUrlOf(place),
     mailAddress: addressOf(place.ports.mailPages),

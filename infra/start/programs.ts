@@ -1,7 +1,7 @@
 /** How Node runs a program of the services: as it was compiled, or from its TypeScript source. */
 
 /** Node's arguments for the program with this source, relative to the project's root. */
-export type Programs = (source: string) => readonly string[];
+type Programs = (source: string) => readonly string[];
 
 export const compiled: Programs = (source) => ['--enable-source-maps', source.replace('/src/', '/dist/').replace(/\.ts$/, '.js')];
 

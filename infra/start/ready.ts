@@ -7,7 +7,8 @@ import type { Supervised } from './supervise.ts';
 const withinMs = 60_000;
 const everyMs = 100;
 
-const answers = async (address: string): Promise<boolean> => {
+/** Whether something answers at the address, with success. */
+export const answers = async (address: string): Promise<boolean> => {
   try {
     return (await fetch(address, { signal: AbortSignal.timeout(2000) })).ok;
   } catch {
@@ -15,10 +16,10 @@ const answers = async (address: string): Promise<boolean> => {
   }
 };
 
-/** Waits until `address` answers with success. @throws StartError with the service's last words when it dies first or takes too long */
-export async function untilReady(supervised: Supervised, address: string, signal: AbortSignal): Promise<void> {
+/** Waits until a service is ready. @throws StartError with its last words when it dies first or takes too long */
+export async function untilReady(supervised: Supervised, isReady: () => boolean | Promise<boolean>, signal: AbortSignal): Promise<void> {
   const deadline = Date.now() + withinMs;
-  while (!(await answers(address))) {
+  while (!(await isReady())) {
     signal.throwIfAborted();
     const { title, logFile } = supervised.service;
     const last = (): string => `Its last words (all of them: ${logFile}):\n\n${tail(readFileSync(logFile, 'utf8'))}`;

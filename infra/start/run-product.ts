@@ -6,8 +6,8 @@ import type { DataFolder } from './data-folder.ts';
 import { identityOf, openDatabase } from './database.ts';
 import { adminEnvironment, addressOf, apiEnvironment, mailEnvironment, providerEnvironment } from './environment.ts';
 import type { Place } from './environment.ts';
-import type { Programs } from './programs.ts';
-import { untilReady } from './ready.ts';
+import { compiled, fromSource, watched } from './programs.ts';
+import { answers, untilReady } from './ready.ts';
 import { isSeeded, noteSeeded } from './seeded.ts';
 import { supervise } from './supervise.ts';
 import type { Supervised } from './supervise.ts';
@@ -15,17 +15,17 @@ import type { Supervised } from './supervise.ts';
 export interface ProductNeeds {
   readonly place: Place;
   readonly folder: DataFolder;
-  /** For migration, seed, provider and mail catcher. */
-  readonly once: Programs;
-  /** For API and worker. */
-  readonly lasting: Programs;
+  /** Runs everything from its sources, API and worker again whenever one changes; the client is served elsewhere. */
+  readonly fromSources: boolean;
   readonly report: (sentence: string) => void;
   /** Called with what ends each thing that was started, right after it was; to be called in reverse. */
   readonly onStarted: (end: () => Promise<void>) => void;
   readonly signal: AbortSignal;
 }
 
-export async function runProduct({ place, folder, once, lasting, report, onStarted, signal }: ProductNeeds): Promise<void> {
+export async function runProduct({ place, folder, fromSources, report, onStarted, signal }: ProductNeeds): Promise<void> {
+  const once = fromSources ? fromSource : compiled;
+  const lasting = fromSources ? watched : compiled;
   const log = (name: string): string => join(folder.logs, `${name}.log`);
 
   const database = await openDatabase({
@@ -66,9 +66,10 @@ export async function runProduct({ place, folder, once, lasting, report, onStart
   const api = start('The API', 'api', lasting('services/api/src/main.ts'), apiEnvironment(place, database));
   const worker = start('The worker', 'worker', lasting('services/api/src/worker.ts'), apiEnvironment(place, database));
 
-  await untilReady(provider, `${addressOf(place.ports.provider)}/.well-known/openid-configuration`, signal);
-  await untilReady(mail, addressOf(place.ports.mailPages), signal);
-  await untilReady(api, `${addressOf(place.apiPort)}/api/health/ready`, signal);
-  // The worker answers nothing; that it has not died by now is what can be known.
-  await untilReady(worker, `${addressOf(place.apiPort)}/api/health/ready`, signal);
+  const at = (address: string) => (): Promise<boolean> => answers(address);
+  await untilReady(provider, at(`${addressOf(place.ports.provider)}/.well-known/openid-configuration`), signal);
+  await untilReady(mail, at(addressOf(place.ports.mailPages)), signal);
+  await untilReady(api, at(`${addressOf(place.apiPort)}/api/health/ready`), signal);
+  // The watcher between us and a watched worker does not pass its message on.
+  if (!fromSources) await untilReady(worker, () => worker.saidReady(), signal);
 }

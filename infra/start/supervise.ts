@@ -18,6 +18,8 @@ export interface Supervised {
   readonly service: Service;
   /** How often it has ended without being told to. */
   deaths(): number;
+  /** Whether the running process has sent the message "ready" to this one; not every service does. */
+  saidReady(): boolean;
   /** Ends it and waits; it is not started again. */
   stop(): Promise<void>;
 }
@@ -32,7 +34,7 @@ export interface Patience {
   readonly endsWithin: number;
 }
 
-const usualPatience: Patience = { firstWait: 1000, longestWait: 30_000, steadyAfter: 60_000, endsWithin: 10_000 };
+const usualPatience: Patience = { firstWait: 1000, longestWait: 30_000, steadyAfter: 60_000, endsWithin: 20_000 };
 const largestLogBytes = 10_000_000;
 const leaveWithParent = fileURLToPath(new URL('./leave-with-parent.mjs', import.meta.url));
 
@@ -65,6 +67,7 @@ export function supervise(service: Service, report: (sentence: string) => void, 
   let deaths = 0;
   let deathsInARow = 0;
   let stopping = false;
+  let ready = false;
   let child: ChildProcess;
   let ended: Promise<void>;
   let again: NodeJS.Timeout | undefined;
@@ -72,6 +75,8 @@ export function supervise(service: Service, report: (sentence: string) => void, 
   const start = (): void => {
     const startedAt = Date.now();
     child = launch(service);
+    ready = false;
+    child.on('message', (message) => (ready ||= message === 'ready'));
     ended = new Promise((resolve) => {
       const onEnd = (reason: string): void => {
         resolve();
@@ -91,6 +96,7 @@ export function supervise(service: Service, report: (sentence: string) => void, 
   return {
     service,
     deaths: () => deaths,
+    saidReady: () => ready,
     async stop() {
       stopping = true;
       clearTimeout(again);

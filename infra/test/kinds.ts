@@ -4,7 +4,7 @@ import { projectRoot } from '../project-root.ts';
 import { failedOnce, judged, passedOnce } from './outcome.ts';
 import type { Outcome } from './outcome.ts';
 import { outcomeIn, playwrightOutcome, vitestOutcome } from './reports.ts';
-import { runChild } from './run-child.ts';
+import { runChild } from '../start/run-child.ts';
 
 export interface KindContext {
   /** Administrator's address of the throw-away cluster. */
