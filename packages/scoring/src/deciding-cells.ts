@@ -40,14 +40,12 @@ export function openCells(exam: Exam): OpenCell[] {
 }
 
 /**
- * The open cells that matter to a result: those of which some score would narrow it. When only several together would,
- * all open cells.
+ * The open cells of which some score would narrow a result. Empty when only several of them together would.
  */
-export function decidingCells(
+export function narrowingCells(
   open: readonly OpenCell[],
   result: Determined<string>,
   pick: (found: Classification) => Determined<string>,
 ): readonly OpenCell[] {
-  const alone = open.filter(({ settled }) => settled.some((found) => pick(found).values.length < result.values.length));
-  return alone.length > 0 ? alone : open;
+  return open.filter(({ settled }) => settled.some((found) => pick(found).values.length < result.values.length));
 }

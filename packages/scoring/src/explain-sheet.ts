@@ -55,6 +55,6 @@ export function dermatomeCells(side: Side, segment: SensorySegment): CellKey[] {
 export const perianalCells: readonly CellKey[] = sides.flatMap((side) => dermatomeCells(side, 'S4_5'));
 
 /** "a", "a and b", "a, b and c". */
-export function listed(items: readonly string[]): string {
-  return items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} and ${items.at(-1)}`;
+export function listed(items: readonly string[], last: 'and' | 'or' = 'and'): string {
+  return items.length < 2 ? items.join('') : `${items.slice(0, -1).join(', ')} ${last} ${items.at(-1)}`;
 }

@@ -1,8 +1,8 @@
-import type { AisGrade, Classification, Determined } from './classification.ts';
+import type { Classification, Determined } from './classification.ts';
 import { cellPlaces } from './cell-key.ts';
 import { cellName } from './cell-name.ts';
 import type { OpenCell } from './deciding-cells.ts';
-import { decidingCells, openCells } from './deciding-cells.ts';
+import { narrowingCells, openCells } from './deciding-cells.ts';
 import { completenessReason, gradeConditions, gradeReason } from './explain-grade.ts';
 import { motorLevelReason, nliReason, sensoryLevelReason } from './explain-levels.ts';
 import type { Reason, Sheet } from './explain-sheet.ts';
@@ -18,18 +18,20 @@ const cellNames: ReadonlyMap<CellKey, string> = new Map([
   ['dap', 'deep anal pressure'],
 ]);
 
-function openReason(sheet: Sheet, open: readonly OpenCell[], result: TraceStep['result']): Reason {
-  const cells = open.map(({ key }) => key);
-  const named = listed(open.map(({ key, written }) => `${cellNames.get(key)!} (${written})`));
-  const depends = `Not determinable: it depends on ${named}.`;
-  if (result !== 'ais') return { because: depends, cells };
-  const conditions = sheet.found.ais.values.map((grade: AisGrade) => gradeConditions[grade]);
-  return { because: `${depends} It is ${conditions.join('; ')}.`, cells };
+function openReason(sheet: Sheet, narrowing: readonly OpenCell[], open: readonly OpenCell[], result: TraceStep['result']): Reason {
+  const told = narrowing.length > 0 ? narrowing : open;
+  const named = told.map(({ key, written }) => `${cellNames.get(key)!} (${written})`);
+  const depends =
+    narrowing.length > 0
+      ? `Knowing ${listed(named, 'or')} could narrow it.`
+      : `Only several of these together could narrow it: ${listed(named)}.`;
+  const conditions = result === 'ais' ? ` It is ${sheet.found.ais.values.map((grade) => gradeConditions[grade]).join('; ')}.` : '';
+  return { because: `Not determinable. ${depends}${conditions}`, cells: told.map(({ key }) => key) };
 }
 
 /**
  * Why each result of `classify` came out: one step for each level, the completeness, the grade and each zone, in plain
- * words with the deciding cells. A result with several possible values names the open cells that keep it so. Much slower
+ * words with the deciding cells. A result with several possible values names the open cells that could narrow it. Much slower
  * than `classify`, which it calls once for every score of every open cell.
  *
  * @throws UnreadableCellError when a cell holds nothing the sheet allows; check with `validateExam` first.
@@ -45,7 +47,7 @@ export function explain(exam: Exam): TraceStep[] {
   ): TraceStep {
     const found = pick(sheet.found);
     const isOpen = found.values.length > 1;
-    const { because, cells } = isOpen ? openReason(sheet, decidingCells(open, found, pick), about.result) : determinate();
+    const { because, cells } = isOpen ? openReason(sheet, narrowingCells(open, found, pick), open, about.result) : determinate();
     const tagged = found.tagged ? ' Cells tagged for another condition change this result.' : '';
     return { ...about, value: found.values.join(', '), because: because + tagged, cells: [...new Set(cells)] };
   }

@@ -1,9 +1,8 @@
 import type { NotDeterminable } from './assign-by-set.ts';
-import { assignBySet } from './assign-by-set.ts';
+import { assignBySet, notDeterminable } from './assign-by-set.ts';
 import type { AisGrade } from './classification.ts';
 import { place } from './level-bits.ts';
 import type { Level } from './segments.ts';
-import { levels } from './segments.ts';
 
 /** The reporting groups of the International SCI Data Sets (DeVivo et al., Spinal Cord 2011;49:596-9). */
 export const reportingGroups = {
@@ -33,30 +32,33 @@ export interface ReportingFacts {
   readonly ais: readonly AisGrade[] | undefined;
 }
 
-function isNormal(grade: AisGrade): boolean {
-  return grade === 'E' || grade === 'none';
+function groupWithoutLevel(grade: AisGrade): ReportingGroupId | undefined {
+  if (grade === 'E') return 'ais_e';
+  if (grade === 'none') return 'no_grade';
+  return grade === 'D' ? 'ais_d' : undefined;
 }
 
 function groupOf(level: Level, grade: AisGrade): ReportingGroupId {
-  if (grade === 'E') return 'ais_e';
-  if (grade === 'none') return 'no_grade';
-  if (grade === 'D') return 'ais_d';
+  const group = groupWithoutLevel(grade);
+  if (group !== undefined) return group;
   if (place[level] <= place.C4) return 'c1_c4_abc';
   return place[level] <= place.C8 ? 'c5_c8_abc' : 't1_s3_abc';
 }
 
+/** An intact level and a normal grade only ever occur together. */
+function canOccur(level: Level, grade: AisGrade): boolean {
+  return (level === 'INT') === (grade === 'E' || grade === 'none');
+}
+
 /**
  * The reporting group of one person. Ventilator dependence goes before level and grade; D and E need no level. Not
- * determinable when the values that level and grade can have fall in different groups.
+ * determinable when the values that level and grade can have fall in different groups, or contradict each other.
  */
 export function reportingGroup({ ventilator, nli, ais }: ReportingFacts): ReportingGroupId | NotDeterminable {
   if (ventilator === true) return 'ventilator';
   if (ventilator === undefined || ais === undefined) return 'unknown';
-  const needsLevel = ais.some((grade) => !isNormal(grade) && grade !== 'D');
-  if (nli === undefined && needsLevel) return 'unknown';
-  // An intact level and a normal grade only ever occur together.
-  const pairs = (nli ?? levels).flatMap((level) =>
-    ais.filter((grade) => isNormal(grade) === (level === 'INT')).map((grade) => ({ level, grade })),
-  );
-  return assignBySet(pairs, ({ level, grade }) => groupOf(level, grade));
+  if (ais.every((grade) => groupWithoutLevel(grade) !== undefined)) return assignBySet(ais, (grade) => groupOf('INT', grade));
+  if (nli === undefined) return 'unknown';
+  const pairs = nli.flatMap((level) => ais.filter((grade) => canOccur(level, grade)).map((grade) => ({ level, grade })));
+  return pairs.length === 0 ? notDeterminable : assignBySet(pairs, ({ level, grade }) => groupOf(level, grade));
 }
