@@ -3,15 +3,16 @@
  * which passes /api on to the API. Database, sign-in and mail are those of npm start.
  */
 import { join } from 'node:path';
-import { createServer } from 'vite';
 import { drawFreePort, loopback } from '../network/ports.ts';
 import { projectRoot } from '../project-root.ts';
 import { announcement } from '../start/announce.ts';
 import { addressOf, publicUrlOf } from '../start/environment.ts';
 import { prepare } from '../start/prepare.ts';
+import { answers, untilReady } from '../start/ready.ts';
 import { removeRun, writeRun } from '../start/run-note.ts';
 import { runProduct } from '../start/run-product.ts';
 import { runSession, untilToldToEnd } from '../start/session.ts';
+import { supervise } from '../start/supervise.ts';
 
 await runSession(async (session) => {
   const { folder, place: prepared } = await prepare(session);
@@ -21,13 +22,27 @@ await runSession(async (session) => {
   report('Starting …');
   await runProduct({ place, folder, fromSources: true, report, onStarted, signal });
 
-  process.chdir(join(projectRoot, 'services/web'));
-  const client = await createServer({
-    logLevel: 'warn',
-    server: { host: loopback, port: place.ports.product, strictPort: true, proxy: { '/api': addressOf(place.apiPort) } },
-  });
-  await client.listen();
-  onStarted(() => client.close());
+  const address = addressOf(place.ports.product);
+  const client = supervise(
+    {
+      title: 'The client’s server',
+      arguments: [
+        join(projectRoot, 'node_modules/vite/bin/vite.js'),
+        '--host',
+        loopback,
+        '--port',
+        String(place.ports.product),
+        '--strictPort',
+      ],
+      cwd: join(projectRoot, 'services/web'),
+      // With CI set, vite does not take a closed standard input for the order to end.
+      environment: { ...process.env, API_URL: addressOf(place.apiPort), CI: 'true' },
+      logFile: join(folder.logs, 'client.log'),
+    },
+    report,
+  );
+  onStarted(() => client.stop());
+  await untilReady(client, () => answers(address), signal);
 
   const run = {
     address: publicUrlOf(place),
