@@ -1,6 +1,6 @@
 /**
  * How long the random intercept model takes for a registry's worth of rows: 30,000 participants with six visits each, some missing.
- * Run: node --import tsx bench/random-intercept.bench.ts
+ * Run: npx tsx --conditions=@cairnstep/source bench/random-intercept.bench.ts
  */
 
 import { performance } from 'node:perf_hooks';

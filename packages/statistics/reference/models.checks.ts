@@ -1,15 +1,26 @@
 /** Regression, analysis of covariance, logistic regression and the random intercept model against R. */
 
 import type { Predictor } from '../src/index.ts';
-import { ancova, indicatorPredictors, linearRegression, logisticRegression, predictedMean, productPredictor, randomInterceptModel } from '../src/index.ts';
+import {
+  ancova,
+  indicatorPredictors,
+  linearRegression,
+  logisticRegression,
+  predictedMean,
+  productPredictor,
+  randomInterceptModel,
+  randomSlopeModel,
+} from '../src/index.ts';
 import type { ReferenceCheck } from './agreement.ts';
 import ancovaFixture from './ancova.json' with { type: 'json' };
 import { coefficientColumns, figures, membersOf } from './figures.ts';
 import linearFixture from './linear-regression.json' with { type: 'json' };
 import logisticFixture from './logistic-regression.json' with { type: 'json' };
 import mixedFixture from './random-intercept.json' with { type: 'json' };
+import slopeFixture from './random-slope.json' with { type: 'json' };
 
-const namedColumns = (columns: object): Predictor[] => Object.entries(columns).map(([name, values]) => ({ name, values: values as number[] }));
+const namedColumns = (columns: object): Predictor[] =>
+  Object.entries(columns).map(([name, values]) => ({ name, values: values as number[] }));
 
 const linearChecks = linearFixture.regressions.map((one): ReferenceCheck => {
   const { id, source, outcome, predictors, predictions, tolerance } = one;
@@ -40,61 +51,57 @@ const linearChecks = linearFixture.regressions.map((one): ReferenceCheck => {
   };
 });
 
-const ancovaChecks = ancovaFixture.cases.map(
-  (one): ReferenceCheck => ({
-    ...one,
-    method: 'ancova',
-    compute: () =>
-      membersOf(ancova(one), (model) => ({
-        ...model,
-        ...coefficientColumns(model.coefficients),
-        groups: model.adjustedMeans.map((row) => row.group),
-        groupTest: model.groupTest,
-        slopeHomogeneity: membersOf(model.slopeHomogeneity, figures),
-        adjusted: {
-          mean: model.adjustedMeans.map((row) => row.mean),
-          standardError: model.adjustedMeans.map((row) => row.standardError),
-          lower: model.adjustedMeans.map((row) => row.interval.lower),
-          upper: model.adjustedMeans.map((row) => row.interval.upper),
-          change: model.adjustedMeans.map((row) => row.change),
-        },
-        differences: {
-          estimate: model.differences.map((row) => row.estimate),
-          standardError: model.differences.map((row) => row.standardError),
-          t: model.differences.map((row) => row.test?.statistic),
-          lower: model.differences.map((row) => row.interval.lower),
-          upper: model.differences.map((row) => row.interval.upper),
-          p: model.differences.map((row) => row.test?.p),
-          holmP: model.differences.map((row) => row.holmP),
-          tukeyP: model.differences.map((row) => row.tukeyP),
-        },
-      })),
-  }),
-);
+const ancovaChecks = ancovaFixture.cases.map((one): ReferenceCheck => ({
+  ...one,
+  method: 'ancova',
+  compute: () =>
+    membersOf(ancova(one), (model) => ({
+      ...model,
+      ...coefficientColumns(model.coefficients),
+      groups: model.adjustedMeans.map((row) => row.group),
+      groupTest: model.groupTest,
+      slopeHomogeneity: membersOf(model.slopeHomogeneity, figures),
+      adjusted: {
+        mean: model.adjustedMeans.map((row) => row.mean),
+        standardError: model.adjustedMeans.map((row) => row.standardError),
+        lower: model.adjustedMeans.map((row) => row.interval.lower),
+        upper: model.adjustedMeans.map((row) => row.interval.upper),
+        change: model.adjustedMeans.map((row) => row.change),
+      },
+      differences: {
+        estimate: model.differences.map((row) => row.estimate),
+        standardError: model.differences.map((row) => row.standardError),
+        t: model.differences.map((row) => row.test?.statistic),
+        lower: model.differences.map((row) => row.interval.lower),
+        upper: model.differences.map((row) => row.interval.upper),
+        p: model.differences.map((row) => row.test?.p),
+        holmP: model.differences.map((row) => row.holmP),
+        tukeyP: model.differences.map((row) => row.tukeyP),
+      },
+    })),
+}));
 
 const births = logisticFixture.data;
-const logisticChecks = logisticFixture.cases.map(
-  (one): ReferenceCheck => ({
-    ...one,
-    source: `${logisticFixture.source}; ${births.name}`,
-    method: 'logistic-regression',
-    compute: () => {
-      const predictors = one.predictors.map((name) => ({ name, values: births[name as keyof typeof births] as number[] }));
-      return membersOf(logisticRegression({ outcome: births.low, predictors }), (model) => {
-        const { t: z, ...columns } = coefficientColumns(model.coefficients);
-        return {
-          ...model,
-          ...columns,
-          z,
-          oddsRatio: model.coefficients.map((row) => row.oddsRatio),
-          oddsRatioLower: model.coefficients.map((row) => row.oddsRatioLower),
-          oddsRatioUpper: model.coefficients.map((row) => row.oddsRatioUpper),
-          overallStatistic: model.overallTest.statistic,
-        };
-      });
-    },
-  }),
-);
+const logisticChecks = logisticFixture.cases.map((one): ReferenceCheck => ({
+  ...one,
+  source: `${logisticFixture.source}; ${births.name}`,
+  method: 'logistic-regression',
+  compute: () => {
+    const predictors = one.predictors.map((name) => ({ name, values: births[name as keyof typeof births] as number[] }));
+    return membersOf(logisticRegression({ outcome: births.low, predictors }), (model) => {
+      const { t: z, ...columns } = coefficientColumns(model.coefficients);
+      return {
+        ...model,
+        ...columns,
+        z,
+        oddsRatio: model.coefficients.map((row) => row.oddsRatio),
+        oddsRatioLower: model.coefficients.map((row) => row.oddsRatioLower),
+        oddsRatioUpper: model.coefficients.map((row) => row.oddsRatioUpper),
+        overallStatistic: model.overallTest.statistic,
+      };
+    });
+  },
+}));
 
 const { Orthodont, ChickWeight, anorexia } = mixedFixture.data;
 const age = { name: 'age', values: Orthodont.age };
@@ -106,7 +113,10 @@ const groups = indicatorPredictors('group', anorexia.group, ['CBT', 'Cont', 'FT'
 const mixedPredictors: Readonly<Record<string, readonly Predictor[]>> = {
   'Orthodont, age': [age],
   'Orthodont, age by female': [age, female, productPredictor(age, female)],
-  'ChickWeight, time and diet': [{ name: 'time', values: ChickWeight.time }, ...indicatorPredictors('diet', ChickWeight.diet, ['1', '2', '3', '4'])],
+  'ChickWeight, time and diet': [
+    { name: 'time', values: ChickWeight.time },
+    ...indicatorPredictors('diet', ChickWeight.diet, ['1', '2', '3', '4']),
+  ],
   'Dyestuff, common mean': [],
   'chickwts, common mean': [],
   'anorexia, time by group': [time, ...groups, ...groups.map((group) => productPredictor(time, group))],
@@ -122,23 +132,28 @@ const mixedChecks = mixedFixture.cases.map((one): ReferenceCheck => {
     expected: one.expected,
     tolerance: one.tolerance,
     compute: () =>
-      membersOf(
-        randomInterceptModel({ outcome: data.outcome, predictors: mixedPredictors[id] ?? [], cluster: data.cluster }),
-        (model) => ({
-          ...model,
-          ...coefficientColumns(model.coefficients),
-          df: model.coefficients.map((row) => row.df),
-          satterthwaiteDf: model.coefficients.map((row) => row.satterthwaiteDf),
-          clusterEffects: {
-            cluster: model.clusterEffects.map((row) => row.cluster),
-            n: model.clusterEffects.map((row) => row.n),
-            meanResidual: model.clusterEffects.map((row) => row.meanResidual),
-            shrinkage: model.clusterEffects.map((row) => row.shrinkage),
-            effect: model.clusterEffects.map((row) => row.effect),
-          },
-        }),
-      ),
+      membersOf(randomInterceptModel({ outcome: data.outcome, predictors: mixedPredictors[id] ?? [], cluster: data.cluster }), (model) => ({
+        ...model,
+        ...coefficientColumns(model.coefficients),
+        df: model.coefficients.map((row) => row.df),
+        satterthwaiteDf: model.coefficients.map((row) => row.satterthwaiteDf),
+        clusterEffects: {
+          cluster: model.clusterEffects.map((row) => row.cluster),
+          n: model.clusterEffects.map((row) => row.n),
+          meanResidual: model.clusterEffects.map((row) => row.meanResidual),
+          shrinkage: model.clusterEffects.map((row) => row.shrinkage),
+          effect: model.clusterEffects.map((row) => row.effect),
+        },
+      })),
   };
 });
 
-export const modelChecks: readonly ReferenceCheck[] = [...linearChecks, ...ancovaChecks, ...logisticChecks, ...mixedChecks];
+const slopeChecks = slopeFixture.cases.map((one): ReferenceCheck => ({
+  ...one,
+  source: `${slopeFixture.source}; ${one.name}`,
+  method: 'random-slope',
+  compute: () =>
+    membersOf(randomSlopeModel({ ...one, predictors: [] }), (model) => ({ ...model, ...coefficientColumns(model.coefficients) })),
+}));
+
+export const modelChecks: readonly ReferenceCheck[] = [...linearChecks, ...ancovaChecks, ...logisticChecks, ...mixedChecks, ...slopeChecks];

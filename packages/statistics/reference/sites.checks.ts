@@ -50,7 +50,12 @@ export const siteChecks: readonly ReferenceCheck[] = [
         }),
       ),
   },
-  { ...intraclass, id: 'chickwts', method: 'intraclass-correlation', compute: () => intraclassCorrelation(intraclass.values, intraclass.site) },
+  {
+    ...intraclass,
+    id: 'chickwts',
+    method: 'intraclass-correlation',
+    compute: () => intraclassCorrelation(intraclass.values, intraclass.site),
+  },
   {
     ...raters,
     id: 'Shrout and Fleiss',

@@ -8,34 +8,32 @@ import fixture from './survival.json' with { type: 'json' };
 /** R writes null where a figure does not exist. */
 const orNull = (value: number | undefined): number | null => value ?? null;
 
-const curveChecks = fixture.curves.map(
-  (one): ReferenceCheck => ({
-    ...one,
-    method: 'kaplan-meier',
-    compute: () =>
-      membersOf(kaplanMeier(one), (curve) => {
-        const at = one.expected.at.time.map((time) => survivalAt(curve, time));
-        const quantiles = one.expected.quantiles.p.map((p) => survivalQuantile(curve, p));
-        const events = curve.steps.filter((step) => step.events > 0);
-        const member = (key: 'time' | 'lower' | 'upper') =>
-          quantiles.map((quantile) => ('kind' in quantile ? quantile.reason : orNull(quantile[key])));
-        return {
-          ...curve,
-          at: {
-            time: at.map((row) => row.time),
-            atRisk: at.map((row) => row.atRisk),
-            survival: at.map((row) => row.survival),
-            standardError: at.map((row) => orNull(row.standardError)),
-            lower: at.map((row) => orNull(row.interval?.lower)),
-            upper: at.map((row) => orNull(row.interval?.upper)),
-          },
-          quantiles: { p: one.expected.quantiles.p, time: member('time'), lower: member('lower'), upper: member('upper') },
-          eventTimes: events.map((step) => step.time),
-          afterEvent: events.map((step) => step.survival),
-        };
-      }),
-  }),
-);
+const curveChecks = fixture.curves.map((one): ReferenceCheck => ({
+  ...one,
+  method: 'kaplan-meier',
+  compute: () =>
+    membersOf(kaplanMeier(one), (curve) => {
+      const at = one.expected.at.time.map((time) => survivalAt(curve, time));
+      const quantiles = one.expected.quantiles.p.map((p) => survivalQuantile(curve, p));
+      const events = curve.steps.filter((step) => step.events > 0);
+      const member = (key: 'time' | 'lower' | 'upper') =>
+        quantiles.map((quantile) => ('kind' in quantile ? quantile.reason : orNull(quantile[key])));
+      return {
+        ...curve,
+        at: {
+          time: at.map((row) => row.time),
+          atRisk: at.map((row) => row.atRisk),
+          survival: at.map((row) => row.survival),
+          standardError: at.map((row) => orNull(row.standardError)),
+          lower: at.map((row) => orNull(row.interval?.lower)),
+          upper: at.map((row) => orNull(row.interval?.upper)),
+        },
+        quantiles: { p: one.expected.quantiles.p, time: member('time'), lower: member('lower'), upper: member('upper') },
+        eventTimes: events.map((step) => step.time),
+        afterEvent: events.map((step) => step.survival),
+      };
+    }),
+}));
 
 const groupChecks = fixture.groups.flatMap((one): ReferenceCheck[] => {
   const { id, source, tolerance } = one;

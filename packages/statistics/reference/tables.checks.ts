@@ -10,18 +10,16 @@ const twoByTwo = (table: CountTable): TwoByTwo => table as unknown as TwoByTwo;
 
 export const tableChecks: readonly ReferenceCheck[] = [
   ...fixture.chiSquare.map((one): ReferenceCheck => ({ ...one, method: 'chi-square', compute: () => chiSquareTest(one.table) })),
-  ...fixture.fisherTwoByTwo.map(
-    (one): ReferenceCheck => ({
-      ...one,
-      method: 'fisher-two-by-two',
-      compute: () =>
-        membersOf(fisherTwoByTwo(twoByTwo(one.table)), ({ estimate, interval, test }) => ({
-          p: test.p,
-          oddsRatio: estimate,
-          limits: limits(interval),
-        })),
-    }),
-  ),
+  ...fixture.fisherTwoByTwo.map((one): ReferenceCheck => ({
+    ...one,
+    method: 'fisher-two-by-two',
+    compute: () =>
+      membersOf(fisherTwoByTwo(twoByTwo(one.table)), ({ estimate, interval, test }) => ({
+        p: test.p,
+        oddsRatio: estimate,
+        limits: limits(interval),
+      })),
+  })),
   ...fixture.fisherTable.map((one): ReferenceCheck => ({ ...one, method: 'fisher-table', compute: () => fisherExactTable(one.table) })),
   ...fixture.trend.map((one): ReferenceCheck => {
     const groups = one.events.map((events, i) => ({ events, total: one.totals[i] as number }));
@@ -34,17 +32,15 @@ export const tableChecks: readonly ReferenceCheck[] = [
       }),
     };
   }),
-  ...fixture.mantelHaenszel.map(
-    (one): ReferenceCheck => ({
-      ...one,
-      method: 'mantel-haenszel',
-      compute: () =>
-        membersOf(mantelHaenszel(one.strata.map(twoByTwo)), ({ estimate, interval, test }) => ({
-          oddsRatio: estimate,
-          limits: limits(interval),
-          statistic: test.statistic,
-          p: test.p,
-        })),
-    }),
-  ),
+  ...fixture.mantelHaenszel.map((one): ReferenceCheck => ({
+    ...one,
+    method: 'mantel-haenszel',
+    compute: () =>
+      membersOf(mantelHaenszel(one.strata.map(twoByTwo)), ({ estimate, interval, test }) => ({
+        oddsRatio: estimate,
+        limits: limits(interval),
+        statistic: test.statistic,
+        p: test.p,
+      })),
+  })),
 ];

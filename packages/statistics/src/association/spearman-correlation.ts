@@ -23,7 +23,8 @@ export function spearmanCorrelation(x: ArrayLike<Observation>, y: ArrayLike<Obse
   const second = midranks(pairs.second);
   const rho = correlationOf(first.ranks, second.ranks);
   if (typeof rho === 'string') return notEstimable(rho, { n, leftOut });
-  if (isPerfect(rho)) return notEstimable('the pairs are in exactly the same, or opposite, order: no interval', { n, leftOut }, Math.sign(rho));
+  if (isPerfect(rho))
+    return notEstimable('the pairs are in exactly the same, or opposite, order: no interval', { n, leftOut }, Math.sign(rho));
 
   const exact = n < exactBelow && first.tieSizes.length === 0 && second.tieSizes.length === 0;
   const squares = first.ranks.reduce((sum, rank, i) => sum + (rank - (second.ranks[i] as number)) ** 2, 0);

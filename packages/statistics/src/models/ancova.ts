@@ -75,7 +75,13 @@ const slopesDifferBelow = 0.05;
 /** Predictor values of a group at a baseline value. */
 type RowOf = (group: number, baseline: number) => number[];
 
-function adjustedMeansOf(fit: FittedLeastSquares, rowOf: RowOf, baseline: number, groups: readonly { name: string; n: number }[], level: number): AdjustedMean[] {
+function adjustedMeansOf(
+  fit: FittedLeastSquares,
+  rowOf: RowOf,
+  baseline: number,
+  groups: readonly { name: string; n: number }[],
+  level: number,
+): AdjustedMean[] {
   const residualSd = Math.sqrt(fit.residualSumOfSquares / fit.residualDf);
   const multiplier = tMultiplier(level, fit.residualDf);
   return groups.map(({ name, n }, g) => {

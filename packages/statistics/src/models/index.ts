@@ -7,4 +7,7 @@ export type { AdjustedDifference, AdjustedMean, Ancova, AncovaInput } from './an
 export { logisticRegression } from './logistic-regression.ts';
 export type { LogisticCoefficient, LogisticModel, LogisticRegressionInput } from './logistic-regression.ts';
 export { randomInterceptModel } from './random-intercept-model.ts';
-export type { ClusterEffect, MixedCoefficient, RandomInterceptInput, RandomInterceptModel } from './random-intercept-model.ts';
+export type { ClusterEffect, RandomInterceptCoefficient, RandomInterceptInput, RandomInterceptModel } from './random-intercept-model.ts';
+export type { MixedCoefficient } from './mixed-coefficients.ts';
+export { randomSlopeModel } from './random-slope-model.ts';
+export type { RandomSlopeInput, RandomSlopeModel } from './random-slope-model.ts';

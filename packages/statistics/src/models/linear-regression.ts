@@ -65,7 +65,12 @@ export function reasonForUnfit(unfit: UnfitLeastSquares, names: readonly string[
 export function standardErrors(fit: FittedLeastSquares): number[] {
   const variance = fit.residualSumOfSquares / fit.residualDf;
   const slopes = fit.slopeFactor.map((row, j) => Math.sqrt(row[j] as number));
-  const atZero = Math.sqrt(fittedMean(fit, fit.slopes.map(() => 0)).varianceFactor);
+  const atZero = Math.sqrt(
+    fittedMean(
+      fit,
+      fit.slopes.map(() => 0),
+    ).varianceFactor,
+  );
   return (fit.throughOrigin ? slopes : [atZero, ...slopes]).map((factor) => factor * Math.sqrt(variance));
 }
 
@@ -85,7 +90,12 @@ function likelihoodOf(fit: FittedLeastSquares): NonNullable<LinearModel['likelih
   return { logLikelihood, aic: 2 * parameters - 2 * logLikelihood, bic: Math.log(fit.n) * parameters - 2 * logLikelihood };
 }
 
-export function linearRegression({ outcome, predictors, throughOrigin = false, level = 0.95 }: LinearRegressionInput): LinearModel | NotEstimable {
+export function linearRegression({
+  outcome,
+  predictors,
+  throughOrigin = false,
+  level = 0.95,
+}: LinearRegressionInput): LinearModel | NotEstimable {
   requireLevel(level);
   if (predictors.length === 0) throw new RangeError('A regression needs at least one predictor.');
   const { columns, n, leftOut } = completeRows([outcome, ...predictors.map((predictor) => predictor.values)]);
@@ -135,10 +145,15 @@ export interface Prediction {
 /** Mean predicted by a model at predictor values in the order of its predictors. */
 export function predictedMean(model: LinearModel, at: readonly number[], level = 0.95): Prediction {
   requireLevel(level);
-  if (at.length !== model.fit.slopes.length || !at.every(Number.isFinite)) throw new RangeError('A prediction needs one finite value for each predictor.');
+  if (at.length !== model.fit.slopes.length || !at.every(Number.isFinite))
+    throw new RangeError('A prediction needs one finite value for each predictor.');
   const { mean, varianceFactor } = fittedMean(model.fit, at);
   const multiplier = tMultiplier(level, model.residualDf);
-  const around = (standardError: number): Interval => ({ lower: mean - multiplier * standardError, upper: mean + multiplier * standardError, level });
+  const around = (standardError: number): Interval => ({
+    lower: mean - multiplier * standardError,
+    upper: mean + multiplier * standardError,
+    level,
+  });
   const standardError = model.residualSd * Math.sqrt(varianceFactor);
   return {
     mean,

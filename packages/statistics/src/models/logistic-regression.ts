@@ -160,7 +160,10 @@ export function logisticRegression({ outcome, predictors, level = 0.95 }: Logist
   const constant = new Float64Array(n).fill(1);
   const found = maximise([constant, ...scaled.map((column) => column.unit)], events, Math.log(eventCount / (n - eventCount)));
   if (found === undefined) {
-    return notEstimable("separation: the predictors divide those with the event from those without, so no odds ratio can be estimated; show counts and Fisher's test", basis);
+    return notEstimable(
+      "separation: the predictors divide those with the event from those without, so no odds ratio can be estimated; show counts and Fisher's test",
+      basis,
+    );
   }
   const { logOdds } = found;
   const deviance = devianceOf(logOdds, events);
@@ -193,7 +196,12 @@ function unusableColumn(columns: readonly CentredColumn[], names: readonly strin
 }
 
 /** From the scaled columns back to the units of the predictors. */
-function coefficientsOf(found: Converged, columns: readonly CentredColumn[], names: readonly string[], level: number): LogisticCoefficient[] {
+function coefficientsOf(
+  found: Converged,
+  columns: readonly CentredColumn[],
+  names: readonly string[],
+  level: number,
+): LogisticCoefficient[] {
   const covariance = inverseCrossProduct(invertTriangle(found.triangle, names.length + 1));
   // The intercept is the scaled one less what the predictors' means carry.
   const atZero = [1, ...columns.map((column) => -column.mean / column.norm)];

@@ -50,7 +50,12 @@ export interface RestrictedLikelihood {
   readonly logClusterTerms: number;
 }
 
-export function clusteredDesign(outcome: Float64Array, predictors: readonly Float64Array[], codes: Int32Array, clusters: number): ClusteredDesign {
+export function clusteredDesign(
+  outcome: Float64Array,
+  predictors: readonly Float64Array[],
+  codes: Int32Array,
+  clusters: number,
+): ClusteredDesign {
   const rows = outcome.length;
   const order = predictors.length + 1;
   const clusterSizes = new Int32Array(clusters);
@@ -63,7 +68,9 @@ export function clusteredDesign(outcome: Float64Array, predictors: readonly Floa
     for (let i = 0; i < rows; i++) sums[codes[i] as number] = (sums[codes[i] as number] as number) + (unit[i] as number);
     return sums.map((sum, c) => sum / (clusterSizes[c] as number));
   });
-  const variesWithin = raw.map((column, j) => takeOutClusterMeans(column, columns[j]?.unit as Float64Array, means[j] as Float64Array, codes));
+  const variesWithin = raw.map((column, j) =>
+    takeOutClusterMeans(column, columns[j]?.unit as Float64Array, means[j] as Float64Array, codes),
+  );
 
   const constant = new Float64Array(rows);
   const within = orthogonalTriangle([constant, ...columns.map((column) => column.unit)]);

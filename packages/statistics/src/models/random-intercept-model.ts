@@ -3,8 +3,7 @@
  * maximum likelihood (REML). The one variance ratio is found as the root of the derivative of the profiled restricted likelihood; a ratio of 0
  * is a result ("no variation between clusters detected") and not a failure.
  *
- * Degrees of freedom of t: the inner-outer rule. Intercept and predictors that vary within clusters: rows - clusters - (predictors varying
- * within); predictors constant within clusters: clusters - (those, the intercept counted). Satterthwaite's are given beside them.
+ * Degrees of freedom of t: the inner-outer rule, Satterthwaite's beside it.
  *
  * Needs at least 5 clusters, some with more than one row.
  *
@@ -14,23 +13,21 @@
 
 import type { Label } from '../complete-rows.ts';
 import { completeRows } from '../complete-rows.ts';
-import type { NotEstimable, Provenance, TestFigures } from '../result.ts';
+import type { NotEstimable, Provenance } from '../result.ts';
 import { notEstimable, reasons, requireLevel } from '../result.ts';
 import { findRoot } from '../root.ts';
 import type { Observation } from '../samples.ts';
 import { percentText } from '../test-figures.ts';
 import type { Coefficient } from './coefficient.ts';
-import { interceptName, tCoefficient } from './coefficient.ts';
 import { rankTolerance } from './least-squares.ts';
 import { reasonForUnfit, tooFewParticipants } from './linear-regression.ts';
+import type { MixedCoefficient } from './mixed-coefficients.ts';
+import { innerOuterDf, logScale, mixedCoefficients, toOriginalUnits, whitenedRow } from './mixed-coefficients.ts';
 import type { Predictor } from './predictor.ts';
 import type { ClusteredDesign, Curvature, RestrictedLikelihood } from './random-intercept-likelihood.ts';
 import { clusteredDesign, curvatureAt, dependentPredictor, restrictedLikelihood } from './random-intercept-likelihood.ts';
 
-export interface MixedCoefficient extends Coefficient {
-  readonly test: TestFigures;
-  /** Inner-outer degrees of freedom, used for interval and test. */
-  readonly df: number;
+export interface RandomInterceptCoefficient extends MixedCoefficient {
   /** Absent where the variance between clusters is 0, on the edge of what is possible. */
   readonly satterthwaiteDf?: number;
 }
@@ -50,7 +47,7 @@ export interface RandomInterceptModel extends Provenance {
   readonly kind: 'random-intercept-model';
   readonly clusters: number;
   /** Intercept first. */
-  readonly coefficients: readonly MixedCoefficient[];
+  readonly coefficients: readonly RandomInterceptCoefficient[];
   readonly varianceBetween: number;
   readonly varianceResidual: number;
   /** Variance between clusters as a share of all variance. */
@@ -95,19 +92,6 @@ function findMinimum(design: ClusteredDesign): RestrictedLikelihood {
   return at(Math.exp(findRoot(slopeAt, Math.min(bestLog, far), Math.max(bestLog, far), 1e-15)));
 }
 
-/** Rows that turn scaled coefficients (and the inverse triangle) into coefficients in the units of the data. */
-function toOriginalUnits(design: ClusteredDesign): number[][] {
-  const root = 1 / Math.sqrt(design.rows);
-  return Array.from({ length: design.order }, (_, i) =>
-    Array.from({ length: design.order }, (_, j) => {
-      if (j === 0) return i === 0 ? root : 0;
-      const { mean, norm } = design.predictors[j - 1] as ClusteredDesign['predictors'][number];
-      if (i === 0) return -mean / norm;
-      return i === j ? 1 / norm : 0;
-    }),
-  );
-}
-
 /** Satterthwaite: 2 variance^2 / (variance of that variance), the latter from the curvature by lambda and the residual variance. */
 function satterthwaite(whitened: readonly number[], variance: number, curvature: Curvature): number {
   const factor = whitened.reduce((sum, value) => sum + value * value, 0);
@@ -120,18 +104,25 @@ function satterthwaite(whitened: readonly number[], variance: number, curvature:
   const { lambdaLambda, lambdaResidual, residualResidual } = curvature;
   const determinant = lambdaLambda * residualResidual - lambdaResidual ** 2;
   // The deviance is minus twice the log likelihood, so its second derivatives are twice the information.
-  const spread = (2 * (byLambda ** 2 * residualResidual - 2 * byLambda * factor * lambdaResidual + factor ** 2 * lambdaLambda)) / determinant;
+  const spread =
+    (2 * (byLambda ** 2 * residualResidual - 2 * byLambda * factor * lambdaResidual + factor ** 2 * lambdaLambda)) / determinant;
   return (2 * (variance * factor) ** 2) / spread;
 }
 
-export function randomInterceptModel({ outcome, predictors, cluster, level = 0.95 }: RandomInterceptInput): RandomInterceptModel | NotEstimable {
+export function randomInterceptModel({
+  outcome,
+  predictors,
+  cluster,
+  level = 0.95,
+}: RandomInterceptInput): RandomInterceptModel | NotEstimable {
   requireLevel(level);
   const { columns, labels, n, leftOut } = completeRows([outcome, ...predictors.map((predictor) => predictor.values)], [cluster]);
   const basis = { n, leftOut };
   const { names: clusterNames, codes } = labels[0] as (typeof labels)[number];
   const names = predictors.map((predictor) => predictor.name);
   if (n === 0) return notEstimable(reasons.noData, basis);
-  if (clusterNames.length < fewestClusters) return notEstimable(`${clusterNames.length} clusters: a random intercept needs at least ${fewestClusters}`, basis);
+  if (clusterNames.length < fewestClusters)
+    return notEstimable(`${clusterNames.length} clusters: a random intercept needs at least ${fewestClusters}`, basis);
   if (clusterNames.length === n) return notEstimable('no cluster has more than one row', basis);
 
   const values = columns[0] as Float64Array;
@@ -144,27 +135,15 @@ export function randomInterceptModel({ outcome, predictors, cluster, level = 0.9
   const scaledVariance = found.residual / residualDf;
   const varianceResidual = scaledVariance * design.outcome.norm ** 2;
 
-  const units = toOriginalUnits(design);
   const curvature = lambda > 0 ? curvatureAt(design, found) : undefined;
-  const innerCount = design.variesWithin.filter(Boolean).length;
-  const innerDf = n - clusterNames.length - innerCount;
-  const outerDf = clusterNames.length - (design.order - innerCount);
-  const coefficients = units.map((row, i): MixedCoefficient => {
-    const scaled = row.reduce((sum, factor, j) => sum + factor * (found.coefficients[j] as number), 0);
-    const whitened = row.map((_, k) => row.reduce((sum, factor, j) => sum + factor * (found.inverse.entries[k * design.order + j] as number), 0));
-    const standardError = Math.sqrt(varianceResidual * whitened.reduce((sum, value) => sum + value * value, 0));
-    const df = i === 0 || design.variesWithin[i - 1] === true ? innerDf : outerDf;
-    const uncertain = {
-      name: i === 0 ? interceptName : (names[i - 1] as string),
-      estimate: scaled * design.outcome.norm + (i === 0 ? design.outcome.mean : 0),
-      standardError,
-    };
-    const line = tCoefficient(uncertain, df, level, true) as Coefficient & { readonly test: TestFigures };
-    return { ...line, df, ...(curvature ? { satterthwaiteDf: satterthwaite(whitened, scaledVariance, curvature) } : {}) };
+  const rowsOfUnits = toOriginalUnits(n, design.predictors);
+  const solution = { ...design, coefficients: found.coefficients, inverse: found.inverse, varianceResidual };
+  const coefficients = mixedCoefficients(solution, names, clusterNames.length, level).map((coefficient, i): RandomInterceptCoefficient => {
+    if (curvature === undefined) return coefficient;
+    const whitened = whitenedRow(rowsOfUnits[i] as number[], found.inverse);
+    return { ...coefficient, satterthwaiteDf: satterthwaite(whitened, scaledVariance, curvature) };
   });
 
-  // ln |X'V^-1 X| in the units of the data: the columns were scaled by these lengths, the constant by 1/sqrt(rows).
-  const logScale = Math.log(n) + design.predictors.reduce((sum, { norm }) => sum + 2 * Math.log(norm), 0);
   return {
     kind: 'random-intercept-model',
     ...basis,
@@ -173,7 +152,13 @@ export function randomInterceptModel({ outcome, predictors, cluster, level = 0.9
     varianceBetween: lambda * varianceResidual,
     varianceResidual,
     intraclassCorrelation: lambda / (1 + lambda),
-    logLikelihood: -(residualDf * (Math.log(2 * Math.PI * varianceResidual) + 1) + found.logClusterTerms + found.logDeterminant + logScale) / 2,
+    logLikelihood:
+      -(
+        residualDf * (Math.log(2 * Math.PI * varianceResidual) + 1) +
+        found.logClusterTerms +
+        found.logDeterminant +
+        logScale(n, design.predictors)
+      ) / 2,
     clusterEffects: clusterEffectsOf(design, columns, coefficients, codes, clusterNames, lambda),
     method: `Linear mixed model with a random intercept by restricted maximum likelihood, t intervals and tests with inner-outer degrees of freedom (two-sided, ${percentText(level)}).`,
     failedAssumptions: lambda === 0 ? ['no variation between clusters detected'] : [],
@@ -187,8 +172,8 @@ function obstacle(design: ClusteredDesign, names: readonly string[]): string | u
   if (outcome.norm === 0) return reasons.allEqual;
   const flat = predictors.findIndex(({ norm }) => norm === 0);
   if (flat >= 0) return reasonForUnfit({ kind: 'constant-predictor', column: flat }, names);
-  const inner = variesWithin.filter(Boolean).length;
-  if (rows - clusterSizes.length - inner < 1 || clusterSizes.length - (order - inner) < 1) return tooFewParticipants(rows, order);
+  const df = innerOuterDf(rows, clusterSizes.length, variesWithin);
+  if (df.inner < 1 || df.outer < 1) return tooFewParticipants(rows, order);
   const dependent = dependentPredictor(design, rankTolerance);
   if (dependent >= 0) return reasonForUnfit({ kind: 'dependent-predictor', column: dependent }, names);
   // What is left of the outcome within clusters, in units of its own length: no residual variance means a ratio without bounds.

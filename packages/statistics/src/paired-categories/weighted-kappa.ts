@@ -46,7 +46,8 @@ export function weightedKappa(table: CountTable, weights: KappaWeights = 'quadra
   const over = (term: (i: number, j: number) => number): number =>
     index.reduce((sum, i) => index.reduce((inner, j) => inner + term(i, j), sum), 0);
   // Everybody in the same one category both times: chance alone gives full agreement.
-  if (before.some((p, i) => p === 1 && after[i] === 1)) return notEstimable('everybody is in one category: no agreement beyond chance can be seen', basis);
+  if (before.some((p, i) => p === 1 && after[i] === 1))
+    return notEstimable('everybody is in one category: no agreement beyond chance can be seen', basis);
 
   const observedAgreement = over((i, j) => weight(i, j) * share(i, j));
   const chanceAgreement = over((i, j) => weight(i, j) * (before[i] as number) * (after[j] as number));

@@ -31,12 +31,19 @@ export interface BootstrapEstimate extends Estimate {
 export function percentileLimits(resampled: Float64Array, level: number): Interval {
   requireLevel(level);
   const place = Number((((resampled.length + 1) * (1 - level)) / 2).toPrecision(12));
-  if (!(Number.isInteger(place) && place >= 1)) throw new RangeError('(B + 1)(1 - level)/2 must be a whole number: choose B = 1999 or 9999.');
+  if (!(Number.isInteger(place) && place >= 1))
+    throw new RangeError('(B + 1)(1 - level)/2 must be a whole number: choose B = 1999 or 9999.');
   const sorted = resampled.slice().sort();
   return { lower: sorted[place - 1] as number, upper: sorted[sorted.length - place] as number, level };
 }
 
-export function bootstrapPercentile({ n, statistic, seed, replicates = 1999, level = 0.95 }: BootstrapInput): BootstrapEstimate | NotEstimable {
+export function bootstrapPercentile({
+  n,
+  statistic,
+  seed,
+  replicates = 1999,
+  level = 0.95,
+}: BootstrapInput): BootstrapEstimate | NotEstimable {
   if (!(Number.isSafeInteger(n) && n >= 0)) throw new RangeError('The number of participants is a whole number from 0 up.');
   const basis = { n, leftOut: nothingLeftOut };
   if (n === 0) return notEstimable(reasons.noData, basis);

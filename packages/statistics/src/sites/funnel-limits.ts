@@ -24,7 +24,8 @@ export function proportionFunnelLimit(target: number, n: number, p: number): num
 
 /** Limit at the lower-tail probability `p` for the mean of `n` people whose standard deviation within sites is `sdWithin`. */
 export function meanFunnelLimit(target: number, sdWithin: number, n: number, p: number): number {
-  if (!(Number.isFinite(target) && Number.isFinite(sdWithin) && sdWithin > 0)) throw new RangeError('A funnel needs a finite value and a positive standard deviation.');
+  if (!(Number.isFinite(target) && Number.isFinite(sdWithin) && sdWithin > 0))
+    throw new RangeError('A funnel needs a finite value and a positive standard deviation.');
   if (!(Number.isSafeInteger(n) && n >= 1)) throw new RangeError('A site has at least one person.');
   if (!(p > 0 && p < 1)) throw new RangeError('A limit of a funnel is asked for at a probability strictly between 0 and 1.');
   return target + (normalQuantile(p) * sdWithin) / Math.sqrt(n);

@@ -101,7 +101,14 @@ export function proportionFunnel(sites: readonly (EventCount & { readonly site: 
     value: events / total,
     z: (events / total - value) / Math.sqrt((value * (1 - value)) / total),
   }));
-  return funnelPlot(points, value, (size, p) => proportionFunnelLimit(value, size, p), { lowest: 0, highest: 1 }, basis, 'Funnel plot with exact binomial limits, interpolated');
+  return funnelPlot(
+    points,
+    value,
+    (size, p) => proportionFunnelLimit(value, size, p),
+    { lowest: 0, highest: 1 },
+    basis,
+    'Funnel plot with exact binomial limits, interpolated',
+  );
 }
 
 export interface SiteMean {
@@ -112,7 +119,10 @@ export interface SiteMean {
 
 /** `target`: the registry's mean; `sdWithin`: standard deviation of people within sites, positive. */
 export function meanFunnel(sites: readonly SiteMean[], target: number, sdWithin: number): FunnelPlot | NotEstimable {
-  const { columns, labels, leftOut } = completeRows([sites.map((site) => site.mean), sites.map((site) => site.n)], [sites.map((site) => site.site)]);
+  const { columns, labels, leftOut } = completeRows(
+    [sites.map((site) => site.mean), sites.map((site) => site.n)],
+    [sites.map((site) => site.site)],
+  );
   const [means, sizes] = columns as [Float64Array, Float64Array];
   const { names, codes } = labels[0] as (typeof labels)[number];
   const basis = { n: sizes.reduce((sum, size) => sum + size, 0), leftOut };

@@ -49,7 +49,10 @@ const fewestSites = 3;
 
 export function randomEffectsPooling(siteEstimates: readonly SiteEstimate[], level = 0.95): PooledEstimate | NotEstimable {
   requireLevel(level);
-  const rows = completeRows([siteEstimates.map((one) => one.estimate), siteEstimates.map((one) => one.standardError)], [siteEstimates.map((one) => one.site)]);
+  const rows = completeRows(
+    [siteEstimates.map((one) => one.estimate), siteEstimates.map((one) => one.standardError)],
+    [siteEstimates.map((one) => one.site)],
+  );
   const [allEstimates, allErrors] = rows.columns as [Float64Array, Float64Array];
   const { names, codes } = rows.labels[0] as (typeof rows.labels)[number];
   if (names.length < rows.n) throw new RangeError('Each site is pooled once.');
@@ -60,8 +63,10 @@ export function randomEffectsPooling(siteEstimates: readonly SiteEstimate[], lev
   const estimates = kept.map((i) => allEstimates[i] as number);
   const variances = kept.map((i) => (allErrors[i] as number) ** 2);
   const sum = (values: readonly number[]): number => values.reduce((total, value) => total + value, 0);
-  const weightedMean = (weights: readonly number[]): number => sum(weights.map((weight, i) => weight * (estimates[i] as number))) / sum(weights);
-  const spreadAbout = (weights: readonly number[], centre: number): number => sum(weights.map((weight, i) => weight * ((estimates[i] as number) - centre) ** 2));
+  const weightedMean = (weights: readonly number[]): number =>
+    sum(weights.map((weight, i) => weight * (estimates[i] as number))) / sum(weights);
+  const spreadAbout = (weights: readonly number[], centre: number): number =>
+    sum(weights.map((weight, i) => weight * ((estimates[i] as number) - centre) ** 2));
 
   const precision = variances.map((variance) => 1 / variance);
   const q = spreadAbout(precision, weightedMean(precision));
@@ -70,7 +75,8 @@ export function randomEffectsPooling(siteEstimates: readonly SiteEstimate[], lev
   const pooled = weightedMean(weights);
   const unadjustedStandardError = Math.sqrt(1 / sum(weights));
   const standardError = Math.sqrt(spreadAbout(weights, pooled) / (k - 1) / sum(weights));
-  if (![pooled, standardError, unadjustedStandardError, q].every(Number.isFinite)) return notEstimable('the standard errors are too small, or the estimates too large, to weigh', basis);
+  if (![pooled, standardError, unadjustedStandardError, q].every(Number.isFinite))
+    return notEstimable('the standard errors are too small, or the estimates too large, to weigh', basis);
   if (standardError === 0) return notEstimable('all sites give the same estimate: no interval', basis, pooled);
 
   const half = tMultiplier(level, k - 1) * standardError;
@@ -91,14 +97,15 @@ export function randomEffectsPooling(siteEstimates: readonly SiteEstimate[], lev
     sites: kept.map((i, place) => ({
       site: names[codes[i] as number] as string,
       weight: (weights[place] as number) / sum(weights),
-      shrunken:
-        pooled + (varianceBetween / (varianceBetween + (variances[place] as number))) * ((estimates[place] as number) - pooled),
+      shrunken: pooled + (varianceBetween / (varianceBetween + (variances[place] as number))) * ((estimates[place] as number) - pooled),
     })),
     method: `Random-effects pooling of site estimates: DerSimonian-Laird variance between sites, Hartung-Knapp interval and test (two-sided, ${percentText(level)}).`,
     failedAssumptions: [
       ...(k < 5 ? [`pooled from ${k} sites only`] : []),
       ...(without > 0 ? [`${without} site${without === 1 ? '' : 's'} without a positive standard error left out`] : []),
-      ...(standardError < unadjustedStandardError ? ['the sites agree better than their standard errors say: the Hartung-Knapp interval may be too narrow'] : []),
+      ...(standardError < unadjustedStandardError
+        ? ['the sites agree better than their standard errors say: the Hartung-Knapp interval may be too narrow']
+        : []),
     ],
   };
 }

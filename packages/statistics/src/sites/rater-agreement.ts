@@ -61,9 +61,11 @@ export function raterAgreement(ratings: readonly (readonly Observation[])[], lev
   const rater = (n * sum(ofRater.map((mean) => mean * mean))) / (k - 1);
   const within = sum(people.map((i) => sum(raters.map((j) => (at(i, j) - (ofPerson[i] as number)) ** 2)))) / (n * (k - 1));
   const error =
-    sum(people.map((i) => sum(raters.map((j) => (at(i, j) - (ofPerson[i] as number) - (ofRater[j] as number)) ** 2)))) / ((n - 1) * (k - 1));
+    sum(people.map((i) => sum(raters.map((j) => (at(i, j) - (ofPerson[i] as number) - (ofRater[j] as number)) ** 2)))) /
+    ((n - 1) * (k - 1));
   const rounding = (n * k * Number.EPSILON) ** 2;
-  if (within < rounding || error < rounding) return notEstimable('the raters agree exactly: no interval', basis, within < rounding ? 1 : undefined);
+  if (within < rounding || error < rounding)
+    return notEstimable('the raters agree exactly: no interval', basis, within < rounding ? 1 : undefined);
   if (between < rounding) return notEstimable('the participants do not differ', basis);
 
   const tail = (1 - level) / 2;
@@ -102,7 +104,14 @@ type UpperPoint = (df1: number, df2: number) => number;
 type Form = Pick<Reliability, 'correlation' | 'interval'>;
 
 /** Forms (1,·) and (3,·): functions of one F ratio. */
-function ratioForms(ratio: number, df1: number, df2: number, k: number, upperPoint: UpperPoint, level: number): { single: Form; mean: Form } {
+function ratioForms(
+  ratio: number,
+  df1: number,
+  df2: number,
+  k: number,
+  upperPoint: UpperPoint,
+  level: number,
+): { single: Form; mean: Form } {
   const single = (f: number): number => (f - 1) / (f + k - 1);
   const mean = (f: number): number => 1 - 1 / f;
   const low = ratio / upperPoint(df1, df2);
@@ -124,8 +133,7 @@ interface AgreementSquares {
 function agreementLimits({ between, rater, error, agreement, n, k }: AgreementSquares, upperPoint: UpperPoint, level: number): Interval {
   const ratio = rater / error;
   const rest = n * (1 + (k - 1) * agreement) - k * agreement;
-  const df =
-    ((k - 1) * (n - 1) * (k * agreement * ratio + rest) ** 2) / ((n - 1) * k ** 2 * agreement ** 2 * ratio ** 2 + rest ** 2);
+  const df = ((k - 1) * (n - 1) * (k * agreement * ratio + rest) ** 2) / ((n - 1) * k ** 2 * agreement ** 2 * ratio ** 2 + rest ** 2);
   const high = upperPoint(n - 1, df);
   const low = upperPoint(df, n - 1);
   const crossed = k * rater + (k * n - k - n) * error;

@@ -71,7 +71,7 @@ function partialLikelihood(
   const mean = new Float64Array(p);
   let [log, risk0] = [0, 0];
   const at = (values: ArrayLike<number>, i: number): number => values[i] as number;
-  for (let end = order.length; end > 0; ) {
+  for (let end = order.length; end > 0;) {
     const now = at(time, at(order, end - 1));
     let [tied0, events, start] = [0, 0, end];
     tied1.fill(0);
@@ -123,14 +123,20 @@ function partialLikelihood(
   return {
     log,
     score: [...score],
-    information: information.map((row, j) => row.map((value, k) => (k <= j ? value : at(information[k] as Float64Array, j)))).map((row) => [...row]),
+    information: information
+      .map((row, j) => row.map((value, k) => (k <= j ? value : at(information[k] as Float64Array, j))))
+      .map((row) => [...row]),
   };
 }
 
 export function coxRegression({ time, event, predictors, level = 0.95 }: CoxInput): CoxModel | NotEstimable {
   requireLevel(level);
   if (predictors.length === 0) throw new RangeError('A regression needs at least one predictor.');
-  const clean = cleanFollowUp({ time, event }, [], predictors.map((predictor) => predictor.values));
+  const clean = cleanFollowUp(
+    { time, event },
+    [],
+    predictors.map((predictor) => predictor.values),
+  );
   const basis = { n: clean.n, leftOut: clean.leftOut };
   if (clean.n === 0) return notEstimable(reasons.noData, basis);
   const events = clean.event.reduce((sum, value) => sum + value, 0);
@@ -145,10 +151,14 @@ export function coxRegression({ time, event, predictors, level = 0.95 }: CoxInpu
   const likelihoodAt = (b: readonly number[]): PartialLikelihood => partialLikelihood(order, clean.time, clean.event, columns, b);
   const start = likelihoodAt(predictors.map(() => 0));
   const startSolver = symmetricSolver(start.information);
-  if (startSolver === undefined) return notEstimable('the covariates do not vary, or determine each other, among those at risk when events came', basis);
+  if (startSolver === undefined)
+    return notEstimable('the covariates do not vary, or determine each other, among those at risk when events came', basis);
   const found = maximise(start, columns, likelihoodAt);
   if (found === undefined) {
-    return notEstimable('a covariate orders the events without exception, so no hazard ratio can be estimated; show the curves and the log-rank test', basis);
+    return notEstimable(
+      'a covariate orders the events without exception, so no hazard ratio can be estimated; show the curves and the log-rank test',
+      basis,
+    );
   }
   const covariance = found.inverse;
   const enough = events >= neededPerCoefficient * predictors.length;
@@ -195,7 +205,11 @@ interface Maximum {
 }
 
 /** `undefined` when the likelihood has no maximum. */
-function maximise(start: PartialLikelihood, columns: readonly Float64Array[], likelihoodAt: (b: readonly number[]) => PartialLikelihood): Maximum | undefined {
+function maximise(
+  start: PartialLikelihood,
+  columns: readonly Float64Array[],
+  likelihoodAt: (b: readonly number[]) => PartialLikelihood,
+): Maximum | undefined {
   let coefficients: readonly number[] = columns.map(() => 0);
   let current = start;
   const widest = columns.map((column) => column.reduce((most, value) => Math.max(most, Math.abs(value)), 0));

@@ -51,7 +51,7 @@ export function orderOfTime(time: Float64Array): Int32Array {
 export function eventTimes(time: Float64Array, event: Float64Array): EventTime[] {
   const order = orderOfTime(time);
   const found: EventTime[] = [];
-  for (let start = 0; start < order.length; ) {
+  for (let start = 0; start < order.length;) {
     const now = time[order[start] as number] as number;
     let end = start;
     let events = 0;

@@ -89,11 +89,20 @@ function timeAt(curve: readonly CurvePoint[], share: number): number | undefined
 export function survivalQuantile(curve: Pick<SurvivalCurve, 'steps' | 'n' | 'leftOut'>, p: number): SurvivalQuantile | NotEstimable {
   if (!(p > 0 && p < 1)) throw new RangeError('A quantile of survival is asked for at a share strictly between 0 and 1.');
   const { steps } = curve;
-  const time = timeAt(steps.map((step) => ({ time: step.time, share: step.survival })), 1 - p);
+  const time = timeAt(
+    steps.map((step) => ({ time: step.time, share: step.survival })),
+    1 - p,
+  );
   if (time === undefined) return notEstimable('not reached', curve);
   // Once everybody has had the event the lower curve is at 0 too, while the upper one comes down no further.
-  const lower = timeAt(steps.map((step) => ({ time: step.time, share: step.interval?.lower ?? 0 })), 1 - p);
-  const upper = timeAt(steps.flatMap((step) => (step.interval ? [{ time: step.time, share: step.interval.upper }] : [])), 1 - p);
+  const lower = timeAt(
+    steps.map((step) => ({ time: step.time, share: step.interval?.lower ?? 0 })),
+    1 - p,
+  );
+  const upper = timeAt(
+    steps.flatMap((step) => (step.interval ? [{ time: step.time, share: step.interval.upper }] : [])),
+    1 - p,
+  );
   return { time, ...(lower === undefined ? {} : { lower }), ...(upper === undefined ? {} : { upper }) };
 }
 

@@ -45,7 +45,7 @@ export function logRankTest({ time, event, group }: GroupedFollowUp): LogRankTes
   const expected = new Float64Array(k);
   const covariance = Array.from({ length: k }, () => new Float64Array(k));
   const order = orderOfTime(clean.time);
-  for (let start = 0; start < order.length; ) {
+  for (let start = 0; start < order.length;) {
     const now = at(clean.time, at(order, start));
     const leaving = new Float64Array(k);
     let events = 0;
@@ -77,7 +77,8 @@ export function logRankTest({ time, event, group }: GroupedFollowUp): LogRankTes
   const kept = informative.slice(1);
   const difference = kept.map((i) => at(observed, i) - at(expected, i));
   const solved = symmetricSolver(kept.map((i) => kept.map((j) => at(covariance[i] as Float64Array, j))))?.solve(difference);
-  if (kept.length === 0 || solved === undefined) return notEstimable('no event with at least two groups at risk: no comparison possible', basis);
+  if (kept.length === 0 || solved === undefined)
+    return notEstimable('no event with at least two groups at risk: no comparison possible', basis);
   const fewest = Math.min(...informative.map((i) => at(expected, i)));
   return {
     kind: 'test',

@@ -15,7 +15,10 @@ export interface TrendTest extends TestResult {
 }
 
 /** `scores` place the groups on a scale; 1, 2, 3, … when not given. Empty groups count for nothing. */
-export function cochranArmitageTrend(groups: readonly EventCount[], scores: readonly number[] = groups.map((_, i) => i + 1)): TrendTest | NotEstimable {
+export function cochranArmitageTrend(
+  groups: readonly EventCount[],
+  scores: readonly number[] = groups.map((_, i) => i + 1),
+): TrendTest | NotEstimable {
   groups.forEach(requireEventCount);
   if (scores.length !== groups.length || !scores.every(Number.isFinite)) throw new RangeError('Each group needs a finite score.');
   const total = groups.reduce((sum, group) => sum + group.total, 0);

@@ -66,7 +66,10 @@ export function exactTableProbability(table: readonly (readonly number[])[], mar
     const place = (i: number, open: number, log: number): void => {
       if (i === left.length) {
         if (++work > workLimit) throw new WorkLimitReached();
-        visit([...next].sort((a, b) => a - b), log);
+        visit(
+          [...next].sort((a, b) => a - b),
+          log,
+        );
         return;
       }
       const room = left[i] as number;
@@ -120,7 +123,13 @@ export function exactTableProbability(table: readonly (readonly number[])[], mar
 
   try {
     let states = new Map<number, State>();
-    arrive(states, 0, [...rows].sort((a, b) => a - b), 0, 1);
+    arrive(
+      states,
+      0,
+      [...rows].sort((a, b) => a - b),
+      0,
+      1,
+    );
     for (const [stage, column] of columns.entries()) {
       const after = new Map<number, State>();
       for (const { left, partials } of states.values()) {

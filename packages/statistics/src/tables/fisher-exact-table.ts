@@ -43,15 +43,15 @@ function simulatedProbability(table: CountTable, margins: Margins, { seed, repli
 
 export function fisherExactTable(table: CountTable, simulation: Simulation = defaultSimulation): ExactTableTest | NotEstimable {
   requireCountTable(table);
-  if (!(Number.isSafeInteger(simulation.replicates) && simulation.replicates >= 1)) throw new RangeError('Drawn tables are counted from 1 up.');
+  if (!(Number.isSafeInteger(simulation.replicates) && simulation.replicates >= 1))
+    throw new RangeError('Drawn tables are counted from 1 up.');
   const filled = withoutEmptyLines(table);
   const margins = marginsOf(filled);
   const basis = { n: margins.total, leftOut: nothingLeftOut };
   if (margins.total === 0) return notEstimable(reasons.noData, basis);
   if (margins.rows.length < 2 || margins.columns.length < 2) return notEstimable(reasons.noComparison, basis);
   const logFactorial = logFactorials(margins.total);
-  const logConstant =
-    (logFactorial[margins.total] as number) - margins.rows.reduce((sum, row) => sum + (logFactorial[row] as number), 0);
+  const logConstant = (logFactorial[margins.total] as number) - margins.rows.reduce((sum, row) => sum + (logFactorial[row] as number), 0);
   const statistic = Math.exp(logTableWeight(filled, margins.columns, logFactorial) - logConstant);
   const exact = exactTableProbability(filled, margins);
   const figures = { statisticName: 'table probability' as const, statistic, df: [] };

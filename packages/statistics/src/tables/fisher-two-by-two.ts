@@ -65,7 +65,10 @@ export function fisherTwoByTwo(table: TwoByTwo, level = 0.95): TestedEstimate | 
   const most = Math.min(row1, column1);
   const logMass = Float64Array.from({ length: most - least + 1 }, (_, i) => hypergeometricLogMass(least + i, column1, column2, row1));
   const bar = (logMass[observed - least] as number) + Math.log1p(equalProbabilitySlack);
-  const p = Math.min(1, logMass.reduce((sum, log) => (log <= bar ? sum + Math.exp(log) : sum), 0));
+  const p = Math.min(
+    1,
+    logMass.reduce((sum, log) => (log <= bar ? sum + Math.exp(log) : sum), 0),
+  );
 
   const at = (logOdds: number): Noncentral => noncentral(logMass, least, observed, logOdds);
   const tail = (1 - level) / 2;

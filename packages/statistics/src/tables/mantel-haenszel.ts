@@ -36,7 +36,8 @@ export function mantelHaenszel(strata: readonly TwoByTwo[], level = 0.95): Teste
   }
   const basis = { n, leftOut: nothingLeftOut };
   if (variance === 0) return notEstimable(n === 0 ? reasons.noData : reasons.noComparison, basis);
-  if (agree === 0 || disagree === 0) return notEstimable('one of the two diagonals is empty in every stratum: the odds ratio has no bounds', basis);
+  if (agree === 0 || disagree === 0)
+    return notEstimable('one of the two diagonals is empty in every stratum: the odds ratio has no bounds', basis);
   const estimate = agree / disagree;
   const error = Math.sqrt(agreeSquare / (2 * agree * agree) + mixed / (2 * agree * disagree) + disagreeSquare / (2 * disagree * disagree));
   const factor = Math.exp(normalMultiplier(level) * error);
