@@ -220,7 +220,7 @@ describe('addresses that explain', () => {
       'GET /api/openapi.json': { openapi: '3.1.0', paths: { '/api/account': { get: { summary: 'Who is signed in' }, parameters: [] } } },
     });
     renderRoutes(routes, '/developers');
-    expect(await screen.findByRole('row', { name: '/api/account GET Who is signed in' })).toBeTruthy();
+    expect(await screen.findByRole('row', { name: 'Who is signed in GET /api/account' })).toBeTruthy();
   });
 
   it('say that there is nothing at an unknown address', async () => {

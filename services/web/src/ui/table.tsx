@@ -122,7 +122,7 @@ function HeaderCell<Row>({
       {onSort === undefined ? (
         words
       ) : (
-        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-center gap-1 hover:underline">
+        <button type="button" onClick={onSort} className="inline-flex min-h-6 items-center gap-1 [text-align:inherit] hover:underline">
           <span>{words}</span>
           <SortMark direction={direction} />
         </button>

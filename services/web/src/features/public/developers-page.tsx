@@ -35,7 +35,7 @@ export default function DevelopersPage() {
           {({ operations }) => (
             <Table
               id="operations"
-              caption="Every address, its method and what it does"
+              caption="What can be asked, and where"
               columns={columns}
               rows={operations}
               rowKey={({ method, path }) => `${method} ${path}`}
@@ -50,13 +50,12 @@ export default function DevelopersPage() {
 }
 
 const columns = [
+  { key: 'summary', header: 'What it does', value: ({ summary }: Operation) => summary, isRowHeader: true },
+  { key: 'method', header: 'Method', value: ({ method }: Operation) => method },
   {
     key: 'path',
     header: 'Address',
     value: ({ path }: Operation) => path,
-    cell: ({ path }: Operation) => <code>{path}</code>,
-    isRowHeader: true,
+    cell: ({ path }: Operation) => <code className="wrap-anywhere">{path}</code>,
   },
-  { key: 'method', header: 'Method', value: ({ method }: Operation) => method },
-  { key: 'summary', header: 'What it does', value: ({ summary }: Operation) => summary },
 ];

@@ -21,13 +21,14 @@ export default function ParticipantsPage() {
       <Section
         title="What is held about you"
         id="held"
-        note={<p>Days are counted from your first training day. A calendar date never leaves the clinic.</p>}
+        note={<p>Days are counted from your first training day. Of calendar dates, only the year of the injury leaves the clinic.</p>}
       >
         <ul className="grid max-w-2xl list-disc gap-2 pl-5">
           <li>A made-up number in place of your name. Only your clinic can connect it to you.</li>
           <li>
-            Your age in years at the first training day (everyone over 89 is in one group), your sex as recorded, and the kind of injury.
+            Your age in years at the first training day (90 stands for everyone of 90 or more) and your sex as the clinic recorded it.
           </li>
+          <li>The year and the cause of the injury, whether breathing is supported by a ventilator, and the training planned.</li>
           <li>The neurological examination: feeling and strength by segment, and the level and grade worked out from it.</li>
           <li>
             Each training session: the kind of device, minutes, how far and how fast, how much weight was carried, pauses and their reasons.
@@ -45,7 +46,9 @@ export default function ParticipantsPage() {
       <Section
         title="Who uses it, and for what"
         id="use"
-        note={<p>Counts below 11 are not shown to anyone but the data stewards, so that no small group can be recognised.</p>}
+        note={
+          <p>Outside your clinic, counts below 11 are shown to nobody but the data stewards, so that no small group can be recognised.</p>
+        }
       >
         <div className="grid max-w-2xl gap-3">
           <p>Your clinic sees your own course of training. Researchers see figures about groups.</p>
@@ -58,9 +61,15 @@ export default function ParticipantsPage() {
       <Section title="How to withdraw" id="withdraw" note={<p>You need not give a reason, and your care does not change.</p>}>
         <ol className="grid max-w-2xl list-decimal gap-2 pl-5">
           <li>Tell the clinic where you trained that you withdraw from the registry. By word or in writing, both count.</li>
-          <li>The clinic enters the withdrawal under your made-up number.</li>
-          <li>Every later release and every later export leaves your records out.</li>
-          <li>Researchers who already hold an export are told which records to destroy, and must confirm that they did.</li>
+          <li>
+            Say how far it should reach: nothing new is added but what is held may still be used; no further use at all; or what is held is
+            deleted as far as the law allows.
+          </li>
+          <li>The clinic enters the withdrawal under your made-up number with its next month.</li>
+          <li>
+            If you ended further use, every later release and export leaves your records out. Exports that hold them can no longer be
+            fetched, and the access agreement obliges researchers to destroy the copies they have.
+          </li>
         </ol>
         <p className="mt-3 max-w-2xl">Results that were published before cannot be taken back; they show groups and name nobody.</p>
       </Section>
