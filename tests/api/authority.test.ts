@@ -54,7 +54,8 @@ afterAll(() => server.close());
 function addressOf(endpoint: Endpoint, value: (name: string) => string): string {
   const path = endpoint.path.replace(/:(\w+)/g, (_match, name: string) => encodeURIComponent(value(name)));
   const query: Record<string, string> = endpoint.upload ? { fileName: 'bouts.csv' } : {};
-  for (const name of endpoint.path === '/api/submissions' ? ['siteId'] : []) query[name] = value(name);
+  if (endpoint.path === '/api/submissions') query['siteId'] = value('siteId');
+  if (endpoint.path.endsWith('/changes')) Object.assign(query, { table: 'bouts', kind: 'added' });
   return Object.keys(query).length > 0 ? `${path}?${new URLSearchParams(query).toString()}` : path;
 }
 
@@ -82,6 +83,8 @@ describe.each(all)('%s', (name, endpoint) => {
     const answer = await send(stranger, endpoint, anyId);
     if (entry === 'anyone' || entry === 'signed-in') expect(codeOf(answer)).not.toBe('no-grant');
     else expect(codeOf(answer)).toBe('no-grant');
+    // Signing out ended this person's session.
+    if (name === 'signOut') stranger = await makePerson(server, { name: 'No grant' });
   });
 
   it.each(roles)('does for a %s what the table says', async (role) => {
@@ -91,7 +94,6 @@ describe.each(all)('%s', (name, endpoint) => {
     const may = entry === 'anyone' || entry === 'signed-in' || authority[entry][role] !== 'no';
     if (may) expect([401, 403]).not.toContain(answer.status);
     else expect(codeOf(answer)).toBe('not-permitted');
-    // Signing out ended this person's session.
     if (name === 'signOut') people.set(role, await makePerson(server, { grants: [{ role, ...(role === 'therapist' || role === 'coordinator' ? { site: siteA } : {}) }] }));
   });
 });

@@ -29,6 +29,9 @@ export const RequestForm = z.strictObject({
   ethicsCommittee: z.string().trim().max(200),
   ethicsReference: z.string().trim().max(100),
   ethicsExpiresOn: CalendarDate.nullable(),
+  organisationType: z.enum(['not_for_profit', 'for_profit']).nullable(),
+  /** Where the team and the files are: ISO 3166-1 two-letter code. */
+  country: z.string().regex(/^[A-Z]{2}$/, 'Choose a country').nullable(),
   commercialInterest: z.enum(['yes', 'no']).nullable(),
   funding: z.string().trim().max(500),
   storage: z.string().trim().max(1000),
@@ -36,7 +39,10 @@ export const RequestForm = z.strictObject({
   /** Other people of the team who would see rows: e-mail addresses of registered researchers. */
   team: z.array(z.email()).max(20),
   months: z.number().int().min(1).max(36).nullable(),
-  willPublish: z.boolean(),
+  /** Duties some consents ask for; unanswered ones send such consents to a person. */
+  agreesToPublish: z.enum(['yes', 'no']).nullable(),
+  agreesToCollaborate: z.enum(['yes', 'no']).nullable(),
+  agreesToReturn: z.enum(['yes', 'no']).nullable(),
   termsAccepted: z.boolean(),
   cohort: Cohort,
 });

@@ -9,7 +9,7 @@ import { createHash } from 'node:crypto';
 import { demoRegistry, demoSeed, type DemoFiles, type DemoMonth, type DemoSite } from '@cairnstep/demo-data';
 import { dictionary, tableKeys } from '@cairnstep/dictionary';
 import { demonstrationPeople } from '@cairnstep/fake-oidc/demonstration-people';
-import { writeCsv } from '@cairnstep/submission-files';
+import { tableFromRows, writeCsv } from '@cairnstep/submission-files';
 import { pino } from 'pino';
 import { recordAudit } from '../audit/record-audit.ts';
 import { registry, type Person } from '../authority/actor.ts';
@@ -72,9 +72,9 @@ async function addSites(context: Context, sites: readonly DemoSite[]): Promise<M
 
 function filesOf({ tables }: DemoMonth): DemoFiles {
   const files: Partial<Record<(typeof tableKeys)[number], Uint8Array>> = {};
-  for (const { key } of dictionary.tables) {
-    const rows = tables[key];
-    if (rows) files[key] = writeCsv(key, rows);
+  for (const { key, variables } of dictionary.tables) {
+    const rows = tables[key]?.map((row) => Object.fromEntries(variables.flatMap((variable, index) => (row[index] == null ? [] : [[variable.key, row[index]]]))));
+    if (rows) files[key] = Buffer.from(writeCsv(tableFromRows(key, rows)));
   }
   return files;
 }

@@ -5,7 +5,7 @@ import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
-import { permitted } from '../requests/consenting.ts';
+import { verdictOn } from '../requests/consenting.ts';
 import { addressesOf, readRequest, type RequestRecord } from '../requests/requests.repository.ts';
 import { codebookCsv, exportCsv } from './export-csv.ts';
 import { exportTables, type ExportCell, type ExportTableKey } from './export-tables.ts';
@@ -22,12 +22,12 @@ type Row = Readonly<Record<string, string | number | null>>;
 
 const tableOrder: readonly ExportTableKey[] = ['participants', 'outcomes', 'sessions'];
 
-async function build(tx: Tx, record: ExportRecord, request: RequestRecord): Promise<{ content: Buffer; people: number } | null> {
+async function build(tx: Tx, record: ExportRecord, request: RequestRecord, today: string): Promise<{ content: Buffer; people: number } | null> {
   const { form, releaseNumber } = request;
   if (releaseNumber === null || request.accessEndsOn === null) return null;
   const cohort = await readCohort(tx, releaseNumber, form.cohort.cells);
   const consents = await readNewestConsents(tx, cohort);
-  const consenting = cohort.filter((person) => permitted(consents.get(`${person.siteId} ${person.participant}`), request));
+  const consenting = cohort.filter((person) => verdictOn(consents.get(`${person.siteId} ${person.participant}`), form, today).verdict === 'permitted');
   const generalised = generalise(consenting);
   if (!generalised) return null;
 
@@ -72,7 +72,7 @@ async function build(tx: Tx, record: ExportRecord, request: RequestRecord): Prom
   return { content: await zipFiles([...files, { name: 'manifest-sha256.txt', text: manifest }]), people: kept.length };
 }
 
-export async function buildExport({ config, database }: Context, exportId: string): Promise<void> {
+export async function buildExport({ config, database, clock }: Context, exportId: string): Promise<void> {
   await asActor(
     database,
     registry,
@@ -80,7 +80,7 @@ export async function buildExport({ config, database }: Context, exportId: strin
       const record = await readExport(tx, exportId);
       const request = record && (await readRequest(tx, record.requestId));
       if (record?.status !== 'building' || !request) return;
-      const built = request.status === 'approved' ? await build(tx, record, request) : null;
+      const built = request.status === 'approved' ? await build(tx, record, request, clock().toISOString().slice(0, 10)) : null;
       if (!built) {
         await setExportStatus(tx, exportId, 'failed');
         await recordAudit(tx, registry, { act: 'export.build', object: exportId, result: 'refused', reason: request.status === 'approved' ? 'too-few-people' : 'not-approved' });

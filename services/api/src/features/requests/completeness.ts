@@ -15,12 +15,15 @@ export function missingParts(form: Form, today: string): LocatedIssue[] {
   ask(form.ethicsReference.length < 2, 'ethicsReference', 'Give the reference of the ethics approval.');
   ask(form.ethicsExpiresOn === null, 'ethicsExpiresOn', 'Give the last day of the ethics approval.');
   ask(form.ethicsExpiresOn !== null && form.ethicsExpiresOn < today, 'ethicsExpiresOn', 'The ethics approval has run out.');
+  ask(form.organisationType === null, 'organisationType', 'Say whether your organisation works for profit.');
+  ask(form.country === null, 'country', 'Choose the country where the team and the files are.');
   ask(form.commercialInterest === null, 'commercialInterest', 'Say whether anyone has a commercial interest.');
   ask(form.storage.length < 10, 'storage', 'Say where the files will be kept and who can reach them.');
   ask(form.tables.length === 0, 'tables', 'Choose at least one table.');
   form.tables.forEach((one, index) => ask(one.justification.length < 10, `tables/${index}/justification`, 'Say why this table is needed.'));
   ask(new Set(form.tables.map((one) => one.table)).size < form.tables.length, 'tables', 'A table is asked for once.');
   ask(form.months === null, 'months', 'Say for how many months access is needed.');
+  for (const field of ['agreesToPublish', 'agreesToCollaborate', 'agreesToReturn'] as const) ask(form[field] === null, field, 'Answer yes or no: some participants consented on this condition only.');
   ask(!form.termsAccepted, 'termsAccepted', 'Accept the terms: no re-identification, no passing on, destroy at the end.');
   return issues;
 }

@@ -12,14 +12,15 @@ import { readCohort, readNewestConsents } from '../exports/exports.repository.ts
 import { verdictOn } from './consenting.ts';
 import { readRequest } from './requests.repository.ts';
 
-export async function getReach({ database }: Context, actor: Actor, { requestId: id }: InputOf<typeof GetReach>): Promise<ResponseOf<typeof GetReach>> {
+export async function getReach({ database, clock }: Context, actor: Actor, { requestId: id }: InputOf<typeof GetReach>): Promise<ResponseOf<typeof GetReach>> {
   const request = requireFound(await asActor(database, actor, (tx) => readRequest(tx, id)));
   const exact = hasRole(actor, 'steward');
   return asActor(database, registry, async (tx) => {
+    const today = clock().toISOString().slice(0, 10);
     const release = await readRelease(tx, request.releaseNumber ?? undefined);
     const cohort = release ? await readCohort(tx, release.number, request.form.cohort.cells) : [];
     const consents = await readNewestConsents(tx, cohort);
-    const verdicts = cohort.map((person) => verdictOn(consents.get(`${person.siteId} ${person.participant}`), request));
+    const verdicts = cohort.map((person) => verdictOn(consents.get(`${person.siteId} ${person.participant}`), request.form, today));
     const consenting = verdicts.filter((one) => one.verdict === 'permitted').length;
     if (!exact) return { inCohort: publicCount(cohort.length), consenting: publicCount(consenting), reasons: [] };
     await recordAudit(tx, actor, { act: 'request.reach', object: id });
