@@ -25,6 +25,7 @@ export async function cloneDatabase(): Promise<TestDatabase> {
   await server.query(`create database ${name} template ${templateDatabase} owner cairnstep_owner`);
   await server.query(`revoke all on database ${name} from public`);
   await server.query(`grant connect on database ${name} to cairnstep_login`);
+  await server.query(`grant temporary on database ${name} to cairnstep_app`);
   await server.query('select pg_advisory_unlock(4120)');
   const ownerUrl = withDatabase(adminUrl(), name);
   const appUrl = withAccount(ownerUrl, 'cairnstep_login', loginPassword);

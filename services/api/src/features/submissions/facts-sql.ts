@@ -1,5 +1,6 @@
 /**
  * One row per participant and course, and per outcome of it, worked out again for the people a submission touched.
+ * Everyone has a first course, begun or not: a person without results is counted as missing, not overlooked.
  * Baseline exam: the last on or before the first attended session of the course, at most `examWindowDays` earlier.
  * Baseline and end of course: the latest assessment of that timepoint; of several trials on that day the first.
  */
@@ -27,7 +28,8 @@ walked as (
     from sessions s join bouts b on b.site_id = s.site_id and b.participant = s.participant and b.session_day = s.session_day and b.session_no = s.session_no
    where s.site_id = :site and s.participant = any(:people::text[]) and b.activity = 'walking' group by s.participant, s.course_no),
 courses as (
-  select participant, course_no from trained
+  select participant, 1 as course_no from participants where site_id = :site and participant = any(:people::text[])
+  union select participant, course_no from trained
   union select participant, course_no from assessments where site_id = :site and participant = any(:people::text[]))
 select :site::uuid, c.participant, c.course_no, t.first_day, t.last_day, e.exam_day,
        case when cardinality(e.class_nli) = 1 then e.class_nli[1] else 'ND' end, coalesce(e.class_level_group, 'ND'),
