@@ -29,11 +29,14 @@ export async function freePortFrom(first: number, attempts = 50): Promise<number
   throw new Error(`No free port between ${first} and ${first + attempts - 1} on ${loopback}. End a program that uses one of them.`);
 }
 
-/** A free port drawn at random, for a service whose address is remembered and should rarely meet another program. */
-export async function drawFreePort(): Promise<number> {
+/**
+ * A free port drawn at random, for a service whose address is remembered and should rarely meet another program.
+ * @param except ports spoken for, though nothing listens on them yet
+ */
+export async function drawFreePort(except: readonly number[] = []): Promise<number> {
   for (let draw = 0; draw < draws; draw += 1) {
     const port = randomInt(drawnFrom, drawnBelow);
-    if (await isPortFree(port)) return port;
+    if (!except.includes(port) && (await isPortFree(port))) return port;
   }
   throw new Error(`No free port found among ${draws} drawn between ${drawnFrom} and ${drawnBelow - 1} on ${loopback}.`);
 }

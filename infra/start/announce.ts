@@ -1,5 +1,7 @@
 /** What a person needs to know once everything runs. */
+import { existsSync } from 'node:fs';
 import { demonstrationPeople } from '@cairnstep/fake-oidc/demonstration-people';
+import { exampleFilesOf } from './environment.ts';
 import type { Run } from './run-note.ts';
 
 const table = (rows: readonly (readonly string[])[]): string[] => {
@@ -17,6 +19,7 @@ export function announcement(run: Run, dataFolder: string): string {
     ...table(people),
     '',
     `Mails it sends are shown at ${run.mailAddress}`,
+    ...(existsSync(exampleFilesOf(dataFolder)) ? [`Files to try a submission with are in ${exampleFilesOf(dataFolder)}`] : []),
     `Data and logs are in ${dataFolder}`,
     'Ctrl-C ends it; the data stays.',
     '',

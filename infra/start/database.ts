@@ -2,7 +2,7 @@
 import { join } from 'node:path';
 import { Client } from 'pg';
 import { databaseOf } from '../database/connection-url.ts';
-import { ensureRoles } from '../database/roles.ts';
+import { defaultDatabase, ensureRoles } from '../database/roles.ts';
 import type { DatabaseAddresses } from '../database/roles.ts';
 import type { DataFolder } from './data-folder.ts';
 import { rememberPorts } from './ports.ts';
@@ -20,6 +20,8 @@ export interface DatabaseNeeds {
 }
 
 export interface OpenDatabase extends DatabaseAddresses {
+  /** Drops the database and makes it anew. Of a server that is not the start's own, it leaves that to its owner. */
+  empty(): Promise<void>;
   stop(): Promise<void>;
 }
 
@@ -28,13 +30,30 @@ export const clusterFolderOf = (dataFolder: string): string => join(dataFolder, 
 
 async function onGivenServer(url: string, secrets: Secrets): Promise<OpenDatabase> {
   try {
-    return { ...(await ensureRoles(url, secrets.databaseLoginPassword)), stop: async () => undefined };
+    const addresses = await ensureRoles(url, secrets.databaseLoginPassword);
+    const empty = (): Promise<never> =>
+      Promise.reject(
+        new StartError(
+          `DATABASE_URL: the database ${databaseOf(addresses.databaseUrl)} holds half of the demonstration data. Drop it, then start again.`,
+        ),
+      );
+    return { ...addresses, empty, stop: async () => undefined };
   } catch (error) {
     // PostgreSQL's words name the server, the account and the database, never the password.
     const said = error instanceof AggregateError ? error.errors.map(String).join('; ') : (error as Error).message;
     throw new StartError(
       `DATABASE_URL: the server could not be prepared (${said}). Its account must be able to create roles and databases.`,
     );
+  }
+}
+
+async function dropDatabase(adminUrl: string, database: string): Promise<void> {
+  const admin = new Client({ connectionString: adminUrl });
+  await admin.connect();
+  try {
+    await admin.query(`drop database ${admin.escapeIdentifier(database)} with (force)`);
+  } finally {
+    await admin.end();
   }
 }
 
@@ -53,7 +72,12 @@ export async function openDatabase({ givenUrl, folder, secrets, preferredPort, r
   );
   try {
     rememberPorts(folder.path, { database: server.port });
-    return { ...(await ensureRoles(server.adminUrl, secrets.databaseLoginPassword)), stop: () => server.stop() };
+    const ensure = (): Promise<DatabaseAddresses> => ensureRoles(server.adminUrl, secrets.databaseLoginPassword);
+    const empty = async (): Promise<void> => {
+      await dropDatabase(server.adminUrl, defaultDatabase);
+      await ensure();
+    };
+    return { ...(await ensure()), empty, stop: () => server.stop() };
   } catch (error) {
     await server.stop();
     throw error;

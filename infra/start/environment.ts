@@ -54,9 +54,12 @@ export function apiEnvironment(place: Place, database: Pick<DatabaseAddresses, '
   };
 }
 
+/** Where the seed puts files to try an upload with. */
+export const exampleFilesOf = (dataFolder: string): string => join(dataFolder, 'example-files');
+
 /** Migration, seed and audit check: the API's settings, and the administrator's way into the database. */
 export function adminEnvironment(place: Place, database: DatabaseAddresses): NodeJS.ProcessEnv {
-  return { ...apiEnvironment(place, database), DATABASE_URL: database.databaseUrl };
+  return { ...apiEnvironment(place, database), DATABASE_URL: database.databaseUrl, EXAMPLE_FILES: exampleFilesOf(place.dataFolder) };
 }
 
 export function providerEnvironment(place: Place): NodeJS.ProcessEnv {

@@ -33,9 +33,6 @@ export function rememberPorts(dataFolder: string, ports: Remembered): void {
   writeFileSync(fileIn(dataFolder), JSON.stringify({ ...remembered(dataFolder), ...ports }, null, 2));
 }
 
-const orElse = async (last: number | undefined, otherwise: () => Promise<number>): Promise<number> =>
-  last !== undefined && (await isPortFree(last)) ? last : otherwise();
-
 /** The services of a killed run need a moment to notice that it is gone. */
 async function freeWithinMoments(wanted: number): Promise<boolean> {
   for (let attempt = 0; attempt < 30; attempt += 1) {
@@ -45,29 +42,32 @@ async function freeWithinMoments(wanted: number): Promise<boolean> {
   return false;
 }
 
-async function providerPort(last: number | undefined): Promise<number> {
-  if (last === undefined) return drawFreePort();
-  if (await freeWithinMoments(last)) return last;
-  // An account is known by its provider's address and its subject there, so this port must not change.
-  throw new StartError(
-    `The demonstration's accounts belong to the local sign-in service at port ${last}, which another program uses now. End that program, or begin anew with CAIRNSTEP_DATA_DIR set to another folder.`,
-  );
-}
+/** The port of last time when it can be had again. */
+const again = async (last: number | undefined): Promise<number | undefined> =>
+  last !== undefined && (await freeWithinMoments(last)) ? last : undefined;
 
 /**
  * Chooses all ports and remembers them.
  * @param given the PORT setting
- * @throws StartError when the given port is taken, or the provider's of last time is
+ * @throws StartError when the given port is taken
  */
 export async function choosePorts(dataFolder: string, given: number | undefined): Promise<Ports> {
   const last = remembered(dataFolder);
-  if (given !== undefined && !(await freeWithinMoments(given)))
+  if (given !== undefined && !(await freeWithinMoments(given))) {
     throw new StartError(`PORT: another program already uses port ${given}. Choose another, or leave PORT out to have a free one found.`);
+  }
+  const [product, provider, mailPages, smtp] = await Promise.all([
+    given ?? again(last.product),
+    again(last.provider),
+    again(last.mailPages),
+    again(last.smtp),
+  ]);
+  const chosenProvider = provider ?? (await drawFreePort());
   const ports = {
-    product: given ?? (await orElse(last.product, () => freePortFrom(firstForProduct))),
-    provider: await providerPort(last.provider),
-    mailPages: await orElse(last.mailPages, () => freePortFrom(firstForMailPages)),
-    smtp: await orElse(last.smtp, drawFreePort),
+    product: product ?? (await freePortFrom(firstForProduct)),
+    provider: chosenProvider,
+    mailPages: mailPages ?? (await freePortFrom(firstForMailPages)),
+    smtp: smtp ?? (await drawFreePort([chosenProvider])),
   };
   rememberPorts(dataFolder, ports);
   return { ...ports, database: last.database };

@@ -8,7 +8,7 @@ import { adminEnvironment, addressOf, apiEnvironment, mailEnvironment, providerE
 import type { Place } from './environment.ts';
 import { compiled, fromSource, watched } from './programs.ts';
 import { answers, untilReady } from './ready.ts';
-import { isSeeded, noteSeeded } from './seeded.ts';
+import { noteSeedBegun, noteSeedDone, seedNeeded } from './seeded.ts';
 import { supervise } from './supervise.ts';
 import type { Supervised } from './supervise.ts';
 
@@ -47,12 +47,24 @@ export async function runProduct({ place, folder, fromSources, report, onStarted
       logFile: log(name),
       signal,
     });
-  await asAdministrator('Bringing the database up to date', 'migrate', 'services/api/src/database/migrate.ts');
-  const identity = await identityOf(database.databaseUrl);
-  if (!isSeeded(folder.path, identity)) {
-    report('Filling in the demonstration data (first start) …');
+  const migrate = (): Promise<void> =>
+    asAdministrator('Bringing the database up to date', 'migrate', 'services/api/src/database/migrate.ts');
+
+  const providerAddress = addressOf(place.ports.provider);
+  const seed = seedNeeded(folder.path, await identityOf(database.databaseUrl), providerAddress);
+  if (seed === 'anew') {
+    report('The demonstration data was only half filled in when the last start was broken off. Beginning anew …');
+    await database.empty();
+  }
+  await migrate();
+  if (seed !== 'nothing') {
+    const identity = await identityOf(database.databaseUrl);
+    if (seed !== 'people') {
+      report('Filling in the demonstration data (first start) …');
+      noteSeedBegun(folder.path, identity);
+    }
     await asAdministrator('Filling in the demonstration data', 'seed', 'services/api/src/demo/seed.ts');
-    noteSeeded(folder.path, identity);
+    noteSeedDone(folder.path, identity, providerAddress);
   }
 
   const start = (title: string, name: string, programArguments: readonly string[], environment: NodeJS.ProcessEnv): Supervised => {
@@ -67,7 +79,7 @@ export async function runProduct({ place, folder, fromSources, report, onStarted
   const worker = start('The worker', 'worker', lasting('services/api/src/worker.ts'), apiEnvironment(place, database));
 
   const at = (address: string) => (): Promise<boolean> => answers(address);
-  await untilReady(provider, at(`${addressOf(place.ports.provider)}/.well-known/openid-configuration`), signal);
+  await untilReady(provider, at(`${providerAddress}/.well-known/openid-configuration`), signal);
   await untilReady(mail, at(addressOf(place.ports.mailPages)), signal);
   await untilReady(api, at(`${addressOf(place.apiPort)}/api/health/ready`), signal);
   // The watcher between us and a watched worker does not pass its message on.
