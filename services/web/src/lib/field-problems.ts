@@ -2,6 +2,7 @@
 import { ProblemError } from './problem-error.ts';
 
 export interface PlacedProblem {
+  /** The `id` of the field; absent when no field on the page can mend it. */
   readonly fieldId?: string;
   readonly message: string;
 }

@@ -41,14 +41,14 @@ export function LinkButton({ variant = 'secondary', ...rest }: LinkButtonProps) 
   return <Link {...rest} className={`${shape} ${variants[variant]}`} />;
 }
 
-export interface DownloadButtonProps {
+export interface AddressButtonProps {
   readonly href: string;
   readonly variant?: ButtonVariant;
   readonly children: ReactNode;
 }
 
 /** Leaves the client: a file, or the sign-in service. */
-export function AddressButton({ href, variant = 'secondary', children }: DownloadButtonProps) {
+export function AddressButton({ href, variant = 'secondary', children }: AddressButtonProps) {
   return (
     <a href={href} className={`${shape} ${variants[variant]}`}>
       {children}

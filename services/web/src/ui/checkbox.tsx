@@ -26,7 +26,7 @@ export function Checkbox({ id, children, value, onChange, error, isRequired = fa
       )}
       <AriaCheckbox
         {...rest}
-        {...(ref !== undefined && { inputRef: ref as React.RefObject<HTMLInputElement> })}
+        {...(ref !== undefined && { inputRef: ref })}
         {...(error !== undefined && { 'aria-describedby': errorId })}
         id={id}
         isSelected={value}

@@ -19,6 +19,13 @@ export function ErrorNotice({ error, retry }: ErrorNoticeProps) {
     return (
       <Notice kind="error" title={`${error.title}.`} urgent>
         <p>{error.detail}</p>
+        {error.errors.length > 0 && (
+          <ul className="mt-2 list-disc pl-5">
+            {error.errors.map(({ pointer, detail }) => (
+              <li key={`${pointer} ${detail}`}>{detail}</li>
+            ))}
+          </ul>
+        )}
         <p className="mt-2 flex flex-wrap gap-x-6 gap-y-2">
           {error.code === 'not-signed-in' && <TextLink to={signInAddress(pathname + search)}>Sign in and come back here</TextLink>}
           <TextLink to={`/problems/${error.code}`}>What this means</TextLink>

@@ -3,15 +3,10 @@
  * (after the error summary of the GOV.UK design system). Takes the focus when it appears or when `attempt` changes.
  */
 import { useEffect, useRef } from 'react';
+import type { PlacedProblem } from '../lib/field-problems.ts';
 import { formatCount } from '../lib/format.ts';
 
-export interface FieldProblem {
-  /** The `id` of the field; absent when no field on this page can mend it. */
-  readonly fieldId?: string;
-  readonly message: string;
-}
-
-export function ErrorSummary({ problems, attempt = 0 }: { readonly problems: readonly FieldProblem[]; readonly attempt?: number }) {
+export function ErrorSummary({ problems, attempt = 0 }: { readonly problems: readonly PlacedProblem[]; readonly attempt?: number }) {
   const box = useRef<HTMLDivElement>(null);
   const any = problems.length > 0;
   useEffect(() => {

@@ -28,9 +28,9 @@ describe('the level column', () => {
 
   it('chooses one segment by a click and a run of them with shift', () => {
     renderPart(<Column />);
-    fireEvent.pointerDown(option(/^C5/), { button: 0 });
+    fireEvent.click(option(/^C5/));
     expect(selected()).toEqual(['C5']);
-    fireEvent.pointerDown(option(/^C8/), { button: 0, shiftKey: true });
+    fireEvent.click(option(/^C8/), { shiftKey: true });
     expect(selected()).toEqual(['C5', 'C6', 'C7', 'C8']);
   });
 
@@ -41,6 +41,14 @@ describe('the level column', () => {
     fireEvent.pointerUp(option(/^C8/));
     fireEvent.pointerEnter(option(/^C4/));
     expect(selected()).toEqual(['C8', 'T1', 'T2']);
+  });
+
+  it('does not choose where a finger begins to scroll', () => {
+    renderPart(<Column />);
+    fireEvent.pointerDown(option(/^T2/), { button: 0, pointerType: 'touch' });
+    expect(selected()).toEqual([]);
+    fireEvent.click(option(/^T2/));
+    expect(selected()).toEqual(['T2']);
   });
 
   it('is worked with arrow keys; shift extends, Escape gives up the choice', () => {

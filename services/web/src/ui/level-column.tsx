@@ -85,10 +85,12 @@ export function LevelColumn({ label, counts, range, onRangeChange }: LevelColumn
               aria-selected={selected}
               tabIndex={segment === active ? 0 : -1}
               onPointerDown={(event) => {
-                if (event.button !== 0) return;
-                dragging.current = event.pointerType === 'mouse';
+                // A finger may be about to scroll: it chooses by its tap, a click.
+                if (event.pointerType !== 'mouse' || event.button !== 0) return;
+                dragging.current = true;
                 choose(event.shiftKey ? anchor : segment, segment);
               }}
+              onClick={(event) => choose(event.shiftKey ? anchor : segment, segment)}
               onPointerEnter={() => {
                 if (dragging.current) choose(anchor, segment);
               }}

@@ -2,6 +2,7 @@
  * One sheet of paper. Sections are divided by hairlines; on wide screens a margin to the right carries short notes beside
  * what they explain (meaning, method, n, source), on narrow ones the note folds under it.
  */
+import { useId } from 'react';
 import type { ReactNode } from 'react';
 
 export interface PageProps {
@@ -42,7 +43,7 @@ export interface SectionProps {
 }
 
 export function Section({ title, id, note, wide = false, children }: SectionProps) {
-  const titleId = id === undefined ? undefined : `${id}-title`;
+  const titleId = useId();
   return (
     <section id={id} aria-labelledby={title === undefined ? undefined : titleId} className="border-t border-hairline">
       <Row note={note} wide={wide}>

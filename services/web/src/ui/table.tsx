@@ -2,8 +2,8 @@
  * Rows and columns to read: a caption, the unit in the header, sorting kept in the address, a header that stays in sight,
  * copying as text and downloading as CSV. Sorts the rows it is given; paged lists keep the server's order (`isSortable={false}`).
  */
-import { useEffect, useId, useRef, useState } from 'react';
-import type { ReactNode, RefObject } from 'react';
+import { useEffect, useId, useState } from 'react';
+import type { ReactNode } from 'react';
 import { useAddressParam } from '../lib/address-state.ts';
 import { toCsv, toTabSeparated } from '../lib/csv.ts';
 import type { CsvValue } from '../lib/csv.ts';
@@ -49,8 +49,7 @@ interface Sort {
 
 export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortable = true, fileName }: TableProps<Row>) {
   const captionId = useId();
-  const frame = useRef<HTMLDivElement>(null);
-  const overflows = useOverflow(frame);
+  const [overflows, frame] = useOverflow();
   const [sortText, setSortText] = useAddressParam(`sort-${id}`);
   const sort = isSortable ? readSort(sortText, columns) : null;
   const ordered = sort === null ? rows : sorted(rows, columns, sort);
@@ -238,15 +237,16 @@ function sorted<Row>(rows: readonly Row[], columns: readonly Column<Row>[], sort
 }
 
 /** Whether there is more than the frame shows: only then is it a stop for the keyboard, which must be able to scroll it. */
-function useOverflow(frame: RefObject<HTMLDivElement | null>): boolean {
+function useOverflow(): readonly [overflows: boolean, frame: (element: HTMLDivElement | null) => void] {
+  const [frame, setFrame] = useState<HTMLDivElement | null>(null);
   const [overflows, setOverflows] = useState(false);
   useEffect(() => {
-    const element = frame.current;
-    if (element === null) return;
-    const look = () => setOverflows(element.scrollWidth > element.clientWidth || element.scrollHeight > element.clientHeight);
-    const observer = new ResizeObserver(look);
-    observer.observe(element);
+    if (frame === null) return;
+    const observer = new ResizeObserver(() =>
+      setOverflows(frame.scrollWidth > frame.clientWidth || frame.scrollHeight > frame.clientHeight),
+    );
+    for (const element of [frame, ...frame.children]) observer.observe(element);
     return () => observer.disconnect();
   }, [frame]);
-  return overflows;
+  return [overflows, setFrame];
 }
