@@ -117,3 +117,16 @@ export function withTagged(random: Random, exam: Exam): Exam {
   }
   return tagged;
 }
+
+/** The same exam with a given number of cells not tested, most of them key muscles, where they leave most open. */
+export function withManyUntested(random: Random, exam: Exam, count: number): Exam {
+  let opened = exam;
+  const left = new Set(cellPlaces);
+  for (let done = 0; done < count; done++) {
+    const muscles = motorPlaces.filter((place) => left.has(place));
+    const place = pick(random, muscles.length > 0 && random() < 0.6 ? muscles : [...left]);
+    left.delete(place);
+    opened = withCell(opened, place, 'NT');
+  }
+  return opened;
+}
