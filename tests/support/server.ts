@@ -47,7 +47,7 @@ export async function startTestServer(settings: Readonly<Record<string, string>>
   const log = pino({ level: 'debug' }, { write: (line: string) => void logLines.push(line) });
   let now: Date | null = null;
   const context: Context = { config, database: database.app, log, clock: () => now ?? new Date() };
-  const sessionPool: pg.Pool = makeSessionPool(config);
+  const sessionPool: pg.Pool = makeSessionPool(config, log);
   server.on('request', makeApp(context, { sessionPool }));
   return {
     url,

@@ -13,9 +13,7 @@ try {
   const config = readConfig(process.env);
   const log = makeLogger(config.LOG_LEVEL, 'api');
   const database = await makeDataSource({ url: config.DATABASE_APP_URL, statementTimeout }).initialize();
-  const sessionPool = makeSessionPool(config);
-  // A dropped idle connection is replaced at the next request; without a listener it would end the process.
-  sessionPool.on('error', () => log.warn('a session connection was lost'));
+  const sessionPool = makeSessionPool(config, log);
   const server = createServer(makeApp({ config, database, log, clock: () => new Date() }, { sessionPool }));
   server.requestTimeout = 120_000;
   server.headersTimeout = 20_000;

@@ -3,6 +3,7 @@ import connectPgSimple from 'connect-pg-simple';
 import session from 'express-session';
 import type { RequestHandler } from 'express';
 import pg from 'pg';
+import type { Logger } from 'pino';
 import type { Config } from '../config.ts';
 
 export interface SignInFlow {
@@ -30,8 +31,11 @@ declare module 'express-session' {
 export const cookieName = (secure: boolean): string => (secure ? '__Host-cairnstep' : 'cairnstep-session');
 
 /** The session role may touch the table of sessions and nothing else. */
-export function makeSessionPool(config: Config): pg.Pool {
-  return new pg.Pool({ connectionString: config.DATABASE_APP_URL, max: 4, connectionTimeoutMillis: 5_000, statement_timeout: 5_000, options: '-c role=cairnstep_session' });
+export function makeSessionPool(config: Config, log: Logger): pg.Pool {
+  const pool = new pg.Pool({ connectionString: config.DATABASE_APP_URL, max: 4, connectionTimeoutMillis: 5_000, statement_timeout: 5_000, options: '-c role=cairnstep_session' });
+  // A dropped idle connection is replaced at the next request; without a listener it would end the process.
+  pool.on('error', () => log.warn('a session connection was lost'));
+  return pool;
 }
 
 export function sessions(config: Config, pool: pg.Pool): RequestHandler {
