@@ -1,6 +1,7 @@
 /** Commands that run to their end during a start. */
 import { spawn } from 'node:child_process';
 import { closeSync, openSync, readFileSync, statSync } from 'node:fs';
+import { leaveWithParent } from './programs.ts';
 import { StartError } from './start-error.ts';
 
 export interface Command {
@@ -28,10 +29,11 @@ export async function runCommand(command: Command): Promise<void> {
   const log = openSync(command.logFile, 'a', 0o600);
   const before = statSync(command.logFile).size;
   const code = await new Promise<number | null>((resolve, reject) => {
-    const child = spawn(command.program, command.arguments, {
+    const isNode = command.program === process.execPath;
+    const child = spawn(command.program, [...(isNode ? leaveWithParent : []), ...command.arguments], {
       cwd: command.cwd,
       env: command.environment,
-      stdio: ['ignore', log, log],
+      stdio: ['ignore', log, log, ...(isNode ? (['ipc'] as const) : [])],
       // In a group of its own, so that a Ctrl-C reaches it only through `signal`.
       detached: true,
       ...(command.signal === undefined ? {} : { signal: command.signal }),

@@ -1,4 +1,8 @@
 /** How Node runs a program of the services: as it was compiled, or from its TypeScript source. */
+import { fileURLToPath } from 'node:url';
+
+/** Node's arguments that make a child with an `ipc` channel end when its parent is gone, even by SIGKILL. */
+export const leaveWithParent = ['--import', fileURLToPath(new URL('./leave-with-parent.mjs', import.meta.url))] as const;
 
 /** Node's arguments for the program with this source, relative to the project's root. */
 type Programs = (source: string) => readonly string[];

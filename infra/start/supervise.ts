@@ -2,7 +2,7 @@
 import { spawn } from 'node:child_process';
 import type { ChildProcess } from 'node:child_process';
 import { closeSync, existsSync, openSync, renameSync, statSync } from 'node:fs';
-import { fileURLToPath } from 'node:url';
+import { leaveWithParent } from './programs.ts';
 
 export interface Service {
   /** "The API", for messages. */
@@ -36,7 +36,6 @@ export interface Patience {
 
 const usualPatience: Patience = { firstWait: 1000, longestWait: 30_000, steadyAfter: 60_000, endsWithin: 20_000 };
 const largestLogBytes = 10_000_000;
-const leaveWithParent = fileURLToPath(new URL('./leave-with-parent.mjs', import.meta.url));
 
 /** Opens a log for appending; one that has grown large is put aside first, replacing the one put aside before. */
 function openLog(file: string): number {
@@ -47,7 +46,7 @@ function openLog(file: string): number {
 function launch(service: Service): ChildProcess {
   const log = openLog(service.logFile);
   try {
-    return spawn(process.execPath, ['--import', leaveWithParent, ...service.arguments], {
+    return spawn(process.execPath, [...leaveWithParent, ...service.arguments], {
       cwd: service.cwd,
       env: service.environment,
       // A group of its own: a Ctrl-C reaches the start alone, which ends its services in order.
