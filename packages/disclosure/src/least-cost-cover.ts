@@ -26,7 +26,7 @@ export function leastCostCover(
   below: number,
   budget: SearchBudget,
 ): Cover | undefined | 'out-of-budget' {
-  const ordered = [...sets].sort((a, b) => a.length - b.length);
+  const ordered = withoutSupersets(sets);
   const chosen = new Set<number>();
   const barred = new Set<number>();
   let best: Cover | undefined;
@@ -60,6 +60,16 @@ export function leastCostCover(
   };
   search(0);
   return finished ? best : 'out-of-budget';
+}
+
+/** Shortest first, without sets that are hit whenever a smaller one is. */
+function withoutSupersets(sets: readonly (readonly number[])[]): (readonly number[])[] {
+  const kept: (readonly number[])[] = [];
+  for (const set of [...sets].sort((a, b) => a.length - b.length)) {
+    const items = new Set(set);
+    if (!kept.some((smaller) => smaller.every((item) => items.has(item)))) kept.push(set);
+  }
+  return kept;
 }
 
 /** What hitting these sets costs at least. */
