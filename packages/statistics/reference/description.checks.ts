@@ -51,7 +51,7 @@ export const descriptionChecks: readonly ReferenceCheck[] = [
   ...nist.sets.map((set): ReferenceCheck => ({
     id: `NIST ${set.name}`,
     method: 'description',
-    source: `NIST StRD univariate, ${set.name}`,
+    source: `NIST StRD univariate; ${set.name}`,
     compute: () => members(set.y),
     expected: set.certified,
     tolerance: { fields: { mean: { rel: 10 ** -set.digits.mean }, sd: { rel: 10 ** -set.digits.sd } } },

@@ -1,5 +1,7 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { changes, cleanPairs, cleanSample, roundToResolution } from './samples.ts';
+import { roundHalfAwayFromZero } from './wording/rounding.ts';
 
 describe('cleanSample', () => {
   it('keeps finite numbers in order and counts the rest by reason', () => {
@@ -41,6 +43,17 @@ describe('roundToResolution', () => {
     expect(roundToResolution(0.125, 0.05)).toBe(0.15);
     expect(roundToResolution(7, 5)).toBe(5);
     expect(roundToResolution(7.5, 5)).toBe(10);
+  });
+
+  it('agrees with rounding the decimal as it reads', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: -2_000_000, max: 2_000_000 }), fc.constantFrom(1, 2, 3), (whole, decimals) => {
+        // A decimal with one digit more than the resolution keeps, so that halves are common.
+        const value = Number(`${whole}e-${decimals + 1}`);
+        expect(roundToResolution(value, Number(`1e-${decimals}`))).toBe(roundHalfAwayFromZero(value, decimals) + 0);
+      }),
+      { seed: 20240609, numRuns: 1000 },
+    );
   });
 
   it('never answers minus zero', () => {

@@ -51,15 +51,15 @@ export function cleanPairs(first: ArrayLike<Observation>, second: ArrayLike<Obse
   const leftOut = { missing: 0, nonFinite: 0, unable: 0 };
   let n = 0;
   for (let i = 0; i < first.length; i++) {
-    const states = [fitness(first[i]), fitness(second[i])];
-    const worst = (['missing', 'unable', 'nonFinite'] as const).find((state) => states.includes(state));
-    if (worst) {
-      leftOut[worst]++;
-      continue;
+    const [one, two] = [fitness(first[i]), fitness(second[i])];
+    if (one === 'usable' && two === 'usable') {
+      a[n] = first[i] as number;
+      b[n] = second[i] as number;
+      n++;
+    } else {
+      const worst = (['missing', 'unable', 'nonFinite'] as const).find((state) => state === one || state === two);
+      leftOut[worst as keyof LeftOut]++;
     }
-    a[n] = first[i] as number;
-    b[n] = second[i] as number;
-    n++;
   }
   return { first: a.subarray(0, n), second: b.subarray(0, n), n, leftOut };
 }
@@ -67,15 +67,22 @@ export function cleanPairs(first: ArrayLike<Observation>, second: ArrayLike<Obse
 /** Differences are rounded to this step when the instrument's own is not known, so that 0.7 - 0.4 equals 1.1 - 0.8. */
 export const defaultResolution = 1e-9;
 
+/** Halves up, as the 15-digit decimal reads. Only near a half does the slow way through the decimal decide. */
+function nearestWhole(steps: number): number {
+  const fraction = steps - Math.floor(steps);
+  if (steps < 1e12 && Math.abs(fraction - 0.5) > 0.001) return Math.round(steps);
+  return Math.floor(Number(steps.toPrecision(15)) + 0.5);
+}
+
 /**
  * The multiple of `resolution` nearest to `value`, halves away from zero, judged on the 15-digit decimal: 0.7 - 0.4 and 1.1 - 0.8
  * become the same double. A value too large to have digits at that step comes back unchanged.
  */
 export function roundToResolution(value: number, resolution: number): number {
   if (!(resolution > 0) || !Number.isFinite(resolution)) throw new RangeError('A resolution is a positive number.');
-  const steps = Number((value / resolution).toPrecision(15));
-  if (!(Math.abs(steps) < 2 ** 53)) return value;
-  const whole = Math.sign(steps) * Math.floor(Math.abs(steps) + 0.5);
+  const steps = Math.abs(value / resolution);
+  if (!(steps < 2 ** 53)) return value;
+  const whole = Math.sign(value) * nearestWhole(steps);
   // Dividing by 100 gives the double nearest to the decimal; multiplying by 0.01 does not.
   const perUnit = Math.round(1 / resolution);
   const divides = perUnit >= 1 && Math.abs(perUnit * resolution - 1) < 1e-12;

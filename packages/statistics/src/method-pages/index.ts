@@ -1,5 +1,28 @@
 /** All method pages, in the order the Methods page lists them. One file per method. */
 import type { MethodPage } from './method-page.ts';
+import { descriptionPage } from './description.ts';
+import { quantileTypeSevenPage } from './quantile-type-7.ts';
+import { meanWithIntervalPage } from './mean-with-interval.ts';
+import { oneSampleTPage } from './one-sample-t.ts';
+import { pairedChangePage } from './paired-change.ts';
+import { welchPage } from './welch.ts';
+import { signedRankPage } from './signed-rank.ts';
+import { mannWhitneyPage } from './mann-whitney.ts';
+import { welchAnovaPage } from './welch-anova.ts';
+import { oneWayAnovaPage } from './one-way-anova.ts';
+import { brownForsythePage } from './brown-forsythe.ts';
+import { tukeyKramerPage } from './tukey-kramer.ts';
+import { kruskalWallisPage } from './kruskal-wallis.ts';
+import { dunnPage } from './dunn.ts';
+import { jonckheerePage } from './jonckheere-terpstra.ts';
+import { friedmanPage } from './friedman.ts';
+import { multiplicityPage } from './multiplicity.ts';
+import { hedgesGPage } from './hedges-g.ts';
+import { standardisedResponseMeanPage } from './standardised-response-mean.ts';
+import { standardisedMeanDifferencePage } from './standardised-mean-difference.ts';
+import { minimalDetectableChangePage } from './minimal-detectable-change.ts';
+import { distributionsPage } from './distributions.ts';
+import { roundingPage } from './rounding.ts';
 import { proportionWilsonPage } from './proportion-wilson.ts';
 import { proportionClopperPearsonPage } from './proportion-clopper-pearson.ts';
 import { proportionDifferencePage } from './proportion-difference.ts';
@@ -34,6 +57,29 @@ import { rubinsRulesPage } from './rubins-rules.ts';
 export type { MethodPage } from './method-page.ts';
 
 export const methodPages: readonly MethodPage[] = [
+  descriptionPage,
+  quantileTypeSevenPage,
+  meanWithIntervalPage,
+  oneSampleTPage,
+  pairedChangePage,
+  welchPage,
+  signedRankPage,
+  mannWhitneyPage,
+  welchAnovaPage,
+  oneWayAnovaPage,
+  brownForsythePage,
+  tukeyKramerPage,
+  kruskalWallisPage,
+  dunnPage,
+  jonckheerePage,
+  friedmanPage,
+  multiplicityPage,
+  hedgesGPage,
+  standardisedResponseMeanPage,
+  standardisedMeanDifferencePage,
+  minimalDetectableChangePage,
+  distributionsPage,
+  roundingPage,
   proportionWilsonPage,
   proportionClopperPearsonPage,
   proportionDifferencePage,

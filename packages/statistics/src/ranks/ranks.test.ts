@@ -331,6 +331,10 @@ describe('the exact distributions', () => {
     }
   });
 
+  it('are refused where counting would leave the range of a double', () => {
+    expect(() => signedRankTails(1000, 1001)).toThrow(RangeError);
+  });
+
   it('agree with each other where there are no ties', () => {
     fc.assert(
       fc.property(fc.integer({ min: 1, max: 9 }), fc.integer({ min: 1, max: 9 }), fc.nat(), (m, n, choice) => {

@@ -7,22 +7,25 @@
 import type { Tails } from '../distributions/tails.ts';
 import { noneAbove, noneBelow } from '../distributions/tails.ts';
 
+/** Beyond this the number of patterns, 2^n, leaves the range of a double. */
+const mostScores = 1000;
+
 /**
  * Shares of the sign patterns whose sum is 0, 1, …, `limit`. `scores` are whole numbers: ranks, or doubled midranks when there are ties.
  * Work: number of scores × limit.
  */
 export function signedSumShares(scores: ArrayLike<number>, limit: number): Float64Array {
-  const shares = new Float64Array(limit + 1);
-  shares[0] = 1;
+  if (scores.length > mostScores) throw new RangeError('Sign patterns are counted for at most 1000 differences.');
+  const patterns = new Float64Array(limit + 1);
+  patterns[0] = 1;
   let reached = 0;
   for (let i = 0; i < scores.length; i++) {
     const score = scores[i] as number;
     reached = Math.min(limit, reached + score);
-    // Halved as it goes, so that the counts stay within doubles however many scores there are.
-    for (let sum = reached; sum >= score; sum--) shares[sum] = ((shares[sum] as number) + (shares[sum - score] as number)) / 2;
-    for (let sum = Math.min(score - 1, reached); sum >= 0; sum--) shares[sum] = (shares[sum] as number) / 2;
+    for (let sum = reached; sum >= score; sum--) patterns[sum] = (patterns[sum] as number) + (patterns[sum - score] as number);
   }
-  return shares;
+  const all = 2 ** scores.length;
+  return patterns.map((count) => count / all);
 }
 
 /** Share of the sign patterns whose sum is at most `limit`. */

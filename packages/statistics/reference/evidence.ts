@@ -1,0 +1,80 @@
+/**
+ * How far the functions of this package are from published figures: one row per method and source, worked out by running every reference
+ * check. The Methods page prints it; the unit tests hold each check to its tolerance.
+ */
+
+import type { ReferenceCheck } from './agreement.ts';
+import { agreement } from './agreement.ts';
+import { anovaChecks } from './analysis-of-variance.checks.ts';
+import { correlationChecks } from './correlations.checks.ts';
+import { descriptionChecks } from './description.checks.ts';
+import { distributionChecks } from './distributions.checks.ts';
+import { effectSizeChecks } from './effect-sizes.checks.ts';
+import { meanChecks } from './means.checks.ts';
+import { modelChecks } from './models.checks.ts';
+import { multiplicityChecks } from './multiplicity.checks.ts';
+import { nistRegressionChecks } from './nist-linear-regression.checks.ts';
+import { pairedCategoryChecks } from './paired-categories.checks.ts';
+import { proportionChecks } from './proportions.checks.ts';
+import { rankTestChecks } from './rank-tests.checks.ts';
+import { resamplingChecks } from './resampling.checks.ts';
+import { siteChecks } from './sites.checks.ts';
+import { survivalChecks } from './survival.checks.ts';
+import { tableChecks } from './tables.checks.ts';
+
+/** In the order of the Methods page. */
+export const referenceChecks: readonly ReferenceCheck[] = [
+  ...descriptionChecks,
+  ...meanChecks,
+  ...rankTestChecks,
+  ...anovaChecks,
+  ...multiplicityChecks,
+  ...effectSizeChecks,
+  ...proportionChecks,
+  ...tableChecks,
+  ...pairedCategoryChecks,
+  ...correlationChecks,
+  ...modelChecks,
+  ...nistRegressionChecks,
+  ...survivalChecks,
+  ...siteChecks,
+  ...resamplingChecks,
+  ...distributionChecks,
+];
+
+export interface EvidenceRow {
+  /** Slug of the method page. */
+  readonly method: string;
+  /** Software with version, paper, or certified set. */
+  readonly source: string;
+  readonly cases: number;
+  /** Numbers compared in these cases. */
+  readonly figures: number;
+  /** Largest |got - published| / |published|; absolute where the published figure is 0. */
+  readonly worstRelativeError: number;
+  /** Whether every figure is within the tolerance of its case. */
+  readonly withinTolerance: boolean;
+}
+
+/** What stands before the data set in the source of a check. */
+function sourceWithoutDataSet(source: string): string {
+  return source.split(';')[0] as string;
+}
+
+export function evidence(checks: readonly ReferenceCheck[] = referenceChecks): EvidenceRow[] {
+  const rows = new Map<string, EvidenceRow>();
+  for (const check of checks) {
+    const source = sourceWithoutDataSet(check.source);
+    const key = `${check.method}\n${source}`;
+    const { compared, disagreements, worstRelativeError } = agreement(check);
+    const row = rows.get(key) ?? { method: check.method, source, cases: 0, figures: 0, worstRelativeError: 0, withinTolerance: true };
+    rows.set(key, {
+      ...row,
+      cases: row.cases + 1,
+      figures: row.figures + compared,
+      worstRelativeError: Math.max(row.worstRelativeError, worstRelativeError),
+      withinTolerance: row.withinTolerance && disagreements.length === 0,
+    });
+  }
+  return [...rows.values()];
+}

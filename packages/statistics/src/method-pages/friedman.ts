@@ -1,0 +1,11 @@
+import type { MethodPage } from './method-page.ts';
+
+export const friedmanPage: MethodPage = {
+  slug: 'friedman',
+  title: 'Repeated visits by ranks: Friedman test',
+  formula:
+    'Ranks within each person; chi-square = 12 sum (R_j - n(k + 1)/2)^2/(nk(k + 1) - sum(t^3 - t)/(k - 1)), k - 1 degrees of freedom. Kendall W = chi-square/(n(k - 1)).',
+  whenUsed: 'Three or more visits of the same people on an ordinal scale. Only people with every visit take part.',
+  smallN: 'Marked "very small sample" below 5 people.',
+  source: 'Friedman (1937) J Am Stat Assoc 32:675-701; Hollander & Wolfe (1973) chapter 7.',
+};
