@@ -35,8 +35,6 @@ function makePages(provider: Provider, options: FakeOidcOptions): Express {
       },
       // Over plain http on the loopback interface this header would have no meaning.
       strictTransportSecurity: false,
-      // `no-referrer`, the default, turns the Origin of the registry's own forms into `null` after a redirect from here.
-      referrerPolicy: { policy: 'same-origin' },
     }),
   );
   app.get(stylesheetPath, (_request, response) => void response.type('css').send(stylesheet));

@@ -52,7 +52,6 @@ function makePages(mailbox: Mailbox): Express {
         },
       },
       strictTransportSecurity: false,
-      referrerPolicy: { policy: 'same-origin' },
     }),
   );
   app.use((_request, response, next) => {
