@@ -33,3 +33,6 @@ export type { ScimParts } from './scim.ts';
 export { speedAgrees, speedTolerance, walkingSpeed } from './walking-speed.ts';
 export { helpAgrees, helpAtLevel, helpDifferences, walkingAids } from './walking-index.ts';
 export type { WalkingAid, WalkingHelp } from './walking-index.ts';
+export { affectedByOtherConditions } from './other-conditions.ts';
+export { openReadings } from './open-readings.ts';
+export type { OpenReading } from './open-readings.ts';
