@@ -22,7 +22,7 @@ export function fFigures(f: number, df1: number, df2: number): TestFigures {
   return { statisticName: 'F', statistic: f, df: [df1, df2], p: fTails(f, df1, df2).upper };
 }
 
-/** "95 %" for 0.95, for the sentence that states the method. */
+/** "95%" for 0.95, for the sentence that states the method. */
 export function percentText(level: number): string {
-  return `${Number((level * 100).toPrecision(10))} %`;
+  return `${Number((level * 100).toPrecision(10))}%`;
 }

@@ -4,7 +4,7 @@ import { findRootOfIncreasing } from '../root.ts';
 import type { Tail, Tails } from './tails.ts';
 import { noneAbove, noneBelow, requireNumber, requireProbability } from './tails.ts';
 
-/** z of a two-sided 95 % interval. */
+/** z of a two-sided 95% interval. */
 export const z95 = 1.959963984540054;
 
 const inverseRootTwoPi = 0.3989422804014327;

@@ -68,7 +68,7 @@ describe('meanWithInterval', () => {
 });
 
 describe('oneSampleTest', () => {
-  it('has p below 0.05 exactly when the 95 % interval leaves the value out', () => {
+  it('has p below 0.05 exactly when the 95% interval leaves the value out', () => {
     fc.assert(
       fc.property(sample, value, (values, expected) => {
         const result = oneSampleTest(values, expected);

@@ -151,7 +151,7 @@ describe('signedRankTest', () => {
     const result = signedRankTest([1, 2, 4]);
     expect(result).toMatchObject({
       achievedLevel: 0.75,
-      failedAssumptions: ['very small sample (n = 3)', 'the interval reaches a level of 75 % only'],
+      failedAssumptions: ['very small sample (n = 3)', 'the interval reaches a level of 75% only'],
     });
   });
 

@@ -1,8 +1,8 @@
 /**
- * Funnel plot: each site against the registry's value with 95 % and 99.8 % limits. Where at least ten sites spread more than chance explains, the limits are
+ * Funnel plot: each site against the registry's value with 95% and 99.8% limits. Where at least ten sites spread more than chance explains, the limits are
  * widened by the root of the overdispersion phi = mean z^2 and the answer says so.
  *
- * A site outside the 99.8 % limits "differs from the registry value more than chance explains"; it is never ranked and never called worse.
+ * A site outside the 99.8% limits "differs from the registry value more than chance explains"; it is never ranked and never called worse.
  *
  * Source: Spiegelhalter (2005) Stat Med 24:1185-1202, multiplicative overdispersion without winsorising.
  */
@@ -23,7 +23,7 @@ export interface FunnelSite {
   readonly z: number;
   readonly limits95: Interval;
   readonly limits998: Interval;
-  readonly position: 'within 95 % limits' | 'between 95 % and 99.8 % limits' | 'outside 99.8 % limits';
+  readonly position: 'within 95% limits' | 'between 95% and 99.8% limits' | 'outside 99.8% limits';
 }
 
 export interface FunnelPlot extends Provenance {
@@ -72,13 +72,13 @@ function funnelPlot(
       const limits95 = limits(point.n, 0.95);
       const limits998 = limits(point.n, 0.998);
       const position = outside(point.value, limits998)
-        ? 'outside 99.8 % limits'
+        ? 'outside 99.8% limits'
         : outside(point.value, limits95)
-          ? 'between 95 % and 99.8 % limits'
-          : 'within 95 % limits';
+          ? 'between 95% and 99.8% limits'
+          : 'within 95% limits';
       return { ...point, limits95, limits998, position };
     }),
-    method: `${title}, 95 % and 99.8 %${widened ? ', widened by the root of the overdispersion' : ''}.`,
+    method: `${title}, 95% and 99.8%${widened ? ', widened by the root of the overdispersion' : ''}.`,
     failedAssumptions:
       overdispersion > 1 && !widened && points.length > 1
         ? [`the sites spread more than chance explains, but ${points.length} sites are too few to widen the limits`]
