@@ -39,13 +39,13 @@ function digit(column: TypedColumn): Digit {
 }
 
 /**
- * The number of a row's key: equal for rows that agree in participant and in the columns given, in whatever table they
+ * Per row the number of its key: equal for rows that agree in participant and in the columns given, in whatever table they
  * stand as long as the columns have the same limits; -1 when part of the key is empty or impossible.
  */
-export function keyNumbers(table: Pick<TypedTable, 'column'>, persons: Persons, columns: readonly string[]): (row: number) => number {
+export function keyNumbers(table: Pick<TypedTable, 'column' | 'length'>, persons: Persons, columns: readonly string[]): Float64Array {
   const participant = table.column('participant');
   const digits = columns.map((key) => digit(table.column(key)));
-  return (row) => {
+  const keyOf = (row: number): number => {
     const code = participant.word(row);
     if (code === null) return -1;
     let number = persons.number(code);
@@ -56,4 +56,5 @@ export function keyNumbers(table: Pick<TypedTable, 'column'>, persons: Persons, 
     }
     return number;
   };
+  return Float64Array.from({ length: table.length }, (_, row) => keyOf(row));
 }

@@ -3,11 +3,11 @@ export class RowGroups {
   private readonly first = new Map<number, number>();
   private readonly next: Int32Array;
 
-  /** @param groupOf The group of a row; a negative number for a row that belongs to none. */
-  constructor(length: number, groupOf: (row: number) => number) {
-    this.next = new Int32Array(length).fill(-1);
-    for (let row = length - 1; row >= 0; row -= 1) {
-      const group = groupOf(row);
+  /** @param groups Per row its group; a negative number for a row that belongs to none. */
+  constructor(groups: ArrayLike<number>) {
+    this.next = new Int32Array(groups.length).fill(-1);
+    for (let row = groups.length - 1; row >= 0; row -= 1) {
+      const group = groups[row] ?? -1;
       if (group < 0) continue;
       this.next[row] = this.first.get(group) ?? -1;
       this.first.set(group, row);

@@ -4,6 +4,8 @@ import type { TableKey } from '@cairnstep/dictionary';
 import type { RegistryContext, TypedTables } from '../registry-context.ts';
 import { tableFromRows } from '../table/table-from-rows.ts';
 import type { TypedTable } from '../table/typed-table.ts';
+import { boutSums } from './bout-sums.ts';
+import type { BoutSums } from './bout-sums.ts';
 import { CheckedTable } from './checked-table.ts';
 import { ExamReadings } from './exam-readings.ts';
 import { Persons, keyNumbers } from './key-numbers.ts';
@@ -11,14 +13,14 @@ import { RowGroups } from './row-groups.ts';
 import { visitsOf } from './visits.ts';
 import type { Visit } from './visits.ts';
 
-const sessionKey = ['session_day', 'session_no'];
-
 export class Submission {
   readonly persons = new Persons();
   private readonly joined = new Map<TableKey, CheckedTable>();
   private readonly byPerson = new Map<TableKey, RowGroups>();
-  private boutGroups: RowGroups | null = null;
+  private readonly sessionKeys = new Map<TableKey, Float64Array>();
   private sessionGroups: RowGroups | null = null;
+  private sessionRows: Int32Array | null = null;
+  private sums: ((session: number) => BoutSums | null) | null = null;
   private visitList: readonly Visit[] | null = null;
   private examReadings: ExamReadings | null = null;
 
@@ -52,13 +54,13 @@ export class Submission {
 
   private notOverridden(file: TypedTable, held: TypedTable): number[] {
     const columns = tableOf(file.key).rowKey.slice(1);
-    const inFile = new RowGroups(file.length, keyNumbers(file, this.persons, columns));
-    const keyOfHeld = keyNumbers(held, this.persons, columns);
-    return Array.from({ length: held.length }, (_, row) => row).filter((row) => !inFile.has(keyOfHeld(row)));
+    const inFile = new RowGroups(keyNumbers(file, this.persons, columns));
+    const keysOfHeld = keyNumbers(held, this.persons, columns);
+    return Array.from(keysOfHeld.keys()).filter((row) => !inFile.has(keysOfHeld[row] ?? -1));
   }
 
-  /** The key number of a row, over its participant and these columns. */
-  keyNumbers(table: CheckedTable, columns: readonly string[]): (row: number) => number {
+  /** Per row the number of its key over its participant and these columns. */
+  keyNumbers(table: CheckedTable, columns: readonly string[]): Float64Array {
     return keyNumbers(table, this.persons, columns);
   }
 
@@ -66,26 +68,31 @@ export class Submission {
   rowsByPerson(key: TableKey): RowGroups {
     let groups = this.byPerson.get(key);
     if (!groups) {
-      const table = this.table(key);
-      this.byPerson.set(key, (groups = new RowGroups(table.length, (row) => table.personOf(row))));
+      this.byPerson.set(key, (groups = new RowGroups(this.table(key).persons)));
     }
     return groups;
   }
 
-  /** The session that a bout or an event names, by the numbers of `sessionNumbers`. */
-  get sessionsByKey(): RowGroups {
-    const sessions = this.table('sessions');
-    return (this.sessionGroups ??= new RowGroups(sessions.length, this.sessionNumbers(sessions)));
+  /** For sessions, bouts and events: per row the number of the session it belongs to, -1 for none. */
+  sessionNumbers(key: 'sessions' | 'bouts' | 'adverse_events'): Float64Array {
+    let numbers = this.sessionKeys.get(key);
+    if (!numbers) this.sessionKeys.set(key, (numbers = this.keyNumbers(this.table(key), ['session_day', 'session_no'])));
+    return numbers;
   }
 
-  get boutsBySession(): RowGroups {
-    const bouts = this.table('bouts');
-    return (this.boutGroups ??= new RowGroups(bouts.length, this.sessionNumbers(bouts)));
+  /** Sessions by the numbers of `sessionNumbers`. */
+  get sessionsByNumber(): RowGroups {
+    return (this.sessionGroups ??= new RowGroups(this.sessionNumbers('sessions')));
   }
 
-  /** For sessions, bouts and events: the number of the session a row belongs to, -1 for none. */
-  sessionNumbers(table: CheckedTable): (row: number) => number {
-    return this.keyNumbers(table, sessionKey);
+  /** Per bout the row of its session; -1 when no session has its number. */
+  get sessionOfBout(): Int32Array {
+    return (this.sessionRows ??= Int32Array.from(this.sessionNumbers('bouts'), (number) => this.sessionsByNumber.firstOf(number)));
+  }
+
+  /** What the bouts of a session add up to; null when none of its bouts is known. */
+  get boutSums(): (session: number) => BoutSums | null {
+    return (this.sums ??= boutSums(this));
   }
 
   /** Study day of a participant's injury; null when it is not known. */

@@ -1,6 +1,7 @@
 /** Assessments as the rules compare them: all results of one participant on one day. */
 import { tableOf } from '@cairnstep/dictionary';
 import type { CheckedTable } from './checked-table.ts';
+import { partition } from './partition.ts';
 import { RowGroups } from './row-groups.ts';
 import type { Submission } from './submission.ts';
 
@@ -67,10 +68,10 @@ export function visitsOf(submission: Submission): Visit[] {
     persons: persons.number(row),
   });
   // Rows with the same key have a finding of their own; only the first takes part, so that a visit stays small.
-  const keyOf = submission.keyNumbers(table, tableOf('assessments').rowKey.slice(1));
-  const byKey = new RowGroups(table.length, keyOf);
-  const dayOf = submission.keyNumbers(table, ['assessment_day']);
-  const groups = new RowGroups(table.length, (row) => (byKey.firstOf(keyOf(row)) === row ? dayOf(row) : -1));
+  const keys = submission.keyNumbers(table, tableOf('assessments').rowKey.slice(1));
+  const byKey = new RowGroups(keys);
+  const days = submission.keyNumbers(table, ['assessment_day']);
+  const groups = new RowGroups(days.map((visit, row) => (byKey.firstOf(keys[row] ?? -1) === row ? visit : -1)));
   return [...groups].map((rows) => new Visit(table, table.personOf(rows[0] ?? 0), day.number(rows[0] ?? 0) ?? 0, rows.map(result)));
 }
 
@@ -90,12 +91,8 @@ export interface Timed {
 
 export function comparableWalks(visit: Visit): ComparableWalks[] {
   const seconds = visit.table.column('seconds_walked');
-  const groups = new Map<string, Result[]>();
-  for (const result of visit.of('tmwt_ss', 'tmwt_fast', 'six_mwt', 'tug')) {
-    if (result.value === null || result.aid === null) continue;
-    const key = `${result.aid} ${result.inDevice}`;
-    groups.set(key, [...(groups.get(key) ?? []), result]);
-  }
+  const walks = visit.of('tmwt_ss', 'tmwt_fast', 'six_mwt', 'tug').filter(({ value, aid }) => value !== null && aid !== null);
+  const groups = partition(walks, ({ aid, inDevice }) => `${aid} ${inDevice}`);
   return [...groups.values()].map((results) => {
     const timed = (measure: string): Timed[] =>
       results.flatMap((result) => {

@@ -41,7 +41,7 @@ export class NumberReader implements CellReader {
       const example = this.whole ? 'a whole number such as 12' : 'a number such as 12.5';
       rejectCell(this.place, at, 'F10', 'Something other than a number.', `Write ${example}, without a unit, or leave the cell empty.`);
     } else if (failure === 'too-many-digits') {
-      rejectCell(this.place, at, 'F10', 'A number with more digits than can be kept.', 'Write at most 15 digits.');
+      rejectCell(this.place, at, 'F10', 'A number with more digits than can be kept.', 'Write at most 40 digits.');
     } else if (this.whole && !Number.isInteger(into.value)) {
       rejectCell(this.place, at, 'F10', 'A number with a fraction where only whole numbers stand.', 'Write a whole number.');
     } else if (into.mark === COMMA && manner.commaSeparated && perhapsThousands.test(text)) {

@@ -26,6 +26,18 @@ export class TypedColumn {
     return value === undefined || value !== value ? null : value;
   }
 
+  /** Smallest and largest number of the first rows; from Infinity to -Infinity when they hold none. */
+  extent(rows: number): { readonly min: number; readonly max: number } {
+    let min = Infinity;
+    let max = -Infinity;
+    for (let row = 0; this.numbers && row < rows; row += 1) {
+      const value = this.numbers[row] ?? Number.NaN;
+      if (value < min) min = value;
+      if (value > max) max = value;
+    }
+    return { min, max };
+  }
+
   /** The word of the row, null when the cell is empty or holds a number. */
   word(row: number): string | null {
     const index = this.words?.[row];

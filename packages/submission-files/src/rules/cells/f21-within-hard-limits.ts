@@ -1,5 +1,5 @@
 import { tableKeys } from '@cairnstep/dictionary';
-import { limitsOfRow } from '../../checking/limits-of-row.ts';
+import { beyond, isWithin, judgeNumbers } from '../../checking/numbers-with-limits.ts';
 import type { Rule } from '../../checking/rule.ts';
 
 export const withinHardLimits: Rule = {
@@ -7,19 +7,12 @@ export const withinHardLimits: Rule = {
   evaluate: (submission, report) => {
     for (const key of tableKeys) {
       const table = submission.table(key);
-      for (const column of table.columns) {
-        const { variable } = column;
-        const limitsOf = limitsOfRow(table, variable);
-        if (!limitsOf) continue;
-        for (let row = 0; row < table.fileRows; row += 1) {
-          const value = column.number(row);
-          if (value === null) continue;
-          const { hard, unit } = limitsOf(row);
-          if (!hard || (value >= hard.min && value <= hard.max)) continue;
-          const [side, limit] = value < hard.min ? ['below', hard.min] : ['above', hard.max];
-          report.add(table, row, variable.key, `A number ${side} the hard limit of ${limit}${unit === undefined ? '' : ` ${unit}`}.`);
-        }
-      }
+      judgeNumbers(
+        table,
+        ({ min, max }, { hard }) => isWithin(min, hard) && isWithin(max, hard),
+        (value, { hard, unit }) => (!hard || isWithin(value, hard) ? null : beyond(value, 'hard', hard, unit)),
+        (row, column, found) => report.add(table, row, column.variable.key, found),
+      );
     }
   },
 };

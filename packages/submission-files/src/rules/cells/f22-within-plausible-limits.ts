@@ -1,27 +1,20 @@
 import { tableKeys } from '@cairnstep/dictionary';
-import { limitsOfRow } from '../../checking/limits-of-row.ts';
+import { beyond, isWithin, judgeNumbers } from '../../checking/numbers-with-limits.ts';
 import type { Rule } from '../../checking/rule.ts';
 
+/** A number beyond the hard limits is an error already and is not doubted as well. */
 export const withinPlausibleLimits: Rule = {
   id: 'F22',
   evaluate: (submission, report) => {
     for (const key of tableKeys) {
       const table = submission.table(key);
-      for (const column of table.columns) {
-        const { variable } = column;
-        const limitsOf = limitsOfRow(table, variable);
-        if (!limitsOf) continue;
-        for (let row = 0; row < table.fileRows; row += 1) {
-          const value = column.number(row);
-          if (value === null) continue;
-          const { hard, plausible, unit } = limitsOf(row);
-          // Beyond the hard limits it is an error already.
-          if (!plausible || (hard && (value < hard.min || value > hard.max))) continue;
-          if (value >= plausible.min && value <= plausible.max) continue;
-          const [side, limit] = value < plausible.min ? ['below', plausible.min] : ['above', plausible.max];
-          report.add(table, row, variable.key, `A number ${side} the plausible limit of ${limit}${unit === undefined ? '' : ` ${unit}`}.`);
-        }
-      }
+      judgeNumbers(
+        table,
+        ({ min, max }, { plausible }) => isWithin(min, plausible) && isWithin(max, plausible),
+        (value, { hard, plausible, unit }) =>
+          !plausible || isWithin(value, plausible) || !isWithin(value, hard) ? null : beyond(value, 'plausible', plausible, unit),
+        (row, column, found) => report.add(table, row, column.variable.key, found),
+      );
     }
   },
 };

@@ -8,10 +8,10 @@ export const keyOccursOnce: Rule = {
     for (const key of tableKeys) {
       const table = submission.table(key);
       const columns = tableOf(key).rowKey;
-      const keyOf = submission.keyNumbers(table, columns.slice(1));
-      const groups = new RowGroups(table.fileRows, keyOf);
+      const keys = submission.keyNumbers(table, columns.slice(1)).subarray(0, table.fileRows);
+      const groups = new RowGroups(keys);
       for (let row = 0; row < table.fileRows; row += 1) {
-        const first = groups.firstOf(keyOf(row));
+        const first = groups.firstOf(keys[row] ?? -1);
         if (first >= 0 && first < row) report.add(table, row, null, `The same ${columns.join(', ')} as in line ${table.lineOf(first)}.`);
       }
     }

@@ -1,5 +1,8 @@
 import type { CheckedTable } from '../../checking/checked-table.ts';
-import type { Rule } from '../../checking/rule.ts';
+import { partition } from '../../checking/partition.ts';
+import { RowGroups } from '../../checking/row-groups.ts';
+import type { Rule, RuleReport } from '../../checking/rule.ts';
+import type { TypedColumn } from '../../table/typed-table.ts';
 
 /** Values that never repeat together by chance. */
 const measured = {
@@ -9,22 +12,46 @@ const measured = {
 
 /** Fewer values than this may agree by chance. */
 const fewestValues = 3;
-/** Rows of one participant that may be alike, and the share of a whole file that may be. */
+/** So many rows of one participant may not be alike. */
 const rowsOfOnePerson = 5;
-const fewestOfAFile = 20;
+/** Nor may so many rows of a file, when they are more than this share of it. */
+const rowsOfAFile = 20;
 const shareOfAFile = 0.5;
 
-function likeness(table: CheckedTable, keys: readonly string[]): (row: number) => string | null {
-  const columns = keys.map((key) => table.column(key));
-  return (row) => {
-    const values = columns.map((column) => column.number(row));
-    return values.filter((value) => value !== null).length < fewestValues ? null : values.join(' ');
-  };
+/** Per row a number that is equal for rows with equal values; rarely equal for others too. -1 for rows with too few values. */
+function fingerprints(table: CheckedTable, columns: readonly TypedColumn[]): Float64Array {
+  return Float64Array.from({ length: table.fileRows }, (_, row) => {
+    let hash = 0;
+    let values = 0;
+    for (const column of columns) {
+      const value = column.number(row);
+      // Thousandths make a whole number of every value; an empty cell takes a place of its own.
+      hash = Math.imul(hash ^ (value === null ? 0x5bd1e995 : Math.round(value * 1000)), 0x01000193) ^ (hash >>> 15);
+      if (value !== null) values += 1;
+    }
+    return values < fewestValues ? -1 : hash >>> 0;
+  });
 }
 
-interface Alike {
-  readonly first: number;
-  count: number;
+/** Groups of rows that agree in all their values, told apart where only the fingerprint agrees. */
+function* alikeRows(table: CheckedTable, columns: readonly TypedColumn[]): Generator<number[]> {
+  for (const rows of new RowGroups(fingerprints(table, columns))) {
+    if (rows.length < rowsOfOnePerson) continue;
+    const exact = partition(rows, (row) => columns.map((column) => column.number(row)).join(' '));
+    yield* exact.values();
+  }
+}
+
+function reportAlike(table: CheckedTable, rows: readonly number[], report: RuleReport): void {
+  for (const own of partition(rows, (row) => table.personOf(row)).values()) {
+    const [first] = own;
+    if (first !== undefined && own.length >= rowsOfOnePerson)
+      report.add(table, first, null, `${own.length} rows of one participant that agree in every measured value.`);
+  }
+  const [first] = rows;
+  if (first !== undefined && rows.length >= rowsOfAFile && rows.length > table.fileRows * shareOfAFile) {
+    report.add(table, first, null, `${rows.length} of ${table.fileRows} rows that agree in every measured value.`);
+  }
 }
 
 export const rowsAllAlike: Rule = {
@@ -32,27 +59,8 @@ export const rowsAllAlike: Rule = {
   evaluate: (submission, report) => {
     for (const key of ['sessions', 'bouts'] as const) {
       const table = submission.table(key);
-      const likenessOf = likeness(table, measured[key]);
-      const ofPerson = new Map<string, Alike>();
-      const ofFile = new Map<string, Alike>();
-      const count = (groups: Map<string, Alike>, group: string, row: number): void => {
-        const known = groups.get(group);
-        if (known) known.count += 1;
-        else groups.set(group, { first: row, count: 1 });
-      };
-      for (let row = 0; row < table.fileRows; row += 1) {
-        const values = likenessOf(row);
-        if (values === null) continue;
-        count(ofPerson, `${table.personOf(row)} ${values}`, row);
-        count(ofFile, values, row);
-      }
-      for (const { first, count: rows } of ofPerson.values()) {
-        if (rows >= rowsOfOnePerson) report.add(table, first, null, `${rows} rows of one participant that agree in every measured value.`);
-      }
-      for (const { first, count: rows } of ofFile.values()) {
-        if (rows >= fewestOfAFile && rows > table.fileRows * shareOfAFile)
-          report.add(table, first, null, `${rows} of ${table.fileRows} rows that agree in every measured value.`);
-      }
+      const columns = measured[key].map((name) => table.column(name));
+      for (const rows of alikeRows(table, columns)) reportAlike(table, rows, report);
     }
   },
 };

@@ -7,11 +7,11 @@ export const boutHasASession: Rule = {
   evaluate: (submission, report) => {
     const bouts = submission.table('bouts');
     const status = submission.table('sessions').column('status');
-    const sessionOf = submission.sessionNumbers(bouts);
+    const numbers = submission.sessionNumbers('bouts');
+    const { sessionOfBout } = submission;
     for (let row = 0; row < bouts.fileRows; row += 1) {
-      const number = sessionOf(row);
-      if (number < 0) continue;
-      const session = submission.sessionsByKey.firstOf(number);
+      if ((numbers[row] ?? -1) < 0) continue;
+      const session = sessionOfBout[row] ?? -1;
       if (session < 0) {
         report.add(bouts, row, 'session_no', 'A bout of a session that is neither in the file of sessions nor in the registry.');
         continue;

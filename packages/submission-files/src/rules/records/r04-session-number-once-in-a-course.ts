@@ -6,7 +6,7 @@ export const sessionNumberOnceInACourse: Rule = {
   evaluate: (submission, report) => {
     const sessions = submission.table('sessions');
     const day = sessions.column('session_day');
-    const groups = new RowGroups(sessions.length, submission.keyNumbers(sessions, ['course_no', 'session_no']));
+    const groups = new RowGroups(submission.keyNumbers(sessions, ['course_no', 'session_no']));
     for (const rows of groups) {
       const [first, ...others] = rows;
       if (first === undefined) continue;

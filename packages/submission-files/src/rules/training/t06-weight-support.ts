@@ -11,11 +11,11 @@ export const weightSupport: Rule = {
     const kilograms = bouts.column('bws_kg');
     const percent = bouts.column('bws_pct');
     const mass = submission.table('sessions').column('body_mass_kg');
-    const sessionOf = submission.sessionNumbers(bouts);
+    const { sessionOfBout } = submission;
     for (let row = 0; row < bouts.fileRows; row += 1) {
       const support = kilograms.number(row);
       if (support === null) continue;
-      const session = submission.sessionsByKey.firstOf(sessionOf(row));
+      const session = sessionOfBout[row] ?? -1;
       const body = session < 0 ? null : mass.number(session);
       if (!body) continue;
       const computed = (100 * support) / body;

@@ -1,4 +1,3 @@
-import { boutTimes } from '../../checking/bout-times.ts';
 import type { Rule } from '../../checking/rule.ts';
 
 export const walkingWithinUpright: Rule = {
@@ -6,12 +5,11 @@ export const walkingWithinUpright: Rule = {
   evaluate: (submission, report) => {
     const sessions = submission.table('sessions');
     const upright = sessions.column('upright_min');
-    const timesOf = boutTimes(submission);
     for (let row = 0; row < sessions.fileRows; row += 1) {
       const uprightMin = upright.number(row);
       if (uprightMin === null) continue;
-      const times = timesOf(row);
-      if (times && times.walking > uprightMin + 1e-9) report.add(sessions, row, 'upright_min', 'More time walking than upright.');
+      const sums = submission.boutSums(row);
+      if (sums && sums.walkingMin > uprightMin + 1e-9) report.add(sessions, row, 'upright_min', 'More time walking than upright.');
     }
   },
 };

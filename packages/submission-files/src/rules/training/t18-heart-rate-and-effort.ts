@@ -1,5 +1,4 @@
 import { attendedSessions } from '../../checking/attended-sessions.ts';
-import { boutTimes } from '../../checking/bout-times.ts';
 import { limitOf } from '../../checking/rule.ts';
 import type { Rule, RuleReport } from '../../checking/rule.ts';
 import type { Submission } from '../../checking/submission.ts';
@@ -25,9 +24,8 @@ function effort(submission: Submission, report: RuleReport): void {
   const rating = sessions.column('rpe');
   const scale = sessions.column('rpe_scale');
   const course = sessions.column('course_no');
-  const timesOf = boutTimes(submission);
   for (const attended of attendedSessions(submission)) {
-    const walked = attended.map((row) => timesOf(row)?.walking ?? null);
+    const walked = attended.map((row) => submission.boutSums(row)?.walkingMin ?? null);
     for (let end = inSessions - 1; end < attended.length; end += 1) {
       const rows = attended.slice(end - inSessions + 1, end + 1);
       const isOneSeries = new Set(rows.map((row) => `${course.number(row) ?? ''} ${scale.word(row) ?? ''}`)).size === 1;
