@@ -37,12 +37,15 @@ export function endpoint<
   return definition;
 }
 
-type Part<Schema> = Schema extends z.ZodUndefined ? unknown : Schema extends z.ZodType ? z.output<Schema> : unknown;
+/** An empty strict object would forbid every other part of the input. */
+type Filled<T> = T extends Record<string, never> ? unknown : T;
+
+type Part<Schema> = Schema extends z.ZodUndefined ? unknown : Schema extends z.ZodType ? Filled<z.output<Schema>> : unknown;
 
 /** All that a use case receives: params, query and body merged into one flat object. Names never collide (tested). */
 export type InputOf<E> = E extends Endpoint<infer P, infer Q, infer B, z.ZodType> ? Part<P> & Part<Q> & Part<B> : never;
 
-type WrittenPart<Schema> = Schema extends z.ZodUndefined ? unknown : Schema extends z.ZodType ? z.input<Schema> : unknown;
+type WrittenPart<Schema> = Schema extends z.ZodUndefined ? unknown : Schema extends z.ZodType ? Filled<z.input<Schema>> : unknown;
 
 /** The same as a caller writes it: defaults may be left out. */
 export type CallOf<E> = E extends Endpoint<infer P, infer Q, infer B, z.ZodType> ? WrittenPart<P> & WrittenPart<Q> & WrittenPart<B> : never;

@@ -9,11 +9,11 @@ import { asActor, type Tx } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
 import { readRelease, type ReleaseRecord } from './explore.repository.ts';
 
-/** Newest consent of each person: in force, or withdrawn for new data only; and aggregates not refused. */
-const consenting = `with latest as (select distinct on (site_id, participant) site_id, participant, status, withdrawal_scope, no_aggregates
+/** Newest consent of each person in force, and aggregates not refused. Whoever has withdrawn, however far, is in no later release. */
+const consenting = `with latest as (select distinct on (site_id, participant) site_id, participant, status, no_aggregates
     from consents order by site_id, participant, consent_no desc),
   consenting as (select site_id, participant from latest
-    where (status = 'active' or (status = 'withdrawn' and withdrawal_scope = 'no_new_data')) and no_aggregates is distinct from 'yes')`;
+    where status = 'active' and no_aggregates is distinct from 'yes')`;
 
 const courseColumns = `site_id, participant, course_no, first_day, last_day, exam_day, nli, level_group, ais, age, sex, cause, days_since_injury,
   sessions, bouts, walking_min, distance_m, steps`;
