@@ -1,21 +1,8 @@
 /** The one way to the API: builds the address, sends, parses the answer by the contract, throws refusals. */
-import type { Endpoint, Problem, ResponseOf } from '@cairnstep/contract';
-import type { z } from 'zod';
+import type { CallOf, Endpoint, Problem, ResponseOf } from '@cairnstep/contract';
 import { ProblemError, UnexpectedAnswerError, UnreachableError } from './problem-error.ts';
 
 type AnyEndpoint = Pick<Endpoint, 'method' | 'path' | 'params' | 'query' | 'body' | 'upload' | 'response'>;
-
-/** An object schema without fields types as "no key at all", which no other part could be joined with: it adds nothing instead. */
-type Part<Schema> = Schema extends z.ZodUndefined
-  ? unknown
-  : Schema extends z.ZodType
-    ? string extends keyof z.input<Schema>
-      ? unknown
-      : z.input<Schema>
-    : unknown;
-
-/** Path parameters, query and body as one flat object; whatever has a default may be left out. */
-export type Call<E> = E extends Endpoint<infer P, infer Q, infer B, z.ZodType> ? Part<P> & Part<Q> & Part<B> : never;
 
 export interface CallOptions {
   readonly signal?: AbortSignal;
@@ -24,7 +11,7 @@ export interface CallOptions {
 }
 
 /** The address of an endpoint with its parameters filled in; for links to files as well. */
-export function addressOf<E extends AnyEndpoint>(endpoint: E, input: Call<E>): string {
+export function addressOf<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>): string {
   const values = input as Readonly<Record<string, unknown>>;
   const path = endpoint.path.replace(/:([A-Za-z]+)/g, (_whole, name: string) => encodeURIComponent(String(values[name])));
   const search = new URLSearchParams();
@@ -35,7 +22,7 @@ export function addressOf<E extends AnyEndpoint>(endpoint: E, input: Call<E>): s
   return search.size > 0 ? `${path}?${search}` : path;
 }
 
-export async function call<E extends AnyEndpoint>(endpoint: E, input: Call<E>, options: CallOptions = {}): Promise<ResponseOf<E>> {
+export async function call<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>, options: CallOptions = {}): Promise<ResponseOf<E>> {
   const response = await send(endpoint, input, options);
   if (!response.ok) throw await refusalIn(response);
   const parsed = endpoint.response.safeParse(await jsonIn(response));
@@ -43,7 +30,7 @@ export async function call<E extends AnyEndpoint>(endpoint: E, input: Call<E>, o
   return parsed.data as ResponseOf<E>;
 }
 
-async function send<E extends AnyEndpoint>(endpoint: E, input: Call<E>, { signal, file }: CallOptions): Promise<Response> {
+async function send<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>, { signal, file }: CallOptions): Promise<Response> {
   // A header no form or foreign page can send: the API refuses changes without it.
   const headers: Record<string, string> = { 'X-Cairnstep-Request': '1', Accept: 'application/json, application/problem+json' };
   const request: RequestInit = { method: endpoint.method, headers, credentials: 'same-origin', ...(signal && { signal }) };
