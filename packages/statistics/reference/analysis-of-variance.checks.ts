@@ -36,7 +36,7 @@ function classic(groups: readonly Group[]): Record<string, unknown> {
 }
 
 const cases = casesOf(fixture, 'anova.');
-const source = (dataset: string): string => `${fixture.source}; ${dataset}`;
+const source = (by: string, dataset: string): string => `R 4.2.2, ${by}; ${dataset}`;
 
 export const anovaChecks: readonly ReferenceCheck[] = [
   ...cases.map((one): ReferenceCheck => {
@@ -51,7 +51,7 @@ export const anovaChecks: readonly ReferenceCheck[] = [
     return {
       id: one.id,
       method: 'one-way-anova',
-      source: source(one.dataset),
+      source: source('anova(lm)', one.dataset),
       compute: () => classic(groupsOf(one)),
       expected,
       tolerance: one.tolerance,
@@ -60,7 +60,7 @@ export const anovaChecks: readonly ReferenceCheck[] = [
   ...cases.map((one): ReferenceCheck => ({
     id: `${one.id} Welch`,
     method: 'welch-anova',
-    source: source(one.dataset),
+    source: source('oneway.test', one.dataset),
     compute: () => {
       const of = welchAnova(groupsOf(one));
       return of.kind === 'test' ? { F: of.statistic, df1: of.df[0], df2: of.df[1], p: of.p } : of;
@@ -71,7 +71,7 @@ export const anovaChecks: readonly ReferenceCheck[] = [
   ...cases.map((one): ReferenceCheck => ({
     id: `${one.id} Brown-Forsythe`,
     method: 'brown-forsythe',
-    source: source(one.dataset),
+    source: source('leveneTest of car 3.1-1', one.dataset),
     compute: () => {
       const of = brownForsytheTest(groupsOf(one));
       return of.kind === 'test' ? { F: of.statistic, p: of.p } : of;

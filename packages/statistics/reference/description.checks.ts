@@ -34,7 +34,7 @@ export const descriptionChecks: readonly ReferenceCheck[] = [
     return {
       id: one.id,
       method: 'description',
-      source: `${fixture.source}; ${one.dataset}`,
+      source: `R 4.2.2, mean, sd, median, quantile and skewness of e1071 1.7-13; ${one.dataset}`,
       compute: () => ({ ...members(one.inputs.x), type7: quantiles(one.inputs.x, one.inputs.probs) }),
       expected: { n, mean, variance, sd, min, max, median, type7, quartiles: [type7[3], type7[5]], skewness: skewness.G1_type2 },
       tolerance: one.tolerance,
@@ -43,7 +43,7 @@ export const descriptionChecks: readonly ReferenceCheck[] = [
   ...casesOf(fixture, 'quantile.').map((one): ReferenceCheck => ({
     id: one.id,
     method: 'quantile-type-7',
-    source: `${fixture.source}; ${one.dataset}`,
+    source: `R 4.2.2, quantile(type = 7); ${one.dataset}`,
     compute: () => quantiles(one.inputs.x, one.inputs.probs),
     expected: one.expected.type7,
     tolerance: one.tolerance,

@@ -13,8 +13,15 @@ import fixture from './effect-sizes.json' with { type: 'json' };
 import type { FixtureCase } from './fixture.ts';
 import { casesOf } from './fixture.ts';
 
+const computedBy: Readonly<Record<string, string>> = {
+  'hedges-g': 'pt(ncp) with uniroot and lgamma, checked with effectsize 0.8.3',
+  'standardised-response-mean': 'pt(ncp) with uniroot, checked with effectsize 0.8.3',
+  'standardised-mean-difference': 'formula',
+  'minimal-detectable-change': 'formula with qnorm',
+};
+
 function check(one: FixtureCase, method: string, compute: () => unknown, expected: unknown): ReferenceCheck {
-  return { id: one.id, method, source: `${fixture.source}; ${one.dataset}`, compute, expected, tolerance: one.tolerance };
+  return { id: one.id, method, source: `R 4.2.2, ${computedBy[method]}; ${one.dataset}`, compute, expected, tolerance: one.tolerance };
 }
 
 /** Smokers minus non-smokers, as the case has it. */

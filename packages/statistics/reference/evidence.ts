@@ -1,8 +1,9 @@
 /**
  * How far the functions of this package are from published figures: one row per method and source, worked out by running every reference
- * check. The Methods page prints it; the unit tests hold each check to its tolerance.
+ * check. The Methods page prints a written copy of it; the unit tests hold each check to its tolerance.
  */
 
+import type { EvidenceRow } from '../src/index.ts';
 import type { ReferenceCheck } from './agreement.ts';
 import { agreement } from './agreement.ts';
 import { anovaChecks } from './analysis-of-variance.checks.ts';
@@ -42,27 +43,18 @@ export const referenceChecks: readonly ReferenceCheck[] = [
   ...distributionChecks,
 ];
 
-export interface EvidenceRow {
-  /** Slug of the method page. */
-  readonly method: string;
-  /** Software with version, paper, or certified set. */
-  readonly source: string;
-  readonly cases: number;
-  /** Numbers compared in these cases. */
-  readonly figures: number;
-  /** Largest |got - published| / |published|; absolute where the published figure is 0. */
-  readonly worstRelativeError: number;
+export interface CheckedEvidenceRow extends EvidenceRow {
   /** Whether every figure is within the tolerance of its case. */
   readonly withinTolerance: boolean;
 }
 
-/** What stands before the data set in the source of a check. */
+/** What stands before the data set: up to the first semicolon that is not inside parentheses. */
 function sourceWithoutDataSet(source: string): string {
-  return source.split(';')[0] as string;
+  return source.replace(/;(?![^(]*\)).*$/s, '');
 }
 
-export function evidence(checks: readonly ReferenceCheck[] = referenceChecks): EvidenceRow[] {
-  const rows = new Map<string, EvidenceRow>();
+export function evidence(checks: readonly ReferenceCheck[] = referenceChecks): CheckedEvidenceRow[] {
+  const rows = new Map<string, CheckedEvidenceRow>();
   for (const check of checks) {
     const source = sourceWithoutDataSet(check.source);
     const key = `${check.method}\n${source}`;

@@ -8,7 +8,14 @@ import { casesOf } from './fixture.ts';
 import fixture from './means.json' with { type: 'json' };
 
 function check(one: FixtureCase, method: string, compute: () => unknown, expected: unknown = one.expected): ReferenceCheck {
-  return { id: one.id, method, source: `${fixture.source}; ${one.dataset}`, compute, expected, tolerance: one.tolerance };
+  return {
+    id: one.id,
+    method,
+    source: `R 4.2.2, ${method === 'mean-with-interval' ? 'formula with qt' : 't.test'}; ${one.dataset}`,
+    compute,
+    expected,
+    tolerance: one.tolerance,
+  };
 }
 
 function testMembers(result: (TestedEstimate & { readonly se: number }) | NotEstimable): Record<string, unknown> {

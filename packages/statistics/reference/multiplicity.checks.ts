@@ -11,7 +11,7 @@ const present = (list: readonly (number | null)[]): number[] => list.filter((p) 
 export const multiplicityChecks: readonly ReferenceCheck[] = casesOf(fixture, 'padjust.').map((one) => ({
   id: one.id,
   method: 'multiplicity',
-  source: fixture.source,
+  source: 'R 4.2.2, p.adjust',
   compute: () => {
     const p = present(one.inputs.p);
     return { holm: holmAdjusted(p), BH: falseDiscoveryAdjusted(p), bonferroni: bonferroniAdjusted(p) };

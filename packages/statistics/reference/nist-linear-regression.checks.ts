@@ -39,8 +39,7 @@ function members(model: LinearModel) {
 /** Fewest digits agreed over the coefficients, and over their standard errors. */
 export function nistDigits(set: NistSet): { readonly coefficients: number; readonly standardErrors: number } {
   const model = nistRegression(set.name);
-  const { coefficients, standardErrors } =
-    model.kind === 'linear-model' ? members(model) : { coefficients: [], standardErrors: [] };
+  const { coefficients, standardErrors } = model.kind === 'linear-model' ? members(model) : { coefficients: [], standardErrors: [] };
   const fewest = (got: readonly number[], certified: readonly number[]): number =>
     Math.min(...certified.map((value, i) => digitsAgreed(got[i] ?? NaN, value)));
   return {

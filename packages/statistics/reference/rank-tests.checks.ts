@@ -18,8 +18,17 @@ import fixture from './rank-tests.json' with { type: 'json' };
 
 const caseOf = (id: string): FixtureCase => casesOf(fixture, id)[0] as FixtureCase;
 
+const computedBy: Readonly<Record<string, string>> = {
+  'signed-rank': 'wilcox.test(exact) and counting of all sign patterns',
+  'mann-whitney': 'wilcox.test(exact) and counting',
+  'kruskal-wallis': 'kruskal.test',
+  dunn: 'formula with p.adjust',
+  'jonckheere-terpstra': 'formula, equal to cor.test(method = "kendall")',
+  friedman: 'friedman.test',
+};
+
 function check(one: FixtureCase, method: string, compute: () => unknown, expected: unknown): ReferenceCheck {
-  return { id: one.id, method, source: `${fixture.source}; ${one.dataset}`, compute, expected, tolerance: one.tolerance };
+  return { id: one.id, method, source: `R 4.2.2, ${computedBy[method]}; ${one.dataset}`, compute, expected, tolerance: one.tolerance };
 }
 
 function signedRankMembers(of: SignedRankEstimate | NotEstimable): Record<string, unknown> {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { evidence, referenceChecks } from '../reference/evidence.ts';
-import { methodPages } from './index.ts';
+import { evidenceTable, methodPages } from './index.ts';
 
 describe('the method pages', () => {
   const slugs = methodPages.map(({ slug }) => slug);
@@ -31,6 +31,20 @@ describe('evidence', () => {
       expect(row.figures).toBeGreaterThanOrEqual(row.cases);
       expect(row.source).not.toBe('');
     }
+  });
+
+  it('is what the written table says (else run reference/write-evidence.ts)', () => {
+    const named = (row: { method: string; source: string; cases: number; figures: number }) => [
+      row.method,
+      row.source,
+      row.cases,
+      row.figures,
+    ];
+    expect(evidenceTable.map(named)).toEqual(rows.map(named));
+    rows.forEach((row, i) => {
+      // The last digits may differ between processors; the order of magnitude may not.
+      expect(row.worstRelativeError).toBeLessThanOrEqual(10 * Math.max(1e-15, evidenceTable[i]?.worstRelativeError ?? 0));
+    });
   });
 
   it('shows a figure that is off as off', () => {

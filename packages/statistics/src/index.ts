@@ -1,7 +1,6 @@
 /** Estimates, intervals and tests for the registry. Every function is pure and answers with n, what was left out and the method used. */
 export * from './result.ts';
 export * from './samples.ts';
-export * from './root.ts';
 export * from './distributions/index.ts';
 export * from './description/quantile.ts';
 export * from './description/describe.ts';

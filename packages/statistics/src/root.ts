@@ -43,7 +43,6 @@ export function findRoot(f: (x: number) => number, lower: number, upper: number,
       const accept = 2 * p < Math.min(3 * half * q - Math.abs(smallest * q), Math.abs(stepBefore * q));
       stepBefore = accept ? step : half;
       step = accept ? p / q : half;
-      if (!accept) stepBefore = half;
     }
     a = b;
     fa = fb;

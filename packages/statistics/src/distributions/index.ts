@@ -14,15 +14,15 @@
  *
  * Tails are given both ways and on the log scale, so no p-value is ever formed as 1 minus something near 1.
  */
-export * from './tails.ts';
-export * from './log-gamma.ts';
+export type { Tail, Tails } from './tails.ts';
+export { logBeta, logGamma } from './log-gamma.ts';
 export * from './normal.ts';
 export * from './student-t.ts';
 export * from './chi-square.ts';
 export * from './f.ts';
 export * from './beta.ts';
 export * from './gamma.ts';
-export * from './binomial.ts';
+export { binomialLogMass, binomialMass, binomialQuantile, binomialTails } from './binomial.ts';
 export * from './poisson.ts';
 export * from './hypergeometric.ts';
 export * from './noncentral-t.ts';

@@ -54,6 +54,8 @@ import { funnelPage } from './funnel.ts';
 import { bootstrapPage } from './bootstrap.ts';
 import { rubinsRulesPage } from './rubins-rules.ts';
 
+export type { EvidenceRow } from './evidence-row.ts';
+export { evidenceTable } from './evidence-table.ts';
 export type { MethodPage } from './method-page.ts';
 
 export const methodPages: readonly MethodPage[] = [

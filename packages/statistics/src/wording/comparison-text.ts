@@ -1,4 +1,5 @@
 import type { TestedEstimate } from '../result.ts';
+import { percentText } from '../test-figures.ts';
 import { intervalText, limitText, numberText } from './number-text.ts';
 
 /**
@@ -11,7 +12,6 @@ export function comparisonText(subject: string, of: Pick<TestedEstimate, 'estima
   if (interval.lower > 0 || interval.upper < 0) {
     return `${subject} differ by ${numberText(estimate, decimals)}${measure} (${intervalText(interval, decimals)})`;
   }
-  const level = Number((100 * interval.level).toPrecision(10));
   const [from, to] = [limitText(interval.lower, decimals), limitText(interval.upper, decimals)];
-  return `no difference was shown; the ${level}% CI runs from ${from} to ${to}${measure}`;
+  return `no difference was shown; the ${percentText(interval.level)} CI runs from ${from} to ${to}${measure}`;
 }

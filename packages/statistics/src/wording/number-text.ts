@@ -1,6 +1,7 @@
 /** Figures as they are printed on a screen or in a report (SAMPL guidelines: Lang & Altman 2013, in Science Editors' Handbook). */
 
 import type { Interval, TestFigures } from '../result.ts';
+import { percentText } from '../test-figures.ts';
 import { fixedDecimals } from './rounding.ts';
 
 /** U+2212: as wide as a plus sign, and no line breaks after it. */
@@ -42,7 +43,7 @@ export function rangeText(lower: number, upper: number, decimals: number): strin
 
 /** "95% CI 0.05 to 0.33", with the decimals of its estimate. */
 export function intervalText({ lower, upper, level }: Interval, decimals: number): string {
-  return `${Number((100 * level).toPrecision(10))}% CI ${rangeText(lower, upper, decimals)}`;
+  return `${percentText(level)} CI ${rangeText(lower, upper, decimals)}`;
 }
 
 /** "0.19 (95% CI 0.05 to 0.33)". */
