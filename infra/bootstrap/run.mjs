@@ -1,6 +1,7 @@
 /** First steps of every command: check Node, install what is missing, then hand over to TypeScript. */
 import { spawn } from 'node:child_process';
 import { constants } from 'node:os';
+import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { ensureDebianPrograms } from './debian.mjs';
 import { ensureNodePackages } from './node-packages.mjs';
@@ -18,6 +19,8 @@ function requireNode() {
 function runTypeScript(entry, argv) {
   const child = spawn(process.execPath, ['--conditions=@cairnstep/source', '--import', 'tsx', entry, ...argv], {
     cwd: root,
+    // How the API's decorators are compiled, should its sources be among what is run.
+    env: { ...process.env, TSX_TSCONFIG_PATH: join(root, 'services/api/tsconfig.json') },
     // The channel carries no messages: its closing tells the child that this process is gone.
     stdio: ['inherit', 'inherit', 'inherit', 'ipc'],
   });

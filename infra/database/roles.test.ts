@@ -8,7 +8,7 @@ import { ensureRoles, loginRole, ownerRole, workRoles } from './roles.ts';
 let cluster: RunningCluster;
 beforeAll(async () => {
   cluster = await startThrowAwayCluster();
-});
+}, 120_000);
 afterAll(async () => {
   await cluster.stop();
 });

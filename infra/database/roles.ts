@@ -42,13 +42,14 @@ async function ensureRole(admin: Client, role: string, attributes: 'nologin' | '
   else await admin.query(`alter role ${role} ${attributes}`);
 }
 
-/** Creates the database when missing; only the login role may connect to it. */
+/** Creates the database when missing; only the login role may connect to it. Requests sort what they are sent in temporary tables. */
 async function ensureDatabase(admin: Client, database: string): Promise<void> {
   const name = admin.escapeIdentifier(database);
   const { rowCount } = await admin.query('select from pg_database where datname = $1', [database]);
   if (rowCount === 0) await admin.query(`create database ${name} owner ${ownerRole} template template0 encoding 'UTF8'`);
   await admin.query(`revoke all on database ${name} from public`);
   await admin.query(`grant connect on database ${name} to ${loginRole}`);
+  await admin.query(`grant temporary on database ${name} to cairnstep_app`);
   // Rows of a submission arrive by COPY in a table of the transaction's own: COPY does not write where row-level security holds.
   await admin.query(`grant temporary on database ${name} to cairnstep_app`);
 }

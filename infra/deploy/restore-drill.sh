@@ -19,6 +19,7 @@ admin "create database $database owner cairnstep_owner template template0 encodi
 trap 'admin "drop database if exists $database with (force)"' EXIT
 admin "revoke all on database $database from public"
 admin "grant connect on database $database to cairnstep_login"
+admin "grant temporary on database $database to cairnstep_app"
 pg_restore --exit-on-error --dbname="$(at)" "$dump"
 
 psql --no-psqlrc --quiet --dbname="$(at)" --command="select (select count(*) from sites) as sites, (select count(*) from participants) as participants, (select count(*) from sessions) as sessions, (select count(*) from audit_entries) as audit_entries, (select max(at) from audit_entries) as last_entry"
