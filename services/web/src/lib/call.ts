@@ -1,6 +1,7 @@
 /** The one way to the API: builds the address, sends, parses the answer by the contract, throws refusals. */
 import type { CallOf, Endpoint, Problem, ResponseOf } from '@cairnstep/contract';
 import { ProblemError, UnexpectedAnswerError, UnreachableError } from './problem-error.ts';
+import { sendWithProgress } from './send-with-progress.ts';
 
 type AnyEndpoint = Pick<Endpoint, 'method' | 'path' | 'params' | 'query' | 'body' | 'upload' | 'response'>;
 
@@ -8,6 +9,8 @@ export interface CallOptions {
   readonly signal?: AbortSignal;
   /** The bytes of an endpoint that takes a file. */
   readonly file?: Blob;
+  /** Hears how much of the file has left, from 0 to 1. */
+  readonly onSent?: (part: number) => void;
 }
 
 /** The address of an endpoint with its parameters filled in; for links to files as well. */
@@ -30,7 +33,7 @@ export async function call<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>,
   return parsed.data as ResponseOf<E>;
 }
 
-async function send<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>, { signal, file }: CallOptions): Promise<Response> {
+async function send<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>, { signal, file, onSent }: CallOptions): Promise<Response> {
   // A header no form or foreign page can send: the API refuses changes without it.
   const headers: Record<string, string> = { 'X-Cairnstep-Request': '1', Accept: 'application/json, application/problem+json' };
   const request: RequestInit = { method: endpoint.method, headers, credentials: 'same-origin', ...(signal && { signal }) };
@@ -43,7 +46,8 @@ async function send<E extends AnyEndpoint>(endpoint: E, input: CallOf<E>, { sign
     request.body = JSON.stringify(Object.fromEntries(namesOf(endpoint.body).map((name) => [name, values[name]])));
   }
   try {
-    return await fetch(addressOf(endpoint, input), request);
+    const address = addressOf(endpoint, input);
+    return await (onSent === undefined ? fetch(address, request) : sendWithProgress(address, request, onSent));
   } catch (cause) {
     if (signal?.aborted === true) throw cause;
     throw new UnreachableError();

@@ -8,6 +8,7 @@ import { useAddressParam } from '../lib/address-state.ts';
 import { toCsv, toTabSeparated } from '../lib/csv.ts';
 import type { CsvValue } from '../lib/csv.ts';
 import { formatCount, formatNumber } from '../lib/format.ts';
+import { saveFile } from '../lib/save-file.ts';
 import { announce } from './announcer.tsx';
 import { Button } from './button.tsx';
 
@@ -198,15 +199,6 @@ function Takeaway<Row>({
       </Button>
     </div>
   );
-}
-
-function saveFile(name: string, text: string, type: string): void {
-  const address = URL.createObjectURL(new Blob([text], { type }));
-  const link = document.createElement('a');
-  link.href = address;
-  link.download = name;
-  link.click();
-  URL.revokeObjectURL(address);
 }
 
 function readSort<Row>(text: string | null, columns: readonly Column<Row>[]): Sort | null {
