@@ -3,7 +3,7 @@
  * npx tsx --conditions @cairnstep/source packages/submission-files/bench/read-and-check.bench.ts
  * Seconds are of processor time, so that a busy machine changes them little.
  */
-import { FindingLog, checkSubmission, copyText, readTable } from '@cairnstep/submission-files';
+import { FindingLog, checkSubmission, copyRows, readTable } from '@cairnstep/submission-files';
 import type { TypedTables } from '@cairnstep/submission-files';
 import { parse } from 'csv-parse/sync';
 import { monthOfBouts } from './month-of-bouts.ts';
@@ -45,7 +45,7 @@ await measure('bytes to typed and checked rows, all four files', async () => {
 const findings = new FindingLog();
 const tables = await readAll(findings);
 const { bouts } = tables;
-if (bouts) await measure('typed rows to COPY text, bouts only', () => copyText(bouts, [...bouts.present]));
+if (bouts) await measure('typed rows to COPY bytes, bouts only', () => copyRows(bouts, [...bouts.present]));
 await measure('for comparison: cells as text by csv-parse, bouts only', () => parse(files.bouts));
 checkSubmission(tables, context, findings);
 console.log(

@@ -16,7 +16,7 @@ export { TableBuilder } from './table/table-builder.ts';
 export { tableFromRows } from './table/table-from-rows.ts';
 export { TypedColumn, TypedTable } from './table/typed-table.ts';
 export type { Cell } from './table/typed-table.ts';
-export { copyText } from './writing/copy-text.ts';
+export { copyRows } from './writing/copy-rows.ts';
 export { formatNumber } from './writing/format-number.ts';
 export { csvHeader, writeCsv } from './writing/write-csv.ts';
 export type { RegistryContext, TypedTables } from './registry-context.ts';

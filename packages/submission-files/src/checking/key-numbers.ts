@@ -45,16 +45,16 @@ function digit(column: TypedColumn): Digit {
 export function keyNumbers(table: Pick<TypedTable, 'column' | 'length'>, persons: Persons, columns: readonly string[]): Float64Array {
   const participant = table.column('participant');
   const digits = columns.map((key) => digit(table.column(key)));
-  const keyOf = (row: number): number => {
+  const keys = new Float64Array(table.length).fill(-1);
+  for (let row = 0; row < table.length; row += 1) {
     const code = participant.word(row);
-    if (code === null) return -1;
+    if (code === null) continue;
     let number = persons.number(code);
     for (const { size, digitOf } of digits) {
       const next = digitOf(row);
-      if (next < 0) return -1;
-      number = number * size + next;
+      number = next < 0 || number < 0 ? -1 : number * size + next;
     }
-    return number;
-  };
-  return Float64Array.from({ length: table.length }, (_, row) => keyOf(row));
+    keys[row] = number;
+  }
+  return keys;
 }

@@ -45,10 +45,11 @@ export class Submission {
     const held = this.context.held[key];
     const table = held ? file.followedBy(held, this.notOverridden(file, held)) : file;
     const participant = table.column('participant');
-    const persons = Int32Array.from({ length: table.length }, (_, row) => {
+    const persons = new Int32Array(table.length).fill(-1);
+    for (let row = 0; row < table.length; row += 1) {
       const code = participant.word(row);
-      return code === null ? -1 : this.persons.number(code);
-    });
+      if (code !== null) persons[row] = this.persons.number(code);
+    }
     return new CheckedTable(table, file.length, persons);
   }
 

@@ -197,7 +197,7 @@ describe('readCsv', () => {
     ['.5', 0.5],
     ['-0', 0],
     ['12.0', 12],
-    ['0.12345678901234567', 0.12345678901234567],
+    ['0.1234567890123456', 0.1234567890123456],
   ])('reads %j as a number', async (cell, value) => {
     expect(column(await read(`bout_no,distance_m\n1,${cell}\n`), 'distance_m')).toEqual([value]);
   });

@@ -1,5 +1,6 @@
 import type { CheckedTable } from '../../checking/checked-table.ts';
 import { partition } from '../../checking/partition.ts';
+import { repeatedNumbers } from '../../checking/repeated-numbers.ts';
 import { RowGroups } from '../../checking/row-groups.ts';
 import type { Rule, RuleReport } from '../../checking/rule.ts';
 import type { TypedColumn } from '../../table/typed-table.ts';
@@ -20,7 +21,8 @@ const shareOfAFile = 0.5;
 
 /** Per row a number that is equal for rows with equal values; rarely equal for others too. -1 for rows with too few values. */
 function fingerprints(table: CheckedTable, columns: readonly TypedColumn[]): Float64Array {
-  return Float64Array.from({ length: table.fileRows }, (_, row) => {
+  const prints = new Float64Array(table.fileRows);
+  for (let row = 0; row < table.fileRows; row += 1) {
     let hash = 0;
     let values = 0;
     for (const column of columns) {
@@ -29,17 +31,18 @@ function fingerprints(table: CheckedTable, columns: readonly TypedColumn[]): Flo
       hash = Math.imul(hash ^ (value === null ? 0x5bd1e995 : Math.round(value * 1000)), 0x01000193) ^ (hash >>> 15);
       if (value !== null) values += 1;
     }
-    return values < fewestValues ? -1 : hash >>> 0;
-  });
+    prints[row] = values < fewestValues ? -1 : hash >>> 0;
+  }
+  return prints;
 }
 
 /** Groups of rows that agree in all their values, told apart where only the fingerprint agrees. */
-function* alikeRows(table: CheckedTable, columns: readonly TypedColumn[]): Generator<number[]> {
-  for (const rows of new RowGroups(fingerprints(table, columns))) {
-    if (rows.length < rowsOfOnePerson) continue;
-    const exact = partition(rows, (row) => columns.map((column) => column.number(row)).join(' '));
-    yield* exact.values();
-  }
+function alikeRows(table: CheckedTable, columns: readonly TypedColumn[]): number[][] {
+  const prints = fingerprints(table, columns);
+  const repeated = repeatedNumbers(prints, rowsOfOnePerson);
+  if (repeated.size === 0) return [];
+  const groups = new RowGroups(prints.map((print) => (repeated.has(print) ? print : -1)));
+  return [...groups].flatMap((rows) => [...partition(rows, (row) => columns.map((column) => column.number(row)).join(' ')).values()]);
 }
 
 function reportAlike(table: CheckedTable, rows: readonly number[], report: RuleReport): void {

@@ -1,0 +1,123 @@
+/**
+ * Rows in PostgreSQL's COPY text format, written as bytes: making one text of millions of small ones took three times
+ * as long as reading and typing the rows.
+ */
+import type { TypedColumn, TypedTable } from '../table/typed-table.ts';
+import { formatNumber } from './format-number.ts';
+
+const TAB = 9;
+const LF = 10;
+const MINUS = 45;
+const POINT = 46;
+const ZERO = 48;
+
+/** Special characters of the format (PostgreSQL 15 documentation, COPY, "Text Format"). */
+const escapes: Readonly<Record<string, string>> = { '\\': '\\\\', '\t': '\\t', '\n': '\\n', '\r': '\\r' };
+
+const encoder = new TextEncoder();
+const encoded = (text: string): Uint8Array => encoder.encode(text.replace(/[\\\t\n\r]/g, (character) => escapes[character] ?? character));
+const empty = encoder.encode('\\N');
+
+/** Bytes that grow as they are written. */
+class ByteText {
+  private bytes = new Uint8Array(65_536);
+  private length = 0;
+
+  /** Makes room for so many more bytes. */
+  private reserve(more: number): void {
+    if (this.length + more <= this.bytes.length) return;
+    const larger = new Uint8Array(Math.max(this.bytes.length * 2, this.length + more));
+    larger.set(this.bytes.subarray(0, this.length));
+    this.bytes = larger;
+  }
+
+  byte(value: number): void {
+    this.reserve(1);
+    this.bytes[this.length] = value;
+    this.length += 1;
+  }
+
+  copy(from: Uint8Array): void {
+    this.reserve(from.length);
+    // Most pieces are a few bytes long, for which a call to `set` costs more than the loop.
+    for (let index = 0; index < from.length; index += 1) this.bytes[this.length + index] = from[index] ?? 0;
+    this.length += from.length;
+  }
+
+  /** The number as `formatNumber` writes it. */
+  number(value: number): void {
+    const size = Math.abs(value);
+    for (let decimals = 0, scale = 1; decimals <= 3 && size * scale < 1e9; decimals += 1, scale *= 10) {
+      const whole = Math.round(size * scale);
+      if (whole / scale !== size) continue;
+      if (value < 0) this.byte(MINUS);
+      this.digits(whole, decimals);
+      return;
+    }
+    this.copy(encoder.encode(formatNumber(value)));
+  }
+
+  /** A whole number with a decimal point before its last `decimals` digits. */
+  private digits(whole: number, decimals: number): void {
+    let places = decimals + 1;
+    for (let rest = Math.floor(whole / 10 ** places); rest > 0; rest = Math.floor(rest / 10)) places += 1;
+    const width = places + (decimals > 0 ? 1 : 0);
+    this.reserve(width);
+    let rest = whole;
+    for (let at = width - 1; at >= 0; at -= 1) {
+      if (decimals > 0 && at === width - 1 - decimals) this.bytes[this.length + at] = POINT;
+      else {
+        this.bytes[this.length + at] = ZERO + (rest % 10);
+        rest = Math.floor(rest / 10);
+      }
+    }
+    this.length += width;
+  }
+
+  take(): Uint8Array {
+    return this.bytes.subarray(0, this.length);
+  }
+}
+
+/** Writes the cell of a row. */
+function cellWriter(column: TypedColumn, to: ByteText): (row: number) => void {
+  const words = new Map<string, Uint8Array>();
+  return (row) => {
+    const number = column.number(row);
+    if (number !== null) {
+      to.number(number);
+      return;
+    }
+    const word = column.word(row);
+    if (word === null) {
+      to.copy(empty);
+      return;
+    }
+    let bytes = words.get(word);
+    if (!bytes) words.set(word, (bytes = encoded(word)));
+    to.copy(bytes);
+  };
+}
+
+/**
+ * The rows of a table in PostgreSQL's COPY text format, one line each, in UTF-8.
+ * @param columns Keys of the columns, in the order of the COPY statement.
+ * @param leading Cells that every line begins with, such as the number of the submission; null for an empty one.
+ */
+export function copyRows(table: TypedTable, columns: readonly string[], leading: readonly (string | null)[] = []): Uint8Array {
+  const text = new ByteText();
+  const start = leading.map((cell) => (cell === null ? empty : encoded(cell)));
+  const writers = columns.map((key) => cellWriter(table.column(key), text));
+  for (let row = 0; row < table.length; row += 1) {
+    for (const bytes of start) {
+      text.copy(bytes);
+      text.byte(TAB);
+    }
+    writers.forEach((write, index) => {
+      if (index > 0) text.byte(TAB);
+      write(row);
+    });
+    text.byte(LF);
+  }
+  return text.take();
+}
