@@ -7,6 +7,7 @@
  */
 
 import { computableScale } from '../description/computable-scale.ts';
+import type { Moments } from '../description/moments.ts';
 import { moments, sampleSd } from '../description/moments.ts';
 import type { Estimate, Figure, Interval, NotEstimable } from '../result.ts';
 import { figure, noFigure, notEstimable, reasons, requireLevel, verySmallSample } from '../result.ts';
@@ -40,7 +41,7 @@ export function standardisedChange(
   const scaled = computableScale([changes(pairs, resolution), pairs.first]);
   if (scaled === 'too large') return notEstimable(reasons.tooLarge, basis);
   if (n === 1) return notEstimable(reasons.singleValue, basis);
-  const [change, before] = scaled.samples.map(moments) as [ReturnType<typeof moments>, ReturnType<typeof moments>];
+  const [change, before] = scaled.samples.map(moments) as [Moments, Moments];
   if (change.least === change.greatest) return notEstimable(reasons.allEqual, basis);
   const sd = sampleSd(change);
   const srm = change.mean / sd;

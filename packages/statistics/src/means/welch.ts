@@ -5,6 +5,7 @@
  */
 
 import { computableScale } from '../description/computable-scale.ts';
+import type { Moments } from '../description/moments.ts';
 import { moments } from '../description/moments.ts';
 import { tMultiplier } from '../distributions/student-t.ts';
 import type { NotEstimable, TestedEstimate } from '../result.ts';
@@ -28,7 +29,7 @@ export function welchTest(first: ArrayLike<Observation>, second: ArrayLike<Obser
   const scaled = computableScale([samples[0].values, samples[1].values]);
   if (scaled === 'too large') return notEstimable(reasons.tooLarge, basis);
   const { factor } = scaled;
-  const [one, two] = scaled.samples.map(moments) as [ReturnType<typeof moments>, ReturnType<typeof moments>];
+  const [one, two] = scaled.samples.map(moments) as [Moments, Moments];
   const difference = one.mean - two.mean;
   if (Math.min(one.n, two.n) < 2) return notEstimable('a group has fewer than two values', basis, difference * factor);
   const a = one.sumOfSquares / (one.n - 1) / one.n;
