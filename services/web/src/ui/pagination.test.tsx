@@ -23,3 +23,8 @@ it('leads back from a page beyond the last', () => {
   expect(link('Previous page')).toBe('/?page=3');
   expect(link('Next page')).toBeUndefined();
 });
+
+it('comes to its own section of a page that holds more', () => {
+  renderPart(<Pagination label="Findings" page={1} pageSize={50} total={120} one="finding" anchor="places" />);
+  expect(link('Next page')).toBe('/?page=2#places');
+});

@@ -1,4 +1,5 @@
 import { Link, useSearchParams } from 'react-router-dom';
+import type { To } from 'react-router-dom';
 import { formatCount, formatNumber } from '../lib/format.ts';
 
 export interface PaginationProps {
@@ -12,19 +13,21 @@ export interface PaginationProps {
   readonly many?: string;
   /** Name of the parameter in the address. */
   readonly name?: string;
+  /** Id of the section to come to, on a page that holds more than the list. */
+  readonly anchor?: string;
 }
 
 /** Links to the neighbouring pages, so that each page has an address of its own. */
-export function Pagination({ label, page, pageSize, total, one, many, name = 'page' }: PaginationProps) {
+export function Pagination({ label, page, pageSize, total, one, many, name = 'page', anchor }: PaginationProps) {
   const [search] = useSearchParams();
   const pages = Math.max(1, Math.ceil(total / pageSize));
   const first = total === 0 ? 0 : (page - 1) * pageSize + 1;
   const last = Math.min(total, page * pageSize);
-  function to(target: number): string {
+  function to(target: number): To {
     const after = new URLSearchParams(search);
     if (target === 1) after.delete(name);
     else after.set(name, String(target));
-    return `?${after}`;
+    return { search: `?${after}`, ...(anchor !== undefined && { hash: `#${anchor}` }) };
   }
   return (
     <nav aria-label={`Pages of ${label}`} className="flex flex-wrap items-center gap-x-6 gap-y-2 py-2">

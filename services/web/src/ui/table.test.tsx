@@ -18,6 +18,7 @@ const rows: readonly Row[] = [
 const columns: readonly Column<Row>[] = [
   { key: 'name', header: 'Site', value: ({ name }) => name, isRowHeader: true },
   { key: 'speed', header: 'Gait speed', unit: 'm/s', value: ({ speed }) => speed, kind: 'number', decimals: 2 },
+  { key: 'next', header: 'Next', value: () => null, cell: ({ name }) => <a href={`#${name}`}>Open</a>, isAct: true },
 ];
 
 function show(address = '/', shown = rows) {
@@ -69,12 +70,17 @@ describe('a table', () => {
     expect(order()).toEqual(['site 1', 'site 2', 'site 10']);
   });
 
+  it('does not offer to sort by what is there to be pressed', () => {
+    show();
+    expect(within(screen.getByRole('columnheader', { name: 'Next' })).queryByRole('button')).toBeNull();
+  });
+
   it('shows the order it was given when the address names no column of it', () => {
     show('/?sort-sites=secret');
     expect(order()).toEqual(['site 10', 'site 2', 'site 1']);
   });
 
-  it('copies what it shows, in the order shown, and says so', async () => {
+  it('copies what it shows to be read, in the order shown, and says so', async () => {
     const writeText = vi.fn((_text: string) => Promise.resolve());
     vi.stubGlobal('navigator', { ...navigator, clipboard: { writeText } });
     show('/?sort-sites=name');

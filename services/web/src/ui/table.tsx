@@ -27,6 +27,8 @@ export interface Column<Row> {
   readonly kind?: 'text' | 'number';
   /** The column that names the row. */
   readonly isRowHeader?: boolean;
+  /** Things to press or follow: neither sorted by nor copied. */
+  readonly isAct?: boolean;
 }
 
 export interface TableProps<Row> {
@@ -74,7 +76,7 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
                   key={column.key}
                   column={column}
                   direction={sort?.key === column.key ? (sort.descending ? 'descending' : 'ascending') : undefined}
-                  onSort={isSortable ? () => setSortText(nextSort(column, sort)) : undefined}
+                  onSort={isSortable && column.isAct !== true ? () => setSortText(nextSort(column, sort)) : undefined}
                 />
               ))}
             </tr>
@@ -90,7 +92,7 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
           </tbody>
         </table>
       </div>
-      {fileName !== undefined && <Takeaway columns={columns} rows={ordered} fileName={fileName} />}
+      {fileName !== undefined && <Takeaway columns={columns.filter(({ isAct }) => isAct !== true)} rows={ordered} fileName={fileName} />}
     </div>
   );
 }
