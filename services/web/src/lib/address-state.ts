@@ -4,21 +4,30 @@ import { useSearchParams } from 'react-router-dom';
 
 /** One search parameter as state. An empty or `null` value leaves the address. */
 export function useAddressParam(name: string): readonly [value: string | null, set: (value: string | null) => void] {
-  const [search, setSearch] = useSearchParams();
-  const set = useCallback(
-    (value: string | null) =>
+  const [search] = useSearchParams();
+  const change = useAddressChange();
+  const set = useCallback((value: string | null) => change({ [name]: value }), [name, change]);
+  return [search.get(name), set];
+}
+
+/** Changes several search parameters at once; an empty or `null` value leaves the address. */
+export function useAddressChange(): (changes: Readonly<Record<string, string | null>>) => void {
+  const [, setSearch] = useSearchParams();
+  return useCallback(
+    (changes) =>
       setSearch(
         (before) => {
           const after = new URLSearchParams(before);
-          if (value === null || value === '') after.delete(name);
-          else after.set(name, value);
+          for (const [name, value] of Object.entries(changes)) {
+            if (value === null || value === '') after.delete(name);
+            else after.set(name, value);
+          }
           return after;
         },
         { replace: true, preventScrollReset: true },
       ),
-    [name, setSearch],
+    [setSearch],
   );
-  return [search.get(name), set];
 }
 
 /** The `page` parameter: a whole number from 1. */

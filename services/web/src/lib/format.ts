@@ -79,10 +79,13 @@ export function formatDate(date: string): string {
 
 /** An instant by the reader's own clock: "3 November 2026, 14:05". */
 export function formatInstant(instant: string, timeZone?: string): string {
-  const at = new Date(instant);
-  const day = inWords(at, { day: 'numeric', month: 'long', year: 'numeric' }, timeZone);
-  const time = inWords(at, { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }, timeZone);
-  return `${day}, ${time}`;
+  const day = inWords(new Date(instant), { day: 'numeric', month: 'long', year: 'numeric' }, timeZone);
+  return `${day}, ${formatTime(instant, timeZone)}`;
+}
+
+/** The time alone: "14:05". */
+export function formatTime(instant: string, timeZone?: string): string {
+  return inWords(new Date(instant), { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }, timeZone);
 }
 
 function inWords(at: Date, parts: Intl.DateTimeFormatOptions, timeZone: string | undefined): string {
