@@ -2,7 +2,7 @@ import { createHash } from 'node:crypto';
 import { describe, expect, it } from 'vitest';
 import { codebookRows, measureRows } from './codebook.ts';
 import { dataPackageFields } from './data-package-fields.ts';
-import { describeRange, describeRequirement } from './describe.ts';
+import { describeConversion, describeRange, describeRequirement } from './describe.ts';
 import { dictionaryAsJson } from './dictionary-document.ts';
 import { dictionary, variableOf } from './dictionary.ts';
 import { exampleParticipant, exampleRow } from './example-row.ts';
@@ -96,6 +96,13 @@ describe('data package fields', () => {
 });
 
 describe('descriptions', () => {
+  it('writes a unit conversion with its exact factors', () => {
+    const convert = (times: number, dividedBy: number) => describeConversion({ unit: 'km/h', times, dividedBy, source: 'SI' }, 'm/s');
+    expect(convert(5, 18)).toBe('value in km/h × 5 ÷ 18 = value in m/s');
+    expect(convert(60, 1)).toBe('value in km/h × 60 = value in m/s');
+    expect(convert(1, 60)).toBe('value in km/h ÷ 60 = value in m/s');
+  });
+
   it('put limits into words', () => {
     expect(describeRange({ min: 0.05, max: 2.5 }, 'm/s')).toBe('0.05 to 2.5 m/s');
     expect(describeRange({ min: 6, max: 10, step: 4 }, 'm')).toBe('6 or 10 m');

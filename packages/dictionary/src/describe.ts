@@ -1,5 +1,5 @@
 /** Limits and requirements of a variable in words, the same on screens, in the template and in the codebook. */
-import type { Condition, Range, Variable } from './types.ts';
+import type { AcceptedUnit, Condition, Range, Variable } from './types.ts';
 
 /** `0.05 to 2.5 m/s`, `6 or 10 m`, `0 to 10 points in steps of 0.5`. */
 export function describeRange({ min, max, step }: Range, unit?: string): string {
@@ -7,6 +7,12 @@ export function describeRange({ min, max, step }: Range, unit?: string): string 
   if (step !== undefined && min + step === max) return `${min} or ${max}${suffix}`;
   const steps = step === undefined || step === 1 ? '' : ` in steps of ${step}`;
   return `${min} to ${max}${suffix}${steps}`;
+}
+
+/** How a written value becomes the stored one, exactly: `value in km/h × 5 ÷ 18 = value in m/s`. */
+export function describeConversion({ unit, times, dividedBy }: AcceptedUnit, stored: string): string {
+  const factors = `${times === 1 ? '' : ` × ${times}`}${dividedBy === 1 ? '' : ` ÷ ${dividedBy}`}`;
+  return `value in ${unit}${factors} = value in ${stored}`;
 }
 
 function describeCondition({ column, isOneOf }: Condition): string {

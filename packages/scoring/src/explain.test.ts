@@ -7,7 +7,7 @@ import { randomExam, seededRandom, withTagged, withUntested } from '../reference
 import { cellPlaces, writtenIn } from './cell-key.ts';
 import { classify } from './classify.ts';
 import type { Exam } from './exam.ts';
-import { explain } from './explain.ts';
+import { explain, explainResult, resultNames, resultOf } from './explain.ts';
 import type { Side } from './segments.ts';
 import type { TraceStep } from './trace-step.ts';
 
@@ -107,6 +107,15 @@ describe('the explanation of a classification', () => {
       }),
       { seed: 71, numRuns: 400 },
     );
+  });
+
+  it('says of one result alone what it says of it among all', () => {
+    const random = seededRandom(73);
+    for (let exams = 0; exams < 20; exams += 1) {
+      const exam = withUntested(random, randomExam(random, 'levelled'));
+      expect(resultNames.map((name) => explainResult(exam, name))).toEqual(explain(exam));
+      expect(resultNames.map((name) => resultOf(classify(exam), name))).toEqual(Object.values(flatResults(classify(exam))));
+    }
   });
 
   it('names just the cells that could narrow an open result alone, or says that only several together could', () => {
