@@ -5,6 +5,8 @@
  * (1,·): raters differ from participant to participant. (2,·): raters are a sample of all raters (absolute agreement). (3,·): these raters only
  * (consistency). (·,1): one rating; (·,k): the mean of the k ratings. ICC(2,1) is the one to print for a measure used by many raters.
  *
+ * The lower limit of ICC(2,k) is -Infinity where that of ICC(2,1) leaves the mean of k ratings no variance.
+ *
  * Source: Shrout & Fleiss (1979) Psychol Bull 86:420-428. Needs at least 5 participants and 2 raters; incomplete participants are left out.
  */
 
@@ -74,8 +76,11 @@ export function raterAgreement(ratings: readonly (readonly Observation[])[], lev
   const consistency = ratioForms(between / error, n - 1, (n - 1) * (k - 1), k, upperPoint, level);
 
   const agreement = (between - error) / (between + (k - 1) * error + (k * (rater - error)) / n);
+  // Below this the mean of k ratings would have no variance left.
+  const lowest = -1 / (k - 1);
+  if (agreement <= lowest) return notEstimable('the participants differ less than their ratings do: no reliability to estimate', basis);
   const limits = agreementLimits({ between, rater, error, agreement, n, k }, upperPoint, level);
-  const ofMean = (single: number): number => (k * single) / (1 + (k - 1) * single);
+  const ofMean = (single: number): number => (single <= lowest ? -Infinity : (k * single) / (1 + (k - 1) * single));
   const consistencyTest = fFigures(between / error, n - 1, (n - 1) * (k - 1));
   const oneWayTest = fFigures(between / within, n - 1, n * (k - 1));
   return {
@@ -89,7 +94,7 @@ export function raterAgreement(ratings: readonly (readonly Observation[])[], lev
       { form: 'ICC(1,k)', ...oneWay.mean, test: oneWayTest },
       {
         form: 'ICC(2,k)',
-        correlation: (between - error) / (between + (rater - error) / n),
+        correlation: ofMean(agreement),
         interval: { lower: ofMean(limits.lower), upper: ofMean(limits.upper), level },
         test: consistencyTest,
       },

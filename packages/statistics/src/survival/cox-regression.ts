@@ -221,8 +221,8 @@ function maximise(
     const change = direction.reduce((sum, value, j) => sum + Math.abs(value) * (widest[j] as number), 0);
     if (change < smallestChange) return { log: current.log, coefficients, inverse: solver.inverse() };
     let share = 1;
-    let next = current;
-    let moved = coefficients;
+    let next: PartialLikelihood;
+    let moved: readonly number[];
     do {
       const scale = share;
       moved = coefficients.map((value, j) => value + scale * (direction[j] as number));

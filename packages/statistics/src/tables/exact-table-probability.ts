@@ -12,15 +12,17 @@ import { logFactorials } from './log-factorials.ts';
 import type { Margins } from './contingency-table.ts';
 import { equalProbabilitySlack } from './fisher-two-by-two.ts';
 
-/** Steps after which counting is given up; a step is one way to fill one column. About a second's work. */
-const workLimit = 6_000_000;
+/** Steps after which counting is given up; a step is one way to fill one column, or one partial table carried on. About half a second. */
+const workLimit = 5_000_000;
 
 /** ln probabilities that agree to this are carried together. */
 const sameLog = 2 ** -33;
 
-interface Bounds {
+/** What the remaining columns can still contribute to the ln weight from a state, and the ln weight of all ways to fill them together. */
+interface Outlook {
   readonly most: number;
   readonly least: number;
+  readonly all: number;
 }
 
 interface Partial {
@@ -29,10 +31,8 @@ interface Partial {
   count: number;
 }
 
-interface State {
-  readonly left: readonly number[];
-  readonly partials: Map<number, Partial>;
-}
+/** What is left of the row totals, sorted and packed into one number. */
+type State = number;
 
 class WorkLimitReached extends Error {}
 
@@ -53,27 +53,47 @@ export function exactTableProbability(table: readonly (readonly number[])[], mar
 
   const logFactorial = logFactorials(margins.total);
   const lf = (count: number): number => logFactorial[count] as number;
-  const logAll = (left: readonly number[]): number => lf(left.reduce((a, b) => a + b, 0)) - left.reduce((sum, count) => sum + lf(count), 0);
   const observed = transposed ? (table[0] ?? []).map((_, j) => table.map((row) => row[j] as number)) : table;
   const bar = logTableWeight(observed, columns, logFactorial) + Math.log1p(equalProbabilitySlack);
-  const logTotal = logAll(rows);
+
+  const width = rows.length;
+  const sorted = new Array<number>(width);
+  function pack(left: readonly number[]): State {
+    for (let i = 0; i < width; i++) {
+      const count = left[i] as number;
+      let place = i;
+      for (; place > 0 && (sorted[place - 1] as number) > count; place--) sorted[place] = sorted[place - 1] as number;
+      sorted[place] = count;
+    }
+    let state = 0;
+    for (let i = 0; i < width; i++) state = state * radix + (sorted[i] as number);
+    return state;
+  }
+  function unpack(state: State): number[] {
+    const left = new Array<number>(width);
+    for (let i = width - 1, rest = state; i >= 0; i--) {
+      left[i] = rest % radix;
+      rest = Math.floor(rest / radix);
+    }
+    return left;
+  }
 
   let work = 0;
-  /** Calls `visit` with what is left of the rows and the ln weight, for every way to fill a column. */
-  function fillColumn(left: readonly number[], column: number, visit: (left: number[], log: number) => void): void {
+  /** Calls `visit` with the state after, and the ln weight of, every way to fill a column. */
+  function fillColumn(state: State, column: number, visit: (next: State, log: number) => void): void {
+    const left = unpack(state);
     const next = [...left];
-    const roomAfter = left.map((_, i) => left.slice(i + 1).reduce((a, b) => a + b, 0));
+    const roomAfter = new Array<number>(width).fill(0);
+    for (let i = width - 1; i > 0; i--) roomAfter[i - 1] = (roomAfter[i] as number) + (left[i] as number);
     const place = (i: number, open: number, log: number): void => {
-      if (i === left.length) {
+      if (i === width) {
         if (++work > workLimit) throw new WorkLimitReached();
-        visit(
-          [...next].sort((a, b) => a - b),
-          log,
-        );
+        visit(pack(next), log);
         return;
       }
       const room = left[i] as number;
-      for (let cell = Math.max(0, open - (roomAfter[i] as number)); cell <= Math.min(room, open); cell++) {
+      const most = Math.min(room, open);
+      for (let cell = Math.max(0, open - (roomAfter[i] as number)); cell <= most; cell++) {
         next[i] = room - cell;
         place(i + 1, open - cell, log - lf(cell));
       }
@@ -81,64 +101,61 @@ export function exactTableProbability(table: readonly (readonly number[])[], mar
     place(0, column, lf(column));
   }
 
-  const keyOf = (left: readonly number[]): number => left.reduce((key, count) => key * radix + count, 0);
-  const known = columns.map(() => new Map<number, Bounds>());
-  function boundsOf(stage: number, left: readonly number[]): Bounds {
-    if (stage === columns.length) return { most: 0, least: 0 };
-    const key = keyOf(left);
-    const memo = known[stage] as Map<number, Bounds>;
-    let bounds = memo.get(key);
-    if (bounds === undefined) {
+  const known = columns.map(() => new Map<State, Outlook>());
+  known.push(new Map([[0, { most: 0, least: 0, all: 0 }]]));
+  function outlookFrom(stage: number, state: State): Outlook {
+    const memo = known[stage] as Map<State, Outlook>;
+    let outlook = memo.get(state);
+    if (outlook === undefined) {
       let [most, least] = [-Infinity, Infinity];
-      fillColumn(left, columns[stage] as number, (next, log) => {
-        const rest = boundsOf(stage + 1, next);
+      fillColumn(state, columns[stage] as number, (next, log) => {
+        const rest = outlookFrom(stage + 1, next);
         most = Math.max(most, log + rest.most);
         least = Math.min(least, log + rest.least);
       });
-      bounds = { most, least };
-      memo.set(key, bounds);
+      const left = unpack(state);
+      const all = lf(left.reduce((sum, count) => sum + count, 0)) - left.reduce((sum, count) => sum + lf(count), 0);
+      outlook = { most, least, all };
+      memo.set(state, outlook);
     }
-    return bounds;
+    return outlook;
   }
 
   let probability = 0;
-  function arrive(states: Map<number, State>, stage: number, left: readonly number[], log: number, count: number): void {
-    const { most, least } = boundsOf(stage, left);
+  /** Settles a partial table, or carries it on to the next column. */
+  function arrive(carried: Map<State, Map<number, Partial>>, stage: number, state: State, log: number, count: number): void {
+    const { most, least, all } = outlookFrom(stage, state);
     if (log + most <= bar) {
-      probability += count * Math.exp(log + logAll(left) - logTotal);
+      probability += count * Math.exp(log + all - logTotal);
       return;
     }
     if (log + least > bar) return;
-    const key = keyOf(left);
-    let state = states.get(key);
-    if (state === undefined) {
-      state = { left, partials: new Map() };
-      states.set(key, state);
+    let partials = carried.get(state);
+    if (partials === undefined) {
+      partials = new Map();
+      carried.set(state, partials);
     }
     const logKey = Math.round(log / sameLog);
-    const partial = state.partials.get(logKey);
+    const partial = partials.get(logKey);
     if (partial) partial.count += count;
-    else state.partials.set(logKey, { log, count });
+    else partials.set(logKey, { log, count });
   }
 
+  let logTotal = 0;
   try {
-    let states = new Map<number, State>();
-    arrive(
-      states,
-      0,
-      [...rows].sort((a, b) => a - b),
-      0,
-      1,
-    );
+    const start = pack(rows);
+    logTotal = outlookFrom(0, start).all;
+    let carried = new Map<State, Map<number, Partial>>();
+    arrive(carried, 0, start, 0, 1);
     for (const [stage, column] of columns.entries()) {
-      const after = new Map<number, State>();
-      for (const { left, partials } of states.values()) {
-        fillColumn(left, column, (next, log) => {
+      const after = new Map<State, Map<number, Partial>>();
+      for (const [state, partials] of carried) {
+        fillColumn(state, column, (next, log) => {
           work += partials.size;
           for (const partial of partials.values()) arrive(after, stage + 1, next, partial.log + log, partial.count);
         });
       }
-      states = after;
+      carried = after;
     }
   } catch (error) {
     if (error instanceof WorkLimitReached) return undefined;
