@@ -33,6 +33,7 @@ try {
       } catch (error) {
         log.error({ ...errorFacts(error), queue, job: job.id }, 'job failed');
         // pg-boss keeps what is thrown; only its kind may be kept.
+        // eslint-disable-next-line preserve-caught-error -- a cause would be kept too, and may quote a participant's value
         throw new Error(errorFacts(error).kind);
       }
     });

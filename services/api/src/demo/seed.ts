@@ -2,14 +2,12 @@
  * `node dist/demo/seed.js`: fills an empty registry with the invented demonstration data, through the same check and commit as a clinic's
  * own month. In a filled one it only lets the demonstration's people in under the local provider's present address.
  */
-import { randomUUID } from 'node:crypto';
+import { createHash, randomUUID } from 'node:crypto';
 import { mkdir, writeFile } from 'node:fs/promises';
 import path from 'node:path';
-import { createHash } from 'node:crypto';
-import { demoRegistry, demoSeed, type DemoFiles, type DemoMonth, type DemoSite } from '@cairnstep/demo-data';
-import { dictionary, tableKeys } from '@cairnstep/dictionary';
+import { demoCsv, demoRegistry, demoSeed, type DemoFiles, type DemoMonth, type DemoSite } from '@cairnstep/demo-data';
+import { tableKeys, type TableKey } from '@cairnstep/dictionary';
 import { demonstrationPeople } from '@cairnstep/fake-oidc/demonstration-people';
-import { tableFromRows, writeCsv } from '@cairnstep/submission-files';
 import { pino } from 'pino';
 import { recordAudit } from '../audit/record-audit.ts';
 import { registry, type Person } from '../authority/actor.ts';
@@ -70,22 +68,19 @@ async function addSites(context: Context, sites: readonly DemoSite[]): Promise<M
   return seeded;
 }
 
-function filesOf({ tables }: DemoMonth): DemoFiles {
-  const files: Partial<Record<(typeof tableKeys)[number], Uint8Array>> = {};
-  for (const { key, variables } of dictionary.tables) {
-    const rows = tables[key]?.map((row) => Object.fromEntries(variables.flatMap((variable, index) => (row[index] == null ? [] : [[variable.key, row[index]]]))));
-    if (rows) files[key] = Buffer.from(writeCsv(tableFromRows(key, rows)));
-  }
-  return files;
-}
+/** The month's files, in the dictionary's order of tables. */
+const filesOf = ({ tables }: DemoMonth): { table: TableKey; content: Buffer }[] =>
+  tableKeys.flatMap((table) => {
+    const rows = tables[table];
+    return rows ? [{ table, content: Buffer.from(demoCsv(table, rows)) }] : [];
+  });
 
 /** Read, checked and committed as any month; warnings get a reason, an error ends the seeding. */
 async function submit(context: Context, site: SeededSite, month: DemoMonth): Promise<void> {
   const { database, clock } = context;
   const id = await asActor(database, site.coordinator, async (tx) => {
     const submission = await insertSubmission(tx, site.id, month.month, site.coordinator.accountId);
-    for (const [table, bytes] of Object.entries(filesOf(month)) as [(typeof tableKeys)[number], Uint8Array][]) {
-      const content = Buffer.from(bytes);
+    for (const { table, content } of filesOf(month)) {
       await putFile(tx, submission, site.id, { table, fileName: `${table}.csv`, sha256: createHash('sha256').update(content).digest('hex'), content });
     }
     await beginCheck(tx, submission, clock());

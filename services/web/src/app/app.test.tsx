@@ -137,12 +137,6 @@ describe('signing in', () => {
     expect(link.getAttribute('href')).toBe('/api/sign-in?returnTo=%2Fexplore%3Foutcome%3Dx');
   });
 
-  it('says when the provider does not answer', async () => {
-    fakeApi(publicAnswers);
-    renderRoutes(routes, '/sign-in?problem=provider-unavailable');
-    expect(await screen.findByText(/does not answer/)).toBeTruthy();
-  });
-
   it('shows a person without a role whom to ask', async () => {
     fakeApi({ ...publicAnswers, 'GET /api/account': signedInAs() });
     const router = renderRoutes(routes, '/start');

@@ -1,11 +1,10 @@
 import { useSearchParams } from 'react-router-dom';
 import { useAccount } from '../../lib/account.ts';
 import { AddressButton, LinkButton } from '../../ui/button.tsx';
-import { Notice } from '../../ui/notice.tsx';
 import { Page, Section } from '../../ui/page.tsx';
 import { ownAddress, providerAddress } from './return-address.ts';
 
-/** Says what signing in does, then leaves for the organisation's own service. `?problem=` tells how the last try ended. */
+/** Says what signing in does, then leaves for the organisation's own service. When it does not work, the API shows a page of its own that needs no script. */
 export default function SignInPage() {
   const [search] = useSearchParams();
   const account = useAccount();
@@ -34,7 +33,6 @@ export default function SignInPage() {
         </AddressButton>
       }
     >
-      <Trouble problem={search.get('problem')} />
       <Section title="First time here?" id="first-time">
         <p className="max-w-2xl">
           Roles are given by invitation. Open the link in the invitation e-mail first; it brings you through signing in and gives you your
@@ -42,31 +40,5 @@ export default function SignInPage() {
         </p>
       </Section>
     </Page>
-  );
-}
-
-function Trouble({ problem }: { readonly problem: string | null }) {
-  if (problem === 'provider-unavailable') {
-    return (
-      <Section>
-        <Notice kind="error" title="The sign-in service of your organisation does not answer.">
-          <p>
-            You are not signed in, and nothing was changed. Try again in a few minutes; if it lasts, ask those who run your organisation’s
-            accounts.
-          </p>
-        </Notice>
-      </Section>
-    );
-  }
-  if (problem === null) return null;
-  return (
-    <Section>
-      <Notice kind="error" title="Signing in did not work.">
-        <p>
-          You are not signed in, and nothing was changed. It may have taken too long, or been begun in another window. Start again from
-          here.
-        </p>
-      </Notice>
-    </Section>
   );
 }
