@@ -19,6 +19,15 @@ export interface PageEntry {
 export const pages: readonly PageEntry[] = [
   { path: '/', audience: 'anyone', nav: 'At a glance', load: () => import('../features/public/glance-page.tsx') },
   { path: '/participants', audience: 'anyone', nav: 'For participants', load: () => import('../features/public/participants-page.tsx') },
+  { path: '/dictionary', audience: 'anyone', nav: 'Dictionary', load: () => import('../features/dictionary/dictionary-page.tsx') },
+  { path: '/dictionary/measures/:key', audience: 'anyone', load: () => import('../features/dictionary/measure-page.tsx') },
+  { path: '/dictionary/:table/:column', audience: 'anyone', load: () => import('../features/dictionary/variable-page.tsx') },
+  {
+    path: '/explore',
+    audience: ['researcher', 'steward', 'coordinator', 'therapist'],
+    nav: 'Explore',
+    load: () => import('../features/explore/explore-page.tsx'),
+  },
   { path: '/sign-in', audience: 'anyone', load: () => import('../features/account/sign-in-page.tsx') },
   { path: '/invitation/:token', audience: 'anyone', load: () => import('../features/account/invitation-page.tsx') },
   { path: '/whom-to-ask', audience: 'anyone', load: () => import('../features/account/whom-to-ask-page.tsx') },

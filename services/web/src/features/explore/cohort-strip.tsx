@@ -1,0 +1,41 @@
+/** The chosen cohort in one line, kept in sight below the grid, and what can be done with it. */
+import type { Grid } from '@cairnstep/contract';
+import type { CohortCell } from '../../lib/cohort.ts';
+import { formatCells } from '../../lib/cohort.ts';
+import { Button, LinkButton } from '../../ui/button.tsx';
+import { cohortCount } from './grid-words.ts';
+
+export interface CohortStripProps {
+  readonly grid: Grid;
+  readonly cells: readonly CohortCell[];
+  readonly mayRequest: boolean;
+  readonly onClear: () => void;
+}
+
+export function CohortStrip({ grid, cells, mayRequest, onClear }: CohortStripProps) {
+  return (
+    <div className="not-printed sticky bottom-0 z-10 mt-4 flex flex-wrap items-center gap-x-6 gap-y-2 border-t-2 border-lichen bg-sheet py-3">
+      <p role="status" className="numbers min-w-0 flex-1 basis-64 font-semibold">
+        {cohortCount(grid, cells)}
+      </p>
+      {cells.length > 0 && (
+        <Button variant="quiet" onPress={onClear}>
+          Clear the choice
+        </Button>
+      )}
+      {mayRequest && (
+        <LinkButton variant="primary" to={requestAddress(grid, cells)}>
+          Request these rows
+        </LinkButton>
+      )}
+    </div>
+  );
+}
+
+function requestAddress({ outcome }: Grid, cells: readonly CohortCell[]): string {
+  const search = new URLSearchParams({ outcome: outcome.key });
+  if (outcome.inDevice) search.set('in-device', 'yes');
+  const written = formatCells(cells);
+  if (written !== null) search.set('cells', written);
+  return `/requests/new?${search}`;
+}

@@ -1,0 +1,269 @@
+/**
+ * The grid: level groups down, AIS grades across. Choosing cells is defining the cohort. On wide screens the level column
+ * stands beside it, each row as high as the segments it groups; on narrow ones every row becomes a list of its grades.
+ */
+import type { Cell, Grid } from '@cairnstep/contract';
+import { useRef, useState } from 'react';
+import type { KeyboardEvent, ReactNode } from 'react';
+import type { CohortCell, Grade } from '../../lib/cohort.ts';
+import { formatNumber } from '../../lib/format.ts';
+import { HiddenMark } from '../../ui/hidden-mark.tsx';
+import { gradeInWords, intervalText, meanText, unitText } from './grid-words.ts';
+import { IntervalMark } from './interval-mark.tsx';
+import type { IntervalScale } from './interval-scale.ts';
+import { isChosen, toggle } from './selection.ts';
+
+export interface LevelGradeGridProps {
+  readonly grid: Grid;
+  readonly scale: IntervalScale | null;
+  /** Id of what names the grid. */
+  readonly labelledBy: string;
+  readonly chosen: readonly CohortCell[];
+  readonly onChoose: (cells: readonly CohortCell[]) => void;
+}
+
+/** -1 is the header, the row after the last holds the totals. */
+interface Place {
+  readonly row: number;
+  readonly column: number;
+}
+
+export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: LevelGradeGridProps) {
+  const table = useRef<HTMLTableElement>(null);
+  const [active, setActive] = useState<Place>({ row: 0, column: 0 });
+  const { grades, rows } = grid;
+
+  /** The cells that a press at a place chooses: one, a whole row or a whole column; a total chooses none. */
+  function cellsAt({ row, column }: Place): CohortCell[] {
+    if (column >= grades.length || row >= rows.length) return [];
+    const inRows = row === -1 ? rows : rows.slice(row, row + 1);
+    const inGrades = column === -1 ? grades : grades.slice(column, column + 1);
+    return inRows.flatMap(({ levelGroup }) => inGrades.map((grade) => ({ levelGroup, grade })));
+  }
+
+  function press(place: Place): void {
+    const cells = cellsAt(place);
+    if (cells.length > 0) onChoose(toggle(chosen, cells));
+  }
+
+  function move(event: KeyboardEvent, { row, column }: Place): void {
+    const target: Place = { row: Math.min(rows.length, Math.max(-1, row)), column: Math.min(grades.length, Math.max(-1, column)) };
+    event.preventDefault();
+    table.current?.querySelector<HTMLElement>(`[data-place="${target.row} ${target.column}"]`)?.focus();
+    if (event.shiftKey) {
+      const passed = [...cellsAt(active), ...cellsAt(target)].filter((cell) => !isChosen(chosen, cell));
+      if (passed.length > 0) onChoose([...chosen, ...passed]);
+    }
+  }
+
+  function onKeyDown(event: KeyboardEvent): void {
+    const { row, column } = active;
+    const control = event.ctrlKey || event.metaKey;
+    switch (event.key) {
+      case 'ArrowUp':
+        return move(event, { row: row - 1, column });
+      case 'ArrowDown':
+        return move(event, { row: row + 1, column });
+      case 'ArrowLeft':
+        return move(event, { row, column: column - 1 });
+      case 'ArrowRight':
+        return move(event, { row, column: column + 1 });
+      case 'Home':
+        return move(event, { row: control ? 0 : row, column: 0 });
+      case 'End':
+        return move(event, { row: control ? rows.length - 1 : row, column: grades.length - 1 });
+      case ' ':
+      case 'Enter':
+        event.preventDefault();
+        return press(active);
+      case 'Escape':
+        return onChoose([]);
+      case 'a':
+        if (!control) return;
+        event.preventDefault();
+        return onChoose(cellsAt({ row: -1, column: -1 }));
+    }
+  }
+
+  /** What every cell that can be gone to has in common. */
+  const at = (place: Place) => ({
+    'data-place': `${place.row} ${place.column}`,
+    tabIndex: place.row === active.row && place.column === active.column ? 0 : -1,
+    onFocus: () => setActive(place),
+    onClick: () => press(place),
+  });
+  const allChosen = (place: Place) => cellsAt(place).every((cell) => isChosen(chosen, cell));
+  const shared = { grid, scale };
+
+  return (
+    <table
+      ref={table}
+      role="grid"
+      aria-labelledby={labelledBy}
+      aria-multiselectable="true"
+      onKeyDown={onKeyDown}
+      className="block w-full border-separate border-spacing-0 md:table md:min-w-[700px] lg:col-start-2 lg:col-end-[-1] lg:row-start-1 lg:row-end-[-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
+    >
+      <thead role="rowgroup" className="hidden md:table-header-group lg:col-span-full lg:row-start-1 lg:grid lg:grid-cols-subgrid">
+        <tr role="row" className="lg:col-span-full lg:grid lg:grid-cols-subgrid">
+          <td role="gridcell" className={`${headLook} md:sticky md:left-0 md:z-10`}>
+            <span className="text-small text-quiet">Level</span>
+          </td>
+          {grades.map((grade, column) => (
+            <th
+              key={grade}
+              {...at({ row: -1, column })}
+              role="columnheader"
+              scope="col"
+              aria-selected={allChosen({ row: -1, column })}
+              className={`${headLook} cursor-pointer border-l border-l-hairline hover:bg-paper`}
+            >
+              <GradeHead grade={grade} />
+            </th>
+          ))}
+          <th role="columnheader" scope="col" className={`${headLook} border-l border-l-edge`}>
+            <span className="font-semibold">All grades</span>
+          </th>
+        </tr>
+      </thead>
+      <tbody
+        role="rowgroup"
+        className="block md:table-row-group lg:col-span-full lg:[grid-row:2/-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
+      >
+        {rows.map(({ levelGroup, label, cells, total }, row) => (
+          <tr key={levelGroup} role="row" className={rowLook}>
+            <th
+              {...at({ row, column: -1 })}
+              role="rowheader"
+              scope="row"
+              aria-selected={allChosen({ row, column: -1 })}
+              className={`${rowHeadLook} cursor-pointer hover:bg-paper`}
+            >
+              {label}
+            </th>
+            {grades.map((grade, column) => {
+              const cell = cells[column] ?? { state: 'empty' };
+              const selected = isChosen(chosen, { levelGroup, grade });
+              return (
+                <td
+                  key={grade}
+                  {...at({ row, column })}
+                  role="gridcell"
+                  aria-selected={selected}
+                  className={`${cellLook} cursor-pointer border-l-4 focus-visible:-outline-offset-2 ${
+                    selected ? 'border-l-lichen bg-chosen' : 'border-l-transparent hover:bg-paper'
+                  }`}
+                >
+                  <Figures {...shared} cell={cell} grade={grade} label={gradeChip(grade)} />
+                </td>
+              );
+            })}
+            <td {...at({ row, column: grades.length })} role="gridcell" className={`${cellLook} ${totalLook}`}>
+              <Figures {...shared} cell={total} label="all" />
+            </td>
+          </tr>
+        ))}
+        <tr role="row" className={rowLook}>
+          <th role="rowheader" scope="row" className={rowHeadLook}>
+            All levels
+          </th>
+          {grades.map((grade, column) => (
+            <td key={grade} {...at({ row: rows.length, column })} role="gridcell" className={`${cellLook} ${totalLook}`}>
+              <Figures {...shared} cell={grid.columnTotals[column] ?? { state: 'empty' }} grade={grade} label={gradeChip(grade)} />
+            </td>
+          ))}
+          <td {...at({ row: rows.length, column: grades.length })} role="gridcell" className={`${cellLook} ${totalLook}`}>
+            <Figures {...shared} cell={grid.total} label="all" />
+          </td>
+        </tr>
+      </tbody>
+    </table>
+  );
+}
+
+const headLook = 'border-b border-edge bg-sheet px-2 pb-2 text-left align-bottom font-normal focus-visible:-outline-offset-2';
+const rowLook = 'block border-b border-hairline md:table-row lg:col-span-full lg:grid lg:grid-cols-subgrid';
+const rowHeadLook =
+  'block bg-sheet pt-4 pb-1 text-left font-semibold focus-visible:-outline-offset-2 md:sticky md:left-0 md:z-10 md:table-cell md:border-b md:border-hairline md:py-2 md:pr-2 md:align-top lg:static lg:border-0';
+const cellLook = 'block scroll-mb-32 px-2 py-1.5 md:table-cell md:border-b md:border-b-hairline md:align-top lg:block lg:border-b-0';
+const totalLook = 'border-l-4 border-l-transparent md:border-l md:border-l-edge md:pl-[11px]';
+
+const bands: Readonly<Record<Grade, string>> = {
+  A: 'bg-ais-a',
+  B: 'bg-ais-b',
+  C: 'bg-ais-c',
+  D: 'bg-ais-d',
+  E: 'bg-ais-e',
+  ND: 'bg-sheet',
+};
+const completeness: Readonly<Record<Grade, string>> = {
+  A: 'complete',
+  B: 'incomplete',
+  C: 'incomplete',
+  D: 'incomplete',
+  E: 'normal',
+  ND: 'not determinable',
+};
+
+function GradeHead({ grade }: { readonly grade: Grade }) {
+  return (
+    <>
+      <span aria-hidden="true" className={`mb-1 block h-2 border border-edge ${bands[grade]}`} />
+      <span className="sr-only">AIS </span>
+      <span className="text-lead font-semibold">{grade}</span>
+      <span className="block text-small text-quiet">{completeness[grade]}</span>
+    </>
+  );
+}
+
+/** The grade within a cell, where the columns have become lines. */
+function gradeChip(grade: Grade): ReactNode {
+  return (
+    <span className="flex flex-col items-center">
+      <span className="sr-only">{gradeInWords(grade)}</span>
+      <span aria-hidden="true" className="font-semibold">
+        {grade}
+      </span>
+      <span aria-hidden="true" className={`block h-2 w-6 border border-edge ${bands[grade]}`} />
+    </span>
+  );
+}
+
+interface FiguresProps {
+  readonly grid: Grid;
+  readonly cell: Cell;
+  readonly scale: IntervalScale | null;
+  readonly grade?: Grade;
+  readonly label: ReactNode;
+}
+
+function Figures({ grid, cell, scale, grade, label }: FiguresProps) {
+  const unit = unitText(grid.outcome);
+  return (
+    <div className="grid grid-cols-[36px_minmax(0,1fr)_35%] items-center gap-x-3 md:grid-cols-1 md:items-start">
+      <span className="row-span-2 text-center text-small md:hidden">{label}</span>
+      {cell.state === 'shown' ? (
+        <>
+          <span className="flex flex-wrap items-baseline justify-between gap-x-2">
+            <span className="numbers font-semibold">
+              {meanText(cell, grid)}
+              <span className="sr-only"> {unit}</span>
+            </span>
+            <span className="numbers order-last text-small text-quiet">
+              n <span className="text-ink">{formatNumber(cell.n)}</span>
+            </span>
+          </span>
+          <span className="col-start-3 row-span-2 row-start-1 md:col-start-auto md:row-span-1 md:row-start-auto">
+            {scale !== null && <IntervalMark cell={cell} scale={scale} {...(grade !== undefined && { grade })} />}
+          </span>
+          <span className="numbers text-small text-quiet">
+            <span className="sr-only">95% interval </span>
+            {intervalText(cell, grid)}
+          </span>
+        </>
+      ) : (
+        <span className="text-quiet">{cell.state === 'hidden' ? <HiddenMark /> : <span className="text-small">none</span>}</span>
+      )}
+    </div>
+  );
+}

@@ -1,0 +1,42 @@
+/** What is asked and which cells are chosen, as the address holds it. */
+import { useSearchParams } from 'react-router-dom';
+import { useAddressChange } from '../../lib/address-state.ts';
+import { formatCells, parseCells } from '../../lib/cohort.ts';
+import type { CohortCell } from '../../lib/cohort.ts';
+import type { GridQuestion } from './explore.queries.ts';
+
+/** Comfortable walking speed over ten metres: what most people ask first, and measured almost everywhere. */
+const firstOutcome = 'tmwt_ss';
+
+const statistics = ['change', 'baseline', 'end'] as const;
+
+export interface GridAddress {
+  readonly question: GridQuestion;
+  readonly cells: readonly CohortCell[];
+  readonly asTable: boolean;
+  readonly ask: (changes: Partial<Record<'outcome' | 'inDevice' | 'statistic' | 'release' | 'site', string | null>>) => void;
+  readonly chooseCells: (cells: readonly CohortCell[]) => void;
+  readonly showAs: (view: 'grid' | 'table') => void;
+}
+
+/** `ownSites`: ids of sites whose own figures this person may see; any other site in the address is passed over. */
+export function useGridAddress(ownSites: readonly string[]): GridAddress {
+  const [search] = useSearchParams();
+  const change = useAddressChange();
+  const release = Number(search.get('release'));
+  const siteId = ownSites.find((id) => id === search.get('site'));
+  return {
+    question: {
+      outcome: search.get('outcome') ?? firstOutcome,
+      inDevice: search.get('in-device') === 'yes' ? 'yes' : 'no',
+      statistic: statistics.find((one) => one === search.get('statistic')) ?? 'change',
+      ...(siteId === undefined && Number.isInteger(release) && release >= 1 && { release }),
+      ...(siteId !== undefined && { siteId }),
+    },
+    cells: parseCells(search.get('cells')),
+    asTable: search.get('view') === 'table',
+    ask: ({ inDevice, ...others }) => change({ ...others, ...(inDevice !== undefined && { 'in-device': inDevice }) }),
+    chooseCells: (cells) => change({ cells: formatCells(cells) }),
+    showAs: (view) => change({ view: view === 'table' ? 'table' : null }),
+  };
+}
