@@ -11,7 +11,10 @@ export interface CohortCell {
 }
 
 /** Level groups top down, then the row of people whose level cannot be determined; as the grid has them. */
-const groups: readonly { readonly id: string; readonly label: string }[] = [...levelGroups.groups, { id: 'ND', label: 'Level not determinable' }];
+const groups: readonly { readonly id: string; readonly label: string }[] = [
+  ...levelGroups.groups,
+  { id: 'ND', label: 'Level not determinable' },
+];
 
 export function levelGroupLabel(id: string): string {
   return groups.find((group) => group.id === id)?.label ?? id;
@@ -41,10 +44,7 @@ export function cohortPhrases(cells: readonly CohortCell[]): string[] {
 function gradePhrase(names: readonly Grade[]): string {
   if (names.length === grades.length) return 'every grade';
   const known = names.filter((grade) => grade !== 'ND');
-  const phrases = [
-    ...(known.length > 0 ? [`AIS ${inARow(known)}`] : []),
-    ...(names.includes('ND') ? ['grade not determinable'] : []),
-  ];
+  const phrases = [...(known.length > 0 ? [`AIS ${inARow(known)}`] : []), ...(names.includes('ND') ? ['grade not determinable'] : [])];
   return phrases.join(' and ');
 }
 
