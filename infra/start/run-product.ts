@@ -60,7 +60,7 @@ export async function runProduct({ place, folder, fromSources, report, onStarted
   if (seed !== 'nothing') {
     const identity = await identityOf(database.databaseUrl);
     if (seed !== 'people') {
-      report('Filling in the demonstration data (first start) …');
+      report('Filling in the demonstration data (first start, takes some minutes) …');
       noteSeedBegun(folder.path, identity);
     }
     await asAdministrator('Filling in the demonstration data', 'seed', 'services/api/src/demo/seed.ts');

@@ -8,7 +8,7 @@ import { readRun } from '../../infra/start/run-note.ts';
 import { mailUrlVariable, productUrlVariable, providerUrlVariable } from './product-variables.ts';
 
 /** The first start builds the program and fills in the demonstration data. */
-const readyWithinMs = 10 * 60_000;
+const readyWithinMs = 15 * 60_000;
 const ready = 'Cairnstep is ready at';
 
 export default async function startProduct(): Promise<() => Promise<void>> {
