@@ -38,7 +38,7 @@ export interface PlantedMistake {
   readonly column: string | null;
   /** Id of the rule that must find it. */
   readonly rule: string;
-  /** Further rules that the same mistake breaks. */
+  /** Further rules that the same mistake can break, depending on what else the row holds. */
   readonly also: readonly string[];
 }
 

@@ -4,9 +4,15 @@ import type { Random } from '../random.ts';
 
 const characters = 20;
 
-/** A participant code: S, 20 random characters and the check character that a site's own codes have (from the SHA-256 of what stands before it). */
+/** The check character of a participant code, from the SHA-256 of everything before it. */
+export function checkCharacter(code: string): string {
+  const [first = 0] = createHash('sha256').update(code).digest();
+  return pseudonymAlphabet.charAt(first & 31);
+}
+
+/** A participant code as a site would draw it: S, 20 random characters and the check character. */
 export function participantCode(random: Random): string {
-  const body = Array.from({ length: characters }, () => pseudonymAlphabet.charAt(random.whole(0, pseudonymAlphabet.length - 1))).join('');
-  const [first = 0] = createHash('sha256').update(`S${body}`).digest();
-  return `S${body}${pseudonymAlphabet.charAt(first & 31)}`;
+  const drawn = Array.from({ length: characters }, () => pseudonymAlphabet.charAt(random.whole(0, pseudonymAlphabet.length - 1)));
+  const code = `S${drawn.join('')}`;
+  return code + checkCharacter(code);
 }

@@ -58,10 +58,9 @@ function detailsOf(random: Random, kind: Exclude<SessionKind, 'none'>, deviceWor
   switch (kind) {
     case 'fall': {
       const injured = random.chance(0.2);
-      const cells = { ...record(random, injured ? 2 : 1, false, injured ? 'stopped' : random.pick(['none', 'paused']), true) };
       return {
         cells: {
-          ...cells,
+          ...record(random, injured ? 2 : 1, false, injured ? 'stopped' : random.pick(['none', 'paused']), true),
           ...relation(random, random.pick(['staff_handling', 'device', 'condition'])),
           onset: 'during',
           fall_injured: yesNo(injured),

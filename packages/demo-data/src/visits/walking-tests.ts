@@ -38,6 +38,7 @@ function sixMinuteWalk(random: Random, person: Person, speed: number, help: Help
   const seconds = stopped ? random.whole(110, 340) : sixMinutes;
   const mean = speed * random.between(0.72, 0.98);
   const scale = person.site.exertionScale;
+  const exertion = stopped || random.chance(0.15) ? null : scale === 'cr10' ? random.whole(6, 14) / 2 : random.whole(11, 16);
   return {
     measure: 'six_mwt',
     trial_no: 1,
@@ -46,7 +47,7 @@ function sixMinuteWalk(random: Random, person: Person, speed: number, help: Help
     ...help,
     seconds_walked: seconds,
     rests: speed < 0.3 ? random.whole(0, 3) : random.pick([0, 0, 0, 1]),
-    ...(random.chance(0.85) ? { rpe_end: scale === 'cr10' ? random.whole(6, 14) / 2 : random.whole(11, 16), rpe_scale: scale } : {}),
+    ...(exertion === null ? {} : { rpe_end: exertion, rpe_scale: scale }),
   };
 }
 
