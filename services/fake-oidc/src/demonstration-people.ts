@@ -25,28 +25,28 @@ export const demonstrationPeople: readonly DemonstrationPerson[] = [
     subject: 'demo-coordinator-alder',
     name: 'Mira Okafor',
     email: 'mira.okafor@alder-ridge.example',
-    label: 'Site coordinator, Alder Ridge',
+    label: 'Site coordinator, Alder Ridge Rehabilitation',
     role: 'coordinator',
     site: 'S01',
-    institution: 'Alder Ridge',
+    institution: 'Alder Ridge Rehabilitation',
   },
   {
     subject: 'demo-therapist-alder',
     name: 'Jonas Lindqvist',
     email: 'jonas.lindqvist@alder-ridge.example',
-    label: 'Treating therapist, Alder Ridge',
+    label: 'Treating therapist, Alder Ridge Rehabilitation',
     role: 'therapist',
     site: 'S01',
-    institution: 'Alder Ridge',
+    institution: 'Alder Ridge Rehabilitation',
   },
   {
-    subject: 'demo-coordinator-birch',
+    subject: 'demo-coordinator-fennmoor',
     name: 'Paulo Serrano',
-    email: 'paulo.serrano@birch-hollow.example',
-    label: 'Site coordinator, Birch Hollow',
+    email: 'paulo.serrano@fennmoor-spinal.example',
+    label: 'Site coordinator, Fennmoor Spinal Centre',
     role: 'coordinator',
     site: 'S02',
-    institution: 'Birch Hollow',
+    institution: 'Fennmoor Spinal Centre',
   },
   {
     subject: 'demo-researcher',
@@ -105,5 +105,5 @@ export interface DemonstrationSystem {
 
 /** Sites' own systems that submit without a person. Their secret is made at the first start, never written here. */
 export const demonstrationSystems: readonly DemonstrationSystem[] = [
-  { clientId: 'demo-system-alder', label: 'Training records system, Alder Ridge', site: 'S01' },
+  { clientId: 'demo-system-alder', label: 'Training records system, Alder Ridge Rehabilitation', site: 'S01' },
 ];
