@@ -3,11 +3,14 @@ import type { Row, RowProblem, TableKey, Variable } from '@cairnstep/dictionary'
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { checkSubmission } from './check-submission.ts';
+import { FindingLog } from './finding-log.ts';
 import { fileRules } from './file-rules.ts';
+import { readTable } from './reading/read-csv.ts';
 import { submissionRules } from './rules/index.ts';
 import { tableFromRows } from './table/table-from-rows.ts';
-import { bout, exam, month, participant, result, session, someone } from './test-support/a-month.ts';
-import { checkMonth, placesOf, registry } from './test-support/findings-of.ts';
+import { writeCsv } from './writing/write-csv.ts';
+import { bout, completeExam, exam, examCells, month, participant, result, session, someone } from './test-support/a-month.ts';
+import { checkMonth, encode, placesOf, registry } from './test-support/findings-of.ts';
 
 /** Rules that are kept elsewhere: C16 is about statistics over many rows, and F01 to F15 are found while a file is read. */
 const keptElsewhere = new Set(['C16', ...fileRules.map(({ id }) => id).filter((id) => id < 'F20')]);
@@ -48,6 +51,28 @@ describe('checkSubmission', () => {
     const held = registry({ sessions: [session({ body_mass_kg: 35 })] });
     expect(placesOf(await checkMonth(month({ bouts: [bout()] }), held), 'T06')).toEqual(['bouts 2 bws_pct']);
     expect(placesOf(await checkMonth(month({ sessions: [session()], bouts: [bout()] }), held), 'T06')).toEqual([]);
+  });
+
+  it('checks only single cells when a file could not be read to its end', async () => {
+    const findings = new FindingLog();
+    const bouts = await readTable('bouts', encode(writeCsv(tableFromRows('bouts', [bout({ hr_end: 231 })]))), findings);
+    const sessions = await readTable('sessions', encode('<html>'), findings);
+    expect([...findings.incomplete]).toEqual(['sessions']);
+    expect(
+      checkSubmission({ bouts, sessions }, registry(), findings)
+        .byRule()
+        .map(({ id }) => id),
+    ).toEqual(['F01', 'F21']);
+  });
+
+  it('says that dysreflexia is to be expected when the level is T6 or above', async () => {
+    const rose = { sessions: [session({ sbp_max: 140 })], bouts: [bout()] };
+    const told = async (level: string) => {
+      const high = completeExam({ ...examCells({ below: '0', legs: '0', normalTo: level }), recorded_nli: level });
+      return (await checkMonth(month({ ...rose, exams: [high] }))).byRule().find(({ id }) => id === 'T13')?.kept[0]?.found;
+    };
+    expect(await told('T6')).toMatch(/T6 or above/);
+    expect(await told('T7')).not.toMatch(/T6/);
   });
 
   it('repeats no value of the files in its findings', async () => {

@@ -1,11 +1,13 @@
-import { FindingLog } from './finding-log.ts';
 import { RuleReport } from './checking/rule.ts';
 import { Submission } from './checking/submission.ts';
+import { FindingLog } from './finding-log.ts';
 import type { RegistryContext, TypedTables } from './registry-context.ts';
-import { submissionRules } from './rules/index.ts';
+import { cellRules, submissionRules } from './rules/index.ts';
 
 /**
  * Checks the tables of one submission row by row, against each other and against what the registry holds of the site.
+ * Where a file could not be read to its end, only single cells are checked: against rows that are missing, all others
+ * would look wrong.
  *
  * @param tables What was read from the files, by table; a table without a file is left out.
  * @param context What the registry holds for the participants that occur in the files.
@@ -13,6 +15,7 @@ import { submissionRules } from './rules/index.ts';
  */
 export function checkSubmission(tables: TypedTables, context: RegistryContext, findings = new FindingLog()): FindingLog {
   const submission = new Submission(tables, context);
-  for (const { id, evaluate } of submissionRules) evaluate(submission, new RuleReport(id, findings));
+  const rules = findings.incomplete.size > 0 ? cellRules : submissionRules;
+  for (const { id, evaluate } of rules) evaluate(submission, new RuleReport(id, findings));
   return findings;
 }

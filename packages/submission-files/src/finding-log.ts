@@ -28,6 +28,7 @@ const defaultKept: KeptFindings = { perRule: 50_000, inAll: 200_000 };
 /** Collects the findings of a submission, from reading its files to checking them against each other. */
 export class FindingLog {
   private readonly rules = new Map<string, { count: number; kept: Finding[] }>();
+  private readonly stopped = new Set<TableKey>();
   private keptInAll = 0;
   private errors = 0;
   private warnings = 0;
@@ -53,6 +54,17 @@ export class FindingLog {
       found: report.found,
       mend: report.mend ?? mend,
     });
+  }
+
+  /** Adds a finding that ended the reading of a file before its end. */
+  addStopping(report: Report): void {
+    this.stopped.add(report.table);
+    this.add(report);
+  }
+
+  /** Tables whose file could not be read to its end. */
+  get incomplete(): ReadonlySet<TableKey> {
+    return this.stopped;
   }
 
   /** Exact numbers, kept or not. */

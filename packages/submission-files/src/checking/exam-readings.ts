@@ -22,6 +22,18 @@ interface ExamDays {
   readonly rows: readonly number[];
 }
 
+/** How many of the sorted whole days are not after this one. */
+function countUpTo(days: readonly number[], day: number): number {
+  let low = 0;
+  let high = days.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if ((days[middle] ?? Infinity) <= day) low = middle + 1;
+    else high = middle;
+  }
+  return low;
+}
+
 const observed: Readonly<Record<string, Observation>> = { yes: 'Yes', no: 'No', NT: 'NT' };
 
 function cells<Segment extends string>(columns: CellColumns<Segment>, row: number): Record<Segment, string> | null {
@@ -96,14 +108,14 @@ export class ExamReadings {
   /** Rows of a participant's exams whose day lies between the two, both included, by day; of several on a day the last. */
   between(person: number, from: number, to: number): number[] {
     const { days, rows } = this.ofPerson(person);
-    const start = days.findIndex((day) => day >= from);
-    const end = days.findLastIndex((day) => day <= to);
-    return start < 0 || end < start ? [] : rows.slice(start, end + 1);
+    return rows.slice(countUpTo(days, from - 1), countUpTo(days, to));
   }
 
   /** The last exam of a participant between the two days, or null. */
   lastBetween(person: number, from: number, to: number): number | null {
-    return this.between(person, from, to).at(-1) ?? null;
+    const { days, rows } = this.ofPerson(person);
+    const last = countUpTo(days, to) - 1;
+    return last >= 0 && (days[last] ?? -Infinity) >= from ? (rows[last] ?? null) : null;
   }
 
   private ofPerson(person: number): ExamDays {

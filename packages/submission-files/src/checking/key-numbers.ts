@@ -10,11 +10,6 @@ export class Persons {
     if (number === undefined) this.numbers.set(code, (number = this.numbers.size));
     return number;
   }
-
-  /** The number of a code that may be unknown; -1 then. */
-  find(code: string): number {
-    return this.numbers.get(code) ?? -1;
-  }
 }
 
 interface Digit {

@@ -29,11 +29,6 @@ export class Submission {
     readonly context: RegistryContext,
   ) {}
 
-  /** Whether a file of this table was sent. */
-  hasFile(key: TableKey): boolean {
-    return this.files[key] !== undefined;
-  }
-
   table(key: TableKey): CheckedTable {
     let table = this.joined.get(key);
     if (!table) this.joined.set(key, (table = this.join(key)));

@@ -73,7 +73,7 @@ async function* fillFromCsv(builder: TableBuilder, source: ByteSource): AsyncGen
     if (!builder.hasHeader) throw new UnreadableFile('F05', 'The file is empty.', 'Begin with the header row of the template.', null);
   } catch (error) {
     if (!(error instanceof UnreadableFile)) throw error;
-    findings.add({ rule: error.rule, table, line: error.line, column: null, found: error.found, mend: error.mend });
+    findings.addStopping({ rule: error.rule, table, line: error.line, column: null, found: error.found, mend: error.mend });
   }
   yield { ended: true };
 }

@@ -1,4 +1,3 @@
-/** Every check of a submission, in the order in which the findings are worked off: single cells first, then records, then medicine. */
 import type { Rule } from '../checking/rule.ts';
 import { filledWhereRequired } from './cells/f20-filled-where-required.ts';
 import { withinHardLimits } from './cells/f21-within-hard-limits.ts';
@@ -72,13 +71,19 @@ import { painThatCounts } from './events/a06-pain-that-counts.ts';
 import { resolvedAfterOnset } from './events/a07-resolved-after-onset.ts';
 import { decidedEpisodeIsAnEvent } from './events/a08-decided-episode-is-an-event.ts';
 
-export const submissionRules: readonly Rule[] = [
+/** Checks of single cells, which need nothing but their row. */
+export const cellRules: readonly Rule[] = [
   filledWhereRequired,
   withinHardLimits,
   withinPlausibleLimits,
   onAStep,
   emptyWhereNotApplicable,
   nothingComputed,
+];
+
+/** Every check of a submission, in the order in which findings are worked off: single cells first, then records, then medicine. */
+export const submissionRules: readonly Rule[] = [
+  ...cellRules,
   keyOccursOnce,
   consentInForce,
   noDataAfterWithdrawal,

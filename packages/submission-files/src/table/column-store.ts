@@ -2,7 +2,7 @@ import type { Variable } from '@cairnstep/dictionary';
 import { TypedColumn } from './typed-table.ts';
 
 /** Words of a column by number; number 0 is "no word". */
-export class Vocabulary {
+class Vocabulary {
   readonly words: string[] = [''];
   private readonly numbers = new Map<string, number>();
 

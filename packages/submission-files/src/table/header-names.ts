@@ -8,7 +8,7 @@ export interface UnitFactor {
   readonly dividedBy: number;
 }
 
-export const storedUnit: UnitFactor = { times: 1, dividedBy: 1 };
+const storedUnit: UnitFactor = { times: 1, dividedBy: 1 };
 
 export type HeaderMeaning =
   | { readonly kind: 'column'; readonly position: number; readonly variable: Variable; readonly factor: UnitFactor }
@@ -16,7 +16,7 @@ export type HeaderMeaning =
   | { readonly kind: 'undeclared' };
 
 /** Compatibility forms become plain, and case, spaces, underscores, hyphens and full stops do not count. */
-export const foldName = (text: string): string =>
+const foldName = (text: string): string =>
   text
     .normalize('NFKC')
     .toLowerCase()

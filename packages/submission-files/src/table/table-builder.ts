@@ -28,7 +28,7 @@ const isBlank = (cells: readonly string[], count: number): boolean => {
 };
 
 /** The column as a spreadsheet names it: A to Z, AA, AB, … */
-export function columnLetters(position: number): string {
+function columnLetters(position: number): string {
   const letter = String.fromCharCode(65 + (position % 26));
   return position < 26 ? letter : columnLetters(Math.floor(position / 26) - 1) + letter;
 }

@@ -27,7 +27,7 @@ function fingerprints(table: CheckedTable, columns: readonly TypedColumn[]): Flo
     let values = 0;
     for (const column of columns) {
       const value = column.number(row);
-      // Thousandths make a whole number of every value; an empty cell takes a place of its own.
+      // Thousandths make a whole number of every value; an empty cell has a number of its own. The multiplier is that of FNV-1a.
       hash = Math.imul(hash ^ (value === null ? 0x5bd1e995 : Math.round(value * 1000)), 0x01000193) ^ (hash >>> 15);
       if (value !== null) values += 1;
     }
