@@ -1,4 +1,7 @@
-/** Members of answers in the shape that fixtures of published figures have. An answer without figures gives none, so its check fails by name. */
+/**
+ * Members of answers in the shape that fixtures of published figures have. An answer without figures gives none, so its check fails by
+ * name.
+ */
 
 import type { Coefficient, Interval, NotEstimable, TestFigures } from '../src/index.ts';
 

@@ -148,12 +148,13 @@ const mixedChecks = mixedFixture.cases.map((one): ReferenceCheck => {
   };
 });
 
-const slopeChecks = slopeFixture.cases.map((one): ReferenceCheck => ({
-  ...one,
-  source: `${slopeFixture.source}; ${one.name}`,
-  method: 'random-slope',
-  compute: () =>
-    membersOf(randomSlopeModel({ ...one, predictors: [] }), (model) => ({ ...model, ...coefficientColumns(model.coefficients) })),
-}));
+const slopeChecks = slopeFixture.cases.flatMap((one): ReferenceCheck[] => {
+  const compute = (): unknown =>
+    membersOf(randomSlopeModel({ ...one, predictors: [] }), (model) => ({ ...model, ...coefficientColumns(model.coefficients) }));
+  return [
+    { ...one, source: `${slopeFixture.source}; ${one.name}`, method: 'random-slope', compute },
+    { ...one.printed, id: `${one.id}, as printed`, method: 'random-slope', compute },
+  ];
+});
 
 export const modelChecks: readonly ReferenceCheck[] = [...linearChecks, ...ancovaChecks, ...logisticChecks, ...mixedChecks, ...slopeChecks];

@@ -1,4 +1,7 @@
-/** Linear regression against the certified sets of NIST. Each set asks for as many digits as the reference programs reach on it in double precision. */
+/**
+ * Linear regression against the certified sets of NIST. Each set asks for as many digits as the reference programs reach on it in double
+ * precision.
+ */
 
 import type { LinearModel, Predictor } from '../src/index.ts';
 import { linearRegression } from '../src/index.ts';

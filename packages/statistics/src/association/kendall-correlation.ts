@@ -1,9 +1,9 @@
 /**
- * Kendall's tau-b: concordant minus discordant pairs over the pairs not tied, for ordinal scales.
- * Interval on Fisher's z scale with standard error sqrt(0.437/(n - 4)). p: exact by counting inversions for n < 50 without ties, else normal
- * with the variance corrected for ties, no continuity correction.
- * Source: Kendall & Gibbons (1990) Rank Correlation Methods, 5th ed., chapters 3 to 5; interval Fieller, Hartley & Pearson (1957) Biometrika
- * 44:470-481; counting in n log n steps by Knight (1966) J Am Stat Assoc 61:436-439.
+ * Kendall's tau-b: concordant minus discordant pairs over the pairs not tied, for ordinal scales. Interval on Fisher's z scale with
+ * standard error sqrt(0.437/(n - 4)). p: exact by counting inversions for n < 50 without ties, else normal with the variance corrected
+ * for ties, no continuity correction.
+ * Source: Kendall & Gibbons (1990) Rank Correlation Methods, 5th ed., chapters 3 to 5; interval Fieller, Hartley & Pearson (1957)
+ * Biometrika 44:470-481; counting in n log n steps by Knight (1966) J Am Stat Assoc 61:436-439.
  */
 
 import type { TestFigures, TestedEstimateResult } from '../result.ts';

@@ -1,4 +1,7 @@
-/** Sorts a list upwards in place by merging and answers how many pairs stood in the wrong order (equal ones do not). Source: Knight (1966). */
+/**
+ * Sorts a list upwards in place by merging and answers how many pairs stood in the wrong order (equal ones do not). Source: Knight
+ * (1966).
+ */
 
 export function sortCountingInversions(values: Float64Array): number {
   const spare = new Float64Array(values.length);

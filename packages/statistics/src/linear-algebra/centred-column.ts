@@ -1,4 +1,7 @@
-/** A column with its mean taken out and its length set to one, so that columns of very different size can be told apart by rounding error alone. */
+/**
+ * A column with its mean taken out and its length set to one, so that columns of very different size can be told apart by rounding error
+ * alone.
+ */
 
 export interface CentredColumn {
   readonly mean: number;

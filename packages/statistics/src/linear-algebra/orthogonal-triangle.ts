@@ -2,7 +2,8 @@
  * The upper triangle R of a Householder QR decomposition, fed with rows block by block, so that a long table passes through memory once
  * and no cross-product X'X is ever formed (which would cost half of the digits).
  *
- * Source: Golub & Van Loan (2013), Matrix Computations, 4th ed., sections 5.1 and 5.2 (Householder QR), 6.5 (adding rows to a factorisation).
+ * Source: Golub & Van Loan (2013), Matrix Computations, 4th ed., sections 5.1 and 5.2 (Householder QR), 6.5 (adding rows to a
+ * factorisation).
  */
 
 /** Square upper triangle, column by column: element (row, column) is `entries[column * size + row]`. Below the diagonal all is zero. */
@@ -71,7 +72,10 @@ export function orthogonalTriangle(columns: readonly Float64Array[]): UpperTrian
   return triangle;
 }
 
-/** Solves R x = b by back substitution with the leading `order` rows and columns; b is the part above the diagonal of column `rightHandSide`. */
+/**
+ * Solves R x = b by back substitution with the leading `order` rows and columns; b is the part above the diagonal of column
+ * `rightHandSide`.
+ */
 export function solveAgainstColumn({ size, entries }: UpperTriangle, order: number, rightHandSide: number): Float64Array {
   const solution = entries.slice(rightHandSide * size, rightHandSide * size + order);
   for (let i = order - 1; i >= 0; i--) {

@@ -1,6 +1,6 @@
 /**
- * Probability that somebody with the event has the higher score than somebody without, ties counting half (area under the ROC curve), from the
- * rank sum. Source: Hanley & McNeil (1982) Radiology 143:29-36. Needs at least one of each.
+ * Probability that somebody with the event has the higher score than somebody without, ties counting half (area under the ROC curve),
+ * from the rank sum. Source: Hanley & McNeil (1982) Radiology 143:29-36. Needs at least one of each.
  */
 
 import { midranks } from '../ranks/midranks.ts';

@@ -34,7 +34,10 @@ export type UnfitLeastSquares =
   | { readonly kind: 'constant-predictor' | 'dependent-predictor'; readonly column: number }
   | { readonly kind: 'constant-outcome' | 'too-large' };
 
-/** A predictor whose part not explained by those before it is below this share of its length counts as determined by them (R uses the same). */
+/**
+ * A predictor whose part not explained by those before it is below this share of its length counts as determined by them (R uses the
+ * same).
+ */
 export const rankTolerance = 1e-7;
 
 /** Residuals of this many units of rounding of the largest outcome are taken as none. */

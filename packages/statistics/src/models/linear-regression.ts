@@ -1,8 +1,8 @@
 /**
  * Multiple linear regression by least squares (Householder QR on centred columns), t intervals and tests, and means predicted from it.
  *
- * p-values are given only from 10 participants per predictor on. Where the predictors reproduce the outcome to rounding there is no error to
- * test against: the coefficients are given without tests and without a likelihood.
+ * p-values are given only from 10 participants per predictor on. Where the predictors reproduce the outcome to rounding there is no error
+ * to test against: the coefficients are given without tests and without a likelihood.
  *
  * Source: Seber & Lee (2003) Linear Regression Analysis, 2nd ed., chapters 3 to 5. Held to the NIST certified regression sets.
  */

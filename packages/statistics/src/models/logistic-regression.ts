@@ -1,14 +1,16 @@
 /**
- * Logistic regression by maximum likelihood: Newton steps, each a weighted least squares problem solved by Householder QR, with halving of a
- * step that would lower the likelihood. Odds ratios with Wald intervals.
+ * Logistic regression by maximum likelihood: Newton steps, each a weighted least squares problem solved by Householder QR, with halving
+ * of a step that would lower the likelihood. Odds ratios with Wald intervals.
  *
- * Separation: when some combination of predictors divides those with the event from those without, the likelihood has no maximum and every
- * step moves some fitted log odds by about one more, for ever; where a maximum exists the steps shrink quadratically. So the criterion is
- * that the largest change of any log odds vanishes, not that the deviance stands still (which it also does under separation).
+ * Separation: when some combination of predictors divides those with the event from those without, the likelihood has no maximum and
+ * every step moves some fitted log odds by about one more, for ever; where a maximum exists the steps shrink quadratically. So the
+ * criterion is that the largest change of any log odds vanishes, not that the deviance stands still (which it also does under
+ * separation).
  *
  * Needs at least 10 people with and 10 without the event for each predictor; otherwise counts and Fisher's test are to be shown.
  *
- * Source: Agresti (2002) Categorical Data Analysis, 2nd ed., sections 4.6 and 5.5; Albert & Anderson (1984) Biometrika 71:1-10 (separation).
+ * Source: Agresti (2002) Categorical Data Analysis, 2nd ed., sections 4.6 and 5.5; Albert & Anderson (1984) Biometrika 71:1-10
+ * (separation).
  */
 
 import { completeRows } from '../complete-rows.ts';

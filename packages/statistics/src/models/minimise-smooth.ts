@@ -1,6 +1,6 @@
 /**
- * Minimum of a smooth function of a few numbers: BFGS steps with central differences and backtracking, then Newton steps on differences until the gradient is
- * as small as differences can tell.
+ * Minimum of a smooth function of a few numbers: BFGS steps with central differences and backtracking, then Newton steps on differences
+ * until the gradient is as small as differences can tell.
  * Source: Nocedal & Wright (2006) Numerical Optimization, 2nd ed., algorithm 6.1 and section 8.1.
  */
 

@@ -18,8 +18,8 @@ export interface Scale {
 }
 
 /**
- * Degrees of freedom by the inner-outer rule. Intercept and predictors that vary within clusters: rows - clusters - (predictors varying within); predictors
- * constant within clusters: clusters - (those, the intercept counted).
+ * Degrees of freedom by the inner-outer rule. Intercept and predictors that vary within clusters: rows - clusters - (predictors varying
+ * within); predictors constant within clusters: clusters - (those, the intercept counted).
  * Source: Pinheiro & Bates (2000) Mixed-Effects Models in S and S-PLUS, section 2.4.2.
  */
 export function innerOuterDf(
@@ -32,8 +32,8 @@ export function innerOuterDf(
 }
 
 /**
- * Rows that turn scaled coefficients (and the inverse triangle) into coefficients in the units of the data. The scaled design has the constant 1/sqrt(rows)
- * and predictors centred and divided by their length.
+ * Rows that turn scaled coefficients (and the inverse triangle) into coefficients in the units of the data. The scaled design has the
+ * constant 1/sqrt(rows) and predictors centred and divided by their length.
  */
 export function toOriginalUnits(rows: number, predictors: readonly Scale[]): number[][] {
   const order = predictors.length + 1;
@@ -52,7 +52,10 @@ export function logScale(rows: number, predictors: readonly Scale[]): number {
   return predictors.reduce((sum, { norm }) => sum + 2 * Math.log(norm), Math.log(rows));
 }
 
-/** One row of `toOriginalUnits` in the coordinates where X'V^-1 X is the identity: its squared length times the residual variance is a variance. */
+/**
+ * One row of `toOriginalUnits` in the coordinates where X'V^-1 X is the identity: its squared length times the residual variance is a
+ * variance.
+ */
 export function whitenedRow(row: readonly number[], inverse: UpperTriangle): number[] {
   return row.map((_, k) => row.reduce((sum, factor, j) => sum + factor * (inverse.entries[k * inverse.size + j] as number), 0));
 }

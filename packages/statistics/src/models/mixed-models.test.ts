@@ -2,6 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { agreement } from '../../reference/agreement.ts';
 import { modelChecks } from '../../reference/models.checks.ts';
+import { symmetricSolver } from '../linear-algebra/solve-symmetric.ts';
 import { seededGenerator } from '../resampling/index.ts';
 import { linearRegression, randomInterceptModel, randomSlopeModel } from './index.ts';
 import { minimiseSmooth } from './minimise-smooth.ts';
@@ -111,6 +112,72 @@ describe('random intercept model', () => {
     const own = [1, 2, 3, 4].map((c) => ({ name: `cluster ${c}`, values: cluster.map((value) => (value === c ? 1 : 0)) }));
     expect(fit({ predictors: own })).toMatchObject({ reason: 'too few participants for this model (n = 10, 5 coefficients)' });
     expect(fit({ outcome: [null, ...outcome.slice(1)] })).toMatchObject({ n: 9, leftOut: { missing: 1 } });
+  });
+});
+
+describe('restricted likelihood', () => {
+  /** ln determinant and inverse of a positive definite matrix. */
+  const decomposed = (matrix: number[][]) => {
+    const solver = symmetricSolver(matrix);
+    if (solver === undefined) throw new Error('expected a positive definite matrix');
+    return { logDeterminant: solver.logDeterminant, inverse: solver.inverse() };
+  };
+
+  /** With the covariance of all rows written out: -1/2 [(N - p)(ln 2 pi s2 + 1) + ln|V| + ln|X'V^-1 X|]. */
+  function writtenOut(y: number[], x: number[][], covariance: (i: number, j: number) => number): number {
+    const { logDeterminant, inverse } = decomposed(y.map((_, i) => y.map((_, j) => covariance(i, j) + (i === j ? 1 : 0))));
+    const form = (a: number[], b: number[]): number =>
+      a.reduce((sum, value, i) => sum + value * b.reduce((inner, other, j) => inner + (inverse[i]?.[j] as number) * other, 0), 0);
+    const column = (k: number): number[] => x.map((row) => row[k] as number);
+    const order = x[0]?.length ?? 0;
+    const cross = Array.from({ length: order }, (_, k) => Array.from({ length: order }, (_, l) => form(column(k), column(l))));
+    const moment = cross.map((_, k) => form(column(k), y));
+    const { logDeterminant: ofCoefficients, inverse: crossInverse } = decomposed(cross);
+    const explained = moment.reduce(
+      (sum, value, k) => sum + value * moment.reduce((inner, other, l) => inner + (crossInverse[k]?.[l] as number) * other, 0),
+      0,
+    );
+    const df = y.length - order;
+    return -(df * (Math.log((2 * Math.PI * (form(y, y) - explained)) / df) + 1) + logDeterminant + ofCoefficients) / 2;
+  }
+
+  const cluster = [1, 1, 1, 2, 2, 3, 3, 3, 3, 4, 4, 4, 5, 5, 5, 6, 6, 6, 6];
+  const week = [0, 1, 3, 0, 2, 0, 1, 2, 4, 1, 2, 3, 0, 1, 3, 0, 1, 2, 4];
+  const outcome = [3, 6, 11, 8, 9, 1, 2, 4, 5, 9, 9, 15, 4, 4, 7, 10, 13, 15, 24];
+  const slope = { name: 'week', values: week };
+  const design = week.map((time) => [1, time]);
+  const together = (i: number, j: number): boolean => cluster[i] === cluster[j];
+
+  it('is what writing out the covariance of all rows gives, and no ratio does better', () => {
+    const model = randomInterceptModel({ outcome, predictors: [slope], cluster });
+    if (model.kind !== 'random-intercept-model') throw new Error(model.reason);
+    const ratio = model.varianceBetween / model.varianceResidual;
+    const at = (lambda: number): number => writtenOut(outcome, design, (i, j) => (together(i, j) ? lambda : 0));
+    expect(model.logLikelihood).toBeCloseTo(at(ratio), 8);
+    for (const factor of [0, 0.5, 0.99, 1.01, 2, 100]) expect(at(ratio * factor)).toBeLessThan(model.logLikelihood);
+  });
+
+  it('is what writing out the covariance of all rows gives with a slope too', () => {
+    const crossing = [3, 6, 14, 14, 15, 5, 2, 4, 1, 9, 9, 15, 1, 4, 12, 10, 13, 15, 14];
+    const model = randomSlopeModel({ outcome: crossing, slope, predictors: [], cluster });
+    if (model.kind !== 'random-slope-model') throw new Error(model.reason);
+    const { varianceIntercept: a, covariance: b, varianceSlope: c, varianceResidual } = model;
+    const at = (fa: number, fb: number, fc: number): number =>
+      writtenOut(crossing, design, (i, j) => {
+        const [t, u] = [week[i] as number, week[j] as number];
+        return together(i, j) ? (a * fa + b * fb * (t + u) + c * fc * t * u) / varianceResidual : 0;
+      });
+    expect(model.logLikelihood).toBeCloseTo(at(1, 1, 1), 8);
+    for (const [fa, fb, fc] of [
+      [1.02, 1, 1],
+      [0.98, 1, 1],
+      [1, 1.05, 1],
+      [1, 0.95, 1],
+      [1, 1, 1.02],
+      [1, 1, 0.98],
+    ] as const) {
+      expect(at(fa, fb, fc)).toBeLessThan(model.logLikelihood + 1e-9);
+    }
   });
 });
 

@@ -10,8 +10,8 @@ export interface Predictor {
 }
 
 /**
- * One column of 0 and 1 for each level but the first, which is the reference (treatment coding). A missing label stays missing; a label that is
- * not among the levels is a mistake of the caller.
+ * One column of 0 and 1 for each level but the first, which is the reference (treatment coding). A missing label stays missing; a label
+ * that is not among the levels is a mistake of the caller.
  */
 export function indicatorPredictors(name: string, labels: ArrayLike<Label>, levels: readonly string[]): Predictor[] {
   const known = new Set(levels);

@@ -1,12 +1,13 @@
 /**
- * Restricted likelihood of the model y = X b + cluster effect + residual as a function of one number, lambda = variance between clusters /
- * residual variance. The rows are taken apart once into deviations from their cluster's mean and the means themselves; each part is
+ * Restricted likelihood of the model y = X b + cluster effect + residual as a function of one number, lambda = variance between clusters
+ * / residual variance. The rows are taken apart once into deviations from their cluster's mean and the means themselves; each part is
  * reduced to a small triangle (means by cluster size), and after that a value of lambda costs a QR of a few stacked triangles, however
  * many people there are:
  *
  *   X'V^-1 X = X'X within + sum over sizes n of (n means'means)_n / (1 + n lambda).
  *
- * Source: Pinheiro & Bates (2000), Mixed-Effects Models in S and S-PLUS, section 2.2 (profiled restricted likelihood, orthogonal-triangular form).
+ * Source: Pinheiro & Bates (2000), Mixed-Effects Models in S and S-PLUS, section 2.2 (profiled restricted likelihood,
+ * orthogonal-triangular form).
  */
 
 import { centredColumn } from '../linear-algebra/centred-column.ts';
@@ -96,7 +97,10 @@ export function clusteredDesign(
   };
 }
 
-/** Turns `unit` into deviations from the cluster means, exactly zero where the recorded values of a cluster are all equal; answers whether any differ. */
+/**
+ * Turns `unit` into deviations from the cluster means, exactly zero where the recorded values of a cluster are all equal; answers whether
+ * any differ.
+ */
 function takeOutClusterMeans(recorded: Float64Array, unit: Float64Array, means: Float64Array, codes: Int32Array): boolean {
   const firstOfCluster = new Float64Array(means.length).fill(NaN);
   const varies = new Uint8Array(means.length);
@@ -225,7 +229,8 @@ export function curvatureAt(design: ClusteredDesign, fit: RestrictedLikelihood):
       }
     }
   }
-  // The coefficients follow lambda: what they gain is the Schur complement of the second derivatives by them (2 X'V^-1 X, here twice the identity).
+  // The coefficients follow lambda: what they gain is the Schur complement of the second derivatives by them (2 X'V^-1 X, here twice the
+  // identity).
   const profiledBend = residualBend - sumOfSquares(crossed) / 2;
   const squaredTrace = inverseSlope.reduce((sum, row) => sum + sumOfSquares(row), 0);
   return {

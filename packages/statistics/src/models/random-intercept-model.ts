@@ -1,14 +1,14 @@
 /**
- * Linear model with a random intercept for each cluster (a participant seen several times, or a site with several participants), by restricted
- * maximum likelihood (REML). The one variance ratio is found as the root of the derivative of the profiled restricted likelihood; a ratio of 0
- * is a result ("no variation between clusters detected") and not a failure.
+ * Linear model with a random intercept for each cluster (a participant seen several times, or a site with several participants), by
+ * restricted maximum likelihood (REML). The one variance ratio is found as the root of the derivative of the profiled restricted
+ * likelihood; a ratio of 0 is a result ("no variation between clusters detected") and not a failure.
  *
  * Degrees of freedom of t: the inner-outer rule, Satterthwaite's beside it.
  *
  * Needs at least 5 clusters, some with more than one row.
  *
- * Source: Pinheiro & Bates (2000) Mixed-Effects Models in S and S-PLUS, sections 2.2 to 2.4; Satterthwaite (1946) Biometrics Bull 2:110-114
- * with the curvature of the restricted likelihood by the variances; shrinkage Robinson (1991) Stat Sci 6:15-32.
+ * Source: Pinheiro & Bates (2000) Mixed-Effects Models in S and S-PLUS, sections 2.2 to 2.4; Satterthwaite (1946) Biometrics Bull
+ * 2:110-114 with the curvature of the restricted likelihood by the variances; shrinkage Robinson (1991) Stat Sci 6:15-32.
  */
 
 import type { Label } from '../complete-rows.ts';

@@ -1,12 +1,13 @@
 /**
- * Restricted likelihood of y = X b + (1, t) u + residual, u = two random effects for each cluster with any covariance, as a function of the lower triangle L of
- * their relative covariance (covariance / residual variance = L L').
+ * Restricted likelihood of y = X b + (1, t) u + residual, u = two random effects for each cluster with any covariance, as a function of
+ * the lower triangle L of their relative covariance (covariance / residual variance = L L').
  *
- * Within a cluster, rotating by the QR decomposition of (1, t) = Q R leaves two rows C that L touches and the rest that it does not; the rest of all clusters is
- * reduced to one triangle once. Clusters seen at the same times share R, so their C are stacked and reduced together. A value of L then costs, for each pattern
- * of times, a Cholesky decomposition K K' = I + R L L' R' and the rows K^-1 C.
+ * Within a cluster, rotating by the QR decomposition of (1, t) = Q R leaves two rows C that L touches and the rest that it does not; the
+ * rest of all clusters is reduced to one triangle once. Clusters seen at the same times share R, so their C are stacked and reduced
+ * together. A value of L then costs, for each pattern of times, a Cholesky decomposition K K' = I + R L L' R' and the rows K^-1 C.
  *
- * Source: Pinheiro & Bates (2000) Mixed-Effects Models in S and S-PLUS, section 2.2.3; Bates et al. (2015) J Stat Softw 67(1), section 3 (profiled criterion).
+ * Source: Pinheiro & Bates (2000) Mixed-Effects Models in S and S-PLUS, section 2.2.3; Bates et al. (2015) J Stat Softw 67(1), section 3
+ * (profiled criterion).
  */
 
 import type { UpperTriangle } from '../linear-algebra/orthogonal-triangle.ts';

@@ -1,6 +1,6 @@
 /**
- * Linear model in which each cluster (participant) has its own intercept and its own slope on one predictor (time), with any correlation of the two, by
- * restricted maximum likelihood (REML). Degrees of freedom of t by the inner-outer rule.
+ * Linear model in which each cluster (participant) has its own intercept and its own slope on one predictor (time), with any correlation
+ * of the two, by restricted maximum likelihood (REML). Degrees of freedom of t by the inner-outer rule.
  *
  * Needs at least 5 clusters and more rows than the two random effects of all clusters together.
  *

@@ -1,6 +1,6 @@
 /**
- * One estimate from the m analyses of a data set whose gaps were filled m times: total variance = within + (1 + 1/m) between, t with the degrees of freedom of
- * Barnard and Rubin, which never exceed those of the complete data.
+ * One estimate from the m analyses of a data set whose gaps were filled m times: total variance = within + (1 + 1/m) between, t with the
+ * degrees of freedom of Barnard and Rubin, which never exceed those of the complete data.
  * Source: Rubin (1987) Multiple Imputation for Nonresponse in Surveys, chapter 3; Barnard & Rubin (1999) Biometrika 86:948-955.
  */
 

@@ -1,6 +1,7 @@
 /**
- * Percentile interval of any statistic by drawing participants with return. The limits are order statistics, the (B + 1) p-th of the B resampled values, so B
- * is chosen to make that a whole number (1999 or 9999 for 95 %). The generator is seeded, and seed and B are part of the answer.
+ * Percentile interval of any statistic by drawing participants with return. The limits are order statistics, the (B + 1) p-th of the B
+ * resampled values, so B is chosen to make that a whole number (1999 or 9999 for 95 %). The generator is seeded, and seed and B are part
+ * of the answer.
  *
  * Source: Davison & Hinkley (1997) Bootstrap Methods and their Application, section 5.3.1.
  */
@@ -13,7 +14,10 @@ import { seededGenerator } from './seeded-generator.ts';
 export interface BootstrapInput {
   /** Participants to draw from. */
   readonly n: number;
-  /** The statistic of the participants whose places, from 0 to n - 1, are listed; a place may be listed more than once. The list is used again: do not keep it. */
+  /**
+   * The statistic of the participants whose places, from 0 to n - 1, are listed; a place may be listed more than once. The list is used
+   * again: do not keep it.
+   */
   readonly statistic: (places: Int32Array) => number;
   readonly seed: number;
   readonly replicates?: number;

@@ -1,6 +1,7 @@
 /**
  * Draws a hypergeometric count by inversion from the mode outwards, so that the work grows with the spread and not with the counts.
- * Source: Kachitvichyanukul & Schmeiser (1985) J Stat Comput Simul 22:127-145 (inversion); the mode as in Johnson, Kemp & Kotz (2005), section 6.2.
+ * Source: Kachitvichyanukul & Schmeiser (1985) J Stat Comput Simul 22:127-145 (inversion); the mode as in Johnson, Kemp & Kotz (2005),
+ * section 6.2.
  */
 
 import { hypergeometricMass } from '../distributions/hypergeometric.ts';

@@ -1,9 +1,9 @@
 /**
- * Where the figure of a site of n people is expected around the registry's value: exact binomial limits for a proportion, interpolated between counts so that
- * they are smooth in n, and normal limits for a mean.
+ * Where the figure of a site of n people is expected around the registry's value: exact binomial limits for a proportion, interpolated
+ * between counts so that they are smooth in n, and normal limits for a mean.
  *
- * Source: Spiegelhalter (2005) Stat Med 24:1185-1202. For a proportion: r = smallest count with P(X <= r) >= p, limit = (r - (P(X <= r) - p)/P(X = r))/n,
- * clipped to 0 and 1.
+ * Source: Spiegelhalter (2005) Stat Med 24:1185-1202. For a proportion: r = smallest count with P(X <= r) >= p, limit = (r - (P(X <= r) -
+ * p)/P(X = r))/n, clipped to 0 and 1.
  */
 
 import { binomialMass, binomialQuantile, binomialTails } from '../distributions/binomial.ts';

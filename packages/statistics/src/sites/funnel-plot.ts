@@ -1,6 +1,6 @@
 /**
- * Funnel plot: each site against the registry's value with 95% and 99.8% limits. Where at least ten sites spread more than chance explains, the limits are
- * widened by the root of the overdispersion phi = mean z^2 and the answer says so.
+ * Funnel plot: each site against the registry's value with 95% and 99.8% limits. Where at least ten sites spread more than chance
+ * explains, the limits are widened by the root of the overdispersion phi = mean z^2 and the answer says so.
  *
  * A site outside the 99.8% limits "differs from the registry value more than chance explains"; it is never ranked and never called worse.
  *

@@ -1,6 +1,6 @@
 /**
- * Intraclass correlation of people within sites by one-way analysis of variance, sites of unequal size: the share of all variance that lies between sites,
- * set to 0 where the sites differ less than people within them do.
+ * Intraclass correlation of people within sites by one-way analysis of variance, sites of unequal size: the share of all variance that
+ * lies between sites, set to 0 where the sites differ less than people within them do.
  * Source: Donner (1986) Int Stat Rev 54:67-82 (analysis of variance estimator); n0 = (N - sum n^2/N)/(k - 1). Needs at least 5 sites.
  */
 

@@ -1,6 +1,7 @@
 /**
- * One figure from the estimates of several sites that may differ in truth: DerSimonian-Laird variance between sites, interval and test by Hartung and
- * Knapp (t with k - 1 degrees of freedom), prediction interval for a further site (t with k - 2), and each site's estimate drawn towards the pooled one.
+ * One figure from the estimates of several sites that may differ in truth: DerSimonian-Laird variance between sites, interval and test by
+ * Hartung and Knapp (t with k - 1 degrees of freedom), prediction interval for a further site (t with k - 2), and each site's estimate
+ * drawn towards the pooled one.
  *
  * Fewer than three sites are not pooled. A site without a positive standard error has no weight and is left out, which the answer says.
  *

@@ -1,13 +1,15 @@
 /**
- * Intraclass correlations for the reliability of ratings: every participant rated by the same raters, or measured at the same occasions. The six forms of
- * Shrout and Fleiss with their limits and F tests.
+ * Intraclass correlations for the reliability of ratings: every participant rated by the same raters, or measured at the same occasions.
+ * The six forms of Shrout and Fleiss with their limits and F tests.
  *
- * (1,·): raters differ from participant to participant. (2,·): raters are a sample of all raters (absolute agreement). (3,·): these raters only
- * (consistency). (·,1): one rating; (·,k): the mean of the k ratings. ICC(2,1) is the one to print for a measure used by many raters.
+ * (1,·): raters differ from participant to participant. (2,·): raters are a sample of all raters (absolute agreement). (3,·): these
+ * raters only (consistency). (·,1): one rating; (·,k): the mean of the k ratings. ICC(2,1) is the one to print for a measure used by many
+ * raters.
  *
  * The lower limit of ICC(2,k) is -Infinity where that of ICC(2,1) leaves the mean of k ratings no variance.
  *
- * Source: Shrout & Fleiss (1979) Psychol Bull 86:420-428. Needs at least 5 participants and 2 raters; incomplete participants are left out.
+ * Source: Shrout & Fleiss (1979) Psychol Bull 86:420-428. Needs at least 5 participants and 2 raters; incomplete participants are left
+ * out.
  */
 
 import { completeRows } from '../complete-rows.ts';

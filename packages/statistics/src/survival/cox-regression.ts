@@ -1,11 +1,12 @@
 /**
- * Proportional hazards regression by partial likelihood with Efron's treatment of tied events: Newton steps with halving. Hazard ratios with Wald
- * intervals, score and likelihood ratio tests of all covariates.
+ * Proportional hazards regression by partial likelihood with Efron's treatment of tied events: Newton steps with halving. Hazard ratios
+ * with Wald intervals, score and likelihood ratio tests of all covariates.
  *
- * Where some combination of covariates is highest (or lowest) at every event the likelihood has no maximum: the linear predictor keeps moving by
- * about one at every step instead of settling, and the answer says so.
+ * Where some combination of covariates is highest (or lowest) at every event the likelihood has no maximum: the linear predictor keeps
+ * moving by about one at every step instead of settling, and the answer says so.
  *
- * Source: Cox (1972) J R Stat Soc B 34:187-220; Efron (1977) J Am Stat Assoc 72:557-565; Therneau & Grambsch (2000) Modeling Survival Data, ch. 3.
+ * Source: Cox (1972) J R Stat Soc B 34:187-220; Efron (1977) J Am Stat Assoc 72:557-565; Therneau & Grambsch (2000) Modeling Survival
+ * Data, ch. 3.
  */
 
 import type { CentredColumn } from '../linear-algebra/centred-column.ts';

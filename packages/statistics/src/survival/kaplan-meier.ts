@@ -1,9 +1,9 @@
 /**
- * Kaplan-Meier curve with Greenwood's standard error and intervals on the scale log(-log S). Events at a time come before the ends of watching at
- * the same time. At S = 1 the interval is 1 to 1; at S = 0 the standard error and the interval do not exist and are left out.
+ * Kaplan-Meier curve with Greenwood's standard error and intervals on the scale log(-log S). Events at a time come before the ends of
+ * watching at the same time. At S = 1 the interval is 1 to 1; at S = 0 the standard error and the interval do not exist and are left out.
  *
- * Source: Kaplan & Meier (1958) J Am Stat Assoc 53:457-481; Kalbfleisch & Prentice (2002) The Statistical Analysis of Failure Time Data, 2nd
- * ed., section 1.4 (interval); quantiles and their limits as Brookmeyer & Crowley (1982) Biometrics 38:29-41 on that scale.
+ * Source: Kaplan & Meier (1958) J Am Stat Assoc 53:457-481; Kalbfleisch & Prentice (2002) The Statistical Analysis of Failure Time Data,
+ * 2nd ed., section 1.4 (interval); quantiles and their limits as Brookmeyer & Crowley (1982) Biometrics 38:29-41 on that scale.
  */
 
 import { normalMultiplier } from '../distributions/normal.ts';

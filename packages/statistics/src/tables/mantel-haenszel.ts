@@ -1,7 +1,7 @@
 /**
  * Common odds ratio of a 2 x 2 table over strata and the test that it is 1, without continuity correction.
- * Estimate: Mantel & Haenszel (1959) J Natl Cancer Inst 22:719-748. Interval: variance of Robins, Breslow & Greenland (1986) Biometrics 42:311-323.
- * Strata with an empty margin carry no information on the odds ratio and are passed over, as in R's mantelhaen.test.
+ * Estimate: Mantel & Haenszel (1959) J Natl Cancer Inst 22:719-748. Interval: variance of Robins, Breslow & Greenland (1986) Biometrics
+ * 42:311-323. Strata with an empty margin carry no information on the odds ratio and are passed over, as in R's mantelhaen.test.
  */
 
 import { normalMultiplier } from '../distributions/normal.ts';
