@@ -19,6 +19,12 @@ export interface PageEntry {
 export const pages: readonly PageEntry[] = [
   { path: '/', audience: 'anyone', nav: 'At a glance', load: () => import('../features/public/glance-page.tsx') },
   { path: '/participants', audience: 'anyone', nav: 'For participants', load: () => import('../features/public/participants-page.tsx') },
+  {
+    path: '/month',
+    audience: ['coordinator', 'therapist'],
+    nav: 'This month',
+    load: () => import('../features/submissions/month-page.tsx'),
+  },
   { path: '/dictionary', audience: 'anyone', nav: 'Dictionary', load: () => import('../features/dictionary/dictionary-page.tsx') },
   { path: '/dictionary/measures/:key', audience: 'anyone', load: () => import('../features/dictionary/measure-page.tsx') },
   { path: '/dictionary/:table/:column', audience: 'anyone', load: () => import('../features/dictionary/variable-page.tsx') },
@@ -27,6 +33,22 @@ export const pages: readonly PageEntry[] = [
     audience: ['researcher', 'steward', 'coordinator', 'therapist'],
     nav: 'Explore',
     load: () => import('../features/explore/explore-page.tsx'),
+  },
+  {
+    path: '/submit/:submissionId',
+    audience: ['coordinator', 'therapist', 'steward'],
+    load: () => import('../features/submissions/submit-page.tsx'),
+  },
+  {
+    path: '/submissions',
+    audience: ['coordinator', 'therapist', 'steward'],
+    nav: 'Submissions',
+    load: () => import('../features/submissions/submissions-page.tsx'),
+  },
+  {
+    path: '/submissions/:submissionId/receipt',
+    audience: ['coordinator', 'therapist', 'steward'],
+    load: () => import('../features/submissions/receipt-page.tsx'),
   },
   { path: '/sign-in', audience: 'anyone', load: () => import('../features/account/sign-in-page.tsx') },
   { path: '/invitation/:token', audience: 'anyone', load: () => import('../features/account/invitation-page.tsx') },

@@ -1,0 +1,55 @@
+/** Read and prepare: the month's files, chosen, each given its table, and sent. */
+import type { Submission } from '@cairnstep/contract';
+import { formatMonth } from '../../lib/format.ts';
+import { FileDrop } from '../../ui/file-drop.tsx';
+import { Notice } from '../../ui/notice.tsx';
+import { Section } from '../../ui/page.tsx';
+import type { Outgoing } from './outgoing-files.ts';
+import { OutgoingList } from './outgoing-list.tsx';
+import { SentFiles } from './sent-files.tsx';
+
+export interface FilesSectionProps {
+  readonly submission: Submission;
+  readonly outgoing: Outgoing;
+  readonly isOpen: boolean;
+}
+
+export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps) {
+  return (
+    <Section
+      title="Files"
+      id="files"
+      note={
+        <>
+          <p>One CSV file a table, with the columns of the template. Which table a file is of is read from its name; you can change it.</p>
+          <p>
+            A table without a file stays as it is. In a file that you send, rows of this month that the registry has and the file has not
+            are removed, after you have seen them. People and consents are only added or changed.
+          </p>
+          <p>Participant codes and study days only: no names, no record numbers, no dates.</p>
+        </>
+      }
+    >
+      <div className="grid gap-6">
+        <Notice kind="warning" title="Serious events go to the clinic first.">
+          <p>
+            Autonomic dysreflexia, a fall with injury, a fracture or skin breakdown: follow the clinic’s emergency and reporting protocol
+            before you enter it here. The registry alerts nobody.
+          </p>
+        </Notice>
+        {isOpen && (
+          <FileDrop
+            label={`CSV files of ${formatMonth(submission.month)}`}
+            hint="All tables of the month at once, or one by one."
+            accept={['.csv']}
+            multiple
+            isDisabled={outgoing.isSending}
+            onFiles={outgoing.add}
+          />
+        )}
+        <OutgoingList outgoing={outgoing} held={submission.files.map(({ table }) => table)} />
+        <SentFiles submission={submission} isOpen={isOpen && !outgoing.isSending} onChoose={outgoing.add} />
+      </div>
+    </Section>
+  );
+}

@@ -1,0 +1,100 @@
+/** Files chosen in this browser that the registry does not have yet. */
+import { useCallback, useEffect, useRef, useState } from 'react';
+import { recogniseTable } from './recognise-table.ts';
+import { useSendFile } from './submissions.queries.ts';
+import type { TableKey } from './submissions.queries.ts';
+
+export interface OutgoingFile {
+  readonly id: number;
+  readonly file: File;
+  /** `null`: its name does not tell; the reader has to. */
+  readonly table: TableKey | null;
+  /** How much has left, from 0 to 1; `null` while it waits. */
+  readonly sent: number | null;
+  readonly error: unknown;
+}
+
+export interface Outgoing {
+  readonly files: readonly OutgoingFile[];
+  readonly isSending: boolean;
+  /** `table`: what the reader said the files are of; without it their names decide. */
+  readonly add: (files: readonly File[], table?: TableKey) => void;
+  readonly move: (id: number, table: TableKey) => void;
+  readonly leaveOut: (id: number) => void;
+  /** One after the other; a file that fails stays here with its reason. Resolves to how many arrived. */
+  readonly send: () => Promise<number>;
+  readonly stop: () => void;
+}
+
+export function useOutgoingFiles(submissionId: string): Outgoing {
+  const [files, setFiles] = useState<readonly OutgoingFile[]>([]);
+  const [control, setControl] = useState<AbortController | null>(null);
+  const nextId = useRef(0);
+  const { mutateAsync } = useSendFile(submissionId);
+
+  const add = useCallback((chosen: readonly File[], table?: TableKey) => {
+    const added = chosen.map((file) => ({
+      id: nextId.current++,
+      file,
+      table: table ?? recogniseTable(file.name),
+      sent: null,
+      error: null,
+    }));
+    // The same file chosen again takes the place of its earlier self.
+    setFiles((before) => [...before.filter(({ file }) => !chosen.some(({ name }) => name === file.name)), ...added]);
+  }, []);
+  const change = useCallback(
+    (id: number, to: Partial<OutgoingFile>) => setFiles((before) => before.map((file) => (file.id === id ? { ...file, ...to } : file))),
+    [],
+  );
+  const leaveOut = useCallback((id: number) => setFiles((before) => before.filter((file) => file.id !== id)), []);
+
+  useStayOnPage(control !== null);
+
+  async function send(): Promise<number> {
+    const sending = new AbortController();
+    setControl(sending);
+    let arrived = 0;
+    for (const { id, table, file } of files) {
+      if (table === null || sending.signal.aborted) continue;
+      change(id, { sent: 0, error: null });
+      try {
+        await mutateAsync({ table, file, signal: sending.signal, onSent: (sent) => change(id, { sent }) });
+        leaveOut(id);
+        arrived += 1;
+      } catch (error) {
+        change(id, { sent: null, error: sending.signal.aborted ? null : error });
+      }
+    }
+    setControl(null);
+    return arrived;
+  }
+
+  return {
+    files,
+    isSending: control !== null,
+    add,
+    move: (id, table) => change(id, { table, error: null }),
+    leaveOut,
+    send,
+    stop: () => control?.abort(),
+  };
+}
+
+/** The browser asks before the page is closed on a file that is on its way. */
+function useStayOnPage(needed: boolean): void {
+  useEffect(() => {
+    if (!needed) return;
+    const ask = (event: BeforeUnloadEvent) => event.preventDefault();
+    window.addEventListener('beforeunload', ask);
+    return () => window.removeEventListener('beforeunload', ask);
+  }, [needed]);
+}
+
+/** What keeps these files from being sent, in words; `null` when nothing does. */
+export function obstacleOf(files: readonly OutgoingFile[]): string | null {
+  const without = files.find(({ table }) => table === null);
+  if (without !== undefined) return `Choose the table of ${without.file.name}.`;
+  const twice = files.find(({ id, table }) => files.some((other) => other.id !== id && other.table === table));
+  return twice === undefined ? null : `Two files are for the same table. Move one of them, or leave it out.`;
+}

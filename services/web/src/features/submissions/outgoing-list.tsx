@@ -1,0 +1,90 @@
+/** The files about to be sent: each with the table it is of, and how far it has come. */
+import { formatBytes, formatCount } from '../../lib/format.ts';
+import { announce } from '../../ui/announcer.tsx';
+import { Button } from '../../ui/button.tsx';
+import { ErrorNotice } from '../../ui/error-notice.tsx';
+import { Progress } from '../../ui/progress.tsx';
+import { Select } from '../../ui/select.tsx';
+import { obstacleOf } from './outgoing-files.ts';
+import type { Outgoing, OutgoingFile } from './outgoing-files.ts';
+import type { TableKey } from './submissions.queries.ts';
+import { tableName, tables } from './table-names.ts';
+
+const options = tables.map(({ key, name }) => ({ value: key, label: name }));
+
+export interface OutgoingListProps {
+  readonly outgoing: Outgoing;
+  /** Tables the registry has a file of. */
+  readonly held: readonly TableKey[];
+}
+
+export function OutgoingList({ outgoing, held }: OutgoingListProps) {
+  const { files, isSending } = outgoing;
+  const obstacle = obstacleOf(files);
+  if (files.length === 0) return null;
+
+  async function send(): Promise<void> {
+    const arrived = await outgoing.send();
+    announce(`${formatCount(arrived, 'file')} of ${formatCount(files.length, 'file')} arrived.`);
+  }
+
+  return (
+    <div className="grid gap-3 border-l-4 border-lichen pl-4">
+      <h3 className="font-semibold">Not sent yet</h3>
+      <ul aria-label="Files not sent yet">
+        {files.map((file) => (
+          <OneFile key={file.id} file={file} outgoing={outgoing} replaces={file.table !== null && held.includes(file.table)} />
+        ))}
+      </ul>
+      {obstacle !== null && <p className="font-semibold text-amber">{obstacle}</p>}
+      <div className="flex flex-wrap gap-3">
+        <Button variant="primary" isPending={isSending} isDisabled={obstacle !== null && !isSending} onPress={() => void send()}>
+          {isSending ? 'Sending' : `Send ${formatCount(files.length, 'file')}`}
+        </Button>
+        {isSending && <Button onPress={outgoing.stop}>Stop sending</Button>}
+      </div>
+    </div>
+  );
+}
+
+interface OneFileProps {
+  readonly file: OutgoingFile;
+  readonly outgoing: Outgoing;
+  readonly replaces: boolean;
+}
+
+function OneFile({ file: { id, file, table, sent, error }, outgoing, replaces }: OneFileProps) {
+  return (
+    <li className="grid gap-2 border-t border-hairline py-3">
+      <p>
+        <span className="font-semibold break-all">{file.name}</span> <span className="numbers text-quiet">{formatBytes(file.size)}</span>
+      </p>
+      {sent === null ? (
+        <div className="flex flex-wrap items-end gap-x-4 gap-y-2">
+          <div className="w-full max-w-56">
+            <Select
+              id={`table-of-${id}`}
+              label={`Table of ${file.name}`}
+              value={table}
+              options={options}
+              onChange={(key) => outgoing.move(id, key as TableKey)}
+            />
+          </div>
+          <Button variant="quiet" onPress={() => outgoing.leaveOut(id)} aria-label={`Leave out ${file.name}`}>
+            Leave out
+          </Button>
+        </div>
+      ) : (
+        <Progress
+          label={`Sending ${file.name}`}
+          part={sent}
+          words={`${formatBytes(Math.round(file.size * sent))} of ${formatBytes(file.size)}`}
+        />
+      )}
+      {replaces && table !== null && sent === null && (
+        <p className="text-small">Takes the place of the file of {tableName(table).toLowerCase()} that was sent before.</p>
+      )}
+      {error !== null && <ErrorNotice error={error} />}
+    </li>
+  );
+}

@@ -1,0 +1,86 @@
+/** Why the warnings of one rule stand: asked for once, kept with the submission, printed on the receipt. */
+import { acknowledgeFindings } from '@cairnstep/contract';
+import type { Submission } from '@cairnstep/contract';
+import { useState } from 'react';
+import { announce } from '../../ui/announcer.tsx';
+import { Button } from '../../ui/button.tsx';
+import { ErrorNotice } from '../../ui/error-notice.tsx';
+import { Form } from '../../ui/form.tsx';
+import { TextArea } from '../../ui/text-field.tsx';
+import { useAcknowledge } from './submissions.queries.ts';
+
+/** What was typed, by rule; it outlives a check, which begins the findings anew. */
+export interface ReasonDrafts {
+  readonly of: (rule: string) => string | undefined;
+  readonly write: (rule: string, reason: string) => void;
+}
+
+export interface ReasonFormProps {
+  readonly submissionId: string;
+  readonly group: Submission['findings'][number];
+  readonly drafts: ReasonDrafts;
+}
+
+const longest = 500;
+
+export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, drafts }: ReasonFormProps) {
+  const acknowledge = useAcknowledge(submissionId);
+  const [isOpen, setOpen] = useState(acknowledgedReason === null);
+  const [attempt, setAttempt] = useState(0);
+  const reason = drafts.of(rule) ?? acknowledgedReason ?? '';
+  const problem = attempt > 0 ? problemOf(reason) : undefined;
+
+  function keep(): void {
+    setAttempt(attempt + 1);
+    if (problemOf(reason) !== undefined) return;
+    acknowledge.mutate(
+      { rule, reason },
+      {
+        onSuccess: () => {
+          setAttempt(0);
+          setOpen(false);
+          announce(`The reason for rule ${rule} is kept.`);
+        },
+      },
+    );
+  }
+
+  if (!isOpen && acknowledgedReason !== null) {
+    return (
+      <p className="max-w-2xl">
+        <span className="text-quiet">Your reason: </span>
+        {acknowledgedReason}{' '}
+        <Button variant="quiet" onPress={() => setOpen(true)} aria-label={`Change the reason for rule ${rule}`}>
+          Change
+        </Button>
+      </p>
+    );
+  }
+  const fieldId = `reason-${rule}`;
+  return (
+    <Form onSubmit={keep} attempt={attempt} problems={problem === undefined ? [] : [{ fieldId, message: problem }]}>
+      <TextArea
+        id={fieldId}
+        label="Why these stand"
+        hint="A few words about what happened. Nothing that could tell who it was."
+        rows={2}
+        maxLength={longest}
+        isRequired
+        value={reason}
+        onChange={(words) => drafts.write(rule, words)}
+        error={problem}
+      />
+      {acknowledge.isError && <ErrorNotice error={acknowledge.error} />}
+      <div>
+        <Button type="submit" isPending={acknowledge.isPending}>
+          Keep this reason<span className="sr-only"> for rule {rule}</span>
+        </Button>
+      </div>
+    </Form>
+  );
+}
+
+function problemOf(reason: string): string | undefined {
+  const parsed = acknowledgeFindings.body?.shape.reason.safeParse(reason);
+  return parsed?.error?.issues[0]?.message;
+}

@@ -1,0 +1,122 @@
+/** What the pages of a month ask and tell the registry. Every change answers with the submission as it then is. */
+import {
+  acknowledgeFindings,
+  checkSubmission,
+  commitSubmission,
+  discardSubmission,
+  getReceipt,
+  getSubmission,
+  listChanges,
+  listFindings,
+  listMonths,
+  listSubmissions,
+  openSubmission,
+  putSubmissionFile,
+  removeSubmissionFile,
+} from '@cairnstep/contract';
+import type { CallOf, Submission } from '@cairnstep/contract';
+import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import type { QueryClient } from '@tanstack/react-query';
+import { call } from '../../lib/call.ts';
+
+export type TableKey = Submission['files'][number]['table'];
+
+const everything = ['submissions'];
+const keyOf = (submissionId: string) => [...everything, 'one', submissionId];
+
+export const monthsQuery = (siteId: string) =>
+  queryOptions({
+    queryKey: [...everything, 'months', siteId],
+    queryFn: ({ signal }) => call(listMonths, { siteId }, { signal }),
+  });
+
+export const submissionsQuery = (siteId: string, page: number) =>
+  queryOptions({
+    queryKey: [...everything, 'list', siteId, page],
+    queryFn: ({ signal }) => call(listSubmissions, { siteId, page }, { signal }),
+    placeholderData: keepPreviousData,
+  });
+
+const whileChecking = 1_000;
+
+/** Asked again and again while the files are being checked. */
+export const submissionQuery = (submissionId: string) =>
+  queryOptions({
+    queryKey: keyOf(submissionId),
+    queryFn: ({ signal }) => call(getSubmission, { submissionId }, { signal }),
+    refetchInterval: ({ state }) => (state.data?.status === 'checking' ? whileChecking : false),
+  });
+
+export type FindingFilter = Omit<CallOf<typeof listFindings>, 'submissionId' | 'page'>;
+
+/** Findings and changes belong to one check: a later one replaces them, so they are asked for whenever they are shown. */
+export const findingsQuery = (submissionId: string, filter: FindingFilter, page: number) =>
+  queryOptions({
+    queryKey: [...keyOf(submissionId), 'findings', filter, page],
+    queryFn: ({ signal }) => call(listFindings, { submissionId, ...filter, page }, { signal }),
+    placeholderData: keepPreviousData,
+    staleTime: 0,
+  });
+
+export const changesQuery = (submissionId: string, table: TableKey, kind: ChangeKind, page: number) =>
+  queryOptions({
+    queryKey: [...keyOf(submissionId), 'changes', table, kind, page],
+    queryFn: ({ signal }) => call(listChanges, { submissionId, table, kind, page }, { signal }),
+    staleTime: 0,
+  });
+export type ChangeKind = CallOf<typeof listChanges>['kind'];
+
+export const receiptQuery = (submissionId: string) =>
+  queryOptions({
+    queryKey: [...everything, 'receipt', submissionId],
+    queryFn: ({ signal }) => call(getReceipt, { submissionId }, { signal }),
+    staleTime: Infinity,
+  });
+
+/** Keeps the submission as it now is; lists that tell of it are asked anew when they are next shown. */
+function keep(cache: QueryClient, submission: Submission): void {
+  cache.setQueryData(submissionQuery(submission.id).queryKey, submission);
+  void cache.invalidateQueries({ queryKey: [...everything, 'months'] });
+  void cache.invalidateQueries({ queryKey: [...everything, 'list'] });
+}
+
+function useChange<Input>(change: (input: Input) => Promise<Submission>) {
+  const cache = useQueryClient();
+  return useMutation({ mutationFn: change, onSuccess: (submission) => keep(cache, submission) });
+}
+
+export const useOpenSubmission = () => useChange((month: CallOf<typeof openSubmission>) => call(openSubmission, month));
+
+export const useRemoveFile = (submissionId: string) => useChange((table: TableKey) => call(removeSubmissionFile, { submissionId, table }));
+
+export const useCheck = (submissionId: string) => useChange((_: void) => call(checkSubmission, { submissionId }));
+
+export const useAcknowledge = (submissionId: string) =>
+  useChange(({ rule, reason }: { readonly rule: string; readonly reason: string }) =>
+    call(acknowledgeFindings, { submissionId, rule, reason }),
+  );
+
+export const useDiscard = (submissionId: string) => useChange((_: void) => call(discardSubmission, { submissionId }));
+
+export interface FileToSend {
+  readonly table: TableKey;
+  readonly file: File;
+  readonly signal: AbortSignal;
+  readonly onSent: (part: number) => void;
+}
+
+export const useSendFile = (submissionId: string) =>
+  useChange(({ table, file, signal, onSent }: FileToSend) =>
+    call(putSubmissionFile, { submissionId, table, fileName: file.name }, { file, signal, onSent }),
+  );
+
+export function useCommit(submissionId: string) {
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: (previewDigest: string) => call(commitSubmission, { submissionId, previewDigest }),
+    onSuccess: (receipt) => {
+      cache.setQueryData(receiptQuery(submissionId).queryKey, receipt);
+      void cache.invalidateQueries({ queryKey: everything, refetchType: 'none' });
+    },
+  });
+}

@@ -1,0 +1,17 @@
+/** Tables and columns as the dictionary names them. */
+import { tableOf, tableKeys } from '@cairnstep/dictionary';
+import type { TableKey } from './submissions.queries.ts';
+
+/** In the order in which the tables refer to each other. */
+export const tables = tableKeys.map((key) => ({ key, name: tableOf(key).name }));
+
+export const tableName = (key: TableKey): string => tableOf(key).name;
+
+/** "Distance, m"; the key itself for a column no table has. */
+export function columnName(table: TableKey, key: string): string {
+  const variable = tableOf(table).variables.find((known) => known.key === key);
+  if (variable === undefined) return key;
+  return variable.unit === undefined || variable.unit === '1' ? variable.name : `${variable.name}, ${variable.unit}`;
+}
+
+export const isColumn = (table: TableKey, key: string): boolean => tableOf(table).variables.some((known) => known.key === key);
