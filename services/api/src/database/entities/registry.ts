@@ -33,7 +33,12 @@ function columnsOf(table: Table, staged: boolean): Record<string, EntitySchemaCo
 }
 
 const schemaOf = (table: Table, staged: boolean) =>
-  new EntitySchema({ name: `${staged ? 'staged_' : ''}${table.key}`, tableName: `${staged ? 'staged_' : ''}${table.key}`, columns: columnsOf(table, staged) });
+  new EntitySchema({
+    name: `${staged ? 'staged_' : ''}${table.key}`,
+    tableName: `${staged ? 'staged_' : ''}${table.key}`,
+    columns: columnsOf(table, staged),
+    indices: staged ? [] : [{ name: `${table.key}_month_idx`, columns: ['site_id', 'month'] }],
+  });
 
 /** Computed from an exam's cells when it is checked; stored beside them. `class_nli` and `class_ais` list every possible value. */
 export const classColumns = ['class_nli', 'class_ais', 'class_level_group', 'class_uems', 'class_lems'] as const;

@@ -153,6 +153,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       planned_sessions integer, planned_sessions_per_week integer, month text not null, submission_id uuid not null,
       constraint participants_pkey primary key (site_id, participant)
     )`);
+    await runner.query(`create index participants_month_idx on participants (site_id, month)`);
     await runner.query(`create table consents (
       site_id uuid not null, participant text not null, consent_no integer not null, status text not null,
       signed_day integer not null, valid_until_day integer, form_version integer not null, permission text not null,
@@ -164,6 +165,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       no_aggregates text not null, withdrawal_scope text, month text not null, submission_id uuid not null,
       constraint consents_pkey primary key (site_id, participant, consent_no)
     )`);
+    await runner.query(`create index consents_month_idx on consents (site_id, month)`);
     await runner.query(`create table exams (
       site_id uuid not null, participant text not null, exam_day integer not null, lt_r_c2 text not null,
       lt_r_c3 text not null, lt_r_c4 text not null, lt_r_c5 text not null, lt_r_c6 text not null, lt_r_c7 text not null,
@@ -198,6 +200,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       class_ais text array not null, class_level_group text not null, class_uems integer, class_lems integer,
       constraint exams_pkey primary key (site_id, participant, exam_day)
     )`);
+    await runner.query(`create index exams_month_idx on exams (site_id, month)`);
     await runner.query(`create table assessments (
       site_id uuid not null, participant text not null, assessment_day integer not null, measure text not null,
       in_device text not null, trial_no integer not null, course_no integer not null, timepoint text not null,
@@ -208,6 +211,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       submission_id uuid not null,
       constraint assessments_pkey primary key (site_id, participant, assessment_day, measure, in_device, trial_no)
     )`);
+    await runner.query(`create index assessments_month_idx on assessments (site_id, month)`);
     await runner.query(`create table sessions (
       site_id uuid not null, participant text not null, session_day integer not null, session_no integer not null,
       course_no integer not null, start_hour integer, status text not null, not_trained_reason text, device_class text,
@@ -220,6 +224,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       dysreflexia_decision text, hypotension_decision text, month text not null, submission_id uuid not null,
       constraint sessions_pkey primary key (site_id, participant, session_day, session_no)
     )`);
+    await runner.query(`create index sessions_month_idx on sessions (site_id, month)`);
     await runner.query(`create table bouts (
       site_id uuid not null, participant text not null, session_day integer not null, session_no integer not null,
       bout_no integer not null, activity text not null, device_class text not null, surface text,
@@ -232,6 +237,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       submission_id uuid not null,
       constraint bouts_pkey primary key (site_id, participant, session_day, session_no, bout_no)
     )`);
+    await runner.query(`create index bouts_month_idx on bouts (site_id, month)`);
     await runner.query(`create table adverse_events (
       site_id uuid not null, participant text not null, event_no integer not null, event_day integer not null,
       session_day integer, session_no integer, onset text not null, onset_min double precision, kind text not null,
@@ -243,6 +249,7 @@ export class FirstTables1796083200000 implements MigrationInterface {
       month text not null, submission_id uuid not null,
       constraint adverse_events_pkey primary key (site_id, participant, event_no)
     )`);
+    await runner.query(`create index adverse_events_month_idx on adverse_events (site_id, month)`);
     await runner.query(`create table staged_participants (
       submission_id uuid not null, site_id uuid not null, participant text not null, age_at_index integer, sex text,
       injury_year integer, days_injury_to_index integer, cause text, ventilator text, planned_sessions integer,

@@ -13,11 +13,15 @@ export interface ReleaseRecord {
 
 const releaseColumns = 'id, number, made_at as "madeAt", note, totals, digest';
 
-export const listReleases = async (tx: Tx): Promise<ReleaseRecord[]> => (await tx.query(`select ${releaseColumns} from releases order by number desc`)) as ReleaseRecord[];
+export const listReleases = async (tx: Tx): Promise<ReleaseRecord[]> =>
+  (await tx.query(`select ${releaseColumns} from releases order by number desc`)) as ReleaseRecord[];
 
 /** The release of that number, or the newest. */
 export async function readRelease(tx: Tx, number: number | undefined): Promise<ReleaseRecord | null> {
-  const [row] = (await tx.query(`select ${releaseColumns} from releases where $1::int is null or number = $1 order by number desc limit 1`, [number ?? null])) as ReleaseRecord[];
+  const [row] = (await tx.query(
+    `select ${releaseColumns} from releases where $1::int is null or number = $1 order by number desc limit 1`,
+    [number ?? null],
+  )) as ReleaseRecord[];
   return row ?? null;
 }
 
@@ -44,10 +48,14 @@ export async function readSiteOutcome(tx: Tx, siteId: string, measure: string, i
 }
 
 export const readReleaseCourses = async (tx: Tx, release: number): Promise<CourseFact[]> =>
-  (await tx.query('select nli, level_group as "levelGroup", ais from release_courses where release_number = $1 and course_no = 1', [release])) as CourseFact[];
+  (await tx.query('select nli, level_group as "levelGroup", ais from release_courses where release_number = $1 and course_no = 1', [
+    release,
+  ])) as CourseFact[];
 
 export const readSiteCourses = async (tx: Tx, siteId: string): Promise<CourseFact[]> =>
-  (await tx.query('select nli, level_group as "levelGroup", ais from course_facts where site_id = $1 and course_no = 1', [siteId])) as CourseFact[];
+  (await tx.query('select nli, level_group as "levelGroup", ais from course_facts where site_id = $1 and course_no = 1', [
+    siteId,
+  ])) as CourseFact[];
 
 /** Outcomes with enough people in the release for anything to be shown. */
 export async function listMeasured(tx: Tx, release: number, least: number): Promise<{ measure: string; inDevice: 'yes' | 'no' }[]> {

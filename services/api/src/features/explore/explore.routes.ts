@@ -14,7 +14,16 @@ import { Refusal } from '../../http/refusal.ts';
 import { route, type Route } from '../../http/route.ts';
 import { readSite } from '../people/sites.repository.ts';
 import type { CourseFact, OutcomeFact } from './facts.ts';
-import { listMeasured, listReleases, readRelease, readReleaseCourses, readReleaseOutcome, readSiteCourses, readSiteOutcome, type ReleaseRecord } from './explore.repository.ts';
+import {
+  listMeasured,
+  listReleases,
+  readRelease,
+  readReleaseCourses,
+  readReleaseOutcome,
+  readSiteCourses,
+  readSiteOutcome,
+  type ReleaseRecord,
+} from './explore.repository.ts';
 import { gridCells, leftOutCounts, type Statistic, type View } from './grid.ts';
 import { makeRelease } from './make-release.ts';
 import { publicCount } from './public-count.ts';
@@ -50,21 +59,33 @@ const methodOf = (statistic: Statistic, view: View): string =>
 
 function notesOf(view: View, outcome: OutcomeOut): string[] {
   const notes = [
-    outcome.inDevice ? 'Measured in the training device. Never compare with results measured without it.' : 'Measured without the training device.',
+    outcome.inDevice
+      ? 'Measured in the training device. Never compare with results measured without it.'
+      : 'Measured without the training device.',
     'People who tried and were unable have no value; they are counted beside the grid, not as zero.',
     'Level group and grade come from the last exam on or before the first session, at most 90 days earlier.',
   ];
-  if (view === 'registry') notes.push('Groups of 1 to 10 people are hidden, and with them what would give them back; so are groups that come mostly from one clinic.');
+  if (view === 'registry')
+    notes.push(
+      'Groups of 1 to 10 people are hidden, and with them what would give them back; so are groups that come mostly from one clinic.',
+    );
   return notes;
 }
 
 /** Level groups top down, then people without a deficit's level and people whose level cannot be determined. */
-const gridRows: readonly { readonly id: string; readonly label: string }[] = [...levelGroups.groups, { id: 'ND', label: 'Not determinable' }];
+const gridRows: readonly { readonly id: string; readonly label: string }[] = [
+  ...levelGroups.groups,
+  { id: 'ND', label: 'Not determinable' },
+];
 
 function levelColumn(courses: readonly CourseFact[], view: View): Grid['levels'] {
   return spinalLevels.map((level) => {
     const here = courses.filter((course) => course.nli === level);
-    return { level, levelGroup: levelGroups.groupOf(level) ?? 'ND', participants: view === 'site' ? here.length : publicCount(here.length) };
+    return {
+      level,
+      levelGroup: levelGroups.groupOf(level) ?? 'ND',
+      participants: view === 'site' ? here.length : publicCount(here.length),
+    };
   });
 }
 
@@ -73,14 +94,25 @@ export function exploreRoutes({ database, ...context }: Context): Route[] {
   const courses = new ReleaseCache<readonly CourseFact[]>();
   const asStatistics = <T>(work: Parameters<typeof asActor<T>>[2]): Promise<T> => asActor(database, statistics, work);
 
-  function present(facts: readonly OutcomeFact[], people: readonly CourseFact[], outcome: OutcomeOut, statistic: Statistic, view: View): Omit<Grid, 'release' | 'site'> {
+  function present(
+    facts: readonly OutcomeFact[],
+    people: readonly CourseFact[],
+    outcome: OutcomeOut,
+    statistic: Statistic,
+    view: View,
+  ): Omit<Grid, 'release' | 'site'> {
     const options = { rows: gridRows.map((row) => row.id), statistic, view, decimals: outcome.decimals };
     const { cells, rowTotals, columnTotals, total } = gridCells(facts, options);
     return {
       statistic,
       outcome,
       grades: [...grades],
-      rows: gridRows.map((row, index) => ({ levelGroup: row.id, label: row.label, cells: [...(cells[index] ?? [])], total: rowTotals[index] ?? { state: 'empty' } })),
+      rows: gridRows.map((row, index) => ({
+        levelGroup: row.id,
+        label: row.label,
+        cells: [...(cells[index] ?? [])],
+        total: rowTotals[index] ?? { state: 'empty' },
+      })),
       columnTotals: [...columnTotals],
       total,
       leftOut: leftOutCounts(facts, options),
@@ -99,7 +131,11 @@ export function exploreRoutes({ database, ...context }: Context): Route[] {
       return asActor(database, actor, async (tx) => {
         const { id, code, name } = requireFound(await readSite(tx, siteId));
         const facts = await readSiteOutcome(tx, siteId, outcome.key, input.inDevice);
-        return { release: null, site: { id, code, name }, ...present(facts, await readSiteCourses(tx, siteId), outcome, input.statistic, 'site') };
+        return {
+          release: null,
+          site: { id, code, name },
+          ...present(facts, await readSiteCourses(tx, siteId), outcome, input.statistic, 'site'),
+        };
       });
     }
     const release = requireFound(await asStatistics((tx) => readRelease(tx, input.release)));
@@ -125,7 +161,10 @@ export function exploreRoutes({ database, ...context }: Context): Route[] {
     const release = await asStatistics((tx) => readRelease(tx, undefined));
     if (!release) return { release: null, sites: 0, participants: null, sessions: null, bouts: null, levelGroups: [], completeness: [] };
     const people = await courses.get(release.number, 'all', () => asStatistics((tx) => readReleaseCourses(tx, release.number)));
-    const count = (label: string, chosen: (course: CourseFact) => boolean) => ({ label, participants: publicCount(people.filter(chosen).length) });
+    const count = (label: string, chosen: (course: CourseFact) => boolean) => ({
+      label,
+      participants: publicCount(people.filter(chosen).length),
+    });
     return {
       release: { number: release.number, madeAt: release.madeAt.toISOString() },
       sites: release.totals.sites,
@@ -147,7 +186,9 @@ export function exploreRoutes({ database, ...context }: Context): Route[] {
     route('getGrid', getGrid),
     route('listOutcomes', listOutcomes),
     route('listReleases', () => asStatistics(async (tx) => ({ releases: (await listReleases(tx)).map(presentRelease) }))),
-    route('makeRelease', async (actor, input, { requestId }) => presentRelease(await makeRelease({ database, ...context }, actor, input, requestId))),
+    route('makeRelease', async (actor, input, { requestId }) =>
+      presentRelease(await makeRelease({ database, ...context }, actor, input, requestId)),
+    ),
     route('getPublicFigures', publicFigures),
   ];
 }

@@ -95,7 +95,10 @@ export function gridCells(facts: readonly OutcomeFact[], options: Options): Grid
     const column = grades.includes(fact.ais as Grade) ? grades.indexOf(fact.ais as Grade) : width - 1;
     for (const r of [row, height]) for (const c of [column, width]) groupAt(r, c).add(value, fact.siteId);
   }
-  const indexOf = (place: Place) => ({ row: place.row === 'total' ? height : place.row, column: place.column === 'total' ? width : place.column });
+  const indexOf = (place: Place) => ({
+    row: place.row === 'total' ? height : place.row,
+    column: place.column === 'total' ? width : place.column,
+  });
   const perPlace = <T>(of: (place: Place) => T) => ({
     cells: rows.map((_, row) => grades.map((_grade, column) => of({ row, column }))),
     rowTotals: rows.map((_, row) => of({ row, column: 'total' })),
@@ -135,5 +138,10 @@ export function leftOutCounts(facts: readonly OutcomeFact[], { statistic, view }
     else noEndOfCourse += 1;
   }
   const shown = (count: number): number | null => (view === 'site' ? count : publicCount(count));
-  return { noBaseline: shown(noBaseline), noEndOfCourse: shown(noEndOfCourse), unable: shown(notAble), levelOrGradeNotDeterminable: shown(notDeterminable) };
+  return {
+    noBaseline: shown(noBaseline),
+    noEndOfCourse: shown(noEndOfCourse),
+    unable: shown(notAble),
+    levelOrGradeNotDeterminable: shown(notDeterminable),
+  };
 }

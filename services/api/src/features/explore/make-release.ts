@@ -20,10 +20,16 @@ const courseColumns = `site_id, participant, course_no, first_day, last_day, exa
 const outcomeColumns = `site_id, participant, course_no, measure, in_device, baseline_status, baseline_value, baseline_day, end_status, end_value, end_day`;
 
 async function copyFacts(tx: Tx, release: number): Promise<void> {
-  await tx.query(`${consenting} insert into release_courses (${courseColumns}, release_number)
-    select ${courseColumns}, $1 from course_facts join consenting using (site_id, participant)`, [release]);
-  await tx.query(`${consenting} insert into release_outcomes (${outcomeColumns}, release_number)
-    select ${outcomeColumns}, $1 from outcome_facts join consenting using (site_id, participant)`, [release]);
+  await tx.query(
+    `${consenting} insert into release_courses (${courseColumns}, release_number)
+    select ${courseColumns}, $1 from course_facts join consenting using (site_id, participant)`,
+    [release],
+  );
+  await tx.query(
+    `${consenting} insert into release_outcomes (${outcomeColumns}, release_number)
+    select ${outcomeColumns}, $1 from outcome_facts join consenting using (site_id, participant)`,
+    [release],
+  );
   await tx.query(
     `${consenting}, walked as (
        select site_id, participant, session_day, session_no, count(*)::int as bouts, coalesce(sum(duration_s), 0) / 60.0 as walking_min,
@@ -52,20 +58,40 @@ const digestOfFacts = `${consenting}
 
 export async function freeze(tx: Tx, madeBy: string | null, note: string): Promise<ReleaseRecord> {
   await tx.query("select pg_advisory_xact_lock(hashtext('release'))");
+  // Whole tables are joined here; a planner that has not counted them yet (a first release) would loop over them row by row.
+  await tx.query('set local enable_nestloop = off');
   const newest = await readRelease(tx, undefined);
   const [facts] = (await tx.query(digestOfFacts)) as [{ digest: string; totals: ReleaseRecord['totals'] }];
-  if (newest?.digest === facts.digest) throw new Refusal('release-unchanged', `Release ${newest.number} already holds the registry as it is.`);
+  if (newest?.digest === facts.digest)
+    throw new Refusal('release-unchanged', `Release ${newest.number} already holds the registry as it is.`);
   const number = (newest?.number ?? 0) + 1;
-  await tx.query('insert into releases (id, number, made_by, note, totals, digest) values ($1, $2, $3, $4, $5, $6)', [randomUUID(), number, madeBy, note, facts.totals, facts.digest]);
+  await tx.query('insert into releases (id, number, made_by, note, totals, digest) values ($1, $2, $3, $4, $5, $6)', [
+    randomUUID(),
+    number,
+    madeBy,
+    note,
+    facts.totals,
+    facts.digest,
+  ]);
   await copyFacts(tx, number);
   const release = await readRelease(tx, number);
   if (!release) throw new Error('A release just made must be readable.');
   return release;
 }
 
-export const makeRelease = ({ database }: Context, actor: Actor, { note }: InputOf<typeof MakeRelease>, requestId: string): Promise<ReleaseRecord> =>
+export const makeRelease = (
+  { database }: Context,
+  actor: Actor,
+  { note }: InputOf<typeof MakeRelease>,
+  requestId: string,
+): Promise<ReleaseRecord> =>
   asActor(database, actor, async (tx) => {
     const release = await freeze(tx, actor.kind === 'person' ? actor.accountId : null, note);
-    await recordAudit(tx, actor, { act: 'release.make', object: `release ${release.number}`, requestId, detail: { digest: release.digest } });
+    await recordAudit(tx, actor, {
+      act: 'release.make',
+      object: `release ${release.number}`,
+      requestId,
+      detail: { digest: release.digest },
+    });
     return release;
   });

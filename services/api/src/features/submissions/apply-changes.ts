@@ -19,9 +19,18 @@ const run = (tx: Tx, sql: string, values: Readonly<Record<string, unknown>>): Pr
 /** What a commit would do to each table, as the registry stands in this transaction. */
 export async function countChanges(tx: Tx, of: Applied): Promise<z.output<typeof TableChange>[]> {
   const changes: z.output<typeof TableChange>[] = [];
-  for (const table of tableKeys) {
-    const [counts] = (await run(tx, tableSql(table).counts, { ...of })) as [{ staged: number; known: number; changed: number; removed: number }];
-    const change = { table, added: counts.staged - counts.known, changed: counts.changed, unchanged: counts.known - counts.changed, removed: counts.removed };
+  // Bouts go with their sessions, so they are looked at whenever sessions came.
+  for (const table of tableKeys.filter((key) => of.tables.includes(key) || (key === 'bouts' && of.tables.includes('sessions')))) {
+    const [counts] = (await run(tx, tableSql(table).counts, { ...of })) as [
+      { staged: number; known: number; changed: number; removed: number },
+    ];
+    const change = {
+      table,
+      added: counts.staged - counts.known,
+      changed: counts.changed,
+      unchanged: counts.known - counts.changed,
+      removed: counts.removed,
+    };
     if (of.tables.includes(table) || change.removed > 0) changes.push(change);
   }
   return changes;
@@ -30,17 +39,27 @@ export async function countChanges(tx: Tx, of: Applied): Promise<z.output<typeof
 /** Bouts before sessions when rows go, so that a bout still finds the session it goes with. */
 const order: readonly TableKey[] = ['participants', 'consents', 'exams', 'assessments', 'bouts', 'sessions', 'adverse_events'];
 
-export async function applyChanges(tx: Tx, of: Applied): Promise<void> {
+/** Does what the preview counted; the caller has made sure that it still holds. */
+export async function applyChanges(tx: Tx, of: Applied, preview: readonly z.output<typeof TableChange>[]): Promise<void> {
   for (const table of order) {
-    for (const statement of tableSql(table).apply) await run(tx, statement, { ...of });
+    const change = preview.find((one) => one.table === table);
+    if (!change) continue;
+    const { apply } = tableSql(table);
+    for (const kind of ['removed', 'changed', 'added'] as const) {
+      if (change[kind] > 0) for (const statement of apply[kind]) await run(tx, statement, { ...of });
+    }
   }
-  const people = await touchedPeople(tx, of.submission);
+  const people = await touchedPeople(tx, of);
   if (people.length > 0) await refreshFacts(tx, of.site, people);
 }
 
-async function touchedPeople(tx: Tx, submission: string): Promise<string[]> {
-  const staged = tableKeys.map((table) => `select participant from staged_${table} where submission_id = :submission`);
-  const rows = (await run(tx, `${staged.join(' union ')} union select row_key->>'participant' from row_history where submission_id = :submission`, { submission })) as {
+async function touchedPeople(tx: Tx, { submission, tables }: Applied): Promise<string[]> {
+  const staged = tables.map((table) => `select participant from staged_${table} where submission_id = :submission`);
+  const rows = (await run(
+    tx,
+    `${staged.join(' union ')} union select row_key->>'participant' from row_history where submission_id = :submission`,
+    { submission },
+  )) as {
     participant: string;
   }[];
   return rows.map((row) => row.participant);

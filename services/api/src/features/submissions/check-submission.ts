@@ -1,6 +1,13 @@
 /** The job that reads and checks a submission and works out what a commit would change. What it writes, it writes in one transaction at its end. */
 import { tableKeys, type TableKey } from '@cairnstep/dictionary';
-import { checkSubmission as checkTables, FindingLog, readTable, type Finding, type RuleFindings, type TypedTable } from '@cairnstep/submission-files';
+import {
+  checkSubmission as checkTables,
+  FindingLog,
+  readTable,
+  type Finding,
+  type RuleFindings,
+  type TypedTable,
+} from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
@@ -9,7 +16,17 @@ import { countChanges } from './apply-changes.ts';
 import { previewDigest } from './preview-digest.ts';
 import { loadRegistryContext } from './registry-context.repository.ts';
 import { clearStaged, stageRows } from './stage-rows.ts';
-import { clearCheck, finishCheck, lockSubmission, readContent, readFiles, readSubmission, setFileRows, setProgress, type SubmissionRecord } from './submissions.repository.ts';
+import {
+  clearCheck,
+  finishCheck,
+  lockSubmission,
+  readContent,
+  readFiles,
+  readSubmission,
+  setFileRows,
+  setProgress,
+  type SubmissionRecord,
+} from './submissions.repository.ts';
 
 type Step = NonNullable<SubmissionRecord['progress']>['step'];
 
@@ -52,12 +69,16 @@ function groupsOf(checked: Checked, earlier: SubmissionRecord['findings']): Subm
     why,
     mend,
     count,
-    acknowledgedReason: earlier.find((group) => group.rule === id && group.severity === severity && group.count === count)?.acknowledgedReason ?? null,
+    acknowledgedReason:
+      earlier.find((group) => group.rule === id && group.severity === severity && group.count === count)?.acknowledgedReason ?? null,
   }));
 }
 
 export async function checkSubmission({ database, clock }: Context, submissionId: string): Promise<void> {
-  const start = await asActor(database, registry, async (tx) => ({ submission: await readSubmission(tx, submissionId), files: await readFiles(tx, submissionId) }));
+  const start = await asActor(database, registry, async (tx) => ({
+    submission: await readSubmission(tx, submissionId),
+    files: await readFiles(tx, submissionId),
+  }));
   const { submission, files } = start;
   if (submission?.status !== 'checking') return;
   const startedAt = submission.progress?.startedAt ?? clock().toISOString();
@@ -72,7 +93,9 @@ export async function checkSubmission({ database, clock }: Context, submissionId
     tables[file.table] = await readTable(file.table, content ?? new Uint8Array(), log);
   }
   await progress('check', 0, 1);
-  const context = await asActor(database, registry, (tx) => loadRegistryContext(tx, submission.siteId, submission.month, tables, clock().getUTCFullYear()));
+  const context = await asActor(database, registry, (tx) =>
+    loadRegistryContext(tx, submission.siteId, submission.month, tables, clock().getUTCFullYear()),
+  );
   checkTables(tables, context, log);
   const checked: Checked = { tables, groups: log.byRule(), errors: log.counts.errors };
   await progress('compare', 0, 1);
@@ -85,7 +108,11 @@ async function writeOutcome(tx: Tx, before: SubmissionRecord, { tables, ...check
   if (submission?.status !== 'checking') return;
   await clearCheck(tx, submission.id);
   await clearStaged(tx, tableKeys, submission.id);
-  await insertFindings(tx, submission, checked.groups.flatMap((group) => group.kept));
+  await insertFindings(
+    tx,
+    submission,
+    checked.groups.flatMap((group) => group.kept),
+  );
   for (const table of Object.values(tables)) await setFileRows(tx, submission.id, table.key, table.length);
   const findings = groupsOf({ tables, ...checked }, submission.findings);
   if (checked.errors > 0) {
@@ -94,7 +121,12 @@ async function writeOutcome(tx: Tx, before: SubmissionRecord, { tables, ...check
     for (const table of Object.values(tables)) await stageRows(tx, table, submission.id, submission.siteId);
     const [{ revision }] = (await tx.query('select revision from sites where id = $1', [submission.siteId])) as [{ revision: number }];
     const files = await readFiles(tx, submission.id);
-    const changes = await countChanges(tx, { submission: submission.id, site: submission.siteId, month: submission.month, tables: files.map((file) => file.table) });
+    const changes = await countChanges(tx, {
+      submission: submission.id,
+      site: submission.siteId,
+      month: submission.month,
+      tables: files.map((file) => file.table),
+    });
     const digest = previewDigest({ submission: submission.id, revision, files, tables: changes });
     await finishCheck(tx, submission.id, { findings, preview: { tables: changes }, previewDigest: digest, siteRevision: revision });
   }
@@ -102,6 +134,9 @@ async function writeOutcome(tx: Tx, before: SubmissionRecord, { tables, ...check
     act: 'submission.checked',
     object: submission.id,
     site: submission.siteId,
-    detail: { errors: checked.errors, warnings: findings.filter((group) => group.severity === 'warning').reduce((sum, group) => sum + group.count, 0) },
+    detail: {
+      errors: checked.errors,
+      warnings: findings.filter((group) => group.severity === 'warning').reduce((sum, group) => sum + group.count, 0),
+    },
   });
 }

@@ -3,7 +3,13 @@ import { classify, examFromCells, levelGroups, notDeterminable, validateExam } f
 import type { TypedTable } from '@cairnstep/submission-files';
 
 /** In the order of `classColumns`: possible levels, possible grades, level group, upper and lower extremity motor score. */
-export type ExamClass = readonly [nli: readonly string[], ais: readonly string[], levelGroup: string, uems: number | null, lems: number | null];
+export type ExamClass = readonly [
+  nli: readonly string[],
+  ais: readonly string[],
+  levelGroup: string,
+  uems: number | null,
+  lems: number | null,
+];
 
 const scoreOrNull = (total: number | 'ND'): number | null => (total === 'ND' ? null : total);
 

@@ -22,15 +22,23 @@ export async function accept(tx: Tx, person: Person, submission: SubmissionRecor
   const revision = await lockSite(tx, submission.siteId);
   const { preview } = submission;
   if (submission.findings.some((group) => group.severity === 'error')) {
-    throw new Refusal('submission-has-errors', 'Mend what the findings name, add the corrected files and check again. Nothing was committed.');
+    throw new Refusal(
+      'submission-has-errors',
+      'Mend what the findings name, add the corrected files and check again. Nothing was committed.',
+    );
   }
-  const stale = preview === null || submission.previewDigest === null || submission.previewDigest !== digest || submission.siteRevision !== revision;
+  const stale =
+    preview === null || submission.previewDigest === null || submission.previewDigest !== digest || submission.siteRevision !== revision;
   if (stale) throw new Refusal('submission-stale', 'Nothing was committed. Check again to see a fresh preview; your files are still here.');
   if (submission.findings.some((group) => group.acknowledgedReason === null)) {
     throw new Refusal('submission-has-open-warnings', 'Say why each of these warnings stands, or mend the rows. Nothing was committed.');
   }
   const files = await readFiles(tx, submission.id);
-  await applyChanges(tx, { submission: submission.id, site: submission.siteId, month: submission.month, tables: files.map((file) => file.table) });
+  await applyChanges(
+    tx,
+    { submission: submission.id, site: submission.siteId, month: submission.month, tables: files.map((file) => file.table) },
+    preview.tables,
+  );
   await tx.query('update sites set revision = revision + 1 where id = $1', [submission.siteId]);
   await supersedeEarlier(tx, submission.id, submission.siteId, submission.month);
   const receipt: SubmissionReceipt = {
@@ -52,7 +60,9 @@ const receiptText = (receipt: SubmissionReceipt, address: string): string =>
   [
     `${receipt.site.name} (${receipt.site.code}), ${receipt.month}: accepted on ${receipt.acceptedAt}.`,
     '',
-    ...receipt.tables.map((one) => `${one.table}: ${one.added} new, ${one.changed} changed, ${one.unchanged} unchanged, ${one.removed} removed`),
+    ...receipt.tables.map(
+      (one) => `${one.table}: ${one.added} new, ${one.changed} changed, ${one.unchanged} unchanged, ${one.removed} removed`,
+    ),
     '',
     `Digest of what was committed: ${receipt.digest}`,
     `Receipt: ${address}`,
@@ -77,6 +87,12 @@ export const commitSubmission = (
         body: receiptText(receipt, `${config.PUBLIC_URL}/submissions/${submissionId}/receipt`),
       });
     }
-    await recordAudit(tx, actor, { act: 'submission.commit', object: submissionId, site: submission.siteId, requestId, detail: { digest: receipt.digest, month: receipt.month } });
+    await recordAudit(tx, actor, {
+      act: 'submission.commit',
+      object: submissionId,
+      site: submission.siteId,
+      requestId,
+      detail: { digest: receipt.digest, month: receipt.month },
+    });
     return receipt;
   });

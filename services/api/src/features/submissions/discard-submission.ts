@@ -9,7 +9,12 @@ import { lockOwnSubmission } from './lock-own-submission.ts';
 import { present } from './read-submissions.ts';
 import { settle } from './submissions.repository.ts';
 
-export const discardSubmission = ({ database, clock }: Context, actor: Actor, { submissionId }: InputOf<typeof Discard>, requestId: string): Promise<Submission> =>
+export const discardSubmission = (
+  { database, clock }: Context,
+  actor: Actor,
+  { submissionId }: InputOf<typeof Discard>,
+  requestId: string,
+): Promise<Submission> =>
   asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     await settle(tx, submissionId, 'discarded', requirePerson(actor).accountId, null);

@@ -17,18 +17,33 @@ type Stored = Readonly<Record<string, string | number | null>>;
 
 const asText = (value: string | number | null | undefined): string | null => (value === null || value === undefined ? null : String(value));
 
-function presentRow(kind: z.output<typeof RowChange>['kind'], keys: readonly string[], values: readonly string[], before: Stored | null, after: Stored | null): z.output<typeof RowChange> {
+function presentRow(
+  kind: z.output<typeof RowChange>['kind'],
+  keys: readonly string[],
+  values: readonly string[],
+  before: Stored | null,
+  after: Stored | null,
+): z.output<typeof RowChange> {
   const either = after ?? before ?? {};
   const cells = values.map((column) => ({ column, before: asText(before?.[column]), after: asText(after?.[column]) }));
   return {
     kind,
     line: typeof after?.['line'] === 'number' ? after['line'] : null,
     key: Object.fromEntries(keys.map((column) => [column, asText(either[column]) ?? ''])),
-    cells: kind === 'changed' ? cells.filter((cell) => cell.before !== cell.after) : kind === 'unchanged' ? [] : cells.filter((cell) => cell.before !== null || cell.after !== null),
+    cells:
+      kind === 'changed'
+        ? cells.filter((cell) => cell.before !== cell.after)
+        : kind === 'unchanged'
+          ? []
+          : cells.filter((cell) => cell.before !== null || cell.after !== null),
   };
 }
 
-export const listChanges = ({ database }: Context, actor: Actor, { submissionId, table, kind, page }: InputOf<typeof ListChanges>): Promise<ResponseOf<typeof ListChanges>> =>
+export const listChanges = (
+  { database }: Context,
+  actor: Actor,
+  { submissionId, table, kind, page }: InputOf<typeof ListChanges>,
+): Promise<ResponseOf<typeof ListChanges>> =>
   asActor(database, actor, async (tx) => {
     const submission = await visibleSubmission(tx, actor, submissionId);
     const total = submission.preview?.tables.find((one) => one.table === table)?.[kind] ?? 0;

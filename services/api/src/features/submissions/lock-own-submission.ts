@@ -8,7 +8,8 @@ import { lockSubmission, type Status, type SubmissionRecord } from './submission
 const lostCheckMinutes = 5;
 
 export const checkIsLost = (submission: SubmissionRecord, now: Date): boolean =>
-  submission.status === 'checking' && now.getTime() - Date.parse(submission.progress?.startedAt ?? '1970-01-01T00:00:00Z') > lostCheckMinutes * 60_000;
+  submission.status === 'checking' &&
+  now.getTime() - Date.parse(submission.progress?.startedAt ?? '1970-01-01T00:00:00Z') > lostCheckMinutes * 60_000;
 
 const unsettled: readonly Status[] = ['open', 'checked'];
 
@@ -20,7 +21,10 @@ export async function lockOwnSubmission(tx: Tx, actor: Actor, id: string, now: D
     throw new Refusal('submission-busy', 'Wait until the check has finished. Nothing was changed.');
   }
   if (submission.status !== 'checking' && !unsettled.includes(submission.status)) {
-    throw new Refusal('submission-closed', 'It was accepted or given up before. To correct the month, open it again: a new submission replaces the earlier one.');
+    throw new Refusal(
+      'submission-closed',
+      'It was accepted or given up before. To correct the month, open it again: a new submission replaces the earlier one.',
+    );
   }
   return submission;
 }

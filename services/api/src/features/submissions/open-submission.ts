@@ -12,7 +12,12 @@ import { present } from './read-submissions.ts';
 import { findUnsettled, insertSubmission } from './submissions.repository.ts';
 
 /** One submission of a month is worked on at a time: whoever comes second joins the first. */
-export const openSubmission = ({ database, clock }: Context, actor: Actor, { siteId, month }: InputOf<typeof OpenSubmission>, requestId: string): Promise<Submission> =>
+export const openSubmission = (
+  { database, clock }: Context,
+  actor: Actor,
+  { siteId, month }: InputOf<typeof OpenSubmission>,
+  requestId: string,
+): Promise<Submission> =>
   asActor(database, actor, async (tx) => {
     requireMayAtSite(actor, 'submit', siteId);
     const site = requireFound(await readSite(tx, siteId));

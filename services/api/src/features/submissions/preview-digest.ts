@@ -13,5 +13,7 @@ export interface Previewed {
 
 export function previewDigest({ submission, revision, files, tables }: Previewed): string {
   const sorted = [...files].map(({ table, sha256 }) => ({ table, sha256 })).sort((a, b) => (a.table < b.table ? -1 : 1));
-  return createHash('sha256').update(canonicalJson({ submission, revision, files: sorted, tables: [...tables] })).digest('hex');
+  return createHash('sha256')
+    .update(canonicalJson({ submission, revision, files: sorted, tables: [...tables] }))
+    .digest('hex');
 }

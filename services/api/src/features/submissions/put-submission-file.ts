@@ -18,13 +18,22 @@ async function readLimited(stream: AsyncIterable<Buffer>, limit: number): Promis
   let size = 0;
   for await (const chunk of stream) {
     size += chunk.length;
-    if (size > limit) throw new Refusal('too-large', `A file may hold at most ${Math.floor(limit / 1_000_000)} MB. Nothing was kept. Send the table in parts, or only the columns of the template.`);
+    if (size > limit)
+      throw new Refusal(
+        'too-large',
+        `A file may hold at most ${Math.floor(limit / 1_000_000)} MB. Nothing was kept. Send the table in parts, or only the columns of the template.`,
+      );
     chunks.push(chunk);
   }
   return Buffer.concat(chunks);
 }
 
-export async function putSubmissionFile(context: Context, actor: Actor, { submissionId, table, fileName }: InputOf<typeof PutFile>, facts: RequestFacts): Promise<Submission> {
+export async function putSubmissionFile(
+  context: Context,
+  actor: Actor,
+  { submissionId, table, fileName }: InputOf<typeof PutFile>,
+  facts: RequestFacts,
+): Promise<Submission> {
   const { database, config, clock } = context;
   // Refuse before reading what would be refused after it.
   await asActor(database, actor, (tx) => lockOwnSubmission(tx, actor, submissionId, clock()));
@@ -34,16 +43,33 @@ export async function putSubmissionFile(context: Context, actor: Actor, { submis
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     await reopen(tx, submissionId);
     await putFile(tx, submissionId, submission.siteId, { table, fileName, sha256, content });
-    await recordAudit(tx, actor, { act: 'submission.file', object: submissionId, site: submission.siteId, requestId: facts.requestId, detail: { table, bytes: content.length, sha256 } });
+    await recordAudit(tx, actor, {
+      act: 'submission.file',
+      object: submissionId,
+      site: submission.siteId,
+      requestId: facts.requestId,
+      detail: { table, bytes: content.length, sha256 },
+    });
     return present(tx, submissionId);
   });
 }
 
-export const removeSubmissionFile = ({ database, clock }: Context, actor: Actor, { submissionId, table }: InputOf<typeof RemoveFile>, requestId: string): Promise<Submission> =>
+export const removeSubmissionFile = (
+  { database, clock }: Context,
+  actor: Actor,
+  { submissionId, table }: InputOf<typeof RemoveFile>,
+  requestId: string,
+): Promise<Submission> =>
   asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     await reopen(tx, submissionId);
     await removeFile(tx, submissionId, table);
-    await recordAudit(tx, actor, { act: 'submission.file-removed', object: submissionId, site: submission.siteId, requestId, detail: { table } });
+    await recordAudit(tx, actor, {
+      act: 'submission.file-removed',
+      object: submissionId,
+      site: submission.siteId,
+      requestId,
+      detail: { table },
+    });
     return present(tx, submissionId);
   });

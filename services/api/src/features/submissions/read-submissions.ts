@@ -1,6 +1,12 @@
 /** Reading submissions, months, findings and receipts. */
 import type { InputOf, ResponseOf, Submission, SubmissionReceipt } from '@cairnstep/contract';
-import type { getReceipt as GetReceipt, getSubmission as GetSubmission, listFindings as ListFindings, listMonths as ListMonths, listSubmissions as ListSubmissions } from '@cairnstep/contract';
+import type {
+  getReceipt as GetReceipt,
+  getSubmission as GetSubmission,
+  listFindings as ListFindings,
+  listMonths as ListMonths,
+  listSubmissions as ListSubmissions,
+} from '@cairnstep/contract';
 import type { Actor } from '../../authority/actor.ts';
 import { requireFound, requireMayAtSite } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
@@ -18,15 +24,22 @@ export async function visibleSubmission(tx: Tx, actor: Actor, id: string): Promi
   return submission;
 }
 
-export const present = async (tx: Tx, id: string): Promise<Submission> => presentSubmission(requireFound(await readSubmission(tx, id)), await readFiles(tx, id));
+export const present = async (tx: Tx, id: string): Promise<Submission> =>
+  presentSubmission(requireFound(await readSubmission(tx, id)), await readFiles(tx, id));
 
 export const getSubmission = ({ database }: Context, actor: Actor, { submissionId }: InputOf<typeof GetSubmission>): Promise<Submission> =>
-  asActor(database, actor, async (tx) => presentSubmission(await visibleSubmission(tx, actor, submissionId), await readFiles(tx, submissionId)));
+  asActor(database, actor, async (tx) =>
+    presentSubmission(await visibleSubmission(tx, actor, submissionId), await readFiles(tx, submissionId)),
+  );
 
 export const getReceipt = ({ database }: Context, actor: Actor, { submissionId }: InputOf<typeof GetReceipt>): Promise<SubmissionReceipt> =>
   asActor(database, actor, async (tx) => requireFound((await visibleSubmission(tx, actor, submissionId)).receipt));
 
-export const listMonths = ({ database, clock }: Context, actor: Actor, { siteId }: InputOf<typeof ListMonths>): Promise<ResponseOf<typeof ListMonths>> =>
+export const listMonths = (
+  { database, clock }: Context,
+  actor: Actor,
+  { siteId }: InputOf<typeof ListMonths>,
+): Promise<ResponseOf<typeof ListMonths>> =>
   asActor(database, actor, async (tx) => {
     requireMayAtSite(actor, 'see-site-rows', siteId);
     const { id, code, name, firstMonth } = requireFound(await readSite(tx, siteId));
@@ -56,7 +69,11 @@ export const listMonths = ({ database, clock }: Context, actor: Actor, { siteId 
     return { site: { id, code, name }, months: months.reverse() };
   });
 
-export const listSubmissionsOfSite = ({ database }: Context, actor: Actor, { siteId, page }: InputOf<typeof ListSubmissions>): Promise<ResponseOf<typeof ListSubmissions>> =>
+export const listSubmissionsOfSite = (
+  { database }: Context,
+  actor: Actor,
+  { siteId, page }: InputOf<typeof ListSubmissions>,
+): Promise<ResponseOf<typeof ListSubmissions>> =>
   asActor(database, actor, async (tx) => {
     requireMayAtSite(actor, 'see-site-rows', siteId);
     const { items, total } = await listSubmissions(tx, siteId, linesPerPage, (page - 1) * linesPerPage);
@@ -68,7 +85,11 @@ export const listSubmissionsOfSite = ({ database }: Context, actor: Actor, { sit
     };
   });
 
-export const listSubmissionFindings = ({ database }: Context, actor: Actor, input: InputOf<typeof ListFindings>): Promise<ResponseOf<typeof ListFindings>> =>
+export const listSubmissionFindings = (
+  { database }: Context,
+  actor: Actor,
+  input: InputOf<typeof ListFindings>,
+): Promise<ResponseOf<typeof ListFindings>> =>
   asActor(database, actor, async (tx) => {
     await visibleSubmission(tx, actor, input.submissionId);
     const { items, total } = await listFindings(tx, input.submissionId, input, linesPerPage, (input.page - 1) * linesPerPage);

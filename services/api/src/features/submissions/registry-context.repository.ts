@@ -4,9 +4,17 @@ import { tableFromRows, type RegistryContext, type TypedTable, type TypedTables 
 import type { Tx } from '../../database/as-actor.ts';
 
 type StoredRow = Readonly<Record<string, string | number | null>>;
-const withoutNulls = (row: StoredRow): Row => Object.fromEntries(Object.entries(row).filter((entry): entry is [string, string | number] => entry[1] !== null));
+const withoutNulls = (row: StoredRow): Row =>
+  Object.fromEntries(Object.entries(row).filter((entry): entry is [string, string | number] => entry[1] !== null));
 
-async function readHeld(tx: Tx, key: TableKey, siteId: string, month: string, people: readonly string[], only: string | null): Promise<TypedTable | null> {
+async function readHeld(
+  tx: Tx,
+  key: TableKey,
+  siteId: string,
+  month: string,
+  people: readonly string[],
+  only: string | null,
+): Promise<TypedTable | null> {
   const columns = tableOf(key).variables.map((variable) => variable.key);
   const rows = (await tx.query(
     `select ${columns.map((column) => `t.${column}`).join(', ')} from ${key} t
@@ -23,7 +31,13 @@ const ofStagedSessions = (sessions: TypedTable | undefined): string[] => {
   return Array.from({ length: sessions.length }, (_, row) => `${participant?.cell(row)}|${day?.cell(row)}|${number?.cell(row)}`);
 };
 
-export async function loadRegistryContext(tx: Tx, siteId: string, month: string, tables: TypedTables, year: number): Promise<RegistryContext> {
+export async function loadRegistryContext(
+  tx: Tx,
+  siteId: string,
+  month: string,
+  tables: TypedTables,
+  year: number,
+): Promise<RegistryContext> {
   const people = new Set<string>();
   for (const table of Object.values(tables)) {
     const column = table.column('participant');
@@ -42,7 +56,14 @@ export async function loadRegistryContext(tx: Tx, siteId: string, month: string,
   if (sessions.length > 0) {
     await tx.query('create temporary table if not exists checked_sessions (key text primary key) on commit drop');
     await tx.query('insert into checked_sessions select distinct unnest($1::text[])', [sessions]);
-    const bouts = await readHeld(tx, 'bouts', siteId, month, codes, `(t.participant || '|' || t.session_day || '|' || t.session_no) in (select key from checked_sessions)`);
+    const bouts = await readHeld(
+      tx,
+      'bouts',
+      siteId,
+      month,
+      codes,
+      `(t.participant || '|' || t.session_day || '|' || t.session_no) in (select key from checked_sessions)`,
+    );
     if (bouts) held.bouts = bouts;
   }
   const others = await readOthers(tx, siteId, codes);
@@ -56,6 +77,9 @@ export async function loadRegistryContext(tx: Tx, siteId: string, month: string,
 
 async function readOthers(tx: Tx, siteId: string, codes: readonly string[]): Promise<TypedTable | null> {
   const columns = tableOf('participants').variables.map((variable) => variable.key);
-  const rows = (await tx.query(`select ${columns.join(', ')} from participants where site_id = $1 and not participant = any($2::text[])`, [siteId, codes])) as StoredRow[];
+  const rows = (await tx.query(`select ${columns.join(', ')} from participants where site_id = $1 and not participant = any($2::text[])`, [
+    siteId,
+    codes,
+  ])) as StoredRow[];
   return rows.length === 0 ? null : tableFromRows('participants', rows.map(withoutNulls));
 }

@@ -11,7 +11,12 @@ import { present } from './read-submissions.ts';
 import { beginCheck, readFiles } from './submissions.repository.ts';
 
 /** The worker reads and checks; whoever asked may leave and come back. */
-export const requestCheck = ({ database, clock }: Context, actor: Actor, { submissionId }: InputOf<typeof CheckSubmission>, requestId: string): Promise<Submission> =>
+export const requestCheck = (
+  { database, clock }: Context,
+  actor: Actor,
+  { submissionId }: InputOf<typeof CheckSubmission>,
+  requestId: string,
+): Promise<Submission> =>
   asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     if ((await readFiles(tx, submissionId)).length === 0) throw new Refusal('submission-empty', 'Add at least one file, then check.');

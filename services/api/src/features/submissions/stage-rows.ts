@@ -11,7 +11,8 @@ import { tableSql } from './table-sql.ts';
 type CopyValue = string | number | readonly string[] | null;
 
 /** COPY's text format (PostgreSQL manual, COPY, "Text Format"). Codes and pseudonyms hold nothing to escape, but the format's own rules are kept. */
-const escape = (text: string): string => (/[\\\t\n\r]/.test(text) ? text.replaceAll('\\', '\\\\').replaceAll('\t', '\\t').replaceAll('\n', '\\n').replaceAll('\r', '\\r') : text);
+const escape = (text: string): string =>
+  /[\\\t\n\r]/.test(text) ? text.replaceAll('\\', '\\\\').replaceAll('\t', '\\t').replaceAll('\n', '\\n').replaceAll('\r', '\\r') : text;
 
 function copyValue(value: CopyValue): string {
   if (value === null) return '\\N';

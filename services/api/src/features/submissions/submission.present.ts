@@ -14,6 +14,7 @@ export function presentSubmission(record: SubmissionRecord, files: readonly File
     files: files.map((file) => ({ ...file, addedAt: file.addedAt.toISOString() })),
     progress: progress === null ? null : { step: progress.step, done: progress.done, of: progress.of },
     findings: record.findings,
-    preview: record.preview !== null && record.previewDigest !== null ? { digest: record.previewDigest, tables: record.preview.tables } : null,
+    preview:
+      record.preview !== null && record.previewDigest !== null ? { digest: record.previewDigest, tables: record.preview.tables } : null,
   };
 }

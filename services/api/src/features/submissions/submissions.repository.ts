@@ -29,27 +29,36 @@ const columns = `m.id, m.site_id as "siteId", s.code as "siteCode", s.name as "s
   m.preview_digest as "previewDigest", m.site_revision as "siteRevision", m.receipt`;
 
 export async function readSubmission(tx: Tx, id: string): Promise<SubmissionRecord | null> {
-  const [row] = (await tx.query(`select ${columns} from submissions m join sites s on s.id = m.site_id where m.id = $1`, [id])) as SubmissionRecord[];
+  const [row] = (await tx.query(`select ${columns} from submissions m join sites s on s.id = m.site_id where m.id = $1`, [
+    id,
+  ])) as SubmissionRecord[];
   return row ?? null;
 }
 
 /** Also keeps everyone else from changing this submission until the transaction ends. */
 export async function lockSubmission(tx: Tx, id: string): Promise<SubmissionRecord | null> {
-  const [row] = (await tx.query(`select ${columns} from submissions m join sites s on s.id = m.site_id where m.id = $1 for update of m`, [id])) as SubmissionRecord[];
+  const [row] = (await tx.query(`select ${columns} from submissions m join sites s on s.id = m.site_id where m.id = $1 for update of m`, [
+    id,
+  ])) as SubmissionRecord[];
   return row ?? null;
 }
 
 export async function findUnsettled(tx: Tx, siteId: string, month: string): Promise<string | null> {
-  const [row] = (await tx.query("select id from submissions where site_id = $1 and month = $2 and status in ('open', 'checking', 'checked') order by created_at desc limit 1", [
-    siteId,
-    month,
-  ])) as { id: string }[];
+  const [row] = (await tx.query(
+    "select id from submissions where site_id = $1 and month = $2 and status in ('open', 'checking', 'checked') order by created_at desc limit 1",
+    [siteId, month],
+  )) as { id: string }[];
   return row?.id ?? null;
 }
 
 export async function insertSubmission(tx: Tx, siteId: string, month: string, createdBy: string): Promise<string> {
   const id = randomUUID();
-  await tx.query("insert into submissions (id, site_id, month, status, created_by, findings) values ($1, $2, $3, 'open', $4, '[]')", [id, siteId, month, createdBy]);
+  await tx.query("insert into submissions (id, site_id, month, status, created_by, findings) values ($1, $2, $3, 'open', $4, '[]')", [
+    id,
+    siteId,
+    month,
+    createdBy,
+  ]);
   return id;
 }
 
@@ -83,26 +92,38 @@ export interface CheckOutcome {
 }
 
 export async function finishCheck(tx: Tx, id: string, outcome: CheckOutcome): Promise<void> {
-  await tx.query("update submissions set status = 'checked', progress = null, findings = $2, preview = $3, preview_digest = $4, site_revision = $5 where id = $1", [
-    id,
-    JSON.stringify(outcome.findings),
-    outcome.preview,
-    outcome.previewDigest,
-    outcome.siteRevision,
-  ]);
+  await tx.query(
+    "update submissions set status = 'checked', progress = null, findings = $2, preview = $3, preview_digest = $4, site_revision = $5 where id = $1",
+    [id, JSON.stringify(outcome.findings), outcome.preview, outcome.previewDigest, outcome.siteRevision],
+  );
 }
 
 export const setFindingGroups = (tx: Tx, id: string, findings: Submission['findings']): Promise<unknown> =>
   tx.query('update submissions set findings = $2 where id = $1', [id, JSON.stringify(findings)]);
 
-export async function settle(tx: Tx, id: string, status: 'accepted' | 'discarded', by: string, receipt: SubmissionReceipt | null): Promise<void> {
-  await tx.query('update submissions set status = $2, settled_at = now(), settled_by = $3, receipt = $4, progress = null where id = $1', [id, status, by, receipt]);
+export async function settle(
+  tx: Tx,
+  id: string,
+  status: 'accepted' | 'discarded',
+  by: string,
+  receipt: SubmissionReceipt | null,
+): Promise<void> {
+  await tx.query('update submissions set status = $2, settled_at = now(), settled_by = $3, receipt = $4, progress = null where id = $1', [
+    id,
+    status,
+    by,
+    receipt,
+  ]);
   await tx.query('update submission_files set content = null where submission_id = $1', [id]);
 }
 
 /** The month's earlier accepted submission makes way; its receipt stays readable. */
 export const supersedeEarlier = (tx: Tx, id: string, siteId: string, month: string): Promise<unknown> =>
-  tx.query("update submissions set status = 'superseded' where site_id = $1 and month = $2 and status = 'accepted' and id <> $3", [siteId, month, id]);
+  tx.query("update submissions set status = 'superseded' where site_id = $1 and month = $2 and status = 'accepted' and id <> $3", [
+    siteId,
+    month,
+    id,
+  ]);
 
 export interface FileRecord {
   readonly table: TableKey;
@@ -121,11 +142,18 @@ export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
 }
 
 export async function readContent(tx: Tx, id: string, table: TableKey): Promise<Buffer | null> {
-  const [row] = (await tx.query('select content from submission_files where submission_id = $1 and table_key = $2', [id, table])) as { content: Buffer | null }[];
+  const [row] = (await tx.query('select content from submission_files where submission_id = $1 and table_key = $2', [id, table])) as {
+    content: Buffer | null;
+  }[];
   return row?.content ?? null;
 }
 
-export async function putFile(tx: Tx, id: string, siteId: string, file: { table: TableKey; fileName: string; sha256: string; content: Buffer }): Promise<void> {
+export async function putFile(
+  tx: Tx,
+  id: string,
+  siteId: string,
+  file: { table: TableKey; fileName: string; sha256: string; content: Buffer },
+): Promise<void> {
   await tx.query(
     `insert into submission_files (submission_id, table_key, site_id, file_name, bytes, sha256, content) values ($1, $2, $3, $4, $5, $6, $7)
      on conflict (submission_id, table_key) do update
@@ -150,8 +178,15 @@ export interface SubmissionLine {
   readonly rows: number | null;
 }
 
-export async function listSubmissions(tx: Tx, siteId: string, limit: number, offset: number): Promise<{ items: SubmissionLine[]; total: number }> {
-  const [{ total }] = (await tx.query('select count(*)::int as total from submissions where site_id = $1', [siteId])) as [{ total: number }];
+export async function listSubmissions(
+  tx: Tx,
+  siteId: string,
+  limit: number,
+  offset: number,
+): Promise<{ items: SubmissionLine[]; total: number }> {
+  const [{ total }] = (await tx.query('select count(*)::int as total from submissions where site_id = $1', [siteId])) as [
+    { total: number },
+  ];
   const items = (await tx.query(
     `select m.id, m.month, m.status, m.created_at as "createdAt", coalesce(account_name(m.created_by), 'a former colleague') as "createdBy",
             m.settled_at as "settledAt", (select sum(f.rows)::int from submission_files f where f.submission_id = m.id) as rows
@@ -200,7 +235,9 @@ export async function listFindings(
 ): Promise<{ items: FindingRecord[]; total: number }> {
   const where = `submission_id = $1 and ($2::text is null or rule = $2) and ($3::text is null or table_key = $3) and ($4::text is null or severity = $4)`;
   const parameters = [id, filter.rule ?? null, filter.table ?? null, filter.severity ?? null];
-  const [{ total }] = (await tx.query(`select count(*)::int as total from submission_findings where ${where}`, parameters)) as [{ total: number }];
+  const [{ total }] = (await tx.query(`select count(*)::int as total from submission_findings where ${where}`, parameters)) as [
+    { total: number },
+  ];
   const items = (await tx.query(
     `select ordinal as id, rule, severity, table_key as "table", line, column_key as "column", found, mend
        from submission_findings where ${where} order by ordinal limit $5 offset $6`,
