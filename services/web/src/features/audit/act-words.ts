@@ -1,0 +1,32 @@
+/** What the log calls an act, in words. An act this version does not know is shown by its own name. */
+const words: Readonly<Record<string, string>> = {
+  'account.demonstration': 'demonstration account made',
+  'account.disable': 'account disabled',
+  'account.enable': 'account enabled again',
+  'audit.verify': 'audit log verified',
+  'export.ask': 'export asked for',
+  'export.build': 'export built',
+  'export.download': 'export downloaded',
+  'grant.end': 'role ended',
+  'grant.give': 'role given',
+  'invitation.accept': 'invitation accepted',
+  'invitation.revoke': 'invitation taken back',
+  'invitation.send': 'invitation sent',
+  'release.make': 'release made',
+  'request.begin': 'access request begun',
+  'request.reach': 'reach of a request asked for',
+  'request.submit': 'access request submitted',
+  'request.withdraw': 'access request withdrawn',
+  'sign-in': 'signed in',
+  'sign-out': 'signed out',
+  'submission.acknowledge': 'reason for warnings given',
+  'submission.check': 'check of a submission begun',
+  'submission.checked': 'submission checked',
+  'submission.commit': 'submission committed',
+  'submission.discard': 'submission given up',
+  'submission.file': 'file added to a submission',
+  'submission.file-removed': 'file taken out of a submission',
+  'submission.open': 'submission opened',
+};
+
+export const actWords = (act: string): string => words[act] ?? act;
