@@ -109,6 +109,7 @@ export const reasons = {
   allEqual: 'all values equal',
   noComparison: 'no comparison possible',
   tooLarge: 'values too large to compute with',
+  tooSmall: 'values too close together to compute with',
 } as const;
 
 /** An interval from fewer than five values is shown, but marked. */

@@ -3,6 +3,8 @@
  * alone.
  */
 
+import { reasons } from '../result.ts';
+
 export interface CentredColumn {
   readonly mean: number;
   /** Root of the sum of squared deviations; 0 when the column does not vary. */
@@ -38,4 +40,13 @@ export function centredColumn(values: Float64Array, centre: boolean): CentredCol
   const norm = largest * Math.sqrt(sum);
   for (let i = 0; i < values.length; i++) unit[i] = (unit[i] as number) / norm;
   return { mean, norm, unit };
+}
+
+/** Squares below this have lost digits. */
+const smallestSquare = 1e-290;
+
+/** Why these columns cannot be squared in double precision, if so. A column that does not vary is no obstacle here. */
+export function rangeObstacle(columns: readonly Pick<CentredColumn, 'norm'>[]): string | undefined {
+  if (!columns.every(({ norm }) => Number.isFinite(norm ** 2))) return reasons.tooLarge;
+  return columns.some(({ norm }) => norm > 0 && norm ** 2 < smallestSquare) ? reasons.tooSmall : undefined;
 }

@@ -139,6 +139,9 @@ describe('linear regression', () => {
         a.map((x) => x * 1e300),
       ),
     ).toMatchObject({ reason: 'values too large to compute with' });
+    expect(linearRegression({ outcome: a.map((x) => x * 1e-200), predictors: [{ name: 'a', values: a }] })).toMatchObject({
+      reason: 'values too close together to compute with',
+    });
     expect(linearRegression({ outcome: a.map(() => 3), predictors: [{ name: 'a', values: a }] })).toMatchObject({
       reason: 'all values equal',
     });

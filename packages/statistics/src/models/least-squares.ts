@@ -6,7 +6,7 @@
  */
 
 import type { CentredColumn } from '../linear-algebra/centred-column.ts';
-import { centredColumn } from '../linear-algebra/centred-column.ts';
+import { centredColumn, rangeObstacle } from '../linear-algebra/centred-column.ts';
 import { inverseCrossProduct, invertTriangle, orthogonalTriangle, solveAgainstColumn } from '../linear-algebra/orthogonal-triangle.ts';
 
 export interface FittedLeastSquares {
@@ -32,7 +32,8 @@ export interface FittedLeastSquares {
 /** Why there is no fit. `column`: the first predictor that does not vary, or that the predictors before it determine. */
 export type UnfitLeastSquares =
   | { readonly kind: 'constant-predictor' | 'dependent-predictor'; readonly column: number }
-  | { readonly kind: 'constant-outcome' | 'too-large' };
+  | { readonly kind: 'constant-outcome' }
+  | { readonly kind: 'out-of-range'; readonly reason: string };
 
 /**
  * A predictor whose part not explained by those before it is below this share of its length counts as determined by them (R uses the
@@ -52,7 +53,8 @@ export function fitLeastSquares(
   const order = predictors.length;
   const y = centredColumn(outcome, !throughOrigin);
   const columns = predictors.map((predictor) => centredColumn(predictor, !throughOrigin));
-  if (![y, ...columns].every((column) => Number.isFinite(column.norm) && Number.isFinite(column.norm ** 2))) return { kind: 'too-large' };
+  const outOfRange = rangeObstacle([y, ...columns]);
+  if (outOfRange !== undefined) return { kind: 'out-of-range', reason: outOfRange };
   if (y.norm === 0) return { kind: 'constant-outcome' };
   const flat = columns.findIndex((column) => column.norm === 0);
   if (flat >= 0) return { kind: 'constant-predictor', column: flat };

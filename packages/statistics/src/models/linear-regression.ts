@@ -56,8 +56,8 @@ export function reasonForUnfit(unfit: UnfitLeastSquares, names: readonly string[
       return `${names[unfit.column]} does not vary`;
     case 'dependent-predictor':
       return `${names[unfit.column]} is determined by the predictors before it`;
-    case 'too-large':
-      return reasons.tooLarge;
+    case 'out-of-range':
+      return unfit.reason;
   }
 }
 

@@ -25,11 +25,13 @@ import { chiSquareFigures, percentText } from '../test-figures.ts';
 import { areaUnderCurve } from './area-under-curve.ts';
 import type { Coefficient } from './coefficient.ts';
 import { interceptName, neededPerCoefficient, waldCoefficient } from './coefficient.ts';
-import { rankTolerance } from './least-squares.ts';
-import { reasonForUnfit } from './linear-regression.ts';
 import type { Predictor } from './predictor.ts';
+import { unusablePredictor } from './unusable-predictor.ts';
 
-/** Coefficient on the log odds scale, and the same as an odds ratio with its limits. */
+/**
+ * Coefficient on the log odds scale, and the same as an odds ratio with its limits: Infinity where the ratio for one unit is beyond a
+ * double.
+ */
 export interface LogisticCoefficient extends Coefficient {
   readonly oddsRatio: number;
   readonly oddsRatioLower: number;
@@ -156,7 +158,7 @@ export function logisticRegression({ outcome, predictors, level = 0.95 }: Logist
   }
   const names = predictors.map((predictor) => predictor.name);
   const scaled = columns.slice(1).map((column) => centredColumn(column, true));
-  const refused = unusableColumn(scaled, names);
+  const refused = unusablePredictor(scaled, names);
   if (refused !== undefined) return notEstimable(refused, basis);
 
   const constant = new Float64Array(n).fill(1);
@@ -185,16 +187,6 @@ export function logisticRegression({ outcome, predictors, level = 0.95 }: Logist
     method: `Logistic regression by maximum likelihood, Wald intervals and tests, likelihood ratio test of all predictors (two-sided, ${percentText(level)}).`,
     failedAssumptions: [],
   };
-}
-
-/** Why one of the columns cannot enter, if so: the rank test of ordinary least squares. */
-function unusableColumn(columns: readonly CentredColumn[], names: readonly string[]): string | undefined {
-  if (columns.some((column) => !Number.isFinite(column.norm))) return reasonForUnfit({ kind: 'too-large' }, names);
-  const flat = columns.findIndex((column) => column.norm === 0);
-  if (flat >= 0) return reasonForUnfit({ kind: 'constant-predictor', column: flat }, names);
-  const { size, entries } = orthogonalTriangle(columns.map((column) => column.unit));
-  const dependent = columns.findIndex((_, j) => Math.abs(entries[j * size + j] as number) < rankTolerance);
-  return dependent < 0 ? undefined : reasonForUnfit({ kind: 'dependent-predictor', column: dependent }, names);
 }
 
 /** From the scaled columns back to the units of the predictors. */

@@ -13,6 +13,7 @@
 
 import type { Label } from '../complete-rows.ts';
 import { completeRows } from '../complete-rows.ts';
+import { rangeObstacle } from '../linear-algebra/centred-column.ts';
 import type { NotEstimable, Provenance } from '../result.ts';
 import { notEstimable, reasons, requireLevel } from '../result.ts';
 import { findRoot } from '../root.ts';
@@ -92,21 +93,24 @@ function findMinimum(design: ClusteredDesign): RestrictedLikelihood {
   return at(Math.exp(findRoot(slopeAt, Math.min(bestLog, far), Math.max(bestLog, far), 1e-15)));
 }
 
-/** Satterthwaite: 2 variance^2 / (variance of that variance), the latter from the curvature by lambda and the residual variance. */
+/**
+ * Satterthwaite: 2 variance^2 / (variance of that variance), the latter from the curvature by lambda and the residual variance. Both are
+ * those of the coefficient divided by the length of its row, which leaves the ratio as it is.
+ */
 function satterthwaite(whitened: readonly number[], variance: number, curvature: Curvature): number {
-  const factor = whitened.reduce((sum, value) => sum + value * value, 0);
+  const length = Math.hypot(...whitened);
+  const unit = whitened.map((value) => value / length);
   const byLambda =
     variance *
-    whitened.reduce(
-      (sum, value, a) => sum + value * whitened.reduce((inner, other, b) => inner + other * (curvature.inverseSlope[a]?.[b] as number), 0),
+    unit.reduce(
+      (sum, value, a) => sum + value * unit.reduce((inner, other, b) => inner + other * (curvature.inverseSlope[a]?.[b] as number), 0),
       0,
     );
   const { lambdaLambda, lambdaResidual, residualResidual } = curvature;
   const determinant = lambdaLambda * residualResidual - lambdaResidual ** 2;
   // The deviance is minus twice the log likelihood, so its second derivatives are twice the information.
-  const spread =
-    (2 * (byLambda ** 2 * residualResidual - 2 * byLambda * factor * lambdaResidual + factor ** 2 * lambdaLambda)) / determinant;
-  return (2 * (variance * factor) ** 2) / spread;
+  const spread = (2 * (byLambda ** 2 * residualResidual - 2 * byLambda * lambdaResidual + lambdaLambda)) / determinant;
+  return (2 * variance ** 2) / spread;
 }
 
 export function randomInterceptModel({
@@ -168,7 +172,8 @@ export function randomInterceptModel({
 /** Why the model cannot be fitted to these rows, if so. */
 function obstacle(design: ClusteredDesign, names: readonly string[]): string | undefined {
   const { outcome, predictors, order, rows, clusterSizes, variesWithin, within } = design;
-  if (![outcome, ...predictors].every(({ norm }) => Number.isFinite(norm ** 2))) return reasons.tooLarge;
+  const outOfRange = rangeObstacle([outcome, ...predictors]);
+  if (outOfRange !== undefined) return outOfRange;
   if (outcome.norm === 0) return reasons.allEqual;
   const flat = predictors.findIndex(({ norm }) => norm === 0);
   if (flat >= 0) return reasonForUnfit({ kind: 'constant-predictor', column: flat }, names);

@@ -9,20 +9,20 @@
 
 import type { Label } from '../complete-rows.ts';
 import { completeRows } from '../complete-rows.ts';
-import { centredColumn } from '../linear-algebra/centred-column.ts';
-import { orthogonalTriangle } from '../linear-algebra/orthogonal-triangle.ts';
+import type { CentredColumn } from '../linear-algebra/centred-column.ts';
+import { centredColumn, rangeObstacle } from '../linear-algebra/centred-column.ts';
 import type { NotEstimable, Provenance } from '../result.ts';
 import { notEstimable, reasons, requireLevel } from '../result.ts';
 import type { Observation } from '../samples.ts';
 import { percentText } from '../test-figures.ts';
-import { rankTolerance } from './least-squares.ts';
-import { reasonForUnfit, tooFewParticipants } from './linear-regression.ts';
+import { tooFewParticipants } from './linear-regression.ts';
 import { minimiseSmooth } from './minimise-smooth.ts';
 import type { MixedCoefficient } from './mixed-coefficients.ts';
 import { innerOuterDf, logScale, mixedCoefficients } from './mixed-coefficients.ts';
 import type { Predictor } from './predictor.ts';
 import type { RelativeFactor } from './random-slope-likelihood.ts';
 import { slopeDesign, slopeLikelihood } from './random-slope-likelihood.ts';
+import { unusablePredictor } from './unusable-predictor.ts';
 
 export interface RandomSlopeModel extends Provenance {
   readonly kind: 'random-slope-model';
@@ -76,24 +76,19 @@ export function randomSlopeModel({ outcome, slope, predictors, cluster, level = 
   if (n <= 2 * clusters) return notEstimable('too few rows for each cluster to tell its intercept and slope from chance', basis);
 
   const members = membersOf(codes, clusters);
-  const [y, ...scaled] = columns.map((column) => centredColumn(column, true)) as [
-    ReturnType<typeof centredColumn>,
-    ...ReturnType<typeof centredColumn>[],
-  ];
+  const [y, ...scaled] = columns.map((column) => centredColumn(column, true)) as [CentredColumn, ...CentredColumn[]];
   const varying = columns.slice(1).map((column) => variesWithin(column, members));
   const df = innerOuterDf(n, clusters, varying);
-  if (![y, ...scaled].every(({ norm }) => Number.isFinite(norm ** 2))) return notEstimable(reasons.tooLarge, basis);
+  const outOfRange = rangeObstacle([y, ...scaled]);
+  if (outOfRange !== undefined) return notEstimable(outOfRange, basis);
   if (y.norm === 0) return notEstimable(reasons.allEqual, basis);
-  const flat = scaled.findIndex(({ norm }) => norm === 0);
-  if (flat >= 0) return notEstimable(reasonForUnfit({ kind: 'constant-predictor', column: flat }, names), basis);
+  const unusable = unusablePredictor(scaled, names);
+  if (unusable !== undefined) return notEstimable(unusable, basis);
   if (varying[0] === false) return notEstimable(`${slope.name} does not vary within clusters`, basis);
   if (df.inner < 1 || df.outer < 1) return notEstimable(tooFewParticipants(n, names.length + 1), basis);
-  const { size, entries } = orthogonalTriangle(scaled.map(({ unit }) => unit));
-  const dependent = scaled.findIndex((_, j) => Math.abs(entries[j * size + j] as number) < rankTolerance);
-  if (dependent >= 0) return notEstimable(reasonForUnfit({ kind: 'dependent-predictor', column: dependent }, names), basis);
 
   // Time in standard deviations about its mean, so that both random effects have the size of the outcome's spread.
-  const time = (scaled[0] as (typeof scaled)[number]).unit.map((value) => value * Math.sqrt(n));
+  const time = (scaled[0] as CentredColumn).unit.map((value) => value * Math.sqrt(n));
   const constant = new Float64Array(n).fill(1 / Math.sqrt(n));
   const design = slopeDesign([constant, ...scaled.map(({ unit }) => unit), y.unit], time, members);
   const order = names.length + 1;

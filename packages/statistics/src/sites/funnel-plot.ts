@@ -132,5 +132,6 @@ export function meanFunnel(sites: readonly SiteMean[], target: number, sdWithin:
     return { site: names[codes[i] as number] as string, n, value: mean, z: ((mean - target) * Math.sqrt(n)) / sdWithin };
   });
   const limitAt = (size: number, p: number): number => meanFunnelLimit(target, sdWithin, size, p);
+  if (!points.every(({ z }) => Number.isFinite(z ** 2))) return notEstimable(reasons.tooLarge, basis);
   return funnelPlot(points, target, limitAt, { lowest: -Infinity, highest: Infinity }, basis, 'Funnel plot with normal limits');
 }

@@ -6,7 +6,7 @@
 
 import type { Label } from '../complete-rows.ts';
 import { completeRows } from '../complete-rows.ts';
-import { centredColumn } from '../linear-algebra/centred-column.ts';
+import { centredColumn, rangeObstacle } from '../linear-algebra/centred-column.ts';
 import type { NotEstimable, Provenance, TestFigures } from '../result.ts';
 import { notEstimable, reasons } from '../result.ts';
 import type { Observation } from '../samples.ts';
@@ -36,9 +36,11 @@ export function intraclassCorrelation(values: ArrayLike<Observation>, site: Arra
   if (n === 0) return notEstimable(reasons.noData, basis);
   if (k < fewestSites) return notEstimable(`${k} sites: an intraclass correlation needs at least ${fewestSites}`, basis);
   if (k === n) return notEstimable('no site has more than one person', basis);
-  const { norm, unit } = centredColumn(columns[0] as Float64Array, true);
+  const centred = centredColumn(columns[0] as Float64Array, true);
+  const { norm, unit } = centred;
+  const outOfRange = rangeObstacle([centred]);
   if (norm === 0) return notEstimable(reasons.allEqual, basis);
-  if (!Number.isFinite(norm ** 2)) return notEstimable(reasons.tooLarge, basis);
+  if (outOfRange !== undefined) return notEstimable(outOfRange, basis);
   const sizes = new Float64Array(k);
   const sums = new Float64Array(k);
   for (const [i, code] of codes.entries()) {

@@ -254,6 +254,7 @@ describe('funnel plot', () => {
       ],
     });
     expect(meanFunnelLimit(10, 5, 25, 0.975)).toBeCloseTo(10 + 1.959963984540054, 10);
+    expect(meanFunnel([{ site: 'a', mean: 1e200, n: 9 }], 10, 5)).toMatchObject({ reason: 'values too large to compute with' });
     expect(meanFunnel([], 10, 5)).toMatchObject({ reason: 'no data' });
   });
 

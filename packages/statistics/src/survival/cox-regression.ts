@@ -10,7 +10,7 @@
  */
 
 import type { CentredColumn } from '../linear-algebra/centred-column.ts';
-import { centredColumn } from '../linear-algebra/centred-column.ts';
+import { centredColumn, rangeObstacle } from '../linear-algebra/centred-column.ts';
 import { symmetricSolver } from '../linear-algebra/solve-symmetric.ts';
 import type { Coefficient } from '../models/coefficient.ts';
 import { neededPerCoefficient, waldCoefficient } from '../models/coefficient.ts';
@@ -21,7 +21,10 @@ import { chiSquareFigures, percentText } from '../test-figures.ts';
 import type { FollowUp } from './follow-up.ts';
 import { cleanFollowUp, orderOfTime } from './follow-up.ts';
 
-/** Coefficient on the log hazard scale, and the same as a hazard ratio with its limits. */
+/**
+ * Coefficient on the log hazard scale, and the same as a hazard ratio with its limits: Infinity where the ratio for one unit is beyond a
+ * double.
+ */
 export interface CoxCoefficient extends Coefficient {
   readonly hazardRatio: number;
   readonly hazardRatioLower: number;
@@ -145,7 +148,8 @@ export function coxRegression({ time, event, predictors, level = 0.95 }: CoxInpu
   const scaled = clean.covariates.map((column) => standardised(column));
   const flat = scaled.findIndex((column) => column.norm === 0);
   if (flat >= 0) return notEstimable(`${predictors[flat]?.name} does not vary`, basis);
-  if (scaled.some((column) => !Number.isFinite(column.norm))) return notEstimable(reasons.tooLarge, basis);
+  const outOfRange = rangeObstacle(scaled);
+  if (outOfRange !== undefined) return notEstimable(outOfRange, basis);
 
   const order = orderOfTime(clean.time);
   const columns = scaled.map((column) => column.unit);
