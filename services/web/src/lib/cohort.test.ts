@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { cohortPhrases, formatCells, parseCells } from './cohort.ts';
+import { cohortIn, cohortPhrases, cohortSearch, formatCells, parseCells } from './cohort.ts';
 
 describe('a cohort in the address', () => {
   it('reads back as it was written, in the order of the grid', () => {
@@ -17,6 +17,13 @@ describe('a cohort in the address', () => {
     expect(parseCells('c5_c8.C.F.C-x9.A-c5_c8.C')).toEqual([{ levelGroup: 'c5_c8', grade: 'C' }]);
     expect(parseCells(null)).toEqual([]);
     expect(parseCells('')).toEqual([]);
+  });
+
+  it('is carried along with the outcome it was chosen by', () => {
+    const cohort = { outcome: 'tmwt_ss', inDevice: true, cells: parseCells('t1_t9.D') };
+    expect(String(cohortSearch(cohort))).toBe('outcome=tmwt_ss&in-device=yes&cells=t1_t9.D');
+    expect(cohortIn(cohortSearch(cohort))).toEqual(cohort);
+    expect(cohortIn(new URLSearchParams('cells=t1_t9.D'))).toBeNull();
   });
 
   it('leaves the address when nothing is chosen', () => {

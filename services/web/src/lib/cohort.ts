@@ -1,4 +1,5 @@
 /** A cohort as cells of the grid: how the address holds it (`c5_c8.C.D-t1_t9.D`) and how it is said in words. */
+import type { RequestForm } from '@cairnstep/contract';
 import { grades } from '@cairnstep/contract';
 import { levelGroups } from '@cairnstep/scoring';
 
@@ -34,6 +35,22 @@ export function parseCells(text: string | null): CohortCell[] {
 export function formatCells(cells: readonly CohortCell[]): string | null {
   const parts = byGroup(cells).map(({ levelGroup, grades: names }) => [levelGroup, ...names].join('.'));
   return parts.length === 0 ? null : parts.join('-');
+}
+
+/** The outcome that was looked at when the cells were chosen, and the cells; none means everyone. */
+export type Cohort = RequestForm['cohort'];
+
+/** The search parameters that stand for a cohort wherever it is carried along. */
+export function cohortSearch({ outcome, inDevice, cells }: Cohort): URLSearchParams {
+  const written = formatCells(cells);
+  return new URLSearchParams({ outcome, ...(inDevice && { 'in-device': 'yes' }), ...(written !== null && { cells: written }) });
+}
+
+/** Null where the address names none. */
+export function cohortIn(search: URLSearchParams): Cohort | null {
+  const outcome = search.get('outcome');
+  if (outcome === null || outcome === '') return null;
+  return { outcome, inDevice: search.get('in-device') === 'yes', cells: parseCells(search.get('cells')) };
 }
 
 /** One phrase for each level group: "C5–C8: AIS C and D". */

@@ -1,7 +1,7 @@
 /** The chosen cohort in one line, kept in sight below the grid, and what can be done with it. */
 import type { Grid } from '@cairnstep/contract';
 import type { CohortCell } from '../../lib/cohort.ts';
-import { formatCells } from '../../lib/cohort.ts';
+import { cohortSearch } from '../../lib/cohort.ts';
 import { Button, LinkButton } from '../../ui/button.tsx';
 import { cohortCount } from './grid-words.ts';
 
@@ -9,10 +9,12 @@ export interface CohortStripProps {
   readonly grid: Grid;
   readonly cells: readonly CohortCell[];
   readonly mayRequest: boolean;
+  /** The draft request for which a cohort is being chosen. */
+  readonly draft: string | null;
   readonly onClear: () => void;
 }
 
-export function CohortStrip({ grid, cells, mayRequest, onClear }: CohortStripProps) {
+export function CohortStrip({ grid, cells, mayRequest, draft, onClear }: CohortStripProps) {
   return (
     <div className="not-printed sticky bottom-0 z-10 mt-4 flex flex-wrap items-center gap-x-6 gap-y-2 border-t-2 border-lichen bg-sheet py-3">
       <p role="status" className="numbers min-w-0 flex-1 basis-64 font-semibold">
@@ -24,18 +26,13 @@ export function CohortStrip({ grid, cells, mayRequest, onClear }: CohortStripPro
         </Button>
       )}
       {mayRequest && (
-        <LinkButton variant="primary" to={requestAddress(grid, cells)}>
-          Request these rows
+        <LinkButton
+          variant="primary"
+          to={`/requests/${draft ?? 'new'}?${cohortSearch({ outcome: grid.outcome.key, inDevice: grid.outcome.inDevice, cells: [...cells] })}`}
+        >
+          {draft === null ? 'Request these rows' : 'Take these for the draft'}
         </LinkButton>
       )}
     </div>
   );
-}
-
-function requestAddress({ outcome }: Grid, cells: readonly CohortCell[]): string {
-  const search = new URLSearchParams({ outcome: outcome.key });
-  if (outcome.inDevice) search.set('in-device', 'yes');
-  const written = formatCells(cells);
-  if (written !== null) search.set('cells', written);
-  return `/requests/new?${search}`;
 }

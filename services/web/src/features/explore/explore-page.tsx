@@ -79,7 +79,7 @@ interface GridSectionProps {
   readonly mayRequest: boolean;
 }
 
-function GridSection({ grid, isOld, address: { cells, asTable, chooseCells, showAs }, mayRequest }: GridSectionProps) {
+function GridSection({ grid, isOld, address: { cells, asTable, draft, chooseCells, showAs }, mayRequest }: GridSectionProps) {
   const titleId = useId();
   const scale = intervalScale(grid);
   const unit = unitText(grid.outcome);
@@ -110,7 +110,7 @@ function GridSection({ grid, isOld, address: { cells, asTable, chooseCells, show
         {asTable ? <GridAsTable grid={grid} /> : <GridWithLevels grid={grid} labelledBy={titleId} chosen={cells} onChoose={chooseCells} />}
         <CohortSheet grid={grid} cells={cells} />
       </div>
-      <CohortStrip grid={grid} cells={cells} mayRequest={mayRequest} onClear={() => chooseCells([])} />
+      <CohortStrip grid={grid} cells={cells} mayRequest={mayRequest} draft={draft} onClear={() => chooseCells([])} />
     </Section>
   );
 }

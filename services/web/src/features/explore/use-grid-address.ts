@@ -14,6 +14,8 @@ export interface GridAddress {
   readonly question: GridQuestion;
   readonly cells: readonly CohortCell[];
   readonly asTable: boolean;
+  /** The draft request that the choice is to go back to. */
+  readonly draft: string | null;
   readonly ask: (changes: Partial<Record<'outcome' | 'inDevice' | 'statistic' | 'release' | 'site', string | null>>) => void;
   readonly chooseCells: (cells: readonly CohortCell[]) => void;
   readonly showAs: (view: 'grid' | 'table') => void;
@@ -35,6 +37,7 @@ export function useGridAddress(ownSites: readonly string[]): GridAddress {
     },
     cells: parseCells(search.get('cells')),
     asTable: search.get('view') === 'table',
+    draft: search.get('draft'),
     ask: ({ inDevice, ...others }) => change({ ...others, ...(inDevice !== undefined && { 'in-device': inDevice }) }),
     chooseCells: (cells) => change({ cells: formatCells(cells) }),
     showAs: (view) => change({ view: view === 'table' ? 'table' : null }),

@@ -1,0 +1,60 @@
+/** A draft as it is typed, and the keeping of it. */
+import type { AccessRequest, RequestForm } from '@cairnstep/contract';
+import { useEffect, useState, useSyncExternalStore } from 'react';
+import { useSearchParams } from 'react-router-dom';
+import { useAddressChange } from '../../lib/address-state.ts';
+import { cohortIn } from '../../lib/cohort.ts';
+import { withoutCohort } from './cohort-address.ts';
+import { DraftKeeper } from './draft-keeper.ts';
+import type { Keeping } from './draft-keeper.ts';
+import { useSaveRequest } from './requests.queries.ts';
+
+export interface Draft {
+  readonly form: RequestForm;
+  readonly change: (changes: Partial<RequestForm>) => void;
+  readonly keeping: Keeping;
+  /** Resolves when all that was typed is on the server. */
+  readonly keepNow: () => Promise<void>;
+  /** Set when the cohort has just been brought from the grid. */
+  readonly cohortBrought: boolean;
+}
+
+export function useDraft(request: AccessRequest): Draft {
+  const save = useSaveRequest(request.id);
+  const [keeper] = useState(() => new DraftKeeper<RequestForm>((draft) => save.mutateAsync(draft)));
+  const [search] = useSearchParams();
+  const [brought] = useState(() => cohortIn(search));
+  const [form, setForm] = useState<RequestForm>(() => (brought === null ? request.form : { ...request.form, cohort: brought }));
+  const changeAddress = useAddressChange();
+
+  useEffect(() => {
+    if (brought === null) return;
+    keeper.change({ ...request.form, cohort: brought });
+    changeAddress(withoutCohort);
+    // Once, on arriving from the grid.
+    // eslint-disable-next-line react-hooks/exhaustive-deps
+  }, []);
+
+  useEffect(() => {
+    const warn = (event: BeforeUnloadEvent) => {
+      if (keeper.isBehind) event.preventDefault();
+    };
+    window.addEventListener('beforeunload', warn);
+    return () => {
+      window.removeEventListener('beforeunload', warn);
+      void keeper.flush().catch(() => undefined);
+    };
+  }, [keeper]);
+
+  return {
+    form,
+    change: (changes) => {
+      const next = { ...form, ...changes };
+      setForm(next);
+      keeper.change(next);
+    },
+    keeping: useSyncExternalStore(keeper.subscribe, keeper.current),
+    keepNow: () => keeper.flush(),
+    cohortBrought: brought !== null,
+  };
+}
