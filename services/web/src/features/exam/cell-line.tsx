@@ -1,0 +1,97 @@
+/** What the active cell is and holds, and the keys as buttons: for fingers, and to learn the keys by. Stays in sight. */
+import type { RefObject } from 'react';
+import { Button } from 'react-aria-components/Button';
+import type { Act, Entry } from './entry.ts';
+import { cellTitle, labelIn, meaningOf, normalScore, ntReasons, reasonFor, tagCauses } from './exam-sheet.ts';
+import { isAnswer } from './places.ts';
+import type { Reading } from './reading.ts';
+import { shownResult } from './result-words.ts';
+
+export interface CellLineProps {
+  readonly entry: Entry;
+  readonly reading: Reading;
+  readonly act: (act: Act) => void;
+  readonly followsRef: RefObject<boolean>;
+}
+
+export function CellLine({ entry, reading, act, followsRef }: CellLineProps) {
+  const { active } = entry;
+  const issues = reading.issues.filter(({ cell }) => cell === active);
+  return (
+    <div className="not-printed sticky bottom-0 z-2 grid gap-2 border-t-2 border-edge bg-sheet py-2">
+      <p className="min-h-6">
+        <span className="font-semibold">{cellTitle(active)}</span>: {heldIn(entry)}
+      </p>
+      {issues.map(({ message, severity }) => (
+        <p key={message} className={`border-l-4 pl-2 text-small ${severity === 'error' ? 'border-oxide' : 'border-amber'}`}>
+          {message}
+        </p>
+      ))}
+      {entry.said !== null && <p className="text-small text-quiet">{entry.said.words}</p>}
+      <Pad entry={entry} act={act} followsRef={followsRef} />
+      <SoFar reading={reading} />
+    </div>
+  );
+}
+
+function heldIn({ active, sheet }: Entry): string {
+  const written = sheet.written[active];
+  if (written === undefined) return 'blank';
+  const remarks = [
+    meaningOf(active, written),
+    ...(written.endsWith('*') ? [labelIn(tagCauses, sheet.tagCauses[active]) ?? 'no condition named'] : []),
+    ...(written.startsWith('NT') ? [labelIn(ntReasons, reasonFor(sheet, active)) ?? 'no reason given'] : []),
+  ];
+  return `${written}, ${remarks.join('; ')}`;
+}
+
+/** The two results most asked for, where the results themselves are out of sight. */
+function SoFar({ reading }: { readonly reading: Reading }) {
+  const isFull = reading.blank.length === 0;
+  const nli = shownResult(reading.classification, { result: 'nli' }, isFull);
+  const ais = shownResult(reading.classification, { result: 'ais' }, isFull);
+  return (
+    <p className="text-small lg:hidden">
+      Level of injury <span className="font-semibold">{nli.words}</span>, AIS <span className="font-semibold">{ais.words}</span>
+    </p>
+  );
+}
+
+function Pad({ entry, act, followsRef }: Omit<CellLineProps, 'reading'>) {
+  const { active } = entry;
+  const scores = isAnswer(active)
+    ? [
+        { text: '1', words: 'Yes' },
+        { text: '0', words: 'No' },
+      ]
+    : Array.from({ length: Number(normalScore(active)) + 1 }, (_, score) => ({ text: String(score), words: String(score) }));
+  const keys: readonly { readonly act: Act; readonly words: string; readonly name?: string }[] = [
+    ...scores.map(({ text, words }) => ({ act: { act: 'write', text } as const, words })),
+    { act: { act: 'write', text: 'NT' }, words: 'NT', name: 'Not tested' },
+    { act: { act: 'star' }, words: 'Star *' },
+    { act: { act: 'ask-reason' }, words: 'Reason' },
+    { act: { act: 'back' }, words: 'Back' },
+    { act: { act: 'fill', fill: 'normal-down' }, words: 'Normal down' },
+    { act: { act: 'fill', fill: 'normal-up' }, words: 'Normal up' },
+    { act: { act: 'fill', fill: 'absent-down' }, words: 'Absent down' },
+    { act: { act: 'undo' }, words: 'Undo' },
+  ];
+  return (
+    <div role="group" aria-label="Keys" className="flex flex-wrap gap-1">
+      {keys.map(({ act: pressed, words, name }) => (
+        <Button
+          key={words}
+          {...(name !== undefined && { 'aria-label': name })}
+          onPress={({ pointerType }) => {
+            // A finger or a mouse came from the grid and goes back to it; the keyboard stays where it is.
+            if (pointerType === 'mouse' || pointerType === 'touch' || pointerType === 'pen') followsRef.current = true;
+            act(pressed);
+          }}
+          className="min-h-9 min-w-9 rounded-sm border border-edge px-2 text-small numbers hover:border-ink hover:bg-paper"
+        >
+          {words}
+        </Button>
+      ))}
+    </div>
+  );
+}
