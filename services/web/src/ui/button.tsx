@@ -1,9 +1,11 @@
 /** Things to press. Primary: the one act a page is for. Danger: cannot be taken back. Quiet: beside other things. */
+import { useEffect } from 'react';
 import type { ReactNode, Ref } from 'react';
 import { Button as AriaButton } from 'react-aria-components/Button';
 import type { ButtonProps as AriaButtonProps } from 'react-aria-components/Button';
 import { Link } from 'react-router-dom';
 import type { LinkProps } from 'react-router-dom';
+import { announce } from './announcer.tsx';
 
 export type ButtonVariant = 'primary' | 'secondary' | 'quiet' | 'danger';
 
@@ -16,18 +18,32 @@ const variants: Record<ButtonVariant, string> = {
 };
 const resting = 'disabled:border-hairline disabled:bg-transparent disabled:text-quiet data-[pending]:cursor-progress';
 
-export interface ButtonProps extends Omit<AriaButtonProps, 'className' | 'style' | 'children'> {
+export interface ButtonProps extends Omit<AriaButtonProps, 'className' | 'style' | 'children' | 'isPending'> {
   readonly variant?: ButtonVariant;
+  /** What it began is under way. */
+  readonly isPending?: boolean;
   readonly children: ReactNode;
   readonly ref?: Ref<HTMLButtonElement>;
 }
 
-/** While `isPending` the button keeps its focus and words, takes no further press, and says so to assistive technology. */
-export function Button({ variant = 'secondary', children, ...rest }: ButtonProps) {
+/**
+ * While `isPending` the button keeps its focus and words, takes no further press, and says so to assistive technology. React Aria's
+ * own pending state speaks by a reference to the button, which is broken as soon as the act leads to another page.
+ */
+export function Button({ variant = 'secondary', isPending = false, type, onPress, children, ...rest }: ButtonProps) {
+  useEffect(() => {
+    if (isPending) announce('Under way.');
+  }, [isPending]);
   return (
-    <AriaButton {...rest} className={`${shape} ${variants[variant]} ${resting}`}>
+    <AriaButton
+      {...rest}
+      {...(type !== undefined && { type: isPending ? 'button' : type })}
+      {...(onPress !== undefined && !isPending && { onPress })}
+      {...(isPending && { 'aria-disabled': true, 'data-pending': true })}
+      className={`${shape} ${variants[variant]} ${resting}`}
+    >
       {children}
-      {rest.isPending === true && <span aria-hidden="true">…</span>}
+      {isPending && <span aria-hidden="true">…</span>}
     </AriaButton>
   );
 }

@@ -62,7 +62,7 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
     <div className="grid gap-2">
       <div
         ref={frame}
-        className="scrolls max-h-[80vh] overflow-auto"
+        className="scrolls relative max-h-[80vh] overflow-auto"
         {...(overflows && { tabIndex: 0, role: 'region', 'aria-labelledby': captionId })}
       >
         <table className="w-full border-separate border-spacing-0">
@@ -153,7 +153,9 @@ function SortMark({ direction }: { readonly direction: 'ascending' | 'descending
 
 function BodyCell<Row>({ column, row }: { readonly column: Column<Row>; readonly row: Row }) {
   const look = `${cellLook} border-hairline align-top ${alignment(column.kind)}`;
-  const shown = column.cell === undefined ? plain(column, row) : column.cell(row);
+  const content = column.cell === undefined ? plain(column, row) : column.cell(row);
+  // Buttons are as tall as a row: they must not make it taller.
+  const shown = column.isAct === true ? <div className="-my-2 flex min-h-10 flex-wrap items-center gap-x-4">{content}</div> : content;
   if (column.isRowHeader === true) {
     return (
       <th scope="row" className={look}>

@@ -139,12 +139,12 @@ function MonthActs({ month: { month, state, submissionId }, isCoordinator, isOpe
   );
   if (state === 'accepted' && submissionId !== null) {
     return (
-      <span className="flex flex-wrap items-center gap-x-4">
+      <>
         <TextLink to={`/submissions/${submissionId}/receipt`}>
           Receipt<span className="sr-only"> of {name}</span>
         </TextLink>
         {isCoordinator && act('Correct')}
-      </span>
+      </>
     );
   }
   return isCoordinator && (state === 'due' || state === 'overdue') ? act('Submit') : null;
