@@ -75,13 +75,17 @@ export function clusteredDesign(
 
   const constant = new Float64Array(rows);
   const within = orthogonalTriangle([constant, ...columns.map((column) => column.unit)]);
-  const sizes = [...new Set(clusterSizes)].sort((a, b) => a - b);
-  const between = sizes.map((size): SizeClass => {
+  const membersBySize = new Map<number, number[]>([...new Set(clusterSizes)].sort((a, b) => a - b).map((size) => [size, []]));
+  for (const [c, size] of clusterSizes.entries()) membersBySize.get(size)?.push(c);
+  const between = [...membersBySize].map(([size, members]): SizeClass => {
     const scale = Math.sqrt(size);
-    const columnsOfMeans = means.map((mean) => mean.filter((_, c) => clusterSizes[c] === size).map((value) => value * scale));
-    const members = (columnsOfMeans[0] as Float64Array).length;
-    const ones = new Float64Array(members).fill(scale / Math.sqrt(rows));
-    return { size, clusters: members, triangle: orthogonalTriangle([ones, ...columnsOfMeans]) };
+    const columnsOfMeans = means.map((mean) => {
+      const ofSize = new Float64Array(members.length);
+      for (let i = 0; i < members.length; i++) ofSize[i] = (mean[members[i] as number] as number) * scale;
+      return ofSize;
+    });
+    const ones = new Float64Array(members.length).fill(scale / Math.sqrt(rows));
+    return { size, clusters: members.length, triangle: orthogonalTriangle([ones, ...columnsOfMeans]) };
   });
 
   const describe = (j: number) => ({ mean: columns[j]?.mean as number, norm: columns[j]?.norm as number });
