@@ -4,7 +4,7 @@ import { productUrlVariable } from './product-variables.ts';
 
 export default defineConfig({
   testDir: '.',
-  testMatch: '**/*.test.ts',
+  testMatch: '**/*.{test,spec}.ts',
   outputDir: '../../test-results/journeys',
   globalSetup: './global-setup.ts',
   // One product and one database for all, so one journey at a time.

@@ -1,12 +1,13 @@
-/** The door for background work: takes jobs from PostgreSQL, one after another. Several may run beside each other. */
+/** The door for background work: takes jobs from PostgreSQL, one after another of each kind. Several may run beside each other. */
 import PgBoss from 'pg-boss';
 import { readConfig, SettingsError } from './config.ts';
 import { makeDataSource } from './database/data-source.ts';
 import { buildExport } from './features/exports/build-export.ts';
 import { checkSubmission } from './features/submissions/check-submission.ts';
 import { errorFacts, makeLogger } from './http/log.ts';
-import { queues, type Payloads, type QueueName } from './jobs/queues.ts';
+import { makeLeases } from './jobs/leases.ts';
 import { tidyUp } from './jobs/tidy-up.ts';
+import { workOff } from './jobs/work-off.ts';
 import { makeTransport, sendMail } from './mail/send-mail.ts';
 
 try {
@@ -19,34 +20,28 @@ try {
   boss.on('error', (error) => log.error(errorFacts(error), 'queue fault'));
   await boss.start();
 
-  const work: { readonly [Name in QueueName]: (payload: Payloads[Name]) => Promise<void> } = {
-    'check-submission': ({ submissionId }) => checkSubmission(context, submissionId),
-    'send-mail': ({ mailId }) => sendMail(context, transport, mailId),
-    'build-export': ({ exportId }) => buildExport(context, exportId),
-    'tidy-up': () => tidyUp(context),
-  };
-  for (const queue of queues) {
-    await boss.work<Payloads[typeof queue]>(queue, { pollingIntervalSeconds: 0.5, batchSize: 1 }, async ([job]) => {
-      if (!job) return;
-      try {
-        await (work[queue] as (payload: unknown) => Promise<void>)(job.data);
-      } catch (error) {
-        log.error({ ...errorFacts(error), queue, job: job.id }, 'job failed');
-        // pg-boss keeps what is thrown; only its kind may be kept.
-        // eslint-disable-next-line preserve-caught-error -- a cause would be kept too, and may quote a participant's value
-        throw new Error(errorFacts(error).kind);
-      }
-    });
-  }
+  const leases = makeLeases(jobsUrl(config.DATABASE_APP_URL));
+  const working = workOff(
+    boss,
+    leases,
+    {
+      'check-submission': ({ submissionId }) => checkSubmission(context, submissionId),
+      'send-mail': ({ mailId }) => sendMail(context, transport, mailId),
+      'build-export': ({ exportId }) => buildExport(context, exportId),
+      'tidy-up': () => tidyUp(context),
+    },
+    log,
+  );
   await boss.schedule('tidy-up', '*/10 * * * *', {});
   log.info('ready');
   process.send?.('ready');
 
   const stop = () => {
     log.info('stopping');
-    void boss
-      .stop({ graceful: true, timeout: 10_000 })
-      .then(() => database.destroy())
+    void working
+      .stop()
+      .then(() => boss.stop({ graceful: false }))
+      .then(() => Promise.all([leases.close(), database.destroy()]))
       .then(() => process.exit(0));
     setTimeout(() => process.exit(1), 15_000).unref();
   };

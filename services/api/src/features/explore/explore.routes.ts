@@ -26,7 +26,7 @@ import {
 } from './explore.repository.ts';
 import { gridCells, leftOutCounts, type Statistic, type View } from './grid.ts';
 import { makeRelease } from './make-release.ts';
-import { publicCount } from './public-count.ts';
+import { publicCount, publicCounts } from './public-count.ts';
 import { ReleaseCache } from './release-cache.ts';
 
 type OutcomeOut = z.output<typeof Outcome>;
@@ -78,15 +78,24 @@ const gridRows: readonly { readonly id: string; readonly label: string }[] = [
   { id: 'ND', label: 'Not determinable' },
 ];
 
+/** Completeness as printed for the public: classes of grades that leave no one out. */
+const completeness: readonly { readonly label: string; readonly holds: (course: CourseFact) => boolean }[] = [
+  { label: 'Complete (AIS A)', holds: ({ ais }) => ais === 'A' },
+  { label: 'Sensory incomplete (AIS B)', holds: ({ ais }) => ais === 'B' },
+  { label: 'Motor incomplete (AIS C and D)', holds: ({ ais }) => ais === 'C' || ais === 'D' },
+  { label: 'Normal examination after an earlier deficit (AIS E)', holds: ({ ais }) => ais === 'E' },
+  { label: 'Not determinable', holds: ({ ais }) => ais === 'ND' },
+];
+
 function levelColumn(courses: readonly CourseFact[], view: View): Grid['levels'] {
-  return spinalLevels.map((level) => {
-    const here = courses.filter((course) => course.nli === level);
-    return {
-      level,
-      levelGroup: levelGroups.groupOf(level) ?? 'ND',
-      participants: view === 'site' ? here.length : publicCount(here.length),
-    };
-  });
+  const exact = spinalLevels.map((level) => courses.filter((course) => course.nli === level).length);
+  // Whoever has no single level is part of the total, so of the protection too.
+  const shown = view === 'site' ? exact : publicCounts([...exact, courses.length - exact.reduce((sum, count) => sum + count, 0)]);
+  return spinalLevels.map((level, index) => ({
+    level,
+    levelGroup: levelGroups.groupOf(level) ?? 'ND',
+    participants: shown[index] ?? null,
+  }));
 }
 
 export function exploreRoutes({ database, ...context }: Context): Route[] {
@@ -161,24 +170,18 @@ export function exploreRoutes({ database, ...context }: Context): Route[] {
     const release = await asStatistics((tx) => readRelease(tx, undefined));
     if (!release) return { release: null, sites: 0, participants: null, sessions: null, bouts: null, levelGroups: [], completeness: [] };
     const people = await courses.get(release.number, 'all', () => asStatistics((tx) => readReleaseCourses(tx, release.number)));
-    const count = (label: string, chosen: (course: CourseFact) => boolean) => ({
-      label,
-      participants: publicCount(people.filter(chosen).length),
-    });
+    const counted = (classes: readonly { label: string; holds: (course: CourseFact) => boolean }[]) => {
+      const shown = publicCounts(classes.map(({ holds }) => people.filter(holds).length));
+      return classes.map(({ label }, index) => ({ label, participants: shown[index] ?? null }));
+    };
     return {
       release: { number: release.number, madeAt: release.madeAt.toISOString() },
       sites: release.totals.sites,
       participants: publicCount(release.totals.participants),
       sessions: publicCount(release.totals.sessions),
       bouts: publicCount(release.totals.bouts),
-      levelGroups: gridRows.map((row) => count(row.label, (course) => course.levelGroup === row.id)),
-      completeness: [
-        count('Complete (AIS A)', (course) => course.ais === 'A'),
-        count('Sensory incomplete (AIS B)', (course) => course.ais === 'B'),
-        count('Motor incomplete (AIS C and D)', (course) => course.ais === 'C' || course.ais === 'D'),
-        count('Normal examination after an earlier deficit (AIS E)', (course) => course.ais === 'E'),
-        count('Not determinable', (course) => course.ais === 'ND'),
-      ],
+      levelGroups: counted(gridRows.map((row) => ({ label: row.label, holds: (course) => course.levelGroup === row.id }))),
+      completeness: counted(completeness),
     };
   }
 
