@@ -34,7 +34,7 @@ export function Select({ id, label, hint, error, value, onChange, options, place
       placeholder={placeholder}
       isInvalid={error !== undefined}
       validationBehavior="aria"
-      className="grid max-w-xl gap-1"
+      className="grid max-w-xl grid-cols-1 gap-1"
     >
       <FieldParts label={label} hint={hint} error={error} isRequired={rest.isRequired ?? false}>
         <Button {...(ref !== undefined && { ref })} className={`${inputLook} flex items-center justify-between gap-4 text-left`}>
