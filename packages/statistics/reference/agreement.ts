@@ -1,6 +1,6 @@
 /** How computed figures are held against published ones. Used by the unit tests and by the table of evidence. */
 
-/** Passes when |got - want| <= abs + rel |want|. `fields` loosens the rule for a member of the expected value and all under it. */
+/** Passes when got equals want, or both are finite and |got - want| <= abs + rel |want|. `fields` loosens the rule for a member of the expected value and all under it. */
 export interface Tolerance {
   readonly rel?: number;
   readonly abs?: number;
@@ -31,18 +31,25 @@ export interface Agreement {
   readonly disagreements: readonly Disagreement[];
   /** Largest |got - want| / |want| over the numbers compared; absolute where a published figure is 0. */
   readonly worstRelativeError: number;
+  /** The same for each member of the expected value; for a bare number under ''. Members without numbers are not in it. */
+  readonly worstByMember: Readonly<Record<string, number>>;
   readonly compared: number;
 }
 
+/** Infinite where one of the two is no finite number and they are not the same. */
 export function relativeError(got: number, want: number): number {
   if (got === want) return 0;
+  if (!Number.isFinite(got) || !Number.isFinite(want)) return Infinity;
   return want === 0 ? Math.abs(got) : Math.abs(got - want) / Math.abs(want);
 }
 
 /** Digits agreed (log relative error) as the NIST data sets use it: at most 15. */
-export function digitsAgreed(got: number, certified: number): number {
-  const error = relativeError(got, certified);
+export function digitsOfError(error: number): number {
   return error === 0 ? 15 : Math.min(15, Math.max(0, -Math.log10(error)));
+}
+
+export function digitsAgreed(got: number, certified: number): number {
+  return digitsOfError(relativeError(got, certified));
 }
 
 /** Fixtures spell what JSON cannot: "Infinity" and "-Infinity". */
@@ -52,7 +59,7 @@ function asNumber(value: unknown): unknown {
 
 export function agreement(check: ReferenceCheck): Agreement {
   const disagreements: Disagreement[] = [];
-  let worstRelativeError = 0;
+  const worstByMember: Record<string, number> = {};
   let compared = 0;
 
   function compare(got: unknown, wanted: unknown, path: string, rel: number, abs: number): void {
@@ -74,11 +81,13 @@ export function agreement(check: ReferenceCheck): Agreement {
       if (got !== want) disagreements.push({ path, got, want });
       return;
     }
-    if (got === want) return;
-    if (!(Math.abs(got - want) <= abs + rel * Math.abs(want))) disagreements.push({ path, got, want });
-    worstRelativeError = Math.max(worstRelativeError, relativeError(got, want));
+    const error = relativeError(got, want);
+    const [member = ''] = path.split('.');
+    worstByMember[member] = Math.max(worstByMember[member] ?? 0, error);
+    const isWithin = got === want || (Number.isFinite(error) && Math.abs(got - want) <= abs + rel * Math.abs(want));
+    if (!isWithin) disagreements.push({ path, got, want });
   }
 
   compare(check.compute(), check.expected, '', check.tolerance.rel ?? 0, check.tolerance.abs ?? 0);
-  return { disagreements, worstRelativeError, compared };
+  return { disagreements, worstRelativeError: Math.max(0, ...Object.values(worstByMember)), worstByMember, compared };
 }

@@ -4,7 +4,7 @@
  */
 
 import type { EvidenceRow } from '../src/index.ts';
-import type { ReferenceCheck } from './agreement.ts';
+import type { Disagreement, ReferenceCheck } from './agreement.ts';
 import { agreement } from './agreement.ts';
 import { anovaChecks } from './analysis-of-variance.checks.ts';
 import { correlationChecks } from './correlations.checks.ts';
@@ -44,8 +44,8 @@ export const referenceChecks: readonly ReferenceCheck[] = [
 ];
 
 export interface CheckedEvidenceRow extends EvidenceRow {
-  /** Whether every figure is within the tolerance of its case. */
-  readonly withinTolerance: boolean;
+  /** Figures outside the tolerance of their case: a gate that failed. */
+  readonly disagreements: readonly (Disagreement & { readonly id: string })[];
 }
 
 /** What stands before the data set: up to the first semicolon that is not inside parentheses. */
@@ -59,13 +59,13 @@ export function evidence(checks: readonly ReferenceCheck[] = referenceChecks): C
     const source = sourceWithoutDataSet(check.source);
     const key = `${check.method}\n${source}`;
     const { compared, disagreements, worstRelativeError } = agreement(check);
-    const row = rows.get(key) ?? { method: check.method, source, cases: 0, figures: 0, worstRelativeError: 0, withinTolerance: true };
+    const row = rows.get(key) ?? { method: check.method, source, cases: 0, figures: 0, worstRelativeError: 0, disagreements: [] };
     rows.set(key, {
       ...row,
       cases: row.cases + 1,
       figures: row.figures + compared,
       worstRelativeError: Math.max(row.worstRelativeError, worstRelativeError),
-      withinTolerance: row.withinTolerance && disagreements.length === 0,
+      disagreements: [...row.disagreements, ...disagreements.map((found) => ({ id: check.id, ...found }))],
     });
   }
   return [...rows.values()];

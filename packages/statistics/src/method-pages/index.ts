@@ -54,9 +54,12 @@ import { funnelPage } from './funnel.ts';
 import { bootstrapPage } from './bootstrap.ts';
 import { rubinsRulesPage } from './rubins-rules.ts';
 
-export type { EvidenceRow } from './evidence-row.ts';
-export { evidenceTable } from './evidence-table.ts';
+export type { Computation, Library } from './computations.ts';
+export type { CertifiedFigure, CertifiedSet, EvidenceRow } from './evidence-row.ts';
+export { certifiedSets, evidenceTable } from './evidence-table.ts';
 export type { MethodPage } from './method-page.ts';
+export { questions } from './questions.ts';
+export type { QuestionKey } from './questions.ts';
 
 export const methodPages: readonly MethodPage[] = [
   descriptionPage,
