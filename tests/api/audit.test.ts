@@ -37,10 +37,14 @@ describe('the audit log', () => {
 
   it('is one chain without a gap when fifty people write at once', async () => {
     const months = Array.from({ length: 12 }, (_, index) => `2025-${String(index + 1).padStart(2, '0')}`);
-    const writes = Array.from({ length: 50 }, (_, index) => coordinator.post('/api/submissions', { siteId: site.id, month: months[index % 12] }));
+    const writes = Array.from({ length: 50 }, (_, index) =>
+      coordinator.post('/api/submissions', { siteId: site.id, month: months[index % 12] }),
+    );
     const answers = await Promise.all(writes);
     expect(answers.every((answer) => answer.status === 201)).toBe(true);
-    const { rows } = await server.database.owner.query('select count(*)::int as n, max(seq)::int as last, count(distinct prev)::int as links from audit_entries');
+    const { rows } = await server.database.owner.query(
+      'select count(*)::int as n, max(seq)::int as last, count(distinct prev)::int as links from audit_entries',
+    );
     expect(rows[0].n).toBe(rows[0].last);
     expect(rows[0].links).toBe(rows[0].n);
     expect((await steward.post('/api/audit/verification')).body.holds).toBe(true);

@@ -32,11 +32,10 @@ beforeAll(async () => {
   const submission = await coordinatorB.post('/api/submissions', { siteId: siteB.id, month: '2026-01' }).expect(201);
   const request = await otherResearcher.post('/api/access-requests', { form: emptyForm }).expect(201);
   const exportId = randomUUID();
-  await server.database.owner.query("insert into exports (id, number, request_id, requested_by, status) values ($1, 'EX-1', $2, $3, 'building')", [
-    exportId,
-    request.body.id,
-    otherResearcher.id,
-  ]);
+  await server.database.owner.query(
+    "insert into exports (id, number, request_id, requested_by, status) values ($1, 'EX-1', $2, $3, 'building')",
+    [exportId, request.body.id, otherResearcher.id],
+  );
   foreign = {
     siteId: siteB.id,
     submissionId: submission.body.id,
@@ -59,7 +58,12 @@ function addressOf(endpoint: Endpoint, value: (name: string) => string): string 
   return Object.keys(query).length > 0 ? `${path}?${new URLSearchParams(query).toString()}` : path;
 }
 
-function send(who: Pick<TestPerson, 'get' | 'post' | 'put' | 'delete' | 'upload'>, endpoint: Endpoint, value: (name: string) => string, body: object = {}): supertest.Test {
+function send(
+  who: Pick<TestPerson, 'get' | 'post' | 'put' | 'delete' | 'upload'>,
+  endpoint: Endpoint,
+  value: (name: string) => string,
+  body: object = {},
+): supertest.Test {
   const address = addressOf(endpoint, value);
   if (endpoint.upload) return who.upload(address, 'a,b\r\n');
   if (endpoint.method === 'GET') return who.get(address);
@@ -67,7 +71,8 @@ function send(who: Pick<TestPerson, 'get' | 'post' | 'put' | 'delete' | 'upload'
   if (endpoint.method === 'PUT') return who.put(address, body);
   return who.delete(address);
 }
-const anyId = (name: string): string => (name === 'table' ? 'bouts' : name === 'token' ? randomBytes(32).toString('base64url') : randomUUID());
+const anyId = (name: string): string =>
+  name === 'table' ? 'bouts' : name === 'token' ? randomBytes(32).toString('base64url') : randomUUID();
 const codeOf = (answer: supertest.Response): string | undefined => /^\/problems\/(.+)$/.exec(answer.body?.type ?? '')?.[1];
 
 describe.each(all)('%s', (name, endpoint) => {
@@ -94,12 +99,19 @@ describe.each(all)('%s', (name, endpoint) => {
     const may = entry === 'anyone' || entry === 'signed-in' || authority[entry][role] !== 'no';
     if (may) expect([401, 403]).not.toContain(answer.status);
     else expect(codeOf(answer)).toBe('not-permitted');
-    if (name === 'signOut') people.set(role, await makePerson(server, { grants: [{ role, ...(role === 'therapist' || role === 'coordinator' ? { site: siteA } : {}) }] }));
+    if (name === 'signOut')
+      people.set(
+        role,
+        await makePerson(server, { grants: [{ role, ...(role === 'therapist' || role === 'coordinator' ? { site: siteA } : {}) }] }),
+      );
   });
 });
 
 describe('an id of somebody else', () => {
-  const withIds = all.filter(([name, endpoint]) => /:(siteId|submissionId|requestId|exportId)/.test(endpoint.path) || name === 'listSubmissions' || name === 'openSubmission');
+  const withIds = all.filter(
+    ([name, endpoint]) =>
+      /:(siteId|submissionId|requestId|exportId)/.test(endpoint.path) || name === 'listSubmissions' || name === 'openSubmission',
+  );
   /** Valid bodies where the body is read before the row is looked for. */
   const bodies: Partial<Record<EndpointName, () => object>> = {
     openSubmission: () => ({ siteId: siteB.id, month: '2026-01' }),
@@ -139,9 +151,9 @@ describe('a change of grants', () => {
   it('takes effect at the next request, and a disabled account is signed out', async () => {
     const person = await makePerson(server, { grants: [{ role: 'steward' }] });
     await person.get('/api/releases').expect(200);
-    await server.database.owner.query("update grants set ends_on = current_date - 1 where account_id = $1", [person.id]);
+    await server.database.owner.query('update grants set ends_on = current_date - 1 where account_id = $1', [person.id]);
     expect(codeOf(await person.get('/api/releases'))).toBe('no-grant');
-    await server.database.owner.query("update grants set ends_on = null where account_id = $1", [person.id]);
+    await server.database.owner.query('update grants set ends_on = null where account_id = $1', [person.id]);
     await person.get('/api/releases').expect(200);
     await server.database.owner.query("update accounts set status = 'disabled' where id = $1", [person.id]);
     expect(codeOf(await person.get('/api/releases'))).toBe('not-signed-in');
@@ -149,9 +161,14 @@ describe('a change of grants', () => {
 
   it('begins on its first day and ends after its last', async () => {
     const person = await makePerson(server, { grants: [{ role: 'steward' }] });
-    await server.database.owner.query("update grants set starts_on = (now() at time zone 'UTC')::date + 1 where account_id = $1", [person.id]);
+    await server.database.owner.query("update grants set starts_on = (now() at time zone 'UTC')::date + 1 where account_id = $1", [
+      person.id,
+    ]);
     expect(codeOf(await person.get('/api/releases'))).toBe('no-grant');
-    await server.database.owner.query("update grants set starts_on = (now() at time zone 'UTC')::date - 1, ends_on = (now() at time zone 'UTC')::date where account_id = $1", [person.id]);
+    await server.database.owner.query(
+      "update grants set starts_on = (now() at time zone 'UTC')::date - 1, ends_on = (now() at time zone 'UTC')::date where account_id = $1",
+      [person.id],
+    );
     await person.get('/api/releases').expect(200);
   });
 });

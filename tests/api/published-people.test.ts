@@ -17,7 +17,8 @@ beforeAll(async () => {
 });
 afterAll(() => server.close());
 
-const gridOf = async (query: string): Promise<Grid> => (await coordinator.get(`/api/explore/grid?siteId=${site.id}&${query}`).expect(200)).body as Grid;
+const gridOf = async (query: string): Promise<Grid> =>
+  (await coordinator.get(`/api/explore/grid?siteId=${site.id}&${query}`).expect(200)).body as Grid;
 const shown = (cell: Cell | undefined) => {
   if (cell?.state !== 'shown') throw new Error(`expected a figure, found ${cell?.state}`);
   return cell;
@@ -28,7 +29,14 @@ const column = (grid: Grid, grade: string) => grid.columnTotals[grid.grades.find
  * Edwards DJ et al., Spinal Cord 2022;60:522-32 (PMC9209325), table 3, the fifteen rows in print order: sex, age, years since injury, AIS,
  * and speed of the 10 m walk at baseline in m/s. The single level is the most rostral of the four printed ones.
  */
-const trial: readonly (readonly [sex: 'female' | 'male', age: number, years: number | null, ais: 'C' | 'D', nli: string, speed: number | null])[] = [
+const trial: readonly (readonly [
+  sex: 'female' | 'male',
+  age: number,
+  years: number | null,
+  ais: 'C' | 'D',
+  nli: string,
+  speed: number | null,
+])[] = [
   ['female', 41, 22.3, 'C', 'C8', 0.18],
   ['male', 26, 7.8, 'C', 'T10', 0.34],
   ['female', 38, 2.1, 'C', 'T11', 0.41],
@@ -52,12 +60,30 @@ describe('fifteen people of a published trial', () => {
     await submitMonth(server, coordinator, site, '2026-01', {
       participants: trial.map(([sex, age, years], index) => {
         const days = years === null ? null : Math.round(years * 365.25);
-        return rowOf('participants', { participant: codes[index] ?? '', sex, age_at_index: age, days_injury_to_index: days, injury_year: 2026 - Math.ceil(years ?? 10) });
+        return rowOf('participants', {
+          participant: codes[index] ?? '',
+          sex,
+          age_at_index: age,
+          days_injury_to_index: days,
+          injury_year: 2026 - Math.ceil(years ?? 10),
+        });
       }),
       consents: codes.map((participant) => rowOf('consents', { participant })),
-      exams: trial.map(([, , , ais, nli], index) => rowOf('exams', { participant: codes[index] ?? '', exam_day: -3, ...examCells(nli, ais) })),
+      exams: trial.map(([, , , ais, nli], index) =>
+        rowOf('exams', { participant: codes[index] ?? '', exam_day: -3, ...examCells(nli, ais) }),
+      ),
       assessments: trial.flatMap(([, , , , , speed], index) =>
-        speed === null ? [] : [rowOf('assessments', { participant: codes[index] ?? '', measure: 'tmwt_ss', assessment_day: -1, value: speed, time_s: Number((10 / speed).toFixed(2)) })],
+        speed === null
+          ? []
+          : [
+              rowOf('assessments', {
+                participant: codes[index] ?? '',
+                measure: 'tmwt_ss',
+                assessment_day: -1,
+                value: speed,
+                time_s: Number((10 / speed).toFixed(2)),
+              }),
+            ],
       ),
     });
   });
@@ -81,7 +107,9 @@ describe('fifteen people of a published trial', () => {
   it('stands in the cells of its levels and grades', async () => {
     const grid = await gridOf('outcome=tmwt_ss&statistic=baseline');
     const n = Object.fromEntries(
-      grid.rows.flatMap((row) => row.cells.flatMap((cell, index) => (cell.state === 'shown' ? [[`${row.levelGroup} ${grid.grades[index]}`, cell.n]] : []))),
+      grid.rows.flatMap((row) =>
+        row.cells.flatMap((cell, index) => (cell.state === 'shown' ? [[`${row.levelGroup} ${grid.grades[index]}`, cell.n]] : [])),
+      ),
     );
     // Counted by hand from the rows above that have a speed.
     expect(n).toEqual({ 'c1_c4 D': 3, 'c5_c8 C': 3, 'c5_c8 D': 2, 't1_t9 C': 2, 't1_t9 D': 1, 't10_t12 C': 3 });
@@ -103,11 +131,21 @@ describe('nine people of a published feasibility study', () => {
   beforeAll(async () => {
     const codes = feasibility.map((_, index) => participantCode(101 + index));
     const speed = (participant: string, value: number, day: number, timepoint: string) =>
-      rowOf('assessments', { participant, in_device: 'yes', value, assessment_day: day, timepoint, time_s: Number((10 / value).toFixed(2)) });
+      rowOf('assessments', {
+        participant,
+        in_device: 'yes',
+        value,
+        assessment_day: day,
+        timepoint,
+        time_s: Number((10 / value).toFixed(2)),
+      });
     await submitMonth(server, coordinator, site, '2026-02', {
       participants: codes.map((participant) => rowOf('participants', { participant })),
       consents: codes.map((participant) => rowOf('consents', { participant })),
-      assessments: feasibility.flatMap(([first, last], index) => [speed(codes[index] ?? '', first, 0, 'baseline'), speed(codes[index] ?? '', last, 50, 'end_of_course')]),
+      assessments: feasibility.flatMap(([first, last], index) => [
+        speed(codes[index] ?? '', first, 0, 'baseline'),
+        speed(codes[index] ?? '', last, 50, 'end_of_course'),
+      ]),
     });
   });
 

@@ -40,9 +40,19 @@ async function submitSite(index: number): Promise<void> {
   const speed = (participant: string, value: number, day: number, timepoint: string) =>
     rowOf('assessments', { participant, value, assessment_day: day, timepoint, time_s: Number((10 / value).toFixed(2)) });
   await submitMonth(server, coordinator, site, '2026-01', {
-    participants: numbers.map((n) => rowOf('participants', { participant: code(n), age_at_index: 25 + ((n * 7 + index) % 50), sex: n % 4 === 0 ? 'female' : 'male', injury_year: 2000 + n, days_injury_to_index: 700 + n })),
+    participants: numbers.map((n) =>
+      rowOf('participants', {
+        participant: code(n),
+        age_at_index: 25 + ((n * 7 + index) % 50),
+        sex: n % 4 === 0 ? 'female' : 'male',
+        injury_year: 2000 + n,
+        days_injury_to_index: 700 + n,
+      }),
+    ),
     consents: numbers.map((n) => rowOf('consents', { participant: code(n), ...consentOf(n) })),
-    exams: numbers.map((n) => rowOf('exams', { participant: code(n), exam_day: -2, ...examCells(n % 2 === 0 ? 'T4' : 'T11', n % 4 < 2 ? 'C' : 'D') })),
+    exams: numbers.map((n) =>
+      rowOf('exams', { participant: code(n), exam_day: -2, ...examCells(n % 2 === 0 ? 'T4' : 'T11', n % 4 < 2 ? 'C' : 'D') }),
+    ),
     sessions: numbers.map((n) => rowOf('sessions', { participant: code(n), upright_min: 30, steps_total: null, distance_total_m: null })),
     bouts: numbers.map((n) => rowOf('bouts', { participant: code(n) })),
     assessments: numbers.flatMap((n) => [speed(code(n), 0.3 + n / 100, -1, 'baseline'), speed(code(n), 0.4 + n / 80, 40, 'end_of_course')]),
@@ -52,7 +62,16 @@ async function submitSite(index: number): Promise<void> {
 const withdraw = (index: number, number: number): Promise<unknown> => {
   const participant = participantCode(1000 * (index + 1) + number);
   return submitMonth(server, coordinators[index] as TestPerson, sites[index] as TestSite, '2026-02', {
-    consents: [rowOf('consents', { participant, consent_no: 2, signed_day: 60, ...consentOf(number), status: 'withdrawn', withdrawal_scope: 'no_further_use' })],
+    consents: [
+      rowOf('consents', {
+        participant,
+        consent_no: 2,
+        signed_day: 60,
+        ...consentOf(number),
+        status: 'withdrawn',
+        withdrawal_scope: 'no_further_use',
+      }),
+    ],
   });
 };
 
@@ -75,15 +94,23 @@ beforeAll(async () => {
 afterAll(() => server.close());
 
 const codeOf = (body: { type?: string }): string => (body.type ?? '').replace('/problems/', '');
-const begin = async (form: RequestForm, who = researcher): Promise<Request> => (await who.post('/api/access-requests', { form }).expect(201)).body as Request;
+const begin = async (form: RequestForm, who = researcher): Promise<Request> =>
+  (await who.post('/api/access-requests', { form }).expect(201)).body as Request;
 const submit = async (form: RequestForm = completeForm, who = researcher): Promise<Request> => {
   const draft = await begin(form, who);
   return (await who.post(`/api/access-requests/${draft.id}/submit`).expect(200)).body as Request;
 };
 const vote = (who: TestPerson, request: Request, choice: 'approve' | 'decline') =>
-  who.post(`/api/access-requests/${request.id}/votes`, { versionHash: request.versionHash, vote: choice, reason: 'a proper use within consent', noConflict: true });
+  who.post(`/api/access-requests/${request.id}/votes`, {
+    versionHash: request.versionHash,
+    vote: choice,
+    reason: 'a proper use within consent',
+    noConflict: true,
+  });
 const mailsAbout = async (event: string): Promise<string[]> =>
-  (await server.database.owner.query('select recipient from mail_messages where event like $1 order by recipient', [`${event}%`])).rows.map((row: { recipient: string }) => row.recipient);
+  (await server.database.owner.query('select recipient from mail_messages where event like $1 order by recipient', [`${event}%`])).rows.map(
+    (row: { recipient: string }) => row.recipient,
+  );
 const approved = async (form: RequestForm = completeForm): Promise<Request> => {
   const request = await submit(form);
   return (await vote(steward, request, 'approve').expect(200)).body as Request;
@@ -94,21 +121,37 @@ const built = async (request: Request): Promise<DataExport> => {
   return (await researcher.get('/api/exports').expect(200)).body.exports.find((one: DataExport) => one.id === asked.id) as DataExport;
 };
 const download = (who: TestPerson, id: string) =>
-  who.get(`/api/exports/${id}/file`).buffer(true).parse((response, done) => {
-    const chunks: Buffer[] = [];
-    response.on('data', (chunk: Buffer) => chunks.push(chunk));
-    response.on('end', () => done(null, Buffer.concat(chunks)));
-  });
-const lines = (text: string): string[][] => text.trimEnd().split('\r\n').map((line) => line.split(','));
+  who
+    .get(`/api/exports/${id}/file`)
+    .buffer(true)
+    .parse((response, done) => {
+      const chunks: Buffer[] = [];
+      response.on('data', (chunk: Buffer) => chunks.push(chunk));
+      response.on('end', () => done(null, Buffer.concat(chunks)));
+    });
+const lines = (text: string): string[][] =>
+  text
+    .trimEnd()
+    .split('\r\n')
+    .map((line) => line.split(','));
 
 describe('a request', () => {
   it('keeps a draft as typed and names every gap when it is submitted', async () => {
     const draft = await begin({ ...emptyForm, title: 'Half a thought' });
-    await researcher.put(`/api/access-requests/${draft.id}`, { form: { ...emptyForm, title: 'Half a thought', question: 'why' } }).expect(200);
+    await researcher
+      .put(`/api/access-requests/${draft.id}`, { form: { ...emptyForm, title: 'Half a thought', question: 'why' } })
+      .expect(200);
     const refused = await researcher.post(`/api/access-requests/${draft.id}/submit`);
     expect(codeOf(refused.body)).toBe('request-incomplete');
     expect(refused.body.errors.map((error: { pointer: string }) => error.pointer)).toEqual(
-      expect.arrayContaining(['/form/question', '/form/laySummary', '/form/purpose', '/form/ethicsExpiresOn', '/form/tables', '/form/termsAccepted']),
+      expect.arrayContaining([
+        '/form/question',
+        '/form/laySummary',
+        '/form/purpose',
+        '/form/ethicsExpiresOn',
+        '/form/tables',
+        '/form/termsAccepted',
+      ]),
     );
     expect((await researcher.get(`/api/access-requests/${draft.id}`)).body.form.question).toBe('why');
   });
@@ -136,7 +179,11 @@ describe('a request', () => {
       consenting: 53,
       reasons: [expect.objectContaining({ verdict: 'not_permitted', participants: 6 })],
     });
-    expect((await researcher.get(`/api/access-requests/${request.id}/reach`).expect(200)).body).toEqual({ inCohort: 60, consenting: 55, reasons: [] });
+    expect((await researcher.get(`/api/access-requests/${request.id}/reach`).expect(200)).body).toEqual({
+      inCohort: 60,
+      consenting: 55,
+      reasons: [],
+    });
   });
 });
 
@@ -154,7 +201,10 @@ describe('a decision', () => {
     const request = await submit();
     const declined = (await vote(steward, request, 'decline').expect(200)).body as Request;
     expect(declined.status).toBe('declined');
-    const { rows } = await server.database.owner.query('select body from mail_messages where event like $1 and recipient = $2', [`request-decided:${request.id}%`, researcher.email]);
+    const { rows } = await server.database.owner.query('select body from mail_messages where event like $1 and recipient = $2', [
+      `request-decided:${request.id}%`,
+      researcher.email,
+    ]);
     expect(rows[0].body).toContain('a proper use within consent');
     expect(codeOf((await researcher.post(`/api/access-requests/${request.id}/exports`)).body)).toBe('request-not-in-state');
   });
@@ -223,7 +273,11 @@ describe('an export', () => {
     for (const column of header ?? []) expect(codebook).toContain(`participants,${column},`);
     for (const line of (files['manifest-sha256.txt'] ?? '').trimEnd().split('\n')) {
       const [hash, name] = line.split('  ') as [string, string];
-      expect(createHash('sha256').update(files[name] ?? '').digest('hex')).toBe(hash);
+      expect(
+        createHash('sha256')
+          .update(files[name] ?? '')
+          .digest('hex'),
+      ).toBe(hash);
     }
     // Nothing of the registry's own: no code of a site, no site, no study day.
     const everything = Object.values(files).join('\n');
@@ -241,7 +295,9 @@ describe('an export', () => {
     const request = await approved();
     const ready = await built(request);
     const files = unzipSync((await download(researcher, ready.id).expect(200)).body as Uint8Array);
-    const rows = lines(strFromU8(files['outcomes.csv'] ?? new Uint8Array())).slice(1).filter((row) => row[1] === 'tmwt_ss' && row[2] === 'no');
+    const rows = lines(strFromU8(files['outcomes.csv'] ?? new Uint8Array()))
+      .slice(1)
+      .filter((row) => row[1] === 'tmwt_ss' && row[2] === 'no');
     const { rows: truth } = await server.database.owner.query(
       `select avg(o.end_value - o.baseline_value) as mean, count(*)::int as n from release_outcomes o
          join export_pseudonyms x on x.export_id = $1 and x.site_id = o.site_id and x.participant = o.participant where o.measure = 'tmwt_ss' and o.release_number = 1`,
@@ -257,7 +313,10 @@ describe('an export', () => {
   it('uses other codes for the same people each time', async () => {
     const request = await approved();
     const [one, two] = [await built(request), await built(request)];
-    const { rows } = await server.database.owner.query('select count(distinct pseudonym)::int as codes, count(distinct participant)::int as people from export_pseudonyms where export_id in ($1, $2)', [one.id, two.id]);
+    const { rows } = await server.database.owner.query(
+      'select count(distinct pseudonym)::int as codes, count(distinct participant)::int as people from export_pseudonyms where export_id in ($1, $2)',
+      [one.id, two.id],
+    );
     expect(rows[0].codes).toBe(2 * rows[0].people);
   });
 
@@ -273,11 +332,18 @@ describe('an export', () => {
   it('ends with access and with the ethics approval', async () => {
     const request = await approved();
     const ready = await built(request);
-    await server.database.owner.query("update access_requests set access_ends_on = (now() at time zone 'UTC')::date - 1 where id = $1", [request.id]);
+    await server.database.owner.query("update access_requests set access_ends_on = (now() at time zone 'UTC')::date - 1 where id = $1", [
+      request.id,
+    ]);
     expect(codeOf((await researcher.get(`/api/exports/${ready.id}/file`)).body)).toBe('access-ended');
-    await server.database.owner.query("update access_requests set access_ends_on = (now() at time zone 'UTC')::date where id = $1", [request.id]);
+    await server.database.owner.query("update access_requests set access_ends_on = (now() at time zone 'UTC')::date where id = $1", [
+      request.id,
+    ]);
     await download(researcher, ready.id).expect(200);
-    await server.database.owner.query(`update access_requests set form = jsonb_set(form, '{ethicsExpiresOn}', '"2020-01-01"') where id = $1`, [request.id]);
+    await server.database.owner.query(
+      `update access_requests set form = jsonb_set(form, '{ethicsExpiresOn}', '"2020-01-01"') where id = $1`,
+      [request.id],
+    );
     expect(codeOf((await researcher.get(`/api/exports/${ready.id}/file`)).body)).toBe('access-ended');
   });
 
@@ -295,12 +361,18 @@ describe('an export', () => {
     expect(codeOf((await researcher.get(`/api/exports/${before.id}/file`)).body)).toBe('export-stale');
     const after = await built(request);
     expect(after.status).toBe('ready');
-    const gone = await server.database.owner.query('select count(*)::int as n from export_pseudonyms where export_id = $1 and participant = $2', [after.id, participantCode(2003)]);
+    const gone = await server.database.owner.query(
+      'select count(*)::int as n from export_pseudonyms where export_id = $1 and participant = $2',
+      [after.id, participantCode(2003)],
+    );
     expect(gone.rows[0].n).toBe(0);
   });
 
   it('is not built for too few people', async () => {
-    const request = await approved({ ...completeForm, cohort: { outcome: 'tmwt_ss', inDevice: false, cells: [{ levelGroup: 'c1_c4', grade: 'A' }] } });
+    const request = await approved({
+      ...completeForm,
+      cohort: { outcome: 'tmwt_ss', inDevice: false, cells: [{ levelGroup: 'c1_c4', grade: 'A' }] },
+    });
     expect((await built(request)).status).toBe('failed');
   });
 });

@@ -17,16 +17,32 @@ beforeAll(async () => {
 afterAll(() => server.close());
 
 const plain = () => supertest(server.url);
-const submissions = async (): Promise<number> => (await server.database.owner.query('select count(*)::int as n from submissions')).rows[0].n;
+const submissions = async (): Promise<number> =>
+  (await server.database.owner.query('select count(*)::int as n from submissions')).rows[0].n;
 
 describe('a request from another origin', () => {
   it.each([
     ['a form', (test: supertest.Test) => test.type('form').send('month=2026-01')],
-    ['JSON sent as plain text', (test: supertest.Test) => test.set('Content-Type', 'text/plain').send(JSON.stringify({ siteId: site.id, month: '2026-01' }))],
+    [
+      'JSON sent as plain text',
+      (test: supertest.Test) => test.set('Content-Type', 'text/plain').send(JSON.stringify({ siteId: site.id, month: '2026-01' })),
+    ],
     ['a request without the header', (test: supertest.Test) => test.send({ siteId: site.id, month: '2026-01' })],
-    ['another origin with the header', (test: supertest.Test) => test.set('X-Cairnstep-Request', '1').set('Origin', 'https://elsewhere.example').send({ siteId: site.id, month: '2026-01' })],
-    ['a cross-site fetch with the header', (test: supertest.Test) => test.set('X-Cairnstep-Request', '1').set('Sec-Fetch-Site', 'cross-site').send({ siteId: site.id, month: '2026-01' })],
-    ['a same-site fetch with the header', (test: supertest.Test) => test.set('X-Cairnstep-Request', '1').set('Sec-Fetch-Site', 'same-site').send({ siteId: site.id, month: '2026-01' })],
+    [
+      'another origin with the header',
+      (test: supertest.Test) =>
+        test.set('X-Cairnstep-Request', '1').set('Origin', 'https://elsewhere.example').send({ siteId: site.id, month: '2026-01' }),
+    ],
+    [
+      'a cross-site fetch with the header',
+      (test: supertest.Test) =>
+        test.set('X-Cairnstep-Request', '1').set('Sec-Fetch-Site', 'cross-site').send({ siteId: site.id, month: '2026-01' }),
+    ],
+    [
+      'a same-site fetch with the header',
+      (test: supertest.Test) =>
+        test.set('X-Cairnstep-Request', '1').set('Sec-Fetch-Site', 'same-site').send({ siteId: site.id, month: '2026-01' }),
+    ],
   ])('%s is refused and changes nothing', async (_what, finish) => {
     const before = await submissions();
     const answer = await finish(plain().post('/api/submissions').set('Cookie', coordinator.cookie));
@@ -51,21 +67,36 @@ describe('keys nobody asked for', () => {
   it.each(['status', 'id', 'createdBy', 'constructor', '__proto__'])('%s in a body is named and nothing is stored', async (key) => {
     const before = await submissions();
     const body = `{"siteId": "${site.id}", "month": "2026-02", "${key}": "x"}`;
-    const answer = await plain().post('/api/submissions').set('Cookie', coordinator.cookie).set('X-Cairnstep-Request', '1').type('json').send(body);
+    const answer = await plain()
+      .post('/api/submissions')
+      .set('Cookie', coordinator.cookie)
+      .set('X-Cairnstep-Request', '1')
+      .type('json')
+      .send(body);
     expect(answer.status).toBe(400);
     expect(answer.body.errors.map((error: { pointer: string }) => error.pointer)).toContain(`/body/${key}`);
     expect(await submissions()).toBe(before);
   });
 
   it('do not let a person give themselves a role', async () => {
-    const answer = await administrator.post(`/api/people/${administrator.id}/grants`, { role: 'steward', siteId: null, startsOn: '2026-01-01', endsOn: null });
+    const answer = await administrator.post(`/api/people/${administrator.id}/grants`, {
+      role: 'steward',
+      siteId: null,
+      startsOn: '2026-01-01',
+      endsOn: null,
+    });
     expect(answer.body.type).toBe('/problems/grant-to-oneself');
   });
 });
 
 describe('what cannot be read', () => {
   it('is answered with a problem that says nothing of the inside', async () => {
-    const answer = await plain().post('/api/submissions').set('Cookie', coordinator.cookie).set('X-Cairnstep-Request', '1').type('json').send('{"siteId": ');
+    const answer = await plain()
+      .post('/api/submissions')
+      .set('Cookie', coordinator.cookie)
+      .set('X-Cairnstep-Request', '1')
+      .type('json')
+      .send('{"siteId": ');
     expect(answer.status).toBe(400);
     expect(answer.headers['content-type']).toContain('application/problem+json');
     expect(answer.body).toMatchObject({ type: '/problems/invalid-input', status: 400 });
@@ -80,7 +111,12 @@ describe('what cannot be read', () => {
   it('names every issue with its place', async () => {
     const answer = await administrator.post('/api/invitations', { email: 'nobody', role: 'king', siteId: 5, grantEndsOn: 'soon' });
     expect(answer.status).toBe(400);
-    expect(answer.body.errors.map((error: { pointer: string }) => error.pointer).sort()).toEqual(['/body/email', '/body/grantEndsOn', '/body/role', '/body/siteId']);
+    expect(answer.body.errors.map((error: { pointer: string }) => error.pointer).sort()).toEqual([
+      '/body/email',
+      '/body/grantEndsOn',
+      '/body/role',
+      '/body/siteId',
+    ]);
   });
 });
 
@@ -101,6 +137,13 @@ describe('every answer', () => {
     await coordinator.post('/api/submissions', { siteId: site.id, month: 'marker-in-body' });
     const log = server.logLines.join('');
     expect(log).toContain('"route":"/api/submissions"');
-    for (const secret of [coordinator.cookie, coordinator.cookie.split('=')[1] ?? '', 'marker-in-body', coordinator.email, `siteId=${site.id}`]) expect(log).not.toContain(secret);
+    for (const secret of [
+      coordinator.cookie,
+      coordinator.cookie.split('=')[1] ?? '',
+      'marker-in-body',
+      coordinator.email,
+      `siteId=${site.id}`,
+    ])
+      expect(log).not.toContain(secret);
   });
 });

@@ -30,7 +30,8 @@ function oneMonth({ bouts = {}, session = {} }: { bouts?: Overrides; session?: O
     bouts: [1, 2].map((bout) => rowOf('bouts', { participant: anna, bout_no: bout, ...bouts })),
   };
 }
-const held = async (table: string): Promise<number> => (await server.database.owner.query(`select count(*)::int as n from ${table} where site_id = $1`, [site.id])).rows[0].n;
+const held = async (table: string): Promise<number> =>
+  (await server.database.owner.query(`select count(*)::int as n from ${table} where site_id = $1`, [site.id])).rows[0].n;
 const codeOf = (body: { type?: string }): string => (body.type ?? '').replace('/problems/', '');
 
 describe('a clean month', () => {
@@ -38,19 +39,29 @@ describe('a clean month', () => {
     const checked = await uploadMonth(server, coordinator, site, '2026-01', filesOf(oneMonth()));
     expect(checked.status).toBe('checked');
     expect(checked.preview?.tables).toEqual(
-      ['participants', 'consents', 'sessions', 'bouts'].map((table) => ({ table, added: table === 'bouts' ? 2 : 1, changed: 0, unchanged: 0, removed: 0 })),
+      ['participants', 'consents', 'sessions', 'bouts'].map((table) => ({
+        table,
+        added: table === 'bouts' ? 2 : 1,
+        changed: 0,
+        unchanged: 0,
+        removed: 0,
+      })),
     );
     expect(await held('bouts')).toBe(0);
     const rows = await coordinator.get(`/api/submissions/${checked.id}/changes?table=bouts&kind=added`).expect(200);
     expect(rows.body.items[1]).toMatchObject({ kind: 'added', line: 3, key: { participant: anna, bout_no: '2' } });
 
-    const committed = await coordinator.post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest }).expect(200);
+    const committed = await coordinator
+      .post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest })
+      .expect(200);
     const receipt = committed.body as SubmissionReceipt;
     expect(receipt).toMatchObject({ month: '2026-01', acceptedBy: 'Coordinator', digest: checked.preview?.digest });
     expect(receipt.files.find((file) => file.table === 'bouts')).toMatchObject({ rows: 2, fileName: 'bouts.csv' });
     expect(await held('bouts')).toBe(2);
     expect((await coordinator.get(`/api/submissions/${checked.id}/receipt`).expect(200)).body).toEqual(receipt);
-    const { rows: mails } = await server.database.owner.query('select recipient, status from mail_messages where event like $1', [`submission-accepted:${checked.id}%`]);
+    const { rows: mails } = await server.database.owner.query('select recipient, status from mail_messages where event like $1', [
+      `submission-accepted:${checked.id}%`,
+    ]);
     expect(mails).toEqual([{ recipient: coordinator.email, status: 'waiting' }]);
     const months = await coordinator.get(`/api/sites/${site.id}/months`).expect(200);
     expect(months.body.months.find((one: { month: string }) => one.month === '2026-01')).toMatchObject({ state: 'accepted', rows: 5 });
@@ -70,15 +81,30 @@ describe('a correction', () => {
   it('replaces the month, keeps every earlier value with its submission, and removes only what the preview names', async () => {
     const first = await submitMonth(server, coordinator, site, '2026-01', oneMonth());
     const corrected = oneMonth({ bouts: { hr_end: 121 } });
-    const second = await uploadMonth(server, coordinator, site, '2026-01', filesOf({ ...corrected, bouts: corrected.bouts?.slice(0, 1) ?? [] }));
-    expect(second.preview?.tables.find((one) => one.table === 'bouts')).toEqual({ table: 'bouts', added: 0, changed: 1, unchanged: 0, removed: 1 });
+    const second = await uploadMonth(
+      server,
+      coordinator,
+      site,
+      '2026-01',
+      filesOf({ ...corrected, bouts: corrected.bouts?.slice(0, 1) ?? [] }),
+    );
+    expect(second.preview?.tables.find((one) => one.table === 'bouts')).toEqual({
+      table: 'bouts',
+      added: 0,
+      changed: 1,
+      unchanged: 0,
+      removed: 1,
+    });
     const changed = await coordinator.get(`/api/submissions/${second.id}/changes?table=bouts&kind=changed`).expect(200);
     expect(changed.body.items[0].cells).toEqual([{ column: 'hr_end', before: '110', after: '121' }]);
     const removed = await coordinator.get(`/api/submissions/${second.id}/changes?table=bouts&kind=removed`).expect(200);
     expect(removed.body.items[0].key).toMatchObject({ bout_no: '2' });
     await coordinator.post(`/api/submissions/${second.id}/commit`, { previewDigest: second.preview?.digest }).expect(200);
 
-    const { rows } = await server.database.owner.query("select change, before->>'hr_end' as hr, submission_id from row_history where site_id = $1 order by change", [site.id]);
+    const { rows } = await server.database.owner.query(
+      "select change, before->>'hr_end' as hr, submission_id from row_history where site_id = $1 order by change",
+      [site.id],
+    );
     expect(rows).toEqual([
       { change: 'changed', hr: '110', submission_id: second.id },
       { change: 'removed', hr: '110', submission_id: second.id },
@@ -100,7 +126,10 @@ describe('a correction', () => {
 
 describe('a month with mistakes', () => {
   it('is told by rule, file, line and column, and cannot be committed', async () => {
-    const mistaken = { ...oneMonth(), bouts: [rowOf('bouts', { participant: anna, hr_end: 900 }), rowOf('bouts', { participant: participantCode(77) })] };
+    const mistaken = {
+      ...oneMonth(),
+      bouts: [rowOf('bouts', { participant: anna, hr_end: 900 }), rowOf('bouts', { participant: participantCode(77) })],
+    };
     const checked = await uploadMonth(server, coordinator, site, '2026-01', filesOf(mistaken));
     expect(checked.preview).toBeNull();
     const found = await coordinator.get(`/api/submissions/${checked.id}/findings?severity=error`).expect(200);
@@ -127,8 +156,13 @@ describe('a month with mistakes', () => {
     expect(warning).toBeDefined();
     const refused = await coordinator.post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest });
     expect(codeOf(refused.body)).toBe('submission-has-open-warnings');
-    for (const group of checked.findings) await coordinator.post(`/api/submissions/${checked.id}/acknowledgements`, { rule: group.rule, reason: 'as in the record' }).expect(200);
-    const receipt = (await coordinator.post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest }).expect(200)).body as SubmissionReceipt;
+    for (const group of checked.findings)
+      await coordinator
+        .post(`/api/submissions/${checked.id}/acknowledgements`, { rule: group.rule, reason: 'as in the record' })
+        .expect(200);
+    const receipt = (
+      await coordinator.post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest }).expect(200)
+    ).body as SubmissionReceipt;
     expect(receipt.acknowledged).toContainEqual({ rule: warning?.rule, count: warning?.count, reason: 'as in the record' });
   });
 });
@@ -136,7 +170,16 @@ describe('a month with mistakes', () => {
 describe('a commit', () => {
   it('is refused when the registry changed since its preview, and made anew from a fresh one', async () => {
     const january = await uploadMonth(server, coordinator, site, '2026-01', filesOf(oneMonth()));
-    const february = await uploadMonth(server, colleague, site, '2026-02', filesOf({ participants: [rowOf('participants', { participant: participantCode(2), age_at_index: 30 })], consents: [rowOf('consents', { participant: participantCode(2) })] }));
+    const february = await uploadMonth(
+      server,
+      colleague,
+      site,
+      '2026-02',
+      filesOf({
+        participants: [rowOf('participants', { participant: participantCode(2), age_at_index: 30 })],
+        consents: [rowOf('consents', { participant: participantCode(2) })],
+      }),
+    );
     await colleague.post(`/api/submissions/${february.id}/commit`, { previewDigest: february.preview?.digest }).expect(200);
     const refused = await coordinator.post(`/api/submissions/${january.id}/commit`, { previewDigest: january.preview?.digest });
     expect(codeOf(refused.body)).toBe('submission-stale');
@@ -154,14 +197,18 @@ describe('a commit', () => {
 
   it('of two coordinators at once goes through for one; the other is told', async () => {
     const checked = await uploadMonth(server, coordinator, site, '2026-01', filesOf(oneMonth()));
-    const answers = await Promise.all([coordinator, colleague].map((who) => who.post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest })));
+    const answers = await Promise.all(
+      [coordinator, colleague].map((who) => who.post(`/api/submissions/${checked.id}/commit`, { previewDigest: checked.preview?.digest })),
+    );
     expect(answers.map((answer) => answer.status).sort()).toEqual([200, 409]);
     expect(codeOf(answers.find((answer) => answer.status === 409)?.body)).toBe('submission-closed');
     expect(await held('bouts')).toBe(2);
   });
 
   it('works for one submission of a month at a time: whoever opens it second joins the first', async () => {
-    const [one, two] = await Promise.all([coordinator, colleague].map((who) => who.post('/api/submissions', { siteId: site.id, month: '2026-03' })));
+    const [one, two] = await Promise.all(
+      [coordinator, colleague].map((who) => who.post('/api/submissions', { siteId: site.id, month: '2026-03' })),
+    );
     expect((one?.body as Submission).id).toBe((two?.body as Submission).id);
   });
 });
@@ -184,7 +231,12 @@ describe('a submission', () => {
       for (let i = 0; i < 100; i += 1) yield Buffer.alloc(1000, 'a');
     }
     // Sent in chunks, so no header announces the length.
-    const answer = await fetch(path, { method: 'PUT', headers: { 'X-Cairnstep-Request': '1', Cookie: coordinator.cookie }, body: chunks() as unknown as BodyInit, duplex: 'half' } as RequestInit);
+    const answer = await fetch(path, {
+      method: 'PUT',
+      headers: { 'X-Cairnstep-Request': '1', Cookie: coordinator.cookie },
+      body: chunks() as unknown as BodyInit,
+      duplex: 'half',
+    } as RequestInit);
     expect(answer.status).toBe(413);
     await small.close();
     expect((await coordinator.get(`/api/submissions/${opened.body.id}`)).body.files).toEqual([]);

@@ -27,22 +27,76 @@ const researcher = person('researcher', null, researcherId);
 const steward = person('steward');
 const administrator = person('administrator');
 
-const siteTables = ['submissions', 'submission_files', 'submission_findings', 'row_history', 'course_facts', 'outcome_facts', ...tableKeys, ...tableKeys.map((table) => `staged_${table}`)];
+const siteTables = [
+  'submissions',
+  'submission_files',
+  'submission_findings',
+  'row_history',
+  'course_facts',
+  'outcome_facts',
+  ...tableKeys,
+  ...tableKeys.map((table) => `staged_${table}`),
+];
 
 /** One row of a site in every table that holds rows of sites. */
 async function fillSite(siteId: string): Promise<void> {
   const { owner } = database;
   const insert = async (table: string, row: Record<string, unknown>): Promise<void> => {
     const keys = Object.keys(row);
-    await owner.query(`insert into ${table} (${keys.join(', ')}) values (${keys.map((_, i) => `$${i + 1}`).join(', ')})`, Object.values(row));
+    await owner.query(
+      `insert into ${table} (${keys.join(', ')}) values (${keys.map((_, i) => `$${i + 1}`).join(', ')})`,
+      Object.values(row),
+    );
   };
   const submission = randomUUID();
   await insert('sites', { id: siteId, code: siteId.slice(0, 3), name: 'A clinic', first_month: '2025-01' });
-  await insert('submissions', { id: submission, site_id: siteId, month: '2025-01', status: 'open', created_by: randomUUID(), findings: '[]' });
-  await insert('submission_files', { submission_id: submission, table_key: 'bouts', site_id: siteId, file_name: 'f', bytes: 1, sha256: 'x' });
-  await insert('submission_findings', { submission_id: submission, ordinal: 1, site_id: siteId, rule: 'C01', severity: 'error', table_key: 'bouts', found: 'x', mend: 'x' });
-  await insert('row_history', { site_id: siteId, table_key: 'bouts', row_key: '{}', change: 'changed', before: '{}', submission_id: submission });
-  await insert('course_facts', { site_id: siteId, participant: 'P', course_no: 1, nli: 'T4', level_group: 'T1-T9', ais: 'A', sessions: 1, bouts: 1, walking_min: 1, distance_m: 1, steps: 1 });
+  await insert('submissions', {
+    id: submission,
+    site_id: siteId,
+    month: '2025-01',
+    status: 'open',
+    created_by: randomUUID(),
+    findings: '[]',
+  });
+  await insert('submission_files', {
+    submission_id: submission,
+    table_key: 'bouts',
+    site_id: siteId,
+    file_name: 'f',
+    bytes: 1,
+    sha256: 'x',
+  });
+  await insert('submission_findings', {
+    submission_id: submission,
+    ordinal: 1,
+    site_id: siteId,
+    rule: 'C01',
+    severity: 'error',
+    table_key: 'bouts',
+    found: 'x',
+    mend: 'x',
+  });
+  await insert('row_history', {
+    site_id: siteId,
+    table_key: 'bouts',
+    row_key: '{}',
+    change: 'changed',
+    before: '{}',
+    submission_id: submission,
+  });
+  await insert('course_facts', {
+    site_id: siteId,
+    participant: 'P',
+    course_no: 1,
+    nli: 'T4',
+    level_group: 'T1-T9',
+    ais: 'A',
+    sessions: 1,
+    bouts: 1,
+    walking_min: 1,
+    distance_m: 1,
+    steps: 1,
+  });
   await insert('outcome_facts', { site_id: siteId, participant: 'P', course_no: 1, measure: 'tug', in_device: 'no' });
   for (const table of tableKeys) {
     const classes = table === 'exams' ? { class_nli: ['T4'], class_ais: ['A'], class_level_group: 'T1-T9' } : {};
@@ -57,17 +111,30 @@ beforeAll(async () => {
   await fillSite(siteA);
   await fillSite(siteB);
   const { owner } = database;
-  await owner.query(`insert into access_requests (id, number, status, lead_id, form, version_hash, votes_needed_because) values ($1, 'AR-2026-0001', 'draft', $2, '{}', 'x', '[]')`, [requestId, researcherId]);
-  await owner.query(`insert into release_courses (release_number, site_id, participant, course_no, nli, level_group, ais, sessions, bouts, walking_min, distance_m, steps)
-    values (1, $1, 'P', 1, 'T4', 'T1-T9', 'A', 1, 1, 1, 1, 1)`, [siteA]);
+  await owner.query(
+    `insert into access_requests (id, number, status, lead_id, form, version_hash, votes_needed_because) values ($1, 'AR-2026-0001', 'draft', $2, '{}', 'x', '[]')`,
+    [requestId, researcherId],
+  );
+  await owner.query(
+    `insert into release_courses (release_number, site_id, participant, course_no, nli, level_group, ais, sessions, bouts, walking_min, distance_m, steps)
+    values (1, $1, 'P', 1, 'T4', 'T1-T9', 'A', 1, 1, 1, 1, 1)`,
+    [siteA],
+  );
   await owner.query(`insert into export_pseudonyms values ($1, 'R1', $2, 'P')`, [randomUUID(), siteA]);
-  await owner.query(`insert into mail_messages (id, event, recipient, subject, body) values ($1, 'e', 'r@test.example', 's', 'b')`, [randomUUID()]);
+  await owner.query(`insert into mail_messages (id, event, recipient, subject, body) values ($1, 'e', 'r@test.example', 's', 'b')`, [
+    randomUUID(),
+  ]);
 });
 afterAll(() => database.close());
 
 const count = (actor: Actor, table: string, where = 'true'): Promise<number> =>
-  asActor(database.app, actor, async (tx) => ((await tx.query(`select count(*)::int as n from ${table} where ${where}`)) as [{ n: number }])[0].n);
-const thereAre = async (table: string): Promise<number> => (await database.owner.query(`select count(*)::int as n from ${table}`)).rows[0].n;
+  asActor(
+    database.app,
+    actor,
+    async (tx) => ((await tx.query(`select count(*)::int as n from ${table} where ${where}`)) as [{ n: number }])[0].n,
+  );
+const thereAre = async (table: string): Promise<number> =>
+  (await database.owner.query(`select count(*)::int as n from ${table}`)).rows[0].n;
 const refused = { code: '42501' };
 
 describe.each(siteTables)('rows of a site in %s', (table) => {
@@ -78,7 +145,8 @@ describe.each(siteTables)('rows of a site in %s', (table) => {
     expect(await count(therapistA, table)).toBe(1);
     expect(await count(registry, table)).toBe(2);
     expect(await count(steward, table)).toBe(table.startsWith('staged_') ? 0 : 2);
-    for (const stranger of [researcher, administrator, statistics, { kind: 'nobody' } as Actor]) expect(await count(stranger, table)).toBe(0);
+    for (const stranger of [researcher, administrator, statistics, { kind: 'nobody' } as Actor])
+      expect(await count(stranger, table)).toBe(0);
   });
 
   it('are written by its coordinator alone', async () => {
@@ -106,7 +174,8 @@ async function otherRow(table: string, siteId: string): Promise<string> {
 describe('rows of people and of the registry', () => {
   it('of a draft request are reached by its lead alone', async () => {
     expect(await count(researcher, 'access_requests')).toBe(1);
-    for (const actor of [steward, person('researcher', null, otherResearcherId), coordinatorA, administrator]) expect(await count(actor, 'access_requests')).toBe(0);
+    for (const actor of [steward, person('researcher', null, otherResearcherId), coordinatorA, administrator])
+      expect(await count(actor, 'access_requests')).toBe(0);
   });
 
   it('of releases are read by the statistics of the registry, never by a person', async () => {
@@ -135,9 +204,13 @@ describe('the login of the application', () => {
   });
 
   it('owns nothing and cannot become who does', async () => {
-    const { rows } = await database.owner.query(`select rolsuper or rolbypassrls or rolinherit as strong from pg_roles where rolname in ('cairnstep_login', 'cairnstep_app') and rolname = 'cairnstep_login'`);
+    const { rows } = await database.owner.query(
+      `select rolsuper or rolbypassrls or rolinherit as strong from pg_roles where rolname in ('cairnstep_login', 'cairnstep_app') and rolname = 'cairnstep_login'`,
+    );
     expect(rows).toEqual([{ strong: false }]);
-    const owned = await database.owner.query(`select count(*)::int as n from pg_class where relowner in (select oid from pg_roles where rolname in ('cairnstep_login', 'cairnstep_app', 'cairnstep_session', 'cairnstep_jobs'))`);
+    const owned = await database.owner.query(
+      `select count(*)::int as n from pg_class where relowner in (select oid from pg_roles where rolname in ('cairnstep_login', 'cairnstep_app', 'cairnstep_session', 'cairnstep_jobs'))`,
+    );
     expect(owned.rows[0].n).toBe(0);
     await expect(database.app.query('set role cairnstep_owner')).rejects.toMatchObject(refused);
   });
@@ -162,7 +235,9 @@ describe('every table', () => {
 describe('the audit log', () => {
   it('cannot be changed, emptied or shortened, neither by the application nor by its owner', async () => {
     await asActor(database.app, registry, (tx) =>
-      tx.query(`insert into audit_entries values (1, now(), 'system', 'system', 'test', null, 'ok', '{}', repeat('0', 64), repeat('1', 64))`),
+      tx.query(
+        `insert into audit_entries values (1, now(), 'system', 'system', 'test', null, 'ok', '{}', repeat('0', 64), repeat('1', 64))`,
+      ),
     );
     for (const change of [`update audit_entries set act = 'x'`, 'delete from audit_entries', 'truncate audit_entries']) {
       await expect(asActor(database.app, registry, (tx) => tx.query(change))).rejects.toMatchObject(refused);

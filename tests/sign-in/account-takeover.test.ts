@@ -13,7 +13,10 @@ describe('an identity', () => {
     const owner = new Browser(test);
     await owner.signIn('/month', 'subject-of-a-steward');
     const { rows } = await test.server.database.owner.query("select id from accounts where subject = 'subject-of-a-steward'");
-    await test.server.database.owner.query("insert into grants (id, account_id, role, starts_on) values (gen_random_uuid(), $1, 'steward', current_date - 1)", [rows[0].id]);
+    await test.server.database.owner.query(
+      "insert into grants (id, account_id, role, starts_on) values (gen_random_uuid(), $1, 'steward', current_date - 1)",
+      [rows[0].id],
+    );
     expect((await owner.agent.get('/api/account')).body.grants).toHaveLength(1);
 
     const other = new Browser(test);
@@ -28,7 +31,11 @@ describe('an identity', () => {
   it('gets no role from a claim of the provider', async () => {
     const browser = new Browser(test);
     const authorization = await browser.begin();
-    const code = test.provider.expect(authorization, 'subject-with-claims', { groups: ['steward'], roles: ['administrator'], role: 'steward' });
+    const code = test.provider.expect(authorization, 'subject-with-claims', {
+      groups: ['steward'],
+      roles: ['administrator'],
+      role: 'steward',
+    });
     await browser.callback({ ...browser.honest(authorization), code }).expect(303);
     expect((await browser.agent.get('/api/account')).body.grants).toEqual([]);
   });

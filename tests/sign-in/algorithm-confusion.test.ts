@@ -16,7 +16,9 @@ const unsigned = (claims: JWTPayload): Promise<string> => Promise.resolve(`${par
 async function signedWithPublicKey(claims: JWTPayload): Promise<string> {
   const key = (await importJWK(test.provider.keys.publicJwk, 'RS256', { extractable: true })) as CryptoKey;
   const text = `${part({ alg: 'HS256', typ: 'JWT', kid: 'key-1' })}.${part(claims)}`;
-  return `${text}.${createHmac('sha256', await exportSPKI(key)).update(text).digest('base64url')}`;
+  return `${text}.${createHmac('sha256', await exportSPKI(key))
+    .update(text)
+    .digest('base64url')}`;
 }
 
 async function signedByStranger(claims: JWTPayload, header: Record<string, unknown>): Promise<string> {
@@ -30,11 +32,17 @@ describe('the signature of an ID token', () => {
     ['an HMAC made with the public key', signedWithPublicKey],
     ['of an unknown key', (claims: JWTPayload) => signedByStranger(claims, { kid: 'unknown' })],
     ['of a stranger under a known key id', (claims: JWTPayload) => signedByStranger(claims, { kid: 'key-1' })],
-    ['of a key that the header says where to find', (claims: JWTPayload) => signedByStranger(claims, { kid: 'key-1', jku: 'https://attacker.example/keys' })],
-    ['over other claims', async (claims: JWTPayload) => {
-      const [header, , signature] = (await test.provider.sign(claims)).split('.');
-      return `${header}.${part({ ...claims, sub: 'somebody-else' })}.${signature}`;
-    }],
+    [
+      'of a key that the header says where to find',
+      (claims: JWTPayload) => signedByStranger(claims, { kid: 'key-1', jku: 'https://attacker.example/keys' }),
+    ],
+    [
+      'over other claims',
+      async (claims: JWTPayload) => {
+        const [header, , signature] = (await test.provider.sign(claims)).split('.');
+        return `${header}.${part({ ...claims, sub: 'somebody-else' })}.${signature}`;
+      },
+    ],
   ] as const)('is refused when it is %s', async (_what, idToken) => {
     const browser = new Browser(test);
     const answer = browser.honest(await browser.begin());

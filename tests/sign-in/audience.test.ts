@@ -25,7 +25,10 @@ describe('an ID token', () => {
   it('that is really an access token is refused', async () => {
     const browser = new Browser(test);
     const answer = browser.honest(await browser.begin());
-    test.provider.behaviour = { idToken: ({ nonce: _nonce, ...claims }) => test.provider.sign({ ...claims, aud: 'https://api.example', scope: 'openid' }, { typ: 'at+jwt' }) };
+    test.provider.behaviour = {
+      idToken: ({ nonce: _nonce, ...claims }) =>
+        test.provider.sign({ ...claims, aud: 'https://api.example', scope: 'openid' }, { typ: 'at+jwt' }),
+    };
     await expectRefused(test, browser, await browser.callback(answer));
   });
 });

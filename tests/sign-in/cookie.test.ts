@@ -14,7 +14,9 @@ describe('the session cookie', () => {
     expect(cookie).toMatch(/^__Host-cairnstep=/);
     for (const attribute of ['Path=/', 'Secure', 'HttpOnly', 'SameSite=Lax']) expect(cookie).toContain(attribute);
     expect(cookie).not.toContain('Domain');
-    expect(new URL(answer.headers['location'] as string).searchParams.get('redirect_uri')).toBe('https://registry.example/api/sign-in/callback');
+    expect(new URL(answer.headers['location'] as string).searchParams.get('redirect_uri')).toBe(
+      'https://registry.example/api/sign-in/callback',
+    );
     expect(answer.headers['strict-transport-security']).toBeDefined();
   });
 

@@ -16,7 +16,8 @@ describe('an invitation', () => {
     );
     return token;
   };
-  const accept = (browser: Browser, token: string) => browser.agent.post(`/api/invitations/${token}/accept`).set('X-Cairnstep-Request', '1').send({});
+  const accept = (browser: Browser, token: string) =>
+    browser.agent.post(`/api/invitations/${token}/accept`).set('X-Cairnstep-Request', '1').send({});
 
   it('binds to whoever signs in with it, whatever their address, once', async () => {
     const token = await invite();

@@ -12,7 +12,16 @@ afterAll(() => test.close());
 const logoutEvent = { 'http://schemas.openid.net/event/backchannel-logout': {} };
 const logoutToken = (change: JWTPayload = {}, header: Record<string, unknown> = {}): Promise<string> => {
   const now = Math.floor(Date.now() / 1000);
-  const claims = { iss: test.provider.issuer, aud: test.provider.clientId, iat: now, exp: now + 60, jti: `jti-${Math.random()}`, sid: 'provider-session-1', events: logoutEvent, ...change };
+  const claims = {
+    iss: test.provider.issuer,
+    aud: test.provider.clientId,
+    iat: now,
+    exp: now + 60,
+    jti: `jti-${Math.random()}`,
+    sid: 'provider-session-1',
+    events: logoutEvent,
+    ...change,
+  };
   return test.provider.sign(JSON.parse(JSON.stringify(claims)), { typ: 'logout+jwt', ...header });
 };
 const tell = (token: string) => new Browser(test).agent.post('/api/sign-in/back-channel-logout').type('form').send({ logout_token: token });
@@ -29,7 +38,9 @@ describe('a session', () => {
   it('ends after its idle limit', async () => {
     const browser = new Browser(test);
     await browser.signIn();
-    const { rows } = await test.server.database.owner.query("select extract(epoch from max(expire) - now() at time zone current_setting('TimeZone'))::int as left from web_sessions");
+    const { rows } = await test.server.database.owner.query(
+      "select extract(epoch from max(expire) - now() at time zone current_setting('TimeZone'))::int as left from web_sessions",
+    );
     expect(rows[0].left).toBeGreaterThan(590);
     expect(rows[0].left).toBeLessThanOrEqual(600);
     await test.server.database.owner.query("update web_sessions set expire = expire - interval '11 minutes'");

@@ -14,7 +14,8 @@ export function examCells(level: string, grade: keyof typeof strengthBelow): Ove
   const cells: Record<string, string> = { vac: 'no', dap: grade === 'A' ? 'no' : 'yes', recorded_ais: grade, recorded_nli: level };
   for (const side of ['r', 'l']) {
     dermatomes.forEach((dermatome, index) => {
-      for (const modality of ['lt', 'pp']) cells[`${modality}_${side}_${segmentKey(dermatome)}`] = index <= last ? '2' : grade === 'A' ? '0' : '1';
+      for (const modality of ['lt', 'pp'])
+        cells[`${modality}_${side}_${segmentKey(dermatome)}`] = index <= last ? '2' : grade === 'A' ? '0' : '1';
     });
     for (const { segment } of keyMuscles) {
       const at = dermatomes.findIndex((dermatome) => dermatome === segment);

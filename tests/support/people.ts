@@ -16,7 +16,12 @@ let siteNumber = 0;
 export async function makeSite(server: TestServer, firstMonth = '2025-01'): Promise<TestSite> {
   siteNumber += 1;
   const site = { id: randomUUID(), code: `S${String(siteNumber).padStart(2, '0')}`, name: `Test clinic ${siteNumber}` };
-  await server.database.owner.query('insert into sites (id, code, name, first_month) values ($1, $2, $3, $4)', [site.id, site.code, site.name, firstMonth]);
+  await server.database.owner.query('insert into sites (id, code, name, first_month) values ($1, $2, $3, $4)', [
+    site.id,
+    site.code,
+    site.name,
+    firstMonth,
+  ]);
   return site;
 }
 
@@ -41,12 +46,22 @@ export interface PersonOptions {
 }
 
 /** The signature express-session puts on its cookie (package cookie-signature). */
-const sign = (value: string, secret: string): string => `${value}.${createHmac('sha256', secret).update(value).digest('base64').replace(/=+$/, '')}`;
+const sign = (value: string, secret: string): string =>
+  `${value}.${createHmac('sha256', secret).update(value).digest('base64').replace(/=+$/, '')}`;
 
 export async function makeSession(server: TestServer, accountId: string, signedInAt = Date.now()): Promise<string> {
   const sid = randomBytes(24).toString('base64url');
-  const session = { cookie: { originalMaxAge: 1_800_000, path: '/', httpOnly: true }, accountId, issuer: 'https://provider.example', subject: accountId, signedInAt };
-  await server.database.owner.query("insert into web_sessions (sid, sess, expire) values ($1, $2, now() + interval '30 minutes')", [sid, session]);
+  const session = {
+    cookie: { originalMaxAge: 1_800_000, path: '/', httpOnly: true },
+    accountId,
+    issuer: 'https://provider.example',
+    subject: accountId,
+    signedInAt,
+  };
+  await server.database.owner.query("insert into web_sessions (sid, sess, expire) values ($1, $2, now() + interval '30 minutes')", [
+    sid,
+    session,
+  ]);
   return `${cookieName(server.config.secure)}=${encodeURIComponent(`s:${sign(sid, server.config.SESSION_SECRET)}`)}`;
 }
 
@@ -61,28 +76,28 @@ export function browser(server: TestServer, cookie: string | null): Omit<TestPer
     post: (path, body = {}) => prepare(agent.post(path)).send(body),
     put: (path, body = {}) => prepare(agent.put(path)).send(body),
     delete: (path) => prepare(agent.delete(path)),
-    upload: (path, bytes) => prepare(agent.put(path)).set('Content-Type', 'text/csv').send(bytes as string),
+    upload: (path, bytes) =>
+      prepare(agent.put(path))
+        .set('Content-Type', 'text/csv')
+        .send(bytes as string),
   };
 }
 
-export async function makePerson(server: TestServer, { grants = [], institution, name = 'Test person' }: PersonOptions = {}): Promise<TestPerson> {
+export async function makePerson(
+  server: TestServer,
+  { grants = [], institution, name = 'Test person' }: PersonOptions = {},
+): Promise<TestPerson> {
   const id = randomUUID();
   const email = `${id.slice(0, 8)}@test.example`;
-  await server.database.owner.query('insert into accounts (id, issuer, subject, name, email, institution) values ($1, $2, $3, $4, $5, $6)', [
-    id,
-    'https://provider.example',
-    id,
-    name,
-    email,
-    institution ?? null,
-  ]);
+  await server.database.owner.query(
+    'insert into accounts (id, issuer, subject, name, email, institution) values ($1, $2, $3, $4, $5, $6)',
+    [id, 'https://provider.example', id, name, email, institution ?? null],
+  );
   for (const grant of grants) {
-    await server.database.owner.query("insert into grants (id, account_id, role, site_id, starts_on) values ($1, $2, $3, $4, (now() at time zone 'UTC')::date)", [
-      randomUUID(),
-      id,
-      grant.role,
-      grant.site?.id ?? null,
-    ]);
+    await server.database.owner.query(
+      "insert into grants (id, account_id, role, site_id, starts_on) values ($1, $2, $3, $4, (now() at time zone 'UTC')::date)",
+      [randomUUID(), id, grant.role, grant.site?.id ?? null],
+    );
   }
   const cookie = await makeSession(server, id);
   return { id, email, subject: id, cookie, ...browser(server, cookie) };

@@ -28,7 +28,8 @@ export const completeForm: RequestForm = {
   ...emptyForm,
   title: 'Walking speed after a course of supported training',
   question: 'How does self-selected walking speed change over one course, by level and grade of injury?',
-  laySummary: 'We want to describe how fast people walk before and after a course of training, so that clinics can tell people what others like them reached.',
+  laySummary:
+    'We want to describe how fast people walk before and after a course of training, so that clinics can tell people what others like them reached.',
   purpose: 'condition_research',
   ethicsCommittee: 'Committee of Lakeside University',
   ethicsReference: 'LU-2026-118',

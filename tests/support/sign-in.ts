@@ -13,7 +13,10 @@ export interface SignInTest {
 
 export async function startSignInTest(settings: Readonly<Record<string, string>> = {}): Promise<SignInTest> {
   const provider = await startTestProvider();
-  const server = await startTestServer({ OIDC_ISSUER: provider.issuer, OIDC_CLIENT_ID: provider.clientId, ...settings }, await cloneDatabase());
+  const server = await startTestServer(
+    { OIDC_ISSUER: provider.issuer, OIDC_CLIENT_ID: provider.clientId, ...settings },
+    await cloneDatabase(),
+  );
   return {
     provider,
     server,
@@ -46,7 +49,11 @@ export class Browser {
 
   /** What an honest provider sends back after this authorization request. */
   honest(authorization: URL, subject?: string): { code: string; state: string; iss: string } {
-    return { code: this.test.provider.expect(authorization, subject), state: authorization.searchParams.get('state') ?? '', iss: this.test.provider.issuer };
+    return {
+      code: this.test.provider.expect(authorization, subject),
+      state: authorization.searchParams.get('state') ?? '',
+      iss: this.test.provider.issuer,
+    };
   }
 
   async signIn(returnTo?: string, subject?: string): Promise<supertest.Response> {
@@ -67,7 +74,9 @@ export async function expectRefused(test: SignInTest, browser: Browser, answer: 
   expect(answer.status).toBe(400);
   expect(answer.headers['content-type']).toContain('text/html');
   expect(await browser.isSignedIn()).toBe(false);
-  const { rows } = await test.server.database.owner.query("select result from audit_entries where act = 'sign-in' order by seq desc limit 1");
+  const { rows } = await test.server.database.owner.query(
+    "select result from audit_entries where act = 'sign-in' order by seq desc limit 1",
+  );
   expect(rows).toEqual([{ result: 'refused' }]);
   // The same browser signs in when all is as it should be.
   test.provider.behaviour = {};

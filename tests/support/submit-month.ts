@@ -10,10 +10,17 @@ import type { TestServer } from './server.ts';
 export type MonthRows = Partial<Readonly<Record<TableKey, readonly Row[]>>>;
 export type MonthFiles = Partial<Readonly<Record<TableKey, string | Buffer>>>;
 
-export const filesOf = (rows: MonthRows): MonthFiles => Object.fromEntries((Object.entries(rows) as [TableKey, readonly Row[]][]).map(([table, of]) => [table, csvOf(table, of)]));
+export const filesOf = (rows: MonthRows): MonthFiles =>
+  Object.fromEntries((Object.entries(rows) as [TableKey, readonly Row[]][]).map(([table, of]) => [table, csvOf(table, of)]));
 
 /** Opened, uploaded and checked. */
-export async function uploadMonth(server: TestServer, coordinator: TestPerson, site: TestSite, month: string, files: MonthFiles): Promise<Submission> {
+export async function uploadMonth(
+  server: TestServer,
+  coordinator: TestPerson,
+  site: TestSite,
+  month: string,
+  files: MonthFiles,
+): Promise<Submission> {
   const opened = await coordinator.post('/api/submissions', { siteId: site.id, month });
   expect(opened.status, JSON.stringify(opened.body)).toBe(201);
   const { id } = opened.body as Submission;
@@ -27,7 +34,13 @@ export async function uploadMonth(server: TestServer, coordinator: TestPerson, s
 }
 
 /** As above, every warning given a reason, and committed. */
-export async function submitMonth(server: TestServer, coordinator: TestPerson, site: TestSite, month: string, rows: MonthRows): Promise<Submission> {
+export async function submitMonth(
+  server: TestServer,
+  coordinator: TestPerson,
+  site: TestSite,
+  month: string,
+  rows: MonthRows,
+): Promise<Submission> {
   const checked = await uploadMonth(server, coordinator, site, month, filesOf(rows));
   const errors = checked.findings.filter((group) => group.severity === 'error');
   expect(errors.map((group) => `${group.rule} ${group.statement}`)).toEqual([]);

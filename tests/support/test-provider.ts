@@ -87,7 +87,9 @@ export async function startTestProvider(): Promise<TestProvider> {
     tokenRequests,
     behaviour: {},
     expect(authorization, subject = 'person-1', extra = {}) {
-      const code = createHash('sha256').update(authorization.href + String(codes.size) + String(Math.random())).digest('hex');
+      const code = createHash('sha256')
+        .update(authorization.href + String(codes.size) + String(Math.random()))
+        .digest('hex');
       const now = Math.floor(Date.now() / 1000);
       codes.set(code, {
         challenge: authorization.searchParams.get('code_challenge'),
@@ -107,7 +109,8 @@ export async function startTestProvider(): Promise<TestProvider> {
       });
       return code;
     },
-    sign: (claims, header = {}) => new SignJWT(claims).setProtectedHeader({ alg: 'RS256', kid: 'key-1', typ: 'JWT', ...header }).sign(privateKey),
+    sign: (claims, header = {}) =>
+      new SignJWT(claims).setProtectedHeader({ alg: 'RS256', kid: 'key-1', typ: 'JWT', ...header }).sign(privateKey),
     close: () =>
       new Promise((resolve) => {
         server.closeAllConnections();

@@ -1,5 +1,6 @@
 /** Structured logs: method, route pattern, status, time, request id. Never a body, a query value, a cookie, a token or a participant's value. */
 import { randomUUID } from 'node:crypto';
+import type { IncomingMessage, ServerResponse } from 'node:http';
 import { pino, type Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
 import type { RequestHandler } from 'express';
@@ -20,7 +21,7 @@ export function errorFacts(error: unknown): { kind: string; code?: string; at?: 
 }
 
 /** The pattern of the address, never the address: ids and tokens stand in it. */
-const withRoute = (request: object, _response: object, facts: object): object => ({
+const withRoute = (request: IncomingMessage, _response: ServerResponse, facts: object): object => ({
   ...facts,
   route: (request as { route?: { path?: string } }).route?.path ?? null,
 });
@@ -36,7 +37,7 @@ export function requestLog(logger: Logger): RequestHandler {
     autoLogging: true,
     quietReqLogger: true,
     customSuccessObject: withRoute,
-    customErrorObject: (request, response, _error, facts) => withRoute(request, response, facts),
+    customErrorObject: (request, response, _error, facts: object) => withRoute(request, response, facts),
     serializers: {
       req: (request: { id: unknown; method: string }) => ({ id: request.id, method: request.method }),
       res: (response: { statusCode: number }) => ({ status: response.statusCode }),
