@@ -3,7 +3,7 @@ import { problems, type Problem, type ProblemCode } from '@cairnstep/contract';
 import { Refusal } from './refusal.ts';
 
 /** SQLSTATE classes after which trying again later is the right advice: connection lost, out of resources, operator intervention, timeouts. */
-const passingFault = /^(08|53|57|58|55P03|40001|40P01)/;
+const passingFault = /^(08|53|57|58|55000|55P03|40001|40P01)/;
 
 const codeOf = (error: unknown): string | undefined => {
   if (typeof error !== 'object' || error === null) return undefined;
