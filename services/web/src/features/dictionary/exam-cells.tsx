@@ -66,7 +66,8 @@ function CellsOf({ segment, cells }: { readonly segment: string; readonly cells:
           <Fragment key={cell.key}>
             {index > 0 && ' '}
             <TextLink to={variableAddress(cell)}>
-              <code>{cell.key}</code>
+              {/* The line under a link would hide the underscores; this one stands below them. */}
+              <code className="inline-block border-b border-current leading-5">{cell.key}</code>
             </TextLink>
           </Fragment>
         ))}

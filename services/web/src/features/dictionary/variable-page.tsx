@@ -8,8 +8,8 @@ import { measureAddress, tableAddress, variableAddress, variableAt } from './add
 import { CodeList } from './code-list.tsx';
 import { Conversions } from './conversions.tsx';
 import { cellsOfSegment } from './exam-cells.tsx';
-import { Facts } from './facts.tsx';
-import { Neighbours } from './neighbours.tsx';
+import { Facts } from '../../ui/facts.tsx';
+import { Neighbours } from '../../ui/neighbours.tsx';
 import { NothingHere } from './nothing-here.tsx';
 import { RuleList } from './rule-list.tsx';
 import { VersionList } from './version-list.tsx';

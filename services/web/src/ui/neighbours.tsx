@@ -1,4 +1,4 @@
-import { TextLink } from '../../ui/text-link.tsx';
+import { TextLink } from './text-link.tsx';
 
 interface Entry {
   readonly to: string;
