@@ -16,13 +16,13 @@ export interface CohortStripProps {
 
 export function CohortStrip({ grid, cells, mayRequest, draft, onClear }: CohortStripProps) {
   return (
-    <div className="not-printed sticky bottom-0 z-10 mt-4 flex flex-wrap items-center gap-x-6 gap-y-2 border-t-2 border-lichen bg-sheet py-3">
-      <p role="status" className="numbers min-w-0 flex-1 basis-64 font-semibold">
+    <div className="not-printed sticky bottom-0 z-10 mt-4 flex flex-wrap items-center gap-x-6 gap-y-1 border-t-2 border-lichen bg-sheet py-2 md:py-3">
+      <p role="status" className="numbers min-w-0 flex-1 basis-64 text-small font-semibold md:text-base">
         {cohortCount(grid, cells)}
       </p>
       {cells.length > 0 && (
         <Button variant="quiet" onPress={onClear}>
-          Clear the choice
+          Clear
         </Button>
       )}
       {mayRequest && (

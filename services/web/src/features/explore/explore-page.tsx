@@ -15,7 +15,6 @@ import { downloadGrid, GridAsTable } from './grid-as-table.tsx';
 import { GridChoice } from './grid-choice.tsx';
 import { GridWithLevels } from './grid-with-levels.tsx';
 import { cohortCount, gridInWords, sourceOf, statisticNames, unitText } from './grid-words.ts';
-import { IntervalKey } from './interval-key.tsx';
 import { intervalScale } from './interval-scale.ts';
 import { LeftOut } from './left-out.tsx';
 import { useGridAddress } from './use-grid-address.ts';
@@ -49,13 +48,15 @@ function Explorer({ account }: { readonly account: Account }) {
   if (known.data?.releases.length === 0 && address.question.siteId === undefined) return <NothingReleased account={account} />;
   return (
     <>
-      <Section>
-        <div className="min-h-64 sm:min-h-60">
-          <Answer query={known} waiting="Reading which outcomes can be explored.">
-            {(outcomes) => <GridChoice account={account} known={outcomes} address={address} />}
-          </Answer>
-        </div>
-      </Section>
+      <div className="not-printed">
+        <Section>
+          <div className="min-h-64 sm:min-h-60">
+            <Answer query={known} waiting="Reading which outcomes can be explored.">
+              {(outcomes) => <GridChoice account={account} known={outcomes} address={address} />}
+            </Answer>
+          </div>
+        </Section>
+      </div>
       {grid.data === undefined ? (
         <Section wide>
           <div className="min-h-[960px]">
@@ -81,7 +82,6 @@ interface GridSectionProps {
 
 function GridSection({ grid, isOld, address: { cells, asTable, draft, chooseCells, showAs }, mayRequest }: GridSectionProps) {
   const titleId = useId();
-  const scale = intervalScale(grid);
   const unit = unitText(grid.outcome);
   return (
     <Section wide note={<GridNotes grid={grid} />}>
@@ -105,12 +105,15 @@ function GridSection({ grid, isOld, address: { cells, asTable, draft, chooseCell
               Print the cohort sheet
             </Button>
           </div>
-          {scale !== null && !asTable && <IntervalKey grid={grid} scale={scale} />}
         </div>
-        {asTable ? <GridAsTable grid={grid} /> : <GridWithLevels grid={grid} labelledBy={titleId} chosen={cells} onChoose={chooseCells} />}
+        {asTable ? (
+          <GridAsTable grid={grid} />
+        ) : (
+          <GridWithLevels grid={grid} scale={intervalScale(grid)} labelledBy={titleId} chosen={cells} onChoose={chooseCells} />
+        )}
         <CohortSheet grid={grid} cells={cells} />
       </div>
-      <CohortStrip grid={grid} cells={cells} mayRequest={mayRequest} draft={draft} onClear={() => chooseCells([])} />
+      <CohortStrip grid={grid} cells={cells} mayRequest={mayRequest} draft={draft} onClear={() => chooseCells(() => [])} />
     </Section>
   );
 }

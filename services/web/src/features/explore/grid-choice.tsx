@@ -19,8 +19,8 @@ export function GridChoice({ account, known: { outcomes, releases }, address: { 
   const sites = sitesOf(account);
   const newest = releases[0]?.number;
   return (
-    <div className="not-printed grid gap-x-8 gap-y-5 sm:grid-cols-2">
-      <div className="grid content-start gap-3">
+    <div className="grid grid-cols-1 gap-x-8 gap-y-5 sm:grid-cols-2">
+      <div className="grid grid-cols-1 content-start gap-3">
         <Select
           id="outcome"
           label="Outcome"
@@ -48,7 +48,7 @@ export function GridChoice({ account, known: { outcomes, releases }, address: { 
           )
         )}
       </div>
-      <div className="grid content-start gap-3">
+      <div className="grid grid-cols-1 content-start gap-3">
         <RadioGroup
           id="statistic"
           label="Statistic"

@@ -66,7 +66,9 @@ export function gridInWords(grid: Grid): string {
   const unit = unitText(outcome);
   const figure = (cell: Shown) =>
     `${meanText(cell, grid)}${unit === '' ? '' : `\u00A0${unit}`}` +
-    (cell.interval === null ? ` (n = ${formatNumber(cell.n)})` : ` (95% CI ${intervalText(cell, grid)}; n = ${formatNumber(cell.n)})`);
+    (cell.interval === null
+      ? ` (n\u00A0=\u00A0${formatNumber(cell.n)})`
+      : ` (95% CI ${intervalText(cell, grid)}; n\u00A0=\u00A0${formatNumber(cell.n)})`);
   const subject = `${statisticNames[grid.statistic]} in ${outcome.name}, ${outcome.inDevice ? 'measured in the training device' : 'without the training device'}`;
   const groups = groupFigures(grid).filter(({ levelGroup, grade }) => levelGroup !== '' && grade !== null);
   const shown = groups.filter((group): group is GroupFigure & { cell: Shown } => group.cell.state === 'shown');

@@ -12,6 +12,7 @@ import { gradeInWords, intervalText, meanText, unitText } from './grid-words.ts'
 import { IntervalMark } from './interval-mark.tsx';
 import type { IntervalScale } from './interval-scale.ts';
 import { isChosen, toggle } from './selection.ts';
+import type { ChooseCells } from './use-grid-address.ts';
 
 export interface LevelGradeGridProps {
   readonly grid: Grid;
@@ -19,7 +20,7 @@ export interface LevelGradeGridProps {
   /** Id of what names the grid. */
   readonly labelledBy: string;
   readonly chosen: readonly CohortCell[];
-  readonly onChoose: (cells: readonly CohortCell[]) => void;
+  readonly onChoose: ChooseCells;
 }
 
 /** -1 is the header, the row after the last holds the totals. */
@@ -43,7 +44,7 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
 
   function press(place: Place): void {
     const cells = cellsAt(place);
-    if (cells.length > 0) onChoose(toggle(chosen, cells));
+    if (cells.length > 0) onChoose((before) => toggle(before, cells));
   }
 
   function move(event: KeyboardEvent, { row, column }: Place): void {
@@ -51,8 +52,8 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
     event.preventDefault();
     table.current?.querySelector<HTMLElement>(`[data-place="${target.row} ${target.column}"]`)?.focus();
     if (event.shiftKey) {
-      const passed = [...cellsAt(active), ...cellsAt(target)].filter((cell) => !isChosen(chosen, cell));
-      if (passed.length > 0) onChoose([...chosen, ...passed]);
+      const passed = [...cellsAt(active), ...cellsAt(target)];
+      onChoose((before) => [...before, ...passed]);
     }
   }
 
@@ -77,11 +78,11 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
         event.preventDefault();
         return press(active);
       case 'Escape':
-        return onChoose([]);
+        return onChoose(() => []);
       case 'a':
         if (!control) return;
         event.preventDefault();
-        return onChoose(cellsAt({ row: -1, column: -1 }));
+        return onChoose(() => cellsAt({ row: -1, column: -1 }));
     }
   }
 
@@ -102,11 +103,14 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
       aria-labelledby={labelledBy}
       aria-multiselectable="true"
       onKeyDown={onKeyDown}
-      className="block w-full border-separate border-spacing-0 md:table md:min-w-[700px] lg:col-start-2 lg:col-end-[-1] lg:row-start-1 lg:row-end-[-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
+      className="block w-full border-separate border-spacing-0 columns:table columns:table-fixed lg:col-start-2 lg:col-end-[-1] lg:row-start-2 lg:row-end-[-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
     >
-      <thead role="rowgroup" className="hidden md:table-header-group lg:col-span-full lg:row-start-1 lg:grid lg:grid-cols-subgrid">
+      <thead
+        role="rowgroup"
+        className="hidden columns:table-header-group lg:sticky lg:top-0 lg:z-10 lg:col-span-full lg:row-start-1 lg:grid lg:grid-cols-subgrid"
+      >
         <tr role="row" className="lg:col-span-full lg:grid lg:grid-cols-subgrid">
-          <td role="gridcell" className={`${headLook} md:sticky md:left-0 md:z-10`}>
+          <td role="gridcell" className={`${headLook} columns:w-22`}>
             <span className="text-small text-quiet">Level</span>
           </td>
           {grades.map((grade, column) => (
@@ -128,7 +132,7 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
       </thead>
       <tbody
         role="rowgroup"
-        className="block md:table-row-group lg:col-span-full lg:[grid-row:2/-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
+        className="block columns:table-row-group lg:col-span-full lg:[grid-row:2/-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
       >
         {rows.map(({ levelGroup, label, cells, total }, row) => (
           <tr key={levelGroup} role="row" className={rowLook}>
@@ -150,29 +154,33 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
                   {...at({ row, column })}
                   role="gridcell"
                   aria-selected={selected}
-                  className={`${cellLook} cursor-pointer border-l-4 focus-visible:-outline-offset-2 ${
-                    selected ? 'border-l-lichen bg-chosen' : 'border-l-transparent hover:bg-paper'
+                  className={`${cellLook} cursor-pointer focus-visible:-outline-offset-2 ${
+                    selected ? 'bg-chosen before:absolute before:inset-y-0 before:left-0 before:w-1 before:bg-lichen' : 'hover:bg-paper'
                   }`}
                 >
                   <Figures {...shared} cell={cell} grade={grade} label={gradeChip(grade)} />
                 </td>
               );
             })}
-            <td {...at({ row, column: grades.length })} role="gridcell" className={`${cellLook} ${totalLook}`}>
+            <td {...at({ row, column: grades.length })} role="gridcell" className={`${cellLook} ${totalColumnLook}`}>
               <Figures {...shared} cell={total} label="all" />
             </td>
           </tr>
         ))}
         <tr role="row" className={rowLook}>
-          <th role="rowheader" scope="row" className={rowHeadLook}>
+          <th role="rowheader" scope="row" className={`${rowHeadLook} columns:border-t columns:border-t-edge`}>
             All levels
           </th>
           {grades.map((grade, column) => (
-            <td key={grade} {...at({ row: rows.length, column })} role="gridcell" className={`${cellLook} ${totalLook}`}>
+            <td key={grade} {...at({ row: rows.length, column })} role="gridcell" className={`${cellLook} ${totalRowLook}`}>
               <Figures {...shared} cell={grid.columnTotals[column] ?? { state: 'empty' }} grade={grade} label={gradeChip(grade)} />
             </td>
           ))}
-          <td {...at({ row: rows.length, column: grades.length })} role="gridcell" className={`${cellLook} ${totalLook}`}>
+          <td
+            {...at({ row: rows.length, column: grades.length })}
+            role="gridcell"
+            className={`${cellLook} ${totalColumnLook} columns:border-t columns:border-t-edge`}
+          >
             <Figures {...shared} cell={grid.total} label="all" />
           </td>
         </tr>
@@ -181,12 +189,15 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
   );
 }
 
-const headLook = 'border-b border-edge bg-sheet px-2 pb-2 text-left align-bottom font-normal focus-visible:-outline-offset-2';
-const rowLook = 'block border-b border-hairline md:table-row lg:col-span-full lg:grid lg:grid-cols-subgrid';
+const headLook =
+  'border-b border-edge bg-sheet pr-2 pb-2 pl-3 text-left align-bottom font-normal focus-visible:-outline-offset-2 lg:flex lg:flex-col lg:justify-end';
+const rowLook = 'block border-b border-hairline columns:table-row lg:col-span-full lg:grid lg:grid-cols-subgrid';
 const rowHeadLook =
-  'block bg-sheet pt-4 pb-1 text-left font-semibold focus-visible:-outline-offset-2 md:sticky md:left-0 md:z-10 md:table-cell md:border-b md:border-hairline md:py-2 md:pr-2 md:align-top lg:static lg:border-0';
-const cellLook = 'block scroll-mb-32 px-2 py-1.5 md:table-cell md:border-b md:border-b-hairline md:align-top lg:block lg:border-b-0';
-const totalLook = 'border-l-4 border-l-transparent md:border-l md:border-l-edge md:pl-[11px]';
+  'block bg-sheet pt-4 pb-1 text-left font-semibold columns:text-small lg:text-base print:text-[9pt] focus-visible:-outline-offset-2 columns:table-cell columns:border-b columns:border-hairline columns:py-2 columns:pr-2 columns:align-top lg:border-0';
+const cellLook =
+  'relative block scroll-mt-28 scroll-mb-32 py-1.5 pr-1 pl-3 columns:table-cell columns:border-b columns:border-b-hairline columns:align-top lg:block lg:border-b-0';
+const totalRowLook = 'columns:border-t columns:border-t-edge';
+const totalColumnLook = 'columns:border-l columns:border-l-edge';
 
 const bands: Readonly<Record<Grade, string>> = {
   A: 'bg-ais-a',
@@ -210,8 +221,8 @@ function GradeHead({ grade }: { readonly grade: Grade }) {
     <>
       <span aria-hidden="true" className={`mb-1 block h-2 border border-edge ${bands[grade]}`} />
       <span className="sr-only">AIS </span>
-      <span className="text-lead font-semibold">{grade}</span>
-      <span className="block text-small text-quiet">{completeness[grade]}</span>
+      <span className="block text-lead font-semibold">{grade}</span>
+      <span className="block text-small text-quiet print:text-[8pt]">{completeness[grade]}</span>
     </>
   );
 }
@@ -219,13 +230,13 @@ function GradeHead({ grade }: { readonly grade: Grade }) {
 /** The grade within a cell, where the columns have become lines. */
 function gradeChip(grade: Grade): ReactNode {
   return (
-    <span className="flex flex-col items-center">
+    <>
       <span className="sr-only">{gradeInWords(grade)}</span>
-      <span aria-hidden="true" className="font-semibold">
-        {grade}
+      <span aria-hidden="true" className="flex items-center gap-2">
+        <span className={`block h-3 w-5 border border-edge ${bands[grade]}`} />
+        <span className="font-semibold">{grade}</span>
       </span>
-      <span aria-hidden="true" className={`block h-2 w-6 border border-edge ${bands[grade]}`} />
-    </span>
+    </>
   );
 }
 
@@ -240,8 +251,8 @@ interface FiguresProps {
 function Figures({ grid, cell, scale, grade, label }: FiguresProps) {
   const unit = unitText(grid.outcome);
   return (
-    <div className="grid grid-cols-[36px_minmax(0,1fr)_35%] items-center gap-x-3 md:grid-cols-1 md:items-start">
-      <span className="row-span-2 text-center text-small md:hidden">{label}</span>
+    <div className="grid grid-cols-[48px_minmax(0,1fr)_30%] items-start gap-x-3 columns:grid-cols-1">
+      <span className="row-span-2 columns:hidden">{label}</span>
       {cell.state === 'shown' ? (
         <>
           <span className="flex flex-wrap items-baseline justify-between gap-x-2">
@@ -253,7 +264,7 @@ function Figures({ grid, cell, scale, grade, label }: FiguresProps) {
               n <span className="text-ink">{formatNumber(cell.n)}</span>
             </span>
           </span>
-          <span className="col-start-3 row-span-2 row-start-1 md:col-start-auto md:row-span-1 md:row-start-auto">
+          <span className="col-start-3 row-span-2 row-start-1 self-center columns:col-start-auto columns:row-span-1 columns:row-start-auto">
             {scale !== null && <IntervalMark cell={cell} scale={scale} {...(grade !== undefined && { grade })} />}
           </span>
           <span className="numbers text-small text-quiet">

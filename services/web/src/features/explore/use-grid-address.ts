@@ -1,4 +1,5 @@
 /** What is asked and which cells are chosen, as the address holds it. */
+import { useEffect, useRef } from 'react';
 import { useSearchParams } from 'react-router-dom';
 import { useAddressChange } from '../../lib/address-state.ts';
 import { formatCells, parseCells } from '../../lib/cohort.ts';
@@ -10,6 +11,8 @@ const firstOutcome = 'tmwt_ss';
 
 const statistics = ['change', 'baseline', 'end'] as const;
 
+export type ChooseCells = (change: (before: readonly CohortCell[]) => readonly CohortCell[]) => void;
+
 export interface GridAddress {
   readonly question: GridQuestion;
   readonly cells: readonly CohortCell[];
@@ -17,7 +20,8 @@ export interface GridAddress {
   /** The draft request that the choice is to go back to. */
   readonly draft: string | null;
   readonly ask: (changes: Partial<Record<'outcome' | 'inDevice' | 'statistic' | 'release' | 'site', string | null>>) => void;
-  readonly chooseCells: (cells: readonly CohortCell[]) => void;
+  /** Told as a change, so that quick presses build on each other although the address follows a moment later. */
+  readonly chooseCells: ChooseCells;
   readonly showAs: (view: 'grid' | 'table') => void;
 }
 
@@ -26,6 +30,12 @@ export function useGridAddress(ownSites: readonly string[]): GridAddress {
   const [search] = useSearchParams();
   const change = useAddressChange();
   const release = Number(search.get('release'));
+  const cells = parseCells(search.get('cells'));
+  const written = formatCells(cells);
+  const latest = useRef(written);
+  useEffect(() => {
+    latest.current = written;
+  }, [written]);
   const siteId = ownSites.find((id) => id === search.get('site'));
   return {
     question: {
@@ -35,11 +45,14 @@ export function useGridAddress(ownSites: readonly string[]): GridAddress {
       ...(siteId === undefined && Number.isInteger(release) && release >= 1 && { release }),
       ...(siteId !== undefined && { siteId }),
     },
-    cells: parseCells(search.get('cells')),
+    cells,
     asTable: search.get('view') === 'table',
     draft: search.get('draft'),
     ask: ({ inDevice, ...others }) => change({ ...others, ...(inDevice !== undefined && { 'in-device': inDevice }) }),
-    chooseCells: (cells) => change({ cells: formatCells(cells) }),
+    chooseCells: (changeCells) => {
+      latest.current = formatCells(changeCells(parseCells(latest.current)));
+      change({ cells: latest.current });
+    },
     showAs: (view) => change({ view: view === 'table' ? 'table' : null }),
   };
 }
