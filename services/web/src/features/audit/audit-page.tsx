@@ -63,10 +63,10 @@ function leadOf(isSteward: boolean, isAdministrator: boolean): string {
   return isAdministrator ? 'What was done to accounts and roles, and your own acts.' : 'Your own acts in the registry.';
 }
 
-/** Acts of the registry itself have no role, or one that no person has. */
+/** `null` for the registry itself. */
 function roleWord(role: string | null): string | null {
   const known = roles.find((one) => one === role);
-  return known === undefined ? role : roleNames[known];
+  return known === undefined ? null : roleNames[known];
 }
 
 const results: Readonly<Record<Entry['result'], string>> = { ok: 'done', refused: 'refused', failed: 'failed' };
@@ -74,7 +74,7 @@ const results: Readonly<Record<Entry['result'], string>> = { ok: 'done', refused
 const columns: readonly Column<Entry>[] = [
   { key: 'seq', header: 'Number', value: ({ seq }) => seq, cell: ({ seq }) => formatNumber(seq), kind: 'number' },
   { key: 'at', header: 'When', value: ({ at }) => at, cell: ({ at }) => <span className="numbers">{formatInstant(at)}</span> },
-  { key: 'actor', header: 'Who', value: ({ actor }) => actor },
+  { key: 'actor', header: 'Who', value: ({ actor }) => (actor === 'system' ? 'the registry itself' : actor) },
   { key: 'role', header: 'Role', value: ({ role }) => roleWord(role) },
   {
     key: 'act',

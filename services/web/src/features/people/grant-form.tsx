@@ -19,12 +19,12 @@ export function GrantForm({ person }: { readonly person: Person }) {
   const give = useGiveGrant(person.id);
   const [draft, setDraft] = useState(emptyRole);
   const [attempt, setAttempt] = useState(0);
-  const found = attempt === 0 ? [] : problemsOfRole(draft, ids, today());
+  const found = attempt === 0 ? [] : problemsOfRole(draft, ids, today(), person.grants);
   const problems = found.length > 0 ? found : problemsOf(give.error, refusable);
 
   function send(): void {
     setAttempt(attempt + 1);
-    if (problemsOfRole(draft, ids, today()).length > 0) return;
+    if (problemsOfRole(draft, ids, today(), person.grants).length > 0) return;
     give.mutate(
       { ...roleOf(draft), startsOn: today() },
       {

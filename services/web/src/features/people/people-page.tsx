@@ -106,7 +106,7 @@ const columns: readonly Column<Person>[] = [
     key: 'roles',
     header: 'Roles',
     value: (person) => rolesOf(person).join('; '),
-    cell: (person) => <Roles roles={rolesOf(person)} />,
+    cell: (person) => <Roles person={person} />,
   },
   { key: 'institution', header: 'Institution', value: ({ institution }) => institution },
   { key: 'email', header: 'E-mail', value: ({ email }) => email },
@@ -124,12 +124,12 @@ const columns: readonly Column<Person>[] = [
   },
 ];
 
-function Roles({ roles }: { readonly roles: readonly string[] }) {
-  if (roles.length === 0) return <span className="text-quiet">no role</span>;
+function Roles({ person: { grants } }: { readonly person: Person }) {
+  if (grants.length === 0) return <span className="text-quiet">no role</span>;
   return (
     <ul>
-      {roles.map((role) => (
-        <li key={role}>{role}</li>
+      {grants.map(({ id, role, site }) => (
+        <li key={id}>{roleWithin(role, site)}</li>
       ))}
     </ul>
   );

@@ -47,7 +47,7 @@ function OnePerson({ person }: { readonly person: Person }) {
       lead={<p>{person.institution ?? 'Without an institution'}</p>}
       note={
         <>
-          {person.email !== null && <p className="break-all">{person.email}</p>}
+          {person.email !== null && <p>{person.email}</p>}
           <p>{person.lastSignInAt === null ? 'Has never signed in.' : `Last signed in on ${formatInstant(person.lastSignInAt)}.`}</p>
           <p>Name, e-mail and institution come from the organisation that signs the person in.</p>
         </>

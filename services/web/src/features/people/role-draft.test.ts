@@ -13,6 +13,18 @@ describe('a role being given', () => {
     expect(messages({ ...emptyRole, role: 'steward' })).toEqual([]);
   });
 
+  it('is not given twice, but may be given at another site', () => {
+    const site = { id: 'a', code: 'S01', name: 'North Harbour Clinic' };
+    const given = (role: 'coordinator' | 'steward', siteId: string | null) =>
+      problemsOfRole({ role, siteId, endsOn: '' }, ids, today, [
+        { role: 'coordinator', site },
+        { role: 'steward', site: null },
+      ]);
+    expect(given('coordinator', 'a')).toEqual([{ fieldId: 'invite-role', message: 'The person has this role already' }]);
+    expect(given('steward', null)).toHaveLength(1);
+    expect(given('coordinator', 'b')).toEqual([]);
+  });
+
   it('may end on a day to come, written as ISO', () => {
     const ending = (endsOn: string) => messages({ ...emptyRole, role: 'researcher', endsOn });
     expect(ending('2027-06-30')).toEqual([]);

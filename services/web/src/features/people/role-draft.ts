@@ -1,7 +1,9 @@
 /** A role as it is being given: typed so far, what is missing, and what is sent. */
 import { CalendarDate } from '@cairnstep/contract';
-import type { Role } from '@cairnstep/contract';
+import type { Account, Role } from '@cairnstep/contract';
 import type { PlacedProblem } from '../../lib/field-problems.ts';
+
+type Grant = Account['grants'][number];
 
 export interface RoleDraft {
   readonly role: Role | null;
@@ -23,11 +25,17 @@ export interface RoleFieldIds {
 
 export const fieldIdsOf = (form: string): RoleFieldIds => ({ role: `${form}-role`, site: `${form}-site`, endsOn: `${form}-ends-on` });
 
-/** `today`: `2026-12-01`. */
-export function problemsOfRole(draft: RoleDraft, ids: RoleFieldIds, today: string): PlacedProblem[] {
+/** `today`: `2026-12-01`. `held`: the roles the person has. */
+export function problemsOfRole(
+  draft: RoleDraft,
+  ids: RoleFieldIds,
+  today: string,
+  held: readonly Pick<Grant, 'role' | 'site'>[] = [],
+): PlacedProblem[] {
   const endsOn = draft.endsOn.trim();
   return [
     draft.role === null && { fieldId: ids.role, message: 'Choose a role' },
+    held.some((grant) => isSame(grant, draft)) && { fieldId: ids.role, message: 'The person has this role already' },
     isSiteRole(draft.role) && draft.siteId === null && { fieldId: ids.site, message: 'Choose the site this person works at' },
     endsOn !== '' &&
       !CalendarDate.safeParse(endsOn).success && {
@@ -39,6 +47,9 @@ export function problemsOfRole(draft: RoleDraft, ids: RoleFieldIds, today: strin
       endsOn < today && { fieldId: ids.endsOn, message: 'The last day lies in the past' },
   ].filter((problem) => problem !== false);
 }
+
+const isSame = ({ role, site }: Pick<Grant, 'role' | 'site'>, draft: RoleDraft): boolean =>
+  role === draft.role && (!isSiteRole(role) || site?.id === draft.siteId);
 
 /** What is sent of a draft without problems. */
 export function roleOf({ role, siteId, endsOn }: RoleDraft): { role: Role; siteId: string | null; endsOn: string | null } {

@@ -46,7 +46,7 @@ function Rows({ submissionId, table, kind, word }: RowsProps) {
           <div>
             <Table
               id="rows"
-              caption={title}
+              caption={kind === 'removed' ? 'Key and last values' : 'Key and values, in the order of the file'}
               columns={columnsOf(table, kind)}
               rows={items}
               rowKey={({ key }) => Object.values(key).join(' ')}
@@ -68,7 +68,7 @@ function columnsOf(table: TableKey, kind: ChangeKind): readonly Column<Change>[]
     header: columnName(table, column),
     value: ({ key }) => key[column] ?? null,
     isRowHeader: index === 0,
-    ...(index === 0 && { cell: ({ key }: Change) => <code>{key[column]}</code> }),
+    cell: ({ key }) => (index === 0 ? <code>{key[column]}</code> : <Value>{key[column] ?? null}</Value>),
   }));
   const line: Column<Change> = { key: 'line', header: 'Line', value: ({ line: at }) => at, kind: 'number' };
   const values: Column<Change> = {
@@ -127,6 +127,9 @@ function CellList({ table, kind, cells }: { readonly table: TableKey; readonly k
   );
 }
 
+/** A stored number shows a true minus; it is copied and downloaded as stored. */
+const withMinus = (text: string): string => text.replace(/^-(?=\d)/, '\u2212');
+
 function Value({ children }: { readonly children: string | null }): ReactNode {
-  return children === null ? <span className="text-quiet">empty</span> : <span className="numbers">{children}</span>;
+  return children === null ? <span className="text-quiet">empty</span> : <span className="numbers">{withMinus(children)}</span>;
 }

@@ -90,12 +90,12 @@ interface RunningProps {
 /** The registry gives a check up after five minutes without an end. */
 const standsStillMs = 2 * 60_000;
 
-function Running({ submission: { progress }, isCoordinator, onAgain }: RunningProps) {
-  const words = progressWords(progress);
+function Running({ submission, isCoordinator, onAgain }: RunningProps) {
+  const words = progressWords(submission);
   const standsStill = useUnchangedFor(words, standsStillMs);
   return (
     <>
-      <Progress label="Checking" part={partOf(progress)} words={words} />
+      <Progress label="Checking" part={partOf(submission.progress)} words={words} />
       {standsStill && isCoordinator && (
         <div className="grid justify-items-start gap-2">
           <p>The check has not moved for two minutes. After five it can be begun again; your files are kept.</p>

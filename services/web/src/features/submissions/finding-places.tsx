@@ -108,7 +108,7 @@ function Filters({ submission, filter }: { readonly submission: Submission; read
     { value: 'warning', label: 'Warnings' },
   ];
   return (
-    <div className="grid items-end gap-4 sm:grid-cols-2 md:grid-cols-[160px_200px_minmax(0,1fr)]">
+    <div className="grid items-end gap-4 sm:grid-cols-2 md:grid-cols-[220px_200px_minmax(0,1fr)]">
       <Filter
         id="severity"
         label="Kind"

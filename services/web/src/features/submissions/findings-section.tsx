@@ -9,7 +9,7 @@ import { DownloadFindings } from './download-findings.tsx';
 import { FindingPlaces } from './finding-places.tsx';
 import { ReasonForm } from './reason-form.tsx';
 import type { ReasonDrafts } from './reason-form.tsx';
-import { openWarnings } from './stack-steps.ts';
+import { openWarnings, placesOf } from './stack-steps.ts';
 
 type Group = Submission['findings'][number];
 
@@ -24,7 +24,8 @@ export function FindingsSection({ submission, isCoordinator, drafts }: FindingsS
   if (findings.length === 0) return null;
   const errors = findings.filter(({ severity }) => severity === 'error');
   const warnings = findings.filter(({ severity }) => severity === 'warning');
-  const reasonable = isCoordinator && submission.status === 'checked';
+  // A file sent anew begins the findings anew, so reasons wait until the errors are mended.
+  const takesReasons = isCoordinator && errors.length === 0;
   return (
     <>
       <Section
@@ -42,7 +43,7 @@ export function FindingsSection({ submission, isCoordinator, drafts }: FindingsS
           {warnings.length > 0 && (
             <Groups title={warningTitle(submission, warnings.length)} groups={warnings}>
               {(group) =>
-                reasonable ? (
+                takesReasons ? (
                   <ReasonForm key={group.rule} submissionId={submission.id} group={group} drafts={drafts} />
                 ) : (
                   <Reason group={group} />
@@ -61,6 +62,7 @@ export function FindingsSection({ submission, isCoordinator, drafts }: FindingsS
 function warningTitle(submission: Submission, count: number): string {
   const open = openWarnings(submission).length;
   const title = formatCount(count, 'warning');
+  if (placesOf(submission, 'error') > 0) return `${title} to look at; each that is left after the errors are mended needs a reason`;
   return open === 0 ? `${title}, each with its reason` : `${title} to look at, ${open} without a reason`;
 }
 
@@ -76,7 +78,7 @@ function Groups({ title, groups, children }: GroupsProps) {
       <h3 className="pb-2 font-semibold">{title}</h3>
       <ul>
         {groups.map((group) => (
-          <li key={group.rule} className="grid gap-2 border-t border-hairline py-4">
+          <li key={group.rule} className="grid gap-3 border-t border-hairline py-4">
             <OneGroup group={group} />
             {children?.(group)}
           </li>
@@ -92,27 +94,21 @@ function OneGroup({ group: { rule, severity, statement, why, mend, count } }: { 
   for (const name of ['in', 'severity', 'page']) places.delete(name);
   places.set('rule', rule);
   return (
-    <>
-      <div className="flex flex-wrap items-baseline gap-x-3 gap-y-1">
-        <span className={`font-semibold ${severity === 'error' ? 'text-oxide' : 'text-amber'}`}>
-          {severity === 'error' ? 'Error' : 'Warning'}
-        </span>
+    <div className="grid gap-x-6 gap-y-1 sm:grid-cols-[72px_minmax(0,1fr)_auto]">
+      <p className={`font-semibold ${severity === 'error' ? 'text-oxide' : 'text-amber'}`}>{severity === 'error' ? 'Error' : 'Warning'}</p>
+      <div className="grid max-w-2xl gap-1">
         <h4 className="font-semibold">{statement}</h4>
+        <p>{mend}</p>
+        <p className="text-small text-quiet">{why}</p>
       </div>
-      <dl className="grid max-w-2xl gap-x-4 sm:grid-cols-[72px_1fr]">
-        <dt className="text-quiet">Why</dt>
-        <dd>{why}</dd>
-        <dt className="text-quiet">Mend</dt>
-        <dd>{mend}</dd>
-      </dl>
-      <p>
+      <p className="sm:text-right">
         <TextLink to={{ search: `?${places}`, hash: '#places' }}>
           {formatCount(count, 'place')}
           <span className="sr-only"> of rule {rule}</span>
-        </TextLink>{' '}
-        <span className="text-small text-quiet">rule {rule}</span>
+        </TextLink>
+        <span className="block text-small text-quiet">rule {rule}</span>
       </p>
-    </>
+    </div>
   );
 }
 

@@ -8,7 +8,7 @@ import { Select } from '../../ui/select.tsx';
 import { obstacleOf } from './outgoing-files.ts';
 import type { Outgoing, OutgoingFile } from './outgoing-files.ts';
 import type { TableKey } from './submissions.queries.ts';
-import { tableName, tables } from './table-names.ts';
+import { tables } from './table-names.ts';
 
 const options = tables.map(({ key, name }) => ({ value: key, label: name }));
 
@@ -30,7 +30,7 @@ export function OutgoingList({ outgoing, held }: OutgoingListProps) {
 
   return (
     <div className="grid gap-3 border-l-4 border-lichen pl-4">
-      <h3 className="font-semibold">Not sent yet</h3>
+      <h3 className="font-semibold">Not sent yet: each file and its table</h3>
       <ul aria-label="Files not sent yet">
         {files.map((file) => (
           <OneFile key={file.id} file={file} outgoing={outgoing} replaces={file.table !== null && held.includes(file.table)} />
@@ -54,17 +54,17 @@ interface OneFileProps {
 }
 
 function OneFile({ file: { id, file, table, sent, error }, outgoing, replaces }: OneFileProps) {
+  const size = formatBytes(file.size);
   return (
     <li className="grid gap-2 border-t border-hairline py-3">
-      <p>
-        <span className="font-semibold break-all">{file.name}</span> <span className="numbers text-quiet">{formatBytes(file.size)}</span>
-      </p>
       {sent === null ? (
         <div className="flex flex-wrap items-end gap-x-4 gap-y-2">
-          <div className="w-full max-w-56">
+          <div className="w-full max-w-72">
             <Select
               id={`table-of-${id}`}
-              label={`Table of ${file.name}`}
+              label={file.name}
+              hint={replaces && table !== null ? `${size}, takes the place of the file sent before` : size}
+              placeholder="Choose its table"
               value={table}
               options={options}
               onChange={(key) => outgoing.move(id, key as TableKey)}
@@ -78,11 +78,8 @@ function OneFile({ file: { id, file, table, sent, error }, outgoing, replaces }:
         <Progress
           label={`Sending ${file.name}`}
           part={sent}
-          words={`${formatBytes(Math.round(file.size * sent))} of ${formatBytes(file.size)}`}
+          words={`${file.name}: ${formatBytes(Math.round(file.size * sent))} of ${size}`}
         />
-      )}
-      {replaces && table !== null && sent === null && (
-        <p className="text-small">Takes the place of the file of {tableName(table).toLowerCase()} that was sent before.</p>
       )}
       {error !== null && <ErrorNotice error={error} />}
     </li>

@@ -14,7 +14,7 @@ import { TextLink } from '../../ui/text-link.tsx';
 import { ChangeCounts } from './review-section.tsx';
 import { changeWords } from './stack-steps.ts';
 import { receiptQuery, submissionQuery } from './submissions.queries.ts';
-import { tableName } from './table-names.ts';
+import { tableName, tables } from './table-names.ts';
 
 export default function ReceiptPage() {
   const { submissionId = '' } = useParams();
@@ -34,14 +34,14 @@ export default function ReceiptPage() {
 }
 
 function Receipt({ receipt }: { readonly receipt: SubmissionReceipt }) {
-  const { site, month, tables } = receipt;
+  const { site, month } = receipt;
   const name = `${site.code}-${month}-receipt`;
   const asJson = () => saveFile(`${name}.json`, `${JSON.stringify(receipt, null, 2)}\n`, 'application/json');
   return (
     <Page
       title={`Receipt of ${formatMonth(month)}`}
       kicker={`${site.name} (${site.code})`}
-      lead={<p>Accepted: {changeWords(tables)}.</p>}
+      lead={<p>Accepted: {changeWords(receipt.tables)}.</p>}
       note={
         <p>
           <TextLink to={`/month?site=${site.code}`}>Months of the site</TextLink>,{' '}
@@ -72,14 +72,14 @@ function Receipt({ receipt }: { readonly receipt: SubmissionReceipt }) {
         </dl>
       </Section>
       <Section title="Rows" id="rows">
-        <ChangeCounts id="rows" caption="What the commit did, in rows" tables={tables} fileName={`${name}-rows`} />
+        <ChangeCounts id="rows" caption="What the commit did, in rows" tables={receipt.tables} fileName={`${name}-rows`} />
       </Section>
       <Section title="Files" id="files" note={<p>SHA-256 of each file as it was sent. The registry does not keep the files themselves.</p>}>
         <Table
           id="files"
           caption={`${formatCount(receipt.files.length, 'file')} as sent`}
           columns={fileColumns}
-          rows={receipt.files}
+          rows={tables.flatMap(({ key }) => receipt.files.filter(({ table }) => table === key))}
           rowKey={({ table }) => table}
           empty="No file came with this submission."
           fileName={`${name}-files`}
@@ -107,7 +107,7 @@ const fileColumns: readonly Column<SubmissionReceipt['files'][number]>[] = [
     key: 'sha256',
     header: 'SHA-256',
     value: ({ sha256 }) => sha256,
-    cell: ({ sha256 }) => <code className="text-small break-all">{sha256}</code>,
+    cell: ({ sha256 }) => <code className="inline-block min-w-64 text-small break-all">{sha256}</code>,
   },
 ];
 

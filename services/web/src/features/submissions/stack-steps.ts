@@ -17,11 +17,14 @@ const step = (key: Key, state: StepState, remark?: string): Step => ({
 export function stackSteps(submission: Submission, unsent: number): readonly Step[] {
   const { files, status } = submission;
   const settled = status === 'accepted' || status === 'superseded';
-  const chosen = files.length + unsent;
-  const begun = chosen > 0 || settled;
+  const begun = files.length + unsent > 0 || settled;
   const prepared = files.length > 0 && unsent === 0;
   return [
-    step('read', begun ? 'done' : 'current', begun ? formatCount(chosen, 'file') : 'choose the files of the month'),
+    step(
+      'read',
+      begun ? 'done' : 'current',
+      !begun ? 'choose the files of the month' : formatCount(unsent > 0 ? unsent : files.length, 'file'),
+    ),
     step(
       'prepare',
       !begun ? 'waiting' : prepared || settled ? 'done' : 'current',
@@ -39,7 +42,7 @@ function checkStep(submission: Submission, prepared: boolean): Step {
     case 'discarded':
       return prepared ? step('check', 'current', 'not begun yet') : step('check', 'waiting');
     case 'checking':
-      return step('check', 'current', progressWords(submission.progress));
+      return step('check', 'current', progressWords(submission));
     case 'checked':
     case 'accepted':
     case 'superseded': {
@@ -76,16 +79,18 @@ export const openWarnings = ({ findings }: Submission) =>
 export const placesOf = ({ findings }: Submission, severity: 'error' | 'warning'): number =>
   findings.reduce((sum, group) => sum + (group.severity === severity ? group.count : 0), 0);
 
-export function progressWords(progress: Submission['progress']): string {
+export function progressWords({ progress, files }: Submission): string {
   switch (progress?.step) {
     case 'read':
+      // Until the work is taken up nobody has counted the files.
+      if (progress.of !== files.length) return 'waiting to be taken up';
       return `reading file ${formatNumber(Math.min(progress.done + 1, progress.of))} of ${formatNumber(progress.of)}`;
     case 'check':
       return 'checking every row against the rules';
     case 'compare':
       return 'comparing with what the registry holds';
     default:
-      return 'about to begin';
+      return 'waiting to be taken up';
   }
 }
 
