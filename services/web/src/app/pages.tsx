@@ -30,6 +30,8 @@ export const pages: readonly PageEntry[] = [
   { path: '/dictionary/:table/:column', audience: 'anyone', load: () => import('../features/dictionary/variable-page.tsx') },
   { path: '/desk', audience: ['steward'], nav: 'Desk', load: () => import('../features/requests/desk-page.tsx') },
   { path: '/desk/:requestId', audience: ['steward'], load: () => import('../features/requests/review-page.tsx') },
+  { path: '/methods', audience: 'anyone', nav: 'Methods', load: () => import('../features/methods/methods-page.tsx') },
+  { path: '/methods/:slug', audience: 'anyone', load: () => import('../features/methods/method-page.tsx') },
   {
     path: '/explore',
     audience: ['researcher', 'steward', 'coordinator', 'therapist'],
