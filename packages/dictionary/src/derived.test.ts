@@ -99,6 +99,7 @@ describe('descriptions', () => {
   it('writes a unit conversion with its exact factors', () => {
     const convert = (times: number, dividedBy: number) => describeConversion({ unit: 'km/h', times, dividedBy, source: 'SI' }, 'm/s');
     expect(convert(5, 18)).toBe('value in km/h × 5 ÷ 18 = value in m/s');
+    expect(convert(45_359_237, 100_000_000)).toBe('value in km/h × 45\u202F359\u202F237 ÷ 100\u202F000\u202F000 = value in m/s');
     expect(convert(60, 1)).toBe('value in km/h × 60 = value in m/s');
     expect(convert(1, 60)).toBe('value in km/h ÷ 60 = value in m/s');
   });

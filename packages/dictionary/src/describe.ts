@@ -9,9 +9,12 @@ export function describeRange({ min, max, step }: Range, unit?: string): string 
   return `${min} to ${max}${suffix}${steps}`;
 }
 
+/** Digits in threes, divided by narrow spaces. */
+const grouped = (whole: number): string => String(whole).replace(/\B(?=(\d{3})+$)/g, '\u202F');
+
 /** How a written value becomes the stored one, exactly: `value in km/h × 5 ÷ 18 = value in m/s`. */
 export function describeConversion({ unit, times, dividedBy }: AcceptedUnit, stored: string): string {
-  const factors = `${times === 1 ? '' : ` × ${times}`}${dividedBy === 1 ? '' : ` ÷ ${dividedBy}`}`;
+  const factors = `${times === 1 ? '' : ` × ${grouped(times)}`}${dividedBy === 1 ? '' : ` ÷ ${grouped(dividedBy)}`}`;
   return `value in ${unit}${factors} = value in ${stored}`;
 }
 

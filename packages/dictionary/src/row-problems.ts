@@ -24,7 +24,8 @@ function valueProblem(variable: Variable, measure: Measure, row: Row): Omit<RowP
   const value = row[variable.key];
   if (typeof value !== 'number') return undefined;
   if (!measure.entered) return { kind: 'never-entered', message: 'The registry computes this result. Leave the row out.' };
-  if (row['attempt_status'] === 'stopped_early' && !measure.scoredWhenStoppedEarly) {
+  // Of the attempt's own result; effort felt at its end is recorded all the more when it ended early.
+  if (variable.measuredBy?.prefix === '' && row['attempt_status'] === 'stopped_early' && !measure.scoredWhenStoppedEarly) {
     return { kind: 'stopped-early', message: 'This measure has no result when it was stopped early. Leave the cell empty.' };
   }
   const { grades } = measure;

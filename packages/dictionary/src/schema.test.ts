@@ -132,6 +132,8 @@ describe('schema of an assessment', () => {
       seconds_walked: 140,
     };
     expect(faults('assessments', { ...sixMinutes, value: 41.5 })).toEqual([]);
+    // What was felt at the end of it is recorded in any case.
+    expect(faults('assessments', { ...sixMinutes, value: 41.5, rpe_end: 7, rpe_scale: 'cr10' })).toEqual([]);
   });
 
   it('refuses a speed that the registry computes itself', () => {
