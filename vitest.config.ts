@@ -1,12 +1,25 @@
 import react from '@vitejs/plugin-react';
+import { defaultServerConditions } from 'vite';
 import { defineConfig } from 'vitest/config';
 
 /** Packages are read from their sources, so no build is needed before a test. */
 const conditions = ['@cairnstep/source'];
-const shared = { resolve: { conditions }, ssr: { resolve: { conditions, externalConditions: conditions } } };
+const resolve = { conditions: [...conditions, ...defaultServerConditions], externalConditions: conditions };
+// `__vitest__` is the environment in which a project's global setup runs.
+const shared = {
+  resolve: { conditions },
+  ssr: { resolve: { conditions, externalConditions: conditions } },
+  environments: { __vitest__: { resolve } },
+};
 
 /** Tests against real servers: one file at a time per worker, longer limits because a database is cloned first. */
-const integration = { environment: 'node' as const, testTimeout: 60_000, hookTimeout: 120_000, maxWorkers: 2, globalSetup: ['tests/support/global-setup.ts'] };
+const integration = {
+  environment: 'node' as const,
+  testTimeout: 60_000,
+  hookTimeout: 120_000,
+  maxWorkers: 2,
+  globalSetup: ['tests/support/global-setup.ts'],
+};
 
 export default defineConfig({
   test: {

@@ -4,10 +4,9 @@ import { monthOfBouts, type MonthSize } from '../../packages/submission-files/be
 import type { RowCounts } from './commit-state.ts';
 import { makePerson, makeSite, type TestPerson, type TestSite } from './people.ts';
 import type { TestServer } from './server.ts';
-import { uploadMonth, type MonthFiles } from './submit-month.ts';
+import { askForCheck, uploadMonth, type MonthFiles } from './submit-month.ts';
 
 export interface MonthReady {
-  readonly site: TestSite;
   readonly coordinator: TestPerson;
   readonly submission: Submission;
   readonly counts: RowCounts;
@@ -26,16 +25,37 @@ export function monthFiles(size: MonthSize): MonthOfFiles {
   };
 }
 
-export async function monthsReady(server: TestServer, { files, counts }: MonthOfFiles, howMany: number): Promise<MonthReady[]> {
-  const months: MonthReady[] = [];
-  for (let made = 0; made < howMany; made += 1) {
-    const site = await makeSite(server);
-    const coordinator = await makePerson(server, { grants: [{ role: 'coordinator', site }] });
+const inTurn = async <T>(howMany: number, make: () => Promise<T>): Promise<T[]> => {
+  const made: T[] = [];
+  while (made.length < howMany) made.push(await make());
+  return made;
+};
+
+async function newcomer(server: TestServer): Promise<{ site: TestSite; coordinator: TestPerson }> {
+  const site = await makeSite(server);
+  return { site, coordinator: await makePerson(server, { grants: [{ role: 'coordinator', site }] }) };
+}
+
+/** Checked in place. */
+export const monthsReady = (server: TestServer, { files, counts }: MonthOfFiles, howMany: number): Promise<MonthReady[]> =>
+  inTurn(howMany, async () => {
+    const { site, coordinator } = await newcomer(server);
     const submission = await uploadMonth(server, coordinator, site, '2026-01', files);
     if (!submission.preview || submission.findings.length > 0) {
       throw new Error(`The month is not clean: ${submission.findings.map(({ rule, statement }) => `${rule} ${statement}`).join(', ')}.`);
     }
-    months.push({ site, coordinator, submission, counts });
-  }
-  return months;
+    return { coordinator, submission, counts };
+  });
+
+export interface MonthToCheck {
+  readonly coordinator: TestPerson;
+  readonly id: string;
+  readonly counts: RowCounts;
 }
+
+/** Left to the workers to check. */
+export const monthsToCheck = (server: TestServer, { files, counts }: MonthOfFiles, howMany: number): Promise<MonthToCheck[]> =>
+  inTurn(howMany, async () => {
+    const { site, coordinator } = await newcomer(server);
+    return { coordinator, id: await askForCheck(coordinator, site, '2026-01', files), counts };
+  });

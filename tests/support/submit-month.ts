@@ -13,14 +13,8 @@ export type MonthFiles = Partial<Readonly<Record<TableKey, string | Buffer>>>;
 export const filesOf = (rows: MonthRows): MonthFiles =>
   Object.fromEntries((Object.entries(rows) as [TableKey, readonly Row[]][]).map(([table, of]) => [table, csvOf(table, of)]));
 
-/** Opened, uploaded and checked. */
-export async function uploadMonth(
-  server: TestServer,
-  coordinator: TestPerson,
-  site: TestSite,
-  month: string,
-  files: MonthFiles,
-): Promise<Submission> {
+/** Opened, uploaded, and a check asked for; the answer is the submission's id. */
+export async function askForCheck(coordinator: TestPerson, site: TestSite, month: string, files: MonthFiles): Promise<string> {
   const opened = await coordinator.post('/api/submissions', { siteId: site.id, month });
   expect(opened.status, JSON.stringify(opened.body)).toBe(201);
   const { id } = opened.body as Submission;
@@ -29,6 +23,18 @@ export async function uploadMonth(
     expect(put.status, JSON.stringify(put.body)).toBe(200);
   }
   await coordinator.post(`/api/submissions/${id}/check`).expect(202);
+  return id;
+}
+
+/** As above, and checked. */
+export async function uploadMonth(
+  server: TestServer,
+  coordinator: TestPerson,
+  site: TestSite,
+  month: string,
+  files: MonthFiles,
+): Promise<Submission> {
+  const id = await askForCheck(coordinator, site, month, files);
   await checkSubmission(server.context, id);
   return (await coordinator.get(`/api/submissions/${id}`).expect(200)).body as Submission;
 }

@@ -1,11 +1,16 @@
-/** An invented month for measuring: 400 participants, 20,000 sessions and 200,000 bouts that agree with each other. */
+/** An invented month for measuring: participants, sessions and bouts that agree with each other and give no finding. */
 import { exampleRow } from '@cairnstep/dictionary';
 import type { Row } from '@cairnstep/dictionary';
 import { tableFromRows, writeCsv } from '@cairnstep/submission-files';
 
-const participants = 400;
-const sessionsEach = 50;
-const boutsEach = 10;
+export interface MonthSize {
+  readonly participants: number;
+  readonly sessionsEach: number;
+  readonly boutsEach: number;
+}
+
+/** 20,000 sessions and 200,000 bouts. */
+export const largeMonth: MonthSize = { participants: 400, sessionsEach: 50, boutsEach: 10 };
 
 const codeOf = (person: number): string => `S${String(person).padStart(21, '0')}`;
 const sessionKey = (person: number, session: number) => ({ participant: codeOf(person), session_day: session, session_no: session + 1 });
@@ -42,7 +47,7 @@ function sessionOf(person: number, session: number, bouts: readonly Row[]): Row 
 
 const range = (length: number): number[] => Array.from({ length }, (_, index) => index);
 
-function rowsOfMonth(): { readonly sessions: Row[]; readonly bouts: Row[] } {
+function rowsOfMonth({ participants, sessionsEach, boutsEach }: MonthSize): { readonly sessions: Row[]; readonly bouts: Row[] } {
   const sessions: Row[] = [];
   const bouts: Row[] = [];
   for (const person of range(participants)) {
@@ -58,13 +63,14 @@ function rowsOfMonth(): { readonly sessions: Row[]; readonly bouts: Row[] } {
 const encode = (text: string): Uint8Array => new TextEncoder().encode(text);
 
 /** The month as files. */
-export function monthOfBouts(): {
+export function monthOfBouts(size: MonthSize): {
   readonly participants: Uint8Array;
   readonly consents: Uint8Array;
   readonly sessions: Uint8Array;
   readonly bouts: Uint8Array;
 } {
-  const { sessions, bouts } = rowsOfMonth();
+  const { participants } = size;
+  const { sessions, bouts } = rowsOfMonth(size);
   const people = range(participants).map((person) => ({
     ...exampleRow('participants'),
     participant: codeOf(person),

@@ -6,11 +6,11 @@
 import { FindingLog, checkSubmission, copyRows, readTable } from '@cairnstep/submission-files';
 import type { TypedTables } from '@cairnstep/submission-files';
 import { parse } from 'csv-parse/sync';
-import { monthOfBouts } from './month-of-bouts.ts';
+import { largeMonth, monthOfBouts } from './month-of-bouts.ts';
 
 const rounds = 5;
-const rows = 200_000;
-const files = monthOfBouts();
+const rows = largeMonth.participants * largeMonth.sessionsEach * largeMonth.boutsEach;
+const files = monthOfBouts(largeMonth);
 const context = { held: {}, withdrawn: new Set<string>(), year: 2030 };
 
 async function measure(what: string, work: () => Promise<unknown> | unknown): Promise<void> {
