@@ -1,4 +1,5 @@
 /** What the active cell is and holds, and the keys as buttons: for fingers, and to learn the keys by. Stays in sight. */
+import { memo } from 'react';
 import type { RefObject } from 'react';
 import { Button } from 'react-aria-components/Button';
 import type { Act, Entry } from './entry.ts';
@@ -15,8 +16,10 @@ export interface CellLineProps {
 }
 
 export function CellLine({ entry, reading, act, followsRef }: CellLineProps) {
-  const { active } = entry;
+  const { active, question } = entry;
   const issues = reading.issues.filter(({ cell }) => cell === active);
+  // A question has keys of its own, and needs the room.
+  if (question !== null) return null;
   return (
     <div className="not-printed sticky bottom-0 z-2 grid gap-2 border-t-2 border-edge bg-sheet py-2">
       <p className="min-h-6">
@@ -28,7 +31,7 @@ export function CellLine({ entry, reading, act, followsRef }: CellLineProps) {
         </p>
       ))}
       {entry.said !== null && <p className="text-small text-quiet">{entry.said.words}</p>}
-      <Pad entry={entry} act={act} followsRef={followsRef} />
+      <Pad isAnswer={isAnswer(active)} normal={normalScore(active)} act={act} followsRef={followsRef} />
       <SoFar reading={reading} />
     </div>
   );
@@ -57,14 +60,19 @@ function SoFar({ reading }: { readonly reading: Reading }) {
   );
 }
 
-function Pad({ entry, act, followsRef }: Omit<CellLineProps, 'reading'>) {
-  const { active } = entry;
-  const scores = isAnswer(active)
+interface PadProps extends Pick<CellLineProps, 'act' | 'followsRef'> {
+  /** Of the active cell: whether it is one of the two answers, and otherwise its highest score. */
+  readonly isAnswer: boolean;
+  readonly normal: string;
+}
+
+const Pad = memo(function Pad({ isAnswer, normal, act, followsRef }: PadProps) {
+  const scores = isAnswer
     ? [
         { text: '1', words: 'Yes' },
         { text: '0', words: 'No' },
       ]
-    : Array.from({ length: Number(normalScore(active)) + 1 }, (_, score) => ({ text: String(score), words: String(score) }));
+    : Array.from({ length: Number(normal) + 1 }, (_, score) => ({ text: String(score), words: String(score) }));
   const keys: readonly { readonly act: Act; readonly words: string; readonly name?: string }[] = [
     ...scores.map(({ text, words }) => ({ act: { act: 'write', text } as const, words })),
     { act: { act: 'write', text: 'NT' }, words: 'NT', name: 'Not tested' },
@@ -94,4 +102,4 @@ function Pad({ entry, act, followsRef }: Omit<CellLineProps, 'reading'>) {
       ))}
     </div>
   );
-}
+});

@@ -18,7 +18,7 @@ export interface Entry {
   readonly active: CellKey;
   readonly order: EntryOrder;
   readonly question: Question | null;
-  /** What a star or a reason belongs to when the next cell is still blank. */
+  /** Written by the last act: what a star or a reason typed next belongs to, although the active cell has moved on. */
   readonly lastWritten: CellKey | null;
   /** The answer given last, offered again. */
   readonly lastCause: string | null;
@@ -70,11 +70,11 @@ export function nextEntry(entry: Entry, act: Act): Entry {
     case 'write':
       return write(entry, act.text);
     case 'step':
-      return { ...entry, active: neighbour(active, act.step) };
+      return { ...entry, active: neighbour(active, act.step), lastWritten: null };
     case 'go':
-      return act.to === active && entry.question === null ? entry : { ...entry, active: act.to, question: null };
+      return act.to === active && entry.question === null ? entry : { ...entry, active: act.to, question: null, lastWritten: null };
     case 'go-on':
-      return { ...entry, active: after(entry, active) };
+      return { ...entry, active: after(entry, active), lastWritten: null };
     case 'back':
       return back(entry);
     case 'clear':
@@ -118,7 +118,13 @@ function say(entry: Entry, words: string): Entry {
 
 /** The next sheet, with the present one kept for undoing. */
 function changed(entry: Entry, sheet: ExamSheet): Entry {
-  return { ...entry, sheet, before: [...entry.before, { sheet: entry.sheet, active: entry.active }].slice(-mostUndone), said: null };
+  return {
+    ...entry,
+    sheet,
+    before: [...entry.before, { sheet: entry.sheet, active: entry.active }].slice(-mostUndone),
+    lastWritten: null,
+    said: null,
+  };
 }
 
 /** Writes into a cell; remarks on what stood there go with it. */
@@ -178,7 +184,7 @@ function fill(entry: Entry, which: Fill): Entry {
   const words = `${formatCount(blank.length, 'blank cell')} filled as ${which === 'absent-down' ? 'absent' : 'normal'}, ${
     place?.side === 'left' ? 'left' : 'right'
   } side, ${which === 'normal-up' ? 'up' : 'down'} from here.`;
-  return say({ ...filled, active: nextBlank(filled, active), lastWritten: null }, words);
+  return say({ ...filled, active: nextBlank(filled, active) }, words);
 }
 
 /** The next blank cell in the order of typing, or the cell itself when none follows. */
@@ -193,16 +199,13 @@ function paste(entry: Entry, text: string): Entry {
   let sheet = entry.sheet;
   for (const [key, code] of pasted.cells) sheet = withWritten(sheet, key, code);
   const filled = changed(entry, sheet);
-  return say(
-    { ...filled, active: nextBlank(filled, entry.active), lastWritten: null },
-    `${formatCount(pasted.cells.size, 'cell')} pasted.`,
-  );
+  return say({ ...filled, active: nextBlank(filled, entry.active) }, `${formatCount(pasted.cells.size, 'cell')} pasted.`);
 }
 
-/** The cell a remark is meant for: this one, or the one just written when this one is blank. */
+/** The cell a remark is meant for: the one just written, else the active one. */
 function remarked({ active, sheet, lastWritten }: Entry): CellKey | null {
-  if (sheet.written[active] !== undefined) return active;
-  return lastWritten !== null && sheet.written[lastWritten] !== undefined ? lastWritten : null;
+  const key = lastWritten ?? active;
+  return sheet.written[key] === undefined ? null : key;
 }
 
 function star(entry: Entry): Entry {

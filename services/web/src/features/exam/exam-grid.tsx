@@ -20,11 +20,13 @@ export interface ExamGridProps {
   readonly issues: readonly SheetIssue[];
   /** The cells that the chosen result rests on. */
   readonly deciding: ReadonlySet<CellKey>;
+  /** The level of injury, once it is settled. */
+  readonly level: string | undefined;
   /** Whether the keyboard's focus follows the active cell: while it is in the grid, or was sent back to it. */
   readonly followsRef: RefObject<boolean>;
 }
 
-export function ExamGrid({ entry, act, issues, deciding, followsRef }: ExamGridProps) {
+export function ExamGrid({ entry, act, issues, deciding, level, followsRef }: ExamGridProps) {
   const table = useRef<HTMLTableElement>(null);
   const { active, question } = entry;
 
@@ -103,7 +105,7 @@ export function ExamGrid({ entry, act, issues, deciding, followsRef }: ExamGridP
             <th
               colSpan={columnCount}
               scope="rowgroup"
-              className="border-b border-edge pt-3 pb-0.5 text-left text-small font-normal text-quiet print:pt-0.5"
+              className="border-b border-edge pt-3 pb-0.5 text-left text-small font-normal text-quiet print:pt-0"
             >
               {name}
             </th>
@@ -111,8 +113,14 @@ export function ExamGrid({ entry, act, issues, deciding, followsRef }: ExamGridP
           {segments.map((segment) => (
             <Fragment key={segment}>
               <tr>
-                <th scope="row" className="border-r border-edge pr-2 text-right text-small font-semibold numbers">
+                <th
+                  scope="row"
+                  className={`border-r border-edge pr-2 text-right text-small font-semibold numbers ${
+                    segment === level ? 'border-b-3 border-b-lichen bg-chosen' : ''
+                  }`}
+                >
                   {segmentName(segment)}
+                  {segment === level && <span className="sr-only">, level of injury</span>}
                 </th>
                 {sheetColumns.map((column) => {
                   const key = cellAt(segment, column);
@@ -130,7 +138,7 @@ export function ExamGrid({ entry, act, issues, deciding, followsRef }: ExamGridP
           <th
             colSpan={columnCount}
             scope="rowgroup"
-            className="border-b border-edge pt-3 pb-0.5 text-left text-small font-normal text-quiet print:pt-0.5"
+            className="border-b border-edge pt-3 pb-0.5 text-left text-small font-normal text-quiet print:pt-0"
           >
             Lowest sacral segments
           </th>

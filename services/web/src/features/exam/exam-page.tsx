@@ -1,19 +1,18 @@
-import { openReadings } from '@cairnstep/scoring';
 import type { CellKey, ResultName } from '@cairnstep/scoring';
 import { useDeferredValue, useEffect, useMemo, useReducer, useRef, useState } from 'react';
 import { formatShare } from '../../lib/format.ts';
 import { announce } from '../../ui/announcer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
-import { Page, Section } from '../../ui/page.tsx';
-import { RadioGroup } from '../../ui/radio-group.tsx';
+import { Page } from '../../ui/page.tsx';
 import { CellLine } from './cell-line.tsx';
 import { firstEntry, nextEntry } from './entry.ts';
 import type { Entry } from './entry.ts';
+import { Explanations } from './explanations.tsx';
+import { OrderChoice } from './order-choice.tsx';
 import { ExamGrid } from './exam-grid.tsx';
 import { isBlankSheet } from './exam-sheet.ts';
 import { IssueList } from './issue-list.tsx';
-import { keyWords } from './keys.ts';
 import { LeaveQuestion } from './leave-question.tsx';
 import { allCells } from './places.ts';
 import { readSheet, whyOf } from './reading.ts';
@@ -36,6 +35,8 @@ export default function ExamPage() {
   const step = useMemo(() => (chosen === null ? null : whyOf(settled, chosen)), [settled, chosen]);
   const deciding = useMemo(() => (step === null ? noCells : new Set(step.cells)), [step]);
   const followsRef = useRef(false);
+  const { values } = reading.classification.nli;
+  const level = values.length === 1 ? values[0] : undefined;
   const isBlank = isBlankSheet(sheet);
   useSaid(entry);
   useResultsSaid(reading, isBlank);
@@ -58,10 +59,15 @@ export default function ExamPage() {
       lead={<p className="print:hidden">Type a neurological exam and see its levels, grade and zones, and why they came out.</p>}
       note={
         <>
-          <p>Nothing typed here is stored or sent. It stays in this page until you leave it. Print it to keep it.</p>
+          <p className="print:hidden">
+            Nothing typed here is stored or sent. It stays in this page until you leave it. Print it to keep it.
+          </p>
           <p>
-            Classified by the international standard (ISNCSCI), 2019 revision, as the registry classifies the exams it receives. Where the
-            standard leaves a choice, ours is <a href="#readings">stated below</a>.
+            Classified by the international standard (ISNCSCI), 2019 revision, as the registry classifies the exams it receives.
+            <span className="print:hidden">
+              {' '}
+              Where the standard leaves a choice, ours is <a href="#readings">stated below</a>.
+            </span>
           </p>
           <p>It supports the examiner’s judgement and does not replace it.</p>
         </>
@@ -82,29 +88,23 @@ export default function ExamPage() {
         </>
       }
     >
-      <section aria-label="Exam" className="relative border-t border-hairline bg-sheet print:border-0">
-        <div className="grid items-start gap-x-10 gap-y-8 px-4 py-6 md:px-8 lg:grid-cols-[minmax(0,36rem)_minmax(0,1fr)] print:grid-cols-[10fr_11fr] print:gap-x-6 print:p-0 print:text-[8.5pt] print:leading-snug">
+      <section aria-label="Exam" className="relative border-t border-hairline bg-sheet print:border-0 print:bg-transparent">
+        <div className="grid items-start gap-x-10 gap-y-8 px-4 py-6 md:px-8 lg:grid-cols-[minmax(0,36rem)_minmax(0,1fr)] print:grid-cols-[10fr_11fr] print:gap-x-6 print:gap-y-2 print:py-0 print:text-[8.5pt] print:leading-snug print:[&_.text-section]:text-[11pt] print:[&_.text-small]:text-[8pt] print:[&_.text-small]:leading-snug">
           <div className="grid min-w-0 gap-4">
-            <div className="not-printed">
-              <RadioGroup
-                id="entry-order"
-                label="Typing goes on"
-                inline
-                value={entry.order}
-                onChange={(value) => act({ act: 'choose-order', order: value === 'across' ? 'across' : 'down' })}
-                options={[
-                  { value: 'down', label: 'down a column' },
-                  { value: 'across', label: 'across a row' },
-                ]}
-              />
-            </div>
-            <ExamGrid entry={entry} act={act} issues={reading.issues} deciding={deciding} followsRef={followsRef} />
+            <OrderChoice order={entry.order} act={act} />
+            <ExamGrid entry={entry} act={act} issues={reading.issues} deciding={deciding} level={level} followsRef={followsRef} />
             <CellLine entry={entry} reading={reading} act={act} followsRef={followsRef} />
-            <RestOfExam sheet={sheet} act={act} />
+            <RestOfExam
+              nonKey={sheet.nonKey}
+              earlierDeficit={sheet.earlierDeficit}
+              ntReason={sheet.ntReason}
+              anyNotTested={Object.values(sheet.written).some((code) => code.startsWith('NT'))}
+              act={act}
+            />
           </div>
           <div className="grid min-w-0 gap-6 lg:sticky lg:top-4 print:gap-3">
             <section aria-labelledby="result-title" className="grid gap-3 print:gap-1">
-              <h2 id="result-title" className="text-section font-semibold print:text-[11pt]">
+              <h2 id="result-title" className="text-section font-semibold">
                 Result
               </h2>
               <Progress reading={reading} />
@@ -112,13 +112,13 @@ export default function ExamPage() {
               <Why chosen={chosen} step={step} sheet={sheet} blank={reading.blank.length} goTo={goTo} />
             </section>
             <section aria-labelledby="issues-title" className="grid gap-2">
-              <h2 id="issues-title" className="text-section font-semibold print:text-[11pt]">
+              <h2 id="issues-title" className="text-section font-semibold">
                 To look at
               </h2>
               <IssueList reading={reading} goTo={goTo} />
             </section>
             <section aria-labelledby="remarks-title" className="grid gap-2">
-              <h2 id="remarks-title" className="text-section font-semibold print:text-[11pt]">
+              <h2 id="remarks-title" className="text-section font-semibold">
                 Remarks
               </h2>
               <Remarks sheet={sheet} />
@@ -126,39 +126,7 @@ export default function ExamPage() {
           </div>
         </div>
       </section>
-      <div className="not-printed">
-        <Section title="Keys" id="keys" note={<p>They work while a cell of the sheet has the focus. Tab goes in and out of the sheet.</p>}>
-          <dl className="grid max-w-2xl">
-            {keyWords.map(({ keys, does }) => (
-              <div key={keys} className="grid grid-cols-[7rem_minmax(0,1fr)] border-b border-hairline py-1">
-                <dt>
-                  <kbd className="font-semibold">{keys}</kbd>
-                </dt>
-                <dd>{does}</dd>
-              </div>
-            ))}
-          </dl>
-        </Section>
-        <Section
-          title="Where the standard leaves a choice"
-          id="readings"
-          note={
-            <p>
-              A star behind a result says that starred cells change it. ND: not determinable from this exam, with every value it can have.
-            </p>
-          }
-        >
-          <dl className="grid max-w-2xl gap-4">
-            {openReadings.map(({ question, choice, why }) => (
-              <div key={question}>
-                <dt className="font-semibold">{question}</dt>
-                <dd>{choice}</dd>
-                <dd className="text-small text-quiet">{why}</dd>
-              </div>
-            ))}
-          </dl>
-        </Section>
-      </div>
+      <Explanations />
       <LeaveQuestion isNeeded={!isBlank} />
     </Page>
   );

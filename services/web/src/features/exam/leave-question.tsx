@@ -1,12 +1,12 @@
 /** Asks before a sheet that is kept nowhere is left behind. */
-import { useEffect } from 'react';
+import { memo, useEffect } from 'react';
 import { Dialog } from 'react-aria-components/Dialog';
 import { Heading } from 'react-aria-components/Heading';
 import { Modal, ModalOverlay } from 'react-aria-components/Modal';
 import { useBlocker } from 'react-router-dom';
 import { Button } from '../../ui/button.tsx';
 
-export function LeaveQuestion({ isNeeded }: { readonly isNeeded: boolean }) {
+export const LeaveQuestion = memo(function LeaveQuestion({ isNeeded }: { readonly isNeeded: boolean }) {
   const blocker = useBlocker(({ currentLocation, nextLocation }) => isNeeded && currentLocation.pathname !== nextLocation.pathname);
 
   // Closing the tab or loading it again: the browser asks in its own words.
@@ -41,4 +41,4 @@ export function LeaveQuestion({ isNeeded }: { readonly isNeeded: boolean }) {
       </Modal>
     </ModalOverlay>
   );
-}
+});

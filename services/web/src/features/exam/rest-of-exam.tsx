@@ -1,6 +1,7 @@
 /** What the exam holds beside its cells: non-key muscles, an earlier deficit, and one reason for all that was not tested. */
 import { keyMuscles, sides } from '@cairnstep/scoring';
 import type { Side } from '@cairnstep/scoring';
+import { memo } from 'react';
 import { RadioGroup } from '../../ui/radio-group.tsx';
 import { Select } from '../../ui/select.tsx';
 import type { Act } from './entry.ts';
@@ -15,9 +16,13 @@ const muscles = [
   ...keyMuscles.map((muscle) => ({ value: muscle, label: muscle })),
 ];
 
-export function RestOfExam({ sheet, act }: { readonly sheet: ExamSheet; readonly act: (act: Act) => void }) {
-  const { nonKey, earlierDeficit, ntReason, written } = sheet;
-  const anyNotTested = Object.values(written).some((code) => code.startsWith('NT'));
+export interface RestOfExamProps extends Pick<ExamSheet, 'nonKey' | 'earlierDeficit' | 'ntReason'> {
+  readonly anyNotTested: boolean;
+  readonly act: (act: Act) => void;
+}
+
+/** Kept from rendering at every key: its lists of choices are slow to build. */
+export const RestOfExam = memo(function RestOfExam({ nonKey, earlierDeficit, ntReason, anyNotTested, act }: RestOfExamProps) {
   return (
     <div className="not-printed grid gap-4">
       <div className="grid gap-4 sm:grid-cols-2">
@@ -57,4 +62,4 @@ export function RestOfExam({ sheet, act }: { readonly sheet: ExamSheet; readonly
       )}
     </div>
   );
-}
+});

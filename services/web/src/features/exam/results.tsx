@@ -22,7 +22,7 @@ export function Results({ reading, chosen, choose }: ResultsProps) {
   return (
     <div className="grid gap-4 print:gap-2">
       <div className="flex items-start justify-between gap-4">
-        <dl className="grid gap-2">
+        <dl className="grid gap-2 print:gap-0">
           {headlines.map((name) => (
             <div key={name.result}>
               <dt className="text-small text-quiet">{nameOfResult(name)}</dt>
@@ -49,7 +49,7 @@ export function Results({ reading, chosen, choose }: ResultsProps) {
         <tbody>
           {rows.map((result) => (
             <tr key={result} className="border-b border-hairline">
-              <th scope="row" className="py-1 pr-4 text-left font-normal">
+              <th scope="row" className="py-1 pr-4 text-left font-normal print:py-0.5">
                 {rowWords[result]}
               </th>
               {sides.map((side) => (
@@ -83,7 +83,7 @@ function ResultButton({
       type="button"
       aria-pressed={isChosen}
       onClick={() => choose(isChosen ? null : name)}
-      className={`min-h-7 rounded-sm border-l-4 pr-2 pl-2 text-left numbers hover:underline print:min-h-0 ${
+      className={`-ml-3 min-h-7 rounded-sm border-l-4 pr-2 pl-2 text-left numbers hover:underline print:min-h-0 ${
         isChosen ? 'border-lichen bg-chosen' : 'border-transparent'
       } ${state === 'settled' ? 'font-semibold' : 'text-quiet'} ${isLarge && state === 'settled' ? 'text-section' : ''}`}
     >
@@ -128,11 +128,11 @@ function TotalsTable({ totals, isFull }: { readonly totals: Totals; readonly isF
       <tbody>
         {totalRows.map(({ name, keys, most }) => (
           <tr key={name} className="border-b border-hairline">
-            <th scope="row" className="py-1 pr-2 text-left font-normal">
+            <th scope="row" className="py-1 pr-2 text-left font-normal print:py-0.5">
               {name}
             </th>
             {keys.map((key, index) => (
-              <td key={key} className="py-1 text-right numbers">
+              <td key={key} className="py-1 text-right numbers print:py-0.5">
                 {totalInWords(totals[key], isFull)}
                 {totals[key] !== 'ND' && <span className="text-small text-quiet"> of {index === 2 ? most * 2 : most}</span>}
               </td>
