@@ -12,6 +12,8 @@ export interface KeyGeneration {
   readonly secret: Uint8Array<ArrayBuffer>;
   /** Keyed hash of a record number → participant code. In `hmac` mode it holds only record numbers joined to another person's code. */
   readonly codes: ReadonlyMap<string, string>;
+  /** Code of this generation → code of a newer one, for those carried over since. */
+  readonly replacedBy: ReadonlyMap<string, string>;
 }
 
 /** Everything that links a site's people to their codes: the content of its key file. Never sent to the registry. */
