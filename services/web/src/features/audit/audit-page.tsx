@@ -63,10 +63,10 @@ function leadOf(isSteward: boolean, isAdministrator: boolean): string {
   return isAdministrator ? 'What was done to accounts and roles, and your own acts.' : 'Your own acts in the registry.';
 }
 
-/** `null` for the registry itself. */
-function roleWord(role: string | null): string | null {
-  const known = roles.find((one) => one === role);
-  return known === undefined ? null : roleNames[known];
+/** Someone with several roles acts with all of them; the registry itself has none. */
+function rolesInWords(names: string | null): string | null {
+  const known = (names ?? '').split(' ').flatMap((name) => roles.filter((role) => role === name));
+  return known.length === 0 ? null : known.map((role) => roleNames[role]).join(', ');
 }
 
 const results: Readonly<Record<Entry['result'], string>> = { ok: 'done', refused: 'refused', failed: 'failed' };
@@ -75,7 +75,7 @@ const columns: readonly Column<Entry>[] = [
   { key: 'seq', header: 'Number', value: ({ seq }) => seq, cell: ({ seq }) => formatNumber(seq), kind: 'number' },
   { key: 'at', header: 'When', value: ({ at }) => at, cell: ({ at }) => <span className="numbers">{formatInstant(at)}</span> },
   { key: 'actor', header: 'Who', value: ({ actor }) => (actor === 'system' ? 'the registry itself' : actor) },
-  { key: 'role', header: 'Role', value: ({ role }) => roleWord(role) },
+  { key: 'role', header: 'Role', value: ({ role }) => rolesInWords(role) },
   {
     key: 'act',
     header: 'Act',

@@ -6,11 +6,10 @@ import { useParams } from 'react-router-dom';
 import { formatCount, formatInstant, formatMonth } from '../../lib/format.ts';
 import { saveFile } from '../../lib/save-file.ts';
 import { Answer } from '../../ui/answer.tsx';
-import { Button } from '../../ui/button.tsx';
+import { Button, LinkButton } from '../../ui/button.tsx';
 import { Page, Section } from '../../ui/page.tsx';
 import { Table } from '../../ui/table.tsx';
 import type { Column } from '../../ui/table.tsx';
-import { TextLink } from '../../ui/text-link.tsx';
 import { ChangeCounts } from './review-section.tsx';
 import { changeWords } from './stack-steps.ts';
 import { receiptQuery, submissionQuery } from './submissions.queries.ts';
@@ -40,18 +39,18 @@ function Receipt({ receipt }: { readonly receipt: SubmissionReceipt }) {
   return (
     <Page
       title={`Receipt of ${formatMonth(month)}`}
-      kicker={`${site.name} (${site.code})`}
+      kicker={`Cairnstep, ${site.name} (${site.code})`}
       lead={<p>Accepted: {changeWords(receipt.tables)}.</p>}
-      note={
-        <p>
-          <TextLink to={`/month?site=${site.code}`}>Months of the site</TextLink>,{' '}
-          <TextLink to={`/submissions?site=${site.code}`}>submissions</TextLink>
-        </p>
-      }
       actions={
         <>
           <Button onPress={() => window.print()}>Print</Button>
           <Button onPress={asJson}>Download as JSON</Button>
+          <LinkButton variant="quiet" to={`/month?site=${site.code}`}>
+            Months of the site
+          </LinkButton>
+          <LinkButton variant="quiet" to={`/submissions?site=${site.code}`}>
+            Submissions of the site
+          </LinkButton>
         </>
       }
     >
