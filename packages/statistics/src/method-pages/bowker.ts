@@ -3,7 +3,7 @@ import type { MethodPage } from './method-page.ts';
 
 export const bowkerPage: MethodPage = {
   slug: 'bowker',
-  title: "Bowker's test of symmetry",
+  title: 'Bowker’s test of symmetry',
   question: 'grades',
   formula: ['χ^2 = Σ_{i<j} (n_ij − n_ji)^2 / (n_ij + n_ji)', 'pairs without movement are skipped and do not count as degrees of freedom'],
   whenUsed:

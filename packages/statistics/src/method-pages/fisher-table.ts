@@ -11,7 +11,7 @@ export const fisherTablePage: MethodPage = {
     'too many tables: (1 + hits)/(B + 1) from B tables drawn with a seeded generator',
   ],
   whenUsed: 'Grade transitions of several cohorts, or any table with small expected counts.',
-  smallN: 'An empty row or column is left out; with fewer than two left: "no comparison possible". A simulated p names B and the seed.',
+  smallN: 'An empty row or column is left out; with fewer than two left: “no comparison possible”. A simulated p names B and the seed.',
   source:
     'Freeman & Halton (1951) Biometrika 38:141-149; Mehta & Patel (1983) J Am Stat Assoc 78:427-434; Patefield (1981) Appl Stat 30:91-97.',
   computedBy: computations.counts,

@@ -3,7 +3,7 @@ import type { MethodPage } from './method-page.ts';
 
 export const fisherTwoByTwoPage: MethodPage = {
   slug: 'fisher-two-by-two',
-  title: "Fisher's exact test of a 2 x 2 table",
+  title: 'Fisher’s exact test of a 2 × 2 table',
   question: 'tables',
   formula: [
     'with all margins given, the upper left count is hypergeometric',
@@ -12,7 +12,7 @@ export const fisherTwoByTwoPage: MethodPage = {
     'limits: the values at which a tail is 0.025',
   ],
   whenUsed: 'Two groups, two outcomes, any size.',
-  smallN: 'An empty row or column: "no comparison possible". With an empty cell the odds ratio is bounded on one side only.',
+  smallN: 'An empty row or column: “no comparison possible”. With an empty cell the odds ratio is bounded on one side only.',
   source: 'Fisher (1935) J R Stat Soc 98:39-82; Agresti (2002), sections 3.5.1 and 3.6.1.',
   computedBy: computations.counts,
 };

@@ -11,7 +11,7 @@ export const friedmanPage: MethodPage = {
     'Kendall’s W = χ^2 / (n(k − 1))',
   ],
   whenUsed: 'Three or more visits of the same people on an ordinal scale. Only people with every visit take part.',
-  smallN: 'Marked "very small sample" below 5 people.',
+  smallN: 'Marked “very small sample” below 5 people.',
   source: 'Friedman (1937) J Am Stat Assoc 32:675-701; Hollander & Wolfe (1973) chapter 7.',
   computedBy: computations.ranks,
 };

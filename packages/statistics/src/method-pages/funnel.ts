@@ -10,7 +10,8 @@ export const funnelPage: MethodPage = {
     'mean: T ± z SD/√n',
     'φ = mean of z^2; above 1 and from 10 sites on, the limits are widened by √φ',
   ],
-  whenUsed: `A site against the registry's value. Outside 99.8%: "differs from the registry value more than chance explains", never worse, never ranked.`,
+  whenUsed:
+    'A site against the registry’s value. Outside 99.8%: “differs from the registry value more than chance explains”, never worse, never ranked.',
   smallN: 'Limits exist from one person on. Fewer than 10 sites: the limits are not widened, and overdispersion is marked.',
   source: 'Spiegelhalter (2005) Stat Med 24:1185-1202.',
   computedBy: computations.absent,

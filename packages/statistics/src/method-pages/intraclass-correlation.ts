@@ -10,7 +10,7 @@ export const intraclassCorrelationPage: MethodPage = {
     'ICC = v/(v + MSW), v = max(0, (MSB − MSW)/n_0), n_0 = (N − Σn^2/N)/(k − 1)',
   ],
   whenUsed: 'How much of all variation lies between sites.',
-  smallN: 'Needs 5 sites, some with more than one person. 0 is a result: "no variation between sites detected".',
+  smallN: 'Needs 5 sites, some with more than one person. 0 is a result: “no variation between sites detected”.',
   source: 'Donner (1986) Int Stat Rev 54:67-82.',
   computedBy: computations.absent,
 };

@@ -12,7 +12,7 @@ export const kaplanMeierPage: MethodPage = {
     'median: first time with S ≤ 1/2; the middle of the stretch where S is exactly 1/2',
   ],
   whenUsed: 'Time to an event, such as independent walking, when some are still waiting.',
-  smallN: 'Median "not reached" where the curve stays above 1/2. At S = 0 there is no standard error.',
+  smallN: 'Median “not reached” where the curve stays above 1/2. At S = 0 there is no standard error.',
   source: 'Kaplan & Meier (1958) J Am Stat Assoc 53:457-481; Brookmeyer & Crowley (1982) Biometrics 38:29-41.',
   computedBy: computations.absent,
 };

@@ -3,7 +3,7 @@ import type { MethodPage } from './method-page.ts';
 
 export const kendallPage: MethodPage = {
   slug: 'kendall',
-  title: "Kendall's tau-b",
+  title: 'Kendall’s tau-b',
   question: 'association',
   formula: [
     'τ_b = (concordant − discordant) / √((pairs − ties in x)(pairs − ties in y))',

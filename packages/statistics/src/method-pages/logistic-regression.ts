@@ -13,7 +13,7 @@ export const logisticRegressionPage: MethodPage = {
   ],
   whenUsed: 'Responders adjusted for baseline and other predictors.',
   smallN:
-    "Needs 10 people with and 10 without the event per predictor, else counts and Fisher's test. Separation (steps that never settle) is reported, not hidden behind a huge odds ratio.",
+    'Needs 10 people with and 10 without the event per predictor, else counts and Fisher’s test. Separation (steps that never settle) is reported, not hidden behind a huge odds ratio.',
   source: 'Agresti (2002) Categorical Data Analysis, sections 4.6 and 5.5; Albert & Anderson (1984) Biometrika 71:1-10.',
   computedBy: computations.absent,
 };

@@ -11,7 +11,7 @@ export const mcnemarPage: MethodPage = {
     'beside it, for large numbers: χ^2 = (b − c)^2 / (b + c), 1 degree of freedom',
   ],
   whenUsed: 'A yes/no status of the same people before and after.',
-  smallN: 'Nobody changed: "no comparison possible".',
+  smallN: 'Nobody changed: “no comparison possible”.',
   source: 'McNemar (1947) Psychometrika 12:153-157.',
   computedBy: computations.counts,
 };

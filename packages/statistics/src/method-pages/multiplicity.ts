@@ -11,7 +11,7 @@ export const multiplicityPage: MethodPage = {
     'Bonferroni: m p, at most 1',
   ],
   whenUsed:
-    'Holm for families of subgroups and for pairs; Benjamini-Hochberg, named "false discovery rate", for screens of more than 20 tests. The number of comparisons is printed.',
+    'Holm for families of subgroups and for pairs; Benjamini-Hochberg, named “false discovery rate”, for screens of more than 20 tests. The number of comparisons is printed.',
   smallN: 'A comparison that could not be made does not count.',
   source: 'Holm (1979) Scand J Stat 6:65-70; Benjamini & Hochberg (1995) J R Stat Soc B 57:289-300.',
   computedBy: computations.absent,

@@ -11,7 +11,7 @@ export const proportionDifferencePage: MethodPage = {
     'upper limit d + √((u_1 − p_1)^2 + (p_2 − l_2)^2)',
   ],
   whenUsed: 'Responders in two cohorts.',
-  smallN: 'Both groups need at least one person, otherwise "no comparison possible"; marked when the smaller group is below 5.',
+  smallN: 'Both groups need at least one person, otherwise “no comparison possible”; marked when the smaller group is below 5.',
   source: 'Newcombe (1998) Stat Med 17:873-890, method 10.',
   computedBy: computations.counts,
 };

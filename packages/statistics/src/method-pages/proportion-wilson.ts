@@ -11,7 +11,7 @@ export const proportionWilsonPage: MethodPage = {
     'lower limit 0 at x = 0, upper limit 1 at x = n',
   ],
   whenUsed: 'Every share of people with an outcome: responders, grade conversions, adverse events.',
-  smallN: 'Given from n = 1 on; marked "very small sample" below 5. Without anybody: "no data".',
+  smallN: 'Given from n = 1 on; marked “very small sample” below 5. Without anybody: “no data”.',
   source: 'Wilson (1927) J Am Stat Assoc 22:209-212; Newcombe (1998) Stat Med 17:857-872, method 3.',
   computedBy: computations.counts,
 };

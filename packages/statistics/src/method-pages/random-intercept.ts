@@ -12,7 +12,7 @@ export const randomInterceptPage: MethodPage = {
     'degrees of freedom: inner-outer rule',
   ],
   whenUsed: 'Repeated visits (cluster = participant), or sites partly pooled (cluster = site).',
-  smallN: 'Needs 5 clusters, some with more than one row. Lambda of 0 is a result: "no variation between clusters detected".',
+  smallN: 'Needs 5 clusters, some with more than one row. Lambda of 0 is a result: “no variation between clusters detected”.',
   source:
     'Pinheiro & Bates (2000) Mixed-Effects Models in S and S-PLUS; Satterthwaite (1946) Biometrics Bull 2:110-114; Robinson (1991) Stat Sci 6:15-32.',
   computedBy: computations.absent,

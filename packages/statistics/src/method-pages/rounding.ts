@@ -12,6 +12,6 @@ export const roundingPage: MethodPage = {
   ],
   whenUsed: 'Every figure on a screen, in a report or in an export.',
   smallN: 'A percent never stands without its count.',
-  source: "Lang & Altman (2013) SAMPL guidelines, in Science Editors' Handbook.",
+  source: 'Lang & Altman (2013) SAMPL guidelines, in Science Editors’ Handbook.',
   computedBy: computations.rounding,
 };

@@ -3,7 +3,7 @@ import type { MethodPage } from './method-page.ts';
 
 export const rubinsRulesPage: MethodPage = {
   slug: 'rubins-rules',
-  title: "Rubin's rules",
+  title: 'Rubin’s rules',
   question: 'every-figure',
   formula: [
     'T = Ū + (1 + 1/m)B, Ū the mean of the variances, B the variance of the estimates',

@@ -7,10 +7,10 @@ export const sitePoolingPage: MethodPage = {
   question: 'sites',
   formula: [
     'w = 1/SE^2, Q = Σw(y − ȳ)^2, ȳ the mean weighted by w',
-    'τ^2 = max(0, (Q − (k − 1)) / (Σw − Σw^2/Σw)); weights of the pooled figure v = 1/(SE^2 + τ^2)',
-    'Hartung-Knapp: SE^2 = Σv(y − pooled)^2 / ((k − 1) Σv), t with k − 1 degrees of freedom',
+    'τ^2 = max(0, (Q − (k − 1)) / (Σw − Σw^2/Σw)); weights of the pooled figure u = 1/(SE^2 + τ^2)',
+    'Hartung-Knapp: SE(pooled)^2 = Σu(y − pooled)^2 / ((k − 1) Σu), t with k − 1 degrees of freedom',
     'I^2 = max(0, (Q − (k − 1))/Q)',
-    'prediction interval: pooled ± t(0.975, k − 2) √(τ^2 + SE^2)',
+    'prediction interval: pooled ± t(0.975, k − 2) √(τ^2 + SE(pooled)^2)',
   ],
   whenUsed: 'One figure from estimates of sites that may differ in truth.',
   smallN: 'Fewer than 3 sites are not pooled: list them, or show the total. Fewer than 5 is marked.',

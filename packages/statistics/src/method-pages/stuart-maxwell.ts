@@ -11,7 +11,7 @@ export const stuartMaxwellPage: MethodPage = {
     'one category of each connected group is left out',
   ],
   whenUsed: 'Whether the grades are as frequent at follow-up as at baseline.',
-  smallN: 'Nobody changed: "no comparison possible". Fewer than 10 movements out of or into some grade is marked.',
+  smallN: 'Nobody changed: “no comparison possible”. Fewer than 10 movements out of or into some grade is marked.',
   source: 'Stuart (1955) Biometrika 42:412-416; Maxwell (1970) Br J Psychiatry 116:651-655.',
   computedBy: computations.absent,
 };

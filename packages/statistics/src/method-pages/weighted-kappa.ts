@@ -10,7 +10,7 @@ export const weightedKappaPage: MethodPage = {
     'w = 1 − ((i − j)/(k − 1))^2 (quadratic; linear and unweighted can be asked for)',
     'standard errors of Fleiss, Cohen and Everitt; the test uses the one without agreement',
   ],
-  whenUsed: "Agreement of two classifications in ordered categories, such as a clinic's own grade and the computed one.",
+  whenUsed: 'Agreement of two classifications in ordered categories, such as a clinic’s own grade and the computed one.',
   smallN: 'Everybody in one category: no figure. Marked below n = 30, where the standard error is rough.',
   source: 'Cohen (1968) Psychol Bull 70:213-220; Fleiss, Cohen & Everitt (1969) Psychol Bull 72:323-327.',
   computedBy: computations.absent,

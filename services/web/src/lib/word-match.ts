@@ -1,8 +1,14 @@
 /** Searching lists that the client holds: every word of what was typed begins one of the words of an entry. */
 
-/** As words are compared: case, hyphens and underscores do not count, so that "S4-5" finds `lt_r_s4_5`. Begins with a space. */
+/**
+ * As words are compared: case, the form of apostrophes, hyphens and underscores do not count, so that "S4-5" finds `lt_r_s4_5`. Begins
+ * with a space.
+ */
 export function foldText(text: string): string {
-  return ` ${text.toLowerCase().replace(/[\s_-]+/g, ' ')}`;
+  return ` ${text
+    .toLowerCase()
+    .replaceAll('’', "'")
+    .replace(/[\s_-]+/g, ' ')}`;
 }
 
 /** Whether a folded text holds every word of the query at the beginning of one of its own. An empty query is held by every text. */

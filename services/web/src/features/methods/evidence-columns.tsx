@@ -8,7 +8,8 @@ export const evidenceColumns: readonly Column<EvidenceRow>[] = [
   { key: 'figures', header: 'Figures', kind: 'number', value: ({ figures }) => figures },
   {
     key: 'error',
-    header: 'Relative error at most',
+    header: 'Relative error',
+    unit: 'at most',
     kind: 'number',
     value: ({ worstRelativeError }) => worstRelativeError,
     cell: ({ worstRelativeError }) => <RelativeError value={worstRelativeError} />,

@@ -1,4 +1,4 @@
-import type { EvidenceRow, MethodPage } from '@cairnstep/statistics';
+import type { Computation, EvidenceRow, MethodPage } from '@cairnstep/statistics';
 import { certifiedSets, evidenceTable } from '@cairnstep/statistics';
 import { Button } from '../../ui/button.tsx';
 import { Facts } from '../../ui/facts.tsx';
@@ -33,13 +33,22 @@ export function MethodEntry({ method }: { readonly method: MethodPage }) {
           facts={[
             { term: 'When n is small', value: smallN },
             { term: 'Source', value: source },
-            { term: 'Computed by', value: `${computedBy.by.join(' and ')}. ${computedBy.why}` },
+            { term: 'Computed by', value: <ComputedBy {...computedBy} /> },
           ]}
         />
       </Section>
       <Evidence slug={slug} />
       <EntryNeighbours slug={slug} />
     </Page>
+  );
+}
+
+function ComputedBy({ by, why }: Computation) {
+  return (
+    <>
+      <p>{by.join(', ')}</p>
+      <p className="text-small text-quiet">{why}</p>
+    </>
   );
 }
 

@@ -31,7 +31,7 @@ const symbols: readonly { readonly mark: RegExp; readonly meaning: string }[] = 
   { mark: /Γ/, meaning: 'Γ: the gamma function.' },
   { mark: /⌊/, meaning: '⌊h⌋: the largest whole number not above h.' },
   { mark: /MS[BW]|SS[BTW]/, meaning: 'SS and MS: sum of squares and mean square; B between groups, W within, T in all.' },
-  { mark: /′/, meaning: '′: transposed.' },
+  { mark: /′/, meaning: 'X′: X transposed.' },
 ];
 
 /** What the signs of a formula stand for, those that occur. */

@@ -36,10 +36,13 @@ function Body() {
         title="Purpose and permission"
         id="purposes"
         note={
-          <p>
-            Worked out by the matching itself, for a consent without restrictions; permission for a condition (DS) taken for spinal cord
-            injury.
-          </p>
+          <>
+            <p>
+              Worked out by the matching itself, for a consent without restrictions; permission for a condition taken for spinal cord
+              injury.
+            </p>
+            <p>Codes of permissions: {permissionCodes.map((code) => `${code}, ${terms[code].label}`).join('; ')}.</p>
+          </>
         }
       >
         <Table
@@ -84,9 +87,15 @@ function Credit() {
   return (
     <>
       <p>
-        Ids, shorthands and labels: {dataUseOntology.name}, version <a href={dataUseOntology.version}>{dataUseOntology.version}</a>, from{' '}
-        <a href={dataUseOntology.repository}>{dataUseOntology.repository}</a>, licence{' '}
-        <a href="https://creativecommons.org/licenses/by/4.0/">{dataUseOntology.licence}</a>; Lawson et al. (2021) Cell Genomics
+        Ids, shorthands and labels: {dataUseOntology.name}, version{' '}
+        <a href={dataUseOntology.version} className="wrap-anywhere">
+          {dataUseOntology.version}
+        </a>
+        , from{' '}
+        <a href={dataUseOntology.repository} className="wrap-anywhere">
+          {dataUseOntology.repository}
+        </a>
+        , licence <a href="https://creativecommons.org/licenses/by/4.0/">{dataUseOntology.licence}</a>; Lawson et al. (2021) Cell Genomics
         1(2):100028.
       </p>
       <p>The meanings are in our words. Terms without an id are the registry’s own.</p>
