@@ -97,7 +97,8 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
   );
 }
 
-const cellLook = 'border-b px-3 py-2 font-normal first:pl-0 last:pr-0';
+// `wrap-normal`: a column is as wide as its longest word, and a rounding of that width must not break the word.
+const cellLook = 'border-b px-3 py-2 font-normal wrap-normal first:pl-0 last:pr-0';
 const alignment = (kind: 'text' | 'number' = 'text') => (kind === 'number' ? 'numbers text-right' : 'text-left');
 
 function HeaderCell<Row>({

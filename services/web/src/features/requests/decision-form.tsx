@@ -34,7 +34,7 @@ export function DecisionForm({ request, consenting }: DecisionFormProps) {
   const decide = useDecideRequest(request.id);
 
   const errorOf = (id: string) => problems.find(({ fieldId }) => fieldId === id)?.message;
-  const mend = (id: string) => setProblems(problems.filter(({ fieldId }) => fieldId !== id));
+  const mend = (id: string) => setProblems((before) => before.filter(({ fieldId }) => fieldId !== id));
   function show(found: readonly PlacedProblem[]): void {
     setProblems(found);
     setAttempt(attempt + 1);

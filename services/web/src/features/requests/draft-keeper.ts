@@ -1,5 +1,5 @@
 /**
- * Keeps a draft on the server as it is typed: a moment after the last change, one save at a time, the newest wording last.
+ * Holds a draft while it is typed, and keeps it on the server as it is typed: a moment after the last change, one save at a time, the newest wording last.
  * What could not be kept stays here and is tried again.
  */
 import { ProblemError } from '../../lib/problem-error.ts';
@@ -17,7 +17,7 @@ export interface DraftKeeperOptions {
   readonly retryMs?: number;
 }
 
-export class DraftKeeper<Draft> {
+export class DraftKeeper<Draft extends object> {
   private keeping: Keeping = { state: 'kept', at: null };
   private pending: { readonly draft: Draft } | null = null;
   private running: Promise<void> | null = null;
@@ -25,11 +25,14 @@ export class DraftKeeper<Draft> {
   private readonly listeners = new Set<() => void>();
 
   constructor(
+    private draft: Draft,
     private readonly save: (draft: Draft) => Promise<unknown>,
     private readonly options: DraftKeeperOptions = {},
   ) {}
 
-  readonly current = (): Keeping => this.keeping;
+  readonly current = (): Draft => this.draft;
+
+  readonly standing = (): Keeping => this.keeping;
 
   readonly subscribe = (listener: () => void): (() => void) => {
     this.listeners.add(listener);
@@ -41,8 +44,10 @@ export class DraftKeeper<Draft> {
     return this.keeping.state !== 'kept';
   }
 
-  change(draft: Draft): void {
-    this.pending = { draft };
+  /** Two changes at one moment, such as a number read on leaving its field and the box ticked by leaving it, build on each other. */
+  change(changes: Partial<Draft>): void {
+    this.draft = { ...this.draft, ...changes };
+    this.pending = { draft: this.draft };
     this.tell({ state: 'waiting' });
     this.saveIn(this.options.quietMs ?? 800);
   }

@@ -56,7 +56,7 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
     return { ...rest, value: value as string | null, onChange: (next: string) => onChange(next as RequestForm[K]) };
   };
   function mend(id: string): void {
-    setProblems(problems.filter(({ fieldId }) => fieldId !== id));
+    setProblems((before) => before.filter(({ fieldId }) => fieldId !== id));
   }
   function keepQuietly(): void {
     // Whether it was kept is told by the line beside the form.
@@ -149,7 +149,7 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
               error={problems.find(({ fieldId }) => fieldId === 'ethics-expires-on')?.message}
               onChange={(text) => {
                 mend('ethics-expires-on');
-                setTyped({ ...typed, ethicsExpiresOn: text });
+                setTyped((before) => ({ ...before, ethicsExpiresOn: text }));
                 change({ ethicsExpiresOn: readDate(text) });
               }}
               onBlur={keepQuietly}
@@ -174,7 +174,7 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
               error={problems.find(({ fieldId }) => fieldId === 'team')?.message}
               onChange={(text) => {
                 mend('team');
-                setTyped({ ...typed, team: text });
+                setTyped((before) => ({ ...before, team: text }));
                 change({ team: readTeam(text).team });
               }}
               onBlur={keepQuietly}
@@ -198,7 +198,7 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
           </Part>
           <Part title="The data">
             <div className="max-w-xl">
-              <h4 className="font-semibold">Cohort</h4>
+              <h3 className="font-semibold">Cohort</h3>
               {cohortBrought && <p role="status">Taken over from the grid.</p>}
               <CohortInWords cohort={form.cohort} />
               <p className="mt-1">
@@ -266,7 +266,9 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
 function Part({ title, children }: { readonly title: string; readonly children: ReactNode }) {
   return (
     <fieldset className="grid gap-5 border-t border-hairline pt-5 first-of-type:border-t-0 first-of-type:pt-0">
-      <legend className="float-left w-full text-section font-semibold">{title}</legend>
+      <legend className="float-left w-full">
+        <h2 className="text-section font-semibold">{title}</h2>
+      </legend>
       {children}
     </fieldset>
   );

@@ -4,7 +4,7 @@ import { useParams } from 'react-router-dom';
 import { useAccount } from '../../lib/account.ts';
 import { formatDate, formatInstant } from '../../lib/format.ts';
 import { Answer } from '../../ui/answer.tsx';
-import { Button } from '../../ui/button.tsx';
+import { AddressButton, Button } from '../../ui/button.tsx';
 import { Notice } from '../../ui/notice.tsx';
 import { Page, Section } from '../../ui/page.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
@@ -52,7 +52,12 @@ function Review({ request }: { readonly request: AccessRequest }) {
         </p>
       }
       note={<p>A decision holds for just this wording. Its fingerprint begins with {request.versionHash.slice(0, 12)}.</p>}
-      actions={<Button onPress={() => window.print()}>Print</Button>}
+      actions={
+        <>
+          {mayVote && <AddressButton href="#decision">To your decision</AddressButton>}
+          <Button onPress={() => window.print()}>Print</Button>
+        </>
+      }
     >
       <Section title="Where it stands">
         <div className="grid gap-5">
@@ -79,6 +84,7 @@ function Review({ request }: { readonly request: AccessRequest }) {
       />
       <Section
         title="Your decision"
+        id="decision"
         note={
           mayVote && (
             <>

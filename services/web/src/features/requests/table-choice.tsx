@@ -21,9 +21,9 @@ export function TableChoice({ value, problems, onChange, onBlur }: TableChoicePr
   const error = errorOf('tables');
   return (
     <div id="tables" role="group" aria-labelledby="tables-label" className="grid max-w-xl gap-2">
-      <h4 id="tables-label" className="font-semibold">
+      <h3 id="tables-label" className="font-semibold">
         Tables <span className="font-normal text-quiet">(required)</span>
-      </h4>
+      </h3>
       {error !== undefined && <p className="border-l-4 border-oxide pl-2 font-semibold text-oxide">{error}</p>}
       {tables.map(({ value: table, label, holds }) => {
         const chosen = value.find((one) => one.table === table);

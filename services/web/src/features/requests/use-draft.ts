@@ -21,15 +21,14 @@ export interface Draft {
 
 export function useDraft(request: AccessRequest): Draft {
   const save = useSaveRequest(request.id);
-  const [keeper] = useState(() => new DraftKeeper<RequestForm>((draft) => save.mutateAsync(draft)));
+  const [keeper] = useState(() => new DraftKeeper<RequestForm>(request.form, (draft) => save.mutateAsync(draft)));
   const [search] = useSearchParams();
   const [brought] = useState(() => cohortIn(search));
-  const [form, setForm] = useState<RequestForm>(() => (brought === null ? request.form : { ...request.form, cohort: brought }));
   const changeAddress = useAddressChange();
 
   useEffect(() => {
     if (brought === null) return;
-    keeper.change({ ...request.form, cohort: brought });
+    keeper.change({ cohort: brought });
     changeAddress(withoutCohort);
     // Once, on arriving from the grid.
     // eslint-disable-next-line react-hooks/exhaustive-deps
@@ -47,13 +46,9 @@ export function useDraft(request: AccessRequest): Draft {
   }, [keeper]);
 
   return {
-    form,
-    change: (changes) => {
-      const next = { ...form, ...changes };
-      setForm(next);
-      keeper.change(next);
-    },
-    keeping: useSyncExternalStore(keeper.subscribe, keeper.current),
+    form: useSyncExternalStore(keeper.subscribe, keeper.current),
+    change: (changes) => keeper.change(changes),
+    keeping: useSyncExternalStore(keeper.subscribe, keeper.standing),
     keepNow: () => keeper.flush(),
     cohortBrought: brought !== null,
   };
