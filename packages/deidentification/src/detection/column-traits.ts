@@ -1,7 +1,7 @@
 import type { ColumnRole } from './detection-context.ts';
 import { headerTokens } from './header-tokens.ts';
 import { aboutDateWords, ageWords, amountWords, dateWords, mobileWords, phoneWords, postalWords, vehicleWords } from './header-words.ts';
-import { wordSet } from './word-set.ts';
+import { wordSet } from '../word-set.ts';
 
 /** What the header and role of a column say about how its cells are to be read. */
 export interface ColumnTraits {

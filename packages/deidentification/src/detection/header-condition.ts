@@ -1,5 +1,5 @@
 import { numberWords } from './header-words.ts';
-import { wordSet } from './word-set.ts';
+import { wordSet } from '../word-set.ts';
 
 /** When the words of a header meet a rule. Lists are words with blanks between them. */
 export interface HeaderCondition {

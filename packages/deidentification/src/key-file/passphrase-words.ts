@@ -1,3 +1,5 @@
+import { wordSet } from '../word-set.ts';
+
 /**
  * 7,776 words (6⁵) for passphrases, built by rule: consonant, vowel, consonant, vowel. No two are alike in four letters because a word
  * has no more, all are written in lower case, and none has a letter that is spoken or spelt in two ways (c, q, x).
@@ -10,7 +12,8 @@ const words = 7_776;
 const isDoubled = (one: string, other: string): boolean => one === other;
 /** Pairs that a voice on the telephone does not keep apart. */
 const soundAlike = ['jy', 'yj', 'vw', 'wv'];
-const unwelcome = new Set(['hore', 'homo', 'jude', 'nazi', 'puta', 'puto', 'rape', 'sade', 'fagu', 'dego', 'kike', 'paki', 'tudo']);
+/** Slurs and rude words of several languages. */
+const unwelcome = wordSet('bite foda fode homo hore jude kike nazi niga nigu paki puta pute puto rape');
 
 /** The list, in alphabetical order. */
 export function passphraseWords(): string[] {

@@ -3,7 +3,7 @@
  * No list is complete; a name outside them, without a title or another cue, goes unseen. That is why a column of free text is always
  * reported.
  */
-import { wordSet } from '../word-set.ts';
+import { wordSet } from '../../word-set.ts';
 
 /** Given names that are hardly ever another word. */
 export const givenNames = wordSet(`

@@ -1,7 +1,7 @@
 /** Places smaller than a state or country. */
 import { boundedPattern } from '../bounded-pattern.ts';
 import type { ColumnTraits } from '../column-traits.ts';
-import { wordSet } from '../word-set.ts';
+import { wordSet } from '../../word-set.ts';
 import type { CellScan } from './cell-scan.ts';
 
 /** Areas of British postcodes. */
