@@ -23,6 +23,7 @@ export type { RowProblem, RowProblemKind } from './row-problems.ts';
 export { rulesAbout, rulesAboutMeasure, subjectOf } from './rule-subjects.ts';
 export type { RuleSubject } from './rule-subjects.ts';
 export { ruleOf, rules } from './rules.ts';
+export { sqlCheck } from './sql-check.ts';
 export { sqlType } from './sql-type.ts';
 export { tableKeys } from './types.ts';
 export type {

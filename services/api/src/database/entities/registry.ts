@@ -2,7 +2,8 @@
  * The registry's rows and their staging twins. Their columns come from the dictionary, one database column per variable,
  * so that a variable is written down once.
  */
-import { dictionary, sqlType, type Table, type Variable } from '@cairnstep/dictionary';
+import { createHash } from 'node:crypto';
+import { dictionary, sqlCheck, sqlType, type Table, type Variable } from '@cairnstep/dictionary';
 import { EntitySchema, type EntitySchemaColumnOptions } from 'typeorm';
 
 const requiredAlways = (variable: Variable): boolean => variable.required.when === 'always';
@@ -32,11 +33,18 @@ function columnsOf(table: Table, staged: boolean): Record<string, EntitySchemaCo
   return columns;
 }
 
+/** Codes and hard limits of the dictionary. The name carries a digest of the condition, so that a change of the dictionary asks for a migration. */
+function valuesCheck(table: Table): { name: string; expression: string } {
+  const expression = sqlCheck(table.key);
+  return { name: `${table.key}_values_${createHash('sha256').update(expression).digest('hex').slice(0, 8)}`, expression };
+}
+
 const schemaOf = (table: Table, staged: boolean) =>
   new EntitySchema({
     name: `${staged ? 'staged_' : ''}${table.key}`,
     tableName: `${staged ? 'staged_' : ''}${table.key}`,
     columns: columnsOf(table, staged),
+    checks: staged ? [] : [valuesCheck(table)],
     indices: staged ? [] : [{ name: `${table.key}_month_idx`, columns: ['site_id', 'month'] }],
   });
 

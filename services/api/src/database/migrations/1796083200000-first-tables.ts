@@ -151,6 +151,12 @@ export class FirstTables1796083200000 implements MigrationInterface {
       site_id uuid not null, participant text not null, age_at_index integer not null, sex text not null,
       injury_year integer not null, days_injury_to_index integer, cause text not null, ventilator text not null,
       planned_sessions integer, planned_sessions_per_week integer, month text not null, submission_id uuid not null,
+      constraint participants_values_e325631b check (
+        age_at_index between 0 and 90 and sex in ('female', 'male', 'other', 'unknown') and injury_year between 1930 and 2100
+        and days_injury_to_index between 0 and 32850
+        and cause in ('sports_leisure', 'assault', 'transport', 'fall', 'other_traumatic', 'non_traumatic', 'unknown')
+        and ventilator in ('yes', 'no') and planned_sessions between 1 and 500 and planned_sessions_per_week between 1 and 14
+      ),
       constraint participants_pkey primary key (site_id, participant)
     )`);
     await runner.query(`create index participants_month_idx on participants (site_id, month)`);
@@ -163,6 +169,22 @@ export class FirstTables1796083200000 implements MigrationInterface {
       duo_us text not null, duo_ps text not null, duo_is text not null, duo_rtn text not null, duo_cc text not null,
       duo_npoa text not null, duo_npu text not null, duo_ncu text not null, no_controls text not null,
       no_aggregates text not null, withdrawal_scope text, month text not null, submission_id uuid not null,
+      constraint consents_values_0bad9c22 check (
+        consent_no between 1 and 99 and status in ('active', 'withdrawn', 'superseded', 'expired')
+        and signed_day between -3650 and 18250 and valid_until_day between -3650 and 36500 and form_version between 1 and 999
+        and permission in ('NRES', 'GRU', 'HMB', 'DS', 'POA')
+        and condition in ('nervous_system', 'spinal_cord_disorder', 'spinal_cord_injury', 'traumatic_sci', 'non_traumatic_sci', 'cervical_sci', 'thoracic_sci', 'lumbosacral_sci', 'not_stated')
+        and duo_rs in ('yes', 'no')
+        and duo_rs_kind in ('walking_recovery', 'rehabilitation', 'training_safety', 'health_services', 'not_stated')
+        and duo_nmds in ('yes', 'no') and duo_gso in ('yes', 'no') and duo_npuncu in ('yes', 'no') and duo_pub in ('yes', 'no')
+        and duo_col in ('yes', 'no') and duo_irb in ('yes', 'no') and duo_gs in ('yes', 'no')
+        and duo_gs_area in ('own_country', 'eea', 'eea_uk_switzerland', 'north_america', 'not_stated') and duo_mor in ('yes', 'no')
+        and duo_mor_months between 1 and 600 and duo_ts in ('yes', 'no') and duo_ts_months between 1 and 600
+        and duo_us in ('yes', 'no') and duo_ps in ('yes', 'no') and duo_is in ('yes', 'no') and duo_rtn in ('yes', 'no')
+        and duo_cc in ('yes', 'no') and duo_npoa in ('yes', 'no') and duo_npu in ('yes', 'no') and duo_ncu in ('yes', 'no')
+        and no_controls in ('yes', 'no') and no_aggregates in ('yes', 'no')
+        and withdrawal_scope in ('no_new_data', 'no_further_use', 'delete')
+      ),
       constraint consents_pkey primary key (site_id, participant, consent_no)
     )`);
     await runner.query(`create index consents_month_idx on consents (site_id, month)`);
@@ -198,6 +220,149 @@ export class FirstTables1796083200000 implements MigrationInterface {
       earlier_deficit text not null, nt_reason text, tag_cause text, examiner_role text not null, recorded_ais text,
       recorded_nli text, non_sci_affects text, month text not null, submission_id uuid not null, class_nli text array not null,
       class_ais text array not null, class_level_group text not null, class_uems integer, class_lems integer,
+      constraint exams_values_867d5d42 check (
+        exam_day between -3650 and 18250 and lt_r_c2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_c3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_c4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_c5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_c6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_c7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_c8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t9 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t10 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t11 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_t12 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_l1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_l2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_l3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_l4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_l5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_s1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_s2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_s3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_r_s4_5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_c8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t9 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t10 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t11 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_t12 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_l1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_l2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_l3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_l4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_l5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_s1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_s2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_s3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and lt_l_s4_5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_c8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t9 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t10 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t11 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_t12 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_l1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_l2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_l3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_l4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_l5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_s1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_s2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_s3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_r_s4_5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_c8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t6 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t7 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t8 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t9 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t10 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t11 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_t12 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_l1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_l2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_l3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_l4 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_l5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_s1 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_s2 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_s3 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and pp_l_s4_5 in ('0', '1', '2', '0*', '1*', '0**', '1**', 'NT', 'NT*', 'NT**')
+        and m_r_c5 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_c6 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_c7 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_c8 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_t1 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_l2 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_l3 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_l4 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_l5 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_r_s1 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_c5 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_c6 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_c7 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_c8 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_t1 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_l2 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_l3 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_l4 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_l5 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and m_l_s1 in ('0', '1', '2', '3', '4', '5', '0*', '1*', '2*', '3*', '4*', '0**', '1**', '2**', '3**', '4**', 'NT', 'NT*', 'NT**')
+        and vac in ('yes', 'no', 'NT') and dap in ('yes', 'no', 'NT')
+        and non_key_r in ('C5', 'C6', 'C7', 'C8', 'T1', 'L2', 'L3', 'L4', 'L5', 'S1')
+        and non_key_l in ('C5', 'C6', 'C7', 'C8', 'T1', 'L2', 'L3', 'L4', 'L5', 'S1') and earlier_deficit in ('yes', 'no')
+        and nt_reason in ('sacral_sparing_felt', 'cast_or_dressing', 'pain', 'amputation', 'contracture', 'cooperation', 'declined', 'medical', 'other')
+        and tag_cause in ('peripheral_nerve', 'brachial_plexus', 'fracture_or_cast', 'burn_or_scar', 'pain', 'amputation', 'contracture', 'brain_injury', 'other_neurological', 'other')
+        and examiner_role in ('physician', 'physiotherapist', 'occupational_therapist', 'nurse', 'other', 'unknown')
+        and recorded_ais in ('A', 'B', 'C', 'D', 'E', 'ND')
+        and recorded_nli in ('C1', 'C2', 'C3', 'C4', 'C5', 'C6', 'C7', 'C8', 'T1', 'T2', 'T3', 'T4', 'T5', 'T6', 'T7', 'T8', 'T9', 'T10', 'T11', 'T12', 'L1', 'L2', 'L3', 'L4', 'L5', 'S1', 'S2', 'S3', 'INT', 'ND')
+        and non_sci_affects in ('none', 'nli', 'ais', 'both')
+      ),
       constraint exams_pkey primary key (site_id, participant, exam_day)
     )`);
     await runner.query(`create index exams_month_idx on exams (site_id, month)`);
@@ -209,6 +374,22 @@ export class FirstTables1796083200000 implements MigrationInterface {
       rpe_end double precision, rpe_scale text, chair_arms text, level_basis text, muscle_group text, side text,
       pain_window text, pain_type text, locomotion_mode text, posture text, posture_min double precision, month text not null,
       submission_id uuid not null,
+      constraint assessments_values_2654750c check (
+        assessment_day between -3650 and 18250
+        and measure in ('tmwt_ss', 'tmwt_fast', 'six_mwt', 'tug', 'wisci2', 'scim3_total', 'scim3_self_care', 'scim3_resp_sphincter', 'scim3_mobility_room', 'scim3_mobility_in_out', 'scim3_mobility', 'bbs', 'lems', 'uems', 'mas', 'psfs_freq', 'psfs_severity', 'pain_nrs', 'speed_derived', 'fim_locomotion', 'sci_fai_gait', 'sci_fai_aid', 'sci_fai_mobility', 'qol_life', 'qol_physical', 'qol_psychological', 'qol_social', 'rpe_cr10', 'rpe_6_20', 'hr_rest', 'hr_exercise', 'sbp', 'dbp')
+        and in_device in ('yes', 'no') and trial_no between 1 and 40 and course_no between 1 and 50
+        and timepoint in ('baseline', 'interim', 'end_of_course', 'follow_up_3m', 'follow_up_6m', 'follow_up_12m', 'yearly')
+        and attempt_status in ('done', 'unable_physical', 'unable_other', 'not_attempted', 'stopped_early')
+        and value between 0 and 1000 and aid in ('none', 'bars', 'walker', 'two_crutches', 'one_crutch', 'stick')
+        and brace in ('yes', 'no') and assist_persons between 0 and 4 and timed_distance_m between 6 and 10
+        and time_s between 1.5 and 1000 and start_type in ('static', 'flying') and seconds_walked between 1 and 360
+        and rests between 0 and 30 and rpe_end between 0 and 20 and rpe_scale in ('cr10', '6_20') and chair_arms in ('yes', 'no')
+        and level_basis in ('self_selected', 'maximum')
+        and muscle_group in ('hip_add', 'hip_flex', 'knee_flex', 'knee_ext', 'plantar_flex') and side in ('right', 'left')
+        and pain_window in ('now', 'average_7d') and pain_type in ('neuropathic', 'nociceptive', 'unknown')
+        and locomotion_mode in ('walk', 'wheelchair', 'both') and posture in ('supine', 'sitting', 'standing', 'in_device')
+        and posture_min between 0 and 180
+      ),
       constraint assessments_pkey primary key (site_id, participant, assessment_day, measure, in_device, trial_no)
     )`);
     await runner.query(`create index assessments_month_idx on assessments (site_id, month)`);
@@ -222,6 +403,26 @@ export class FirstTables1796083200000 implements MigrationInterface {
       bp_pre_posture text, bp_min_posture text, bp_min_minute double precision, rpe double precision, rpe_scale text,
       pain_pre integer, pain_post integer, spasticity_change text, skin_check_pre text, skin_check_post text,
       dysreflexia_decision text, hypotension_decision text, month text not null, submission_id uuid not null,
+      constraint sessions_values_ff7ce02e check (
+        session_day between -3650 and 18250 and session_no between 1 and 500 and course_no between 1 and 50
+        and start_hour between 0 and 23 and status in ('completed', 'shortened', 'cancelled_before', 'attended_not_trained')
+        and not_trained_reason in ('medical', 'fatigue', 'skin', 'equipment', 'staff', 'transport', 'other')
+        and device_class in ('treadmill_driven_orthosis', 'overground_powered_exoskeleton', 'signal_driven_exoskeleton', 'end_effector_trainer', 'manual_bwstt', 'overground_bws', 'fes_walking', 'passive_orthosis', 'conventional_overground')
+        and planned_min between 5 and 180 and don_min between 0 and 90 and doff_min between 0 and 90
+        and upright_min between 0 and 180 and rest_min between 0 and 180 and steps_total between 0 and 20000
+        and distance_total_m between 0 and 10000 and body_mass_kg between 25 and 200 and staff_count between 0 and 6
+        and assist_level between 1 and 7 and hr_rest between 25 and 220 and hr_peak between 30 and 230 and sbp_pre between 40 and 320
+        and dbp_pre between 20 and 220 and sbp_min between 40 and 320 and dbp_min between 20 and 220 and sbp_max between 40 and 320
+        and dbp_max between 20 and 220 and sbp_post between 40 and 320 and dbp_post between 20 and 220
+        and bp_pre_posture in ('supine', 'sitting', 'standing', 'in_device')
+        and bp_min_posture in ('supine', 'sitting', 'standing', 'in_device') and bp_min_minute between 0 and 180
+        and rpe between 0 and 20 and rpe_scale in ('cr10', '6_20') and pain_pre between 0 and 10 and pain_post between 0 and 10
+        and spasticity_change in ('less', 'same', 'more')
+        and skin_check_pre in ('intact', 'redness_fades', 'redness_stays', 'broken')
+        and skin_check_post in ('intact', 'redness_fades', 'redness_stays', 'broken')
+        and dysreflexia_decision in ('present', 'absent', 'not_assessed')
+        and hypotension_decision in ('present', 'absent', 'not_assessed')
+      ),
       constraint sessions_pkey primary key (site_id, participant, session_day, session_no)
     )`);
     await runner.query(`create index sessions_month_idx on sessions (site_id, month)`);
@@ -235,6 +436,26 @@ export class FirstTables1796083200000 implements MigrationInterface {
       knee_l_gain_pct double precision, stim_on text, stim_channels integer, aid text, assist_persons integer, hr_end integer,
       rpe_end double precision, rpe_scale text, stop_reason text not null, rest_after_s double precision, month text not null,
       submission_id uuid not null,
+      constraint bouts_values_47ea4c70 check (
+        session_day between -3650 and 18250 and session_no between 1 and 500 and bout_no between 1 and 60
+        and activity in ('walking', 'isolated_movement')
+        and device_class in ('treadmill_driven_orthosis', 'overground_powered_exoskeleton', 'signal_driven_exoskeleton', 'end_effector_trainer', 'manual_bwstt', 'overground_bws', 'fes_walking', 'passive_orthosis', 'conventional_overground')
+        and surface in ('treadmill', 'overground_level', 'ramp', 'stairs', 'outdoor') and duration_s between 1 and 7200
+        and distance_m between 0 and 5000 and steps between 0 and 12000 and treadmill_speed_mps between 0.05 and 2.5
+        and bws_kg between 0 and 200 and bws_pct between 0 and 100 and guidance_pct between 0 and 100
+        and hip_r_control in ('volitional', 'volitional_threshold', 'programmed', 'assist_as_needed', 'passive', 'locked', 'stimulated', 'absent')
+        and hip_l_control in ('volitional', 'volitional_threshold', 'programmed', 'assist_as_needed', 'passive', 'locked', 'stimulated', 'absent')
+        and knee_r_control in ('volitional', 'volitional_threshold', 'programmed', 'assist_as_needed', 'passive', 'locked', 'stimulated', 'absent')
+        and knee_l_control in ('volitional', 'volitional_threshold', 'programmed', 'assist_as_needed', 'passive', 'locked', 'stimulated', 'absent')
+        and ankle_r_control in ('volitional', 'volitional_threshold', 'programmed', 'assist_as_needed', 'passive', 'locked', 'stimulated', 'absent')
+        and ankle_l_control in ('volitional', 'volitional_threshold', 'programmed', 'assist_as_needed', 'passive', 'locked', 'stimulated', 'absent')
+        and hip_r_gain_pct between 0 and 100 and hip_l_gain_pct between 0 and 100 and knee_r_gain_pct between 0 and 100
+        and knee_l_gain_pct between 0 and 100 and stim_on in ('yes', 'no') and stim_channels between 0 and 16
+        and aid in ('none', 'bars', 'walker', 'two_crutches', 'one_crutch', 'stick') and assist_persons between 0 and 4
+        and hr_end between 30 and 230 and rpe_end between 0 and 20 and rpe_scale in ('cr10', '6_20')
+        and stop_reason in ('planned', 'signal_fading', 'fatigue', 'symptoms', 'pain', 'spasm', 'equipment', 'fit', 'skin', 'participant_choice', 'other')
+        and rest_after_s between 0 and 3600
+      ),
       constraint bouts_pkey primary key (site_id, participant, session_day, session_no, bout_no)
     )`);
     await runner.query(`create index bouts_month_idx on bouts (site_id, month)`);
@@ -247,6 +468,26 @@ export class FirstTables1796083200000 implements MigrationInterface {
       symptomatic text, skin_stage text, body_site text, device_contact text, fall_injured text, fall_tethered text,
       fall_device_worn text, fracture_imaged text, bone_density_before text, pain_rise integer, pain_over_24h text,
       month text not null, submission_id uuid not null,
+      constraint adverse_events_values_4dfbc452 check (
+        event_no between 1 and 999 and event_day between -3650 and 18250 and session_day between -3650 and 18250
+        and session_no between 1 and 500 and onset in ('before', 'during', 'after', 'outside') and onset_min between 0 and 2880
+        and kind in ('autonomic_dysreflexia', 'orthostatic_hypotension', 'skin_breakdown', 'fall', 'fracture', 'pain_increase', 'spasticity_increase', 'musculoskeletal', 'syncope', 'chest_symptom', 'dvt', 'infection', 'equipment_fault', 'other')
+        and severity in ('1', '2', '3', '4', '5') and serious in ('yes', 'no')
+        and attribution in ('unrelated', 'unlikely', 'possible', 'probable', 'definite')
+        and attributed_to in ('device', 'training_load', 'condition', 'staff_handling', 'other') and expected in ('yes', 'no')
+        and action in ('none', 'paused', 'stopped', 'course_ended')
+        and outcome in ('resolved', 'resolved_lasting_effect', 'ongoing', 'fatal', 'unknown')
+        and resolved_day between -3650 and 18250 and narrative_held in ('yes', 'no') and sbp_rise between 1 and 250
+        and sbp_peak between 40 and 320 and bradycardia in ('yes', 'no')
+        and dysreflexia_trigger in ('bladder', 'bowel', 'skin', 'harness_or_strap', 'pain', 'spasm', 'other', 'unknown')
+        and sbp_drop between 0 and 200 and dbp_drop between 0 and 150 and start_posture in ('supine', 'sitting')
+        and symptomatic in ('yes', 'no') and skin_stage in ('1', '2', '3', '4', 'unstageable')
+        and body_site in ('shoulder', 'upper_arm', 'elbow', 'forearm_wrist', 'hand_thumb', 'neck', 'trunk', 'spine', 'sacrum', 'ischium', 'trochanter', 'pelvis_hip', 'thigh', 'knee', 'lower_leg', 'ankle', 'heel', 'foot_toes', 'other')
+        and device_contact in ('yes', 'no') and fall_injured in ('yes', 'no') and fall_tethered in ('yes', 'no')
+        and fall_device_worn in ('yes', 'no') and fracture_imaged in ('yes', 'no')
+        and bone_density_before in ('normal', 'low', 'osteoporosis', 'not_measured') and pain_rise between 1 and 10
+        and pain_over_24h in ('yes', 'no')
+      ),
       constraint adverse_events_pkey primary key (site_id, participant, event_no)
     )`);
     await runner.query(`create index adverse_events_month_idx on adverse_events (site_id, month)`);
