@@ -5,6 +5,7 @@ import { announce } from '../../ui/announcer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
 import { Page } from '../../ui/page.tsx';
+import { TextLink } from '../../ui/text-link.tsx';
 import { CellLine } from './cell-line.tsx';
 import { firstEntry, nextEntry } from './entry.ts';
 import type { Entry } from './entry.ts';
@@ -66,7 +67,8 @@ export default function ExamPage() {
             Classified by the international standard (ISNCSCI), 2019 revision, as the registry classifies the exams it receives.
             <span className="print:hidden">
               {' '}
-              Where the standard leaves a choice, ours is <a href="#readings">stated below</a>.
+              <TextLink to="/methods/classification">How injuries are classified</TextLink> says more; where the standard leaves a choice,
+              ours is <a href="#readings">stated below</a>.
             </span>
           </p>
           <p>It supports the examiner’s judgement and does not replace it.</p>

@@ -1,0 +1,34 @@
+/** Looks at a page as people meet it: narrow and wide, light and dark. Keeps a picture of each, and finds what shuts people out. */
+import { fileURLToPath } from 'node:url';
+import AxeBuilder from '@axe-core/playwright';
+import { expect } from '@playwright/test';
+import type { Page } from '@playwright/test';
+
+const folder = fileURLToPath(new URL('screenshots/', import.meta.url));
+const schemes = ['light', 'dark'] as const;
+const sizes = [
+  { width: 320, height: 640 },
+  { width: 1440, height: 900 },
+] as const;
+
+/**
+ * Pictures `<name>-<scheme>-<width>.png`; fails on any violation that axe finds and on a page wider than its screen. The
+ * window is as before afterwards, in the light scheme.
+ */
+export async function look(page: Page, name: string): Promise<void> {
+  const before = page.viewportSize();
+  for (const scheme of schemes) {
+    await page.emulateMedia({ colorScheme: scheme });
+    for (const size of sizes) {
+      await page.setViewportSize(size);
+      const { violations } = await new AxeBuilder({ page }).analyze();
+      const found = violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`);
+      expect(found, `${name}, ${scheme}, ${size.width} px`).toEqual([]);
+      const excess = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+      expect(excess, `${name} at ${size.width} px is wider than the screen`).toBeLessThanOrEqual(0);
+      await page.screenshot({ path: `${folder}${name}-${scheme}-${size.width}.png`, fullPage: true });
+    }
+  }
+  await page.emulateMedia({ colorScheme: 'light' });
+  if (before !== null) await page.setViewportSize(before);
+}
