@@ -4,8 +4,9 @@ import { chmodSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { projectRoot } from '../../infra/project-root.ts';
+import { exampleFilesOf } from '../../infra/start/environment.ts';
 import { readRun } from '../../infra/start/run-note.ts';
-import { mailUrlVariable, productUrlVariable, providerUrlVariable } from './product-variables.ts';
+import { exampleFilesVariable, mailUrlVariable, productUrlVariable, providerUrlVariable } from './product-variables.ts';
 
 /** The first start builds the program and fills in the demonstration data. */
 const readyWithinMs = 15 * 60_000;
@@ -52,5 +53,6 @@ export default async function startProduct(): Promise<() => Promise<void>> {
   process.env[productUrlVariable] = run.address;
   process.env[mailUrlVariable] = run.mailAddress;
   process.env[providerUrlVariable] = run.providerAddress;
+  process.env[exampleFilesVariable] = exampleFilesOf(dataFolder);
   return stop;
 }

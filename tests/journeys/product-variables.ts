@@ -4,3 +4,5 @@ export const productUrlVariable = 'CAIRNSTEP_JOURNEY_URL';
 export const mailUrlVariable = 'CAIRNSTEP_JOURNEY_MAIL_URL';
 /** The stand-in for sign-in. */
 export const providerUrlVariable = 'CAIRNSTEP_JOURNEY_PROVIDER_URL';
+/** The folder of files to try a submission with. */
+export const exampleFilesVariable = 'CAIRNSTEP_JOURNEY_FILES';

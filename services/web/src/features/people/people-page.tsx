@@ -4,6 +4,7 @@ import { hasRole, useAccount } from '../../lib/account.ts';
 import { useAddressParam } from '../../lib/address-state.ts';
 import { formatInstant } from '../../lib/format.ts';
 import { roleWithin } from '../../lib/role-names.ts';
+import { foldText, wordMatcher } from '../../lib/word-match.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Page, Section } from '../../ui/page.tsx';
 import { Table } from '../../ui/table.tsx';
@@ -61,13 +62,14 @@ export default function PeoplePage() {
 
 function Accounts({ people }: { readonly people: readonly Person[] }) {
   const [words, setWords] = useAddressParam('search');
-  const found = people.filter((person) => matches(person, words ?? ''));
+  const isFound = wordMatcher(words ?? '');
+  const found = people.filter((person) => isFound(textOf(person)));
   return (
     <div className="grid gap-4">
       <TextField
         id="search"
         label="Search"
-        hint="A part of the name, e-mail, institution, role or site."
+        hint="Beginnings of words of the name, e-mail, institution, role or site."
         value={words ?? ''}
         onChange={(value) => setWords(value)}
       />
@@ -86,13 +88,8 @@ function Accounts({ people }: { readonly people: readonly Person[] }) {
 
 const rolesOf = ({ grants }: Person): readonly string[] => grants.map(({ role, site }) => roleWithin(role, site));
 
-function matches(person: Person, words: string): boolean {
-  const text = [person.name, person.email ?? '', person.institution ?? '', ...rolesOf(person)].join(' ').toLowerCase();
-  return words
-    .toLowerCase()
-    .split(/\s+/)
-    .every((word) => text.includes(word));
-}
+const textOf = (person: Person): string =>
+  foldText([person.name, person.email ?? '', person.institution ?? '', ...rolesOf(person)].join(' '));
 
 const columns: readonly Column<Person>[] = [
   {
