@@ -1,6 +1,7 @@
 /**
  * Rules that are about files and single cells rather than about medicine: F01-F05 stop the reading of a file, F06-F15
- * are about its columns and cells, F20-F24 about single values against the dictionary, F30 and up about rows and records.
+ * are about its columns and cells, F20-F25 about single values against the dictionary, F30-F37 about rows and records,
+ * F40 and up about workbooks (F40 and F41 stop the reading of one).
  * Rules across fields (C, E, T, A, R) are the dictionary's.
  */
 import type { RuleText } from './finding.ts';
@@ -208,5 +209,68 @@ export const fileRules: readonly RuleText[] = [
     statement: 'A consent does not end before it was signed.',
     why: 'One of the two study days is wrong.',
     mend: 'Correct the day of signing or the last day on which the consent holds.',
+  },
+  {
+    id: 'F40',
+    severity: 'error',
+    statement: 'A workbook is in XLSX form, without a password and without macros.',
+    why: 'A protected file cannot be checked, a macro is a program, and other forms are read by nobody here.',
+    mend: 'Save the workbook as XLSX, without a password and without macros, and send that file.',
+  },
+  {
+    id: 'F41',
+    severity: 'error',
+    statement: 'A workbook is whole: every part of it is there, unpacks to what it claims to be, and is plain XML.',
+    why: 'From a damaged file, or one that was put together to do harm, wrong values could be read.',
+    mend: 'Open the workbook in your spreadsheet program, save it again as XLSX and send that file.',
+  },
+  {
+    id: 'F42',
+    severity: 'error',
+    statement: 'Every sheet with cells is one of the tables, or one that the template brings.',
+    why: 'A sheet nobody declared may hold something that identifies a person.',
+    mend: 'Take the sheet out, or give it the name of its table.',
+  },
+  {
+    id: 'F43',
+    severity: 'error',
+    statement: 'A table has one sheet.',
+    why: 'Of two sheets for the same table nobody can tell which one counts.',
+    mend: 'Put the rows of both on one sheet, or take one of the two out.',
+  },
+  {
+    id: 'F44',
+    severity: 'error',
+    statement: 'No cells of a table are merged.',
+    why: 'A merged cell has one value, in its first row and column; the others are empty, whatever the screen shows.',
+    mend: 'Undo the merging and write the value into every cell it belongs to.',
+  },
+  {
+    id: 'F45',
+    severity: 'warning',
+    statement: 'Nothing of a table is hidden.',
+    why: 'Hidden rows, columns and sheets are read like all others, and may hold what nobody meant to send.',
+    mend: 'Show what is hidden, then delete it or keep it.',
+  },
+  {
+    id: 'F46',
+    severity: 'error',
+    statement: 'Every formula has a result.',
+    why: 'Formulas are not worked out here; what counts is the result that the spreadsheet program has saved.',
+    mend: 'Correct the formula, or replace it by its value, and save the workbook in your spreadsheet program.',
+  },
+  {
+    id: 'F47',
+    severity: 'error',
+    statement: 'No cell holds a calendar date or a time of day.',
+    why: 'Calendar dates identify a person. Sometimes a spreadsheet program has made a date of a number or a code.',
+    mend: 'Write study days, plain numbers and codes. If this was one of them, format the cell as text and write it again.',
+  },
+  {
+    id: 'F48',
+    severity: 'error',
+    statement: 'The example row of the template stays as it was, or is deleted.',
+    why: 'A row that is still marked as the example is not read, so a row written over it could be lost.',
+    mend: 'Write the participant in place of the word EXAMPLE, or delete the row.',
   },
 ];

@@ -1,3 +1,4 @@
+import { tableKeys } from '@cairnstep/dictionary';
 import { describe, expect, it } from 'vitest';
 import { FindingLog } from './finding-log.ts';
 
@@ -48,6 +49,16 @@ describe('FindingLog', () => {
       { severity: 'warning', mend: 'Check the value; if it is right, say so.' },
       { mend: 'other' },
     ]);
+  });
+
+  it('puts findings about a whole workbook before those of its tables, and takes all tables for incomplete after one that stops', () => {
+    const log = new FindingLog();
+    log.add({ ...place, rule: 'F42', table: 'participants', line: 1 });
+    log.add({ ...place, rule: 'F42', table: null, line: null });
+    expect(log.byRule()[0]?.kept.map(({ table }) => table)).toEqual([null, 'participants']);
+    expect(log.incomplete.size).toBe(0);
+    log.addStopping({ ...place, rule: 'F41', table: null, line: null });
+    expect([...log.incomplete]).toEqual(tableKeys);
   });
 
   it('refuses a rule that nobody has stated', () => {

@@ -6,7 +6,7 @@ import { ruleText } from './rule-book.ts';
 /** A finding as a rule reports it; severity and the usual mend come with the rule. */
 export interface Report {
   readonly rule: string;
-  readonly table: TableKey;
+  readonly table: TableKey | null;
   readonly line: number | null;
   readonly column: string | null;
   readonly found: string;
@@ -56,9 +56,9 @@ export class FindingLog {
     });
   }
 
-  /** Adds a finding that ended the reading of a file before its end. */
+  /** Adds a finding that ended the reading of a file before its end; of a whole workbook: of all tables. */
   addStopping(report: Report): void {
-    this.stopped.add(report.table);
+    for (const table of report.table === null ? tableKeys : [report.table]) this.stopped.add(table);
     this.add(report);
   }
 
@@ -80,7 +80,8 @@ export class FindingLog {
   }
 }
 
-const tableOrder = new Map(tableKeys.map((key, index) => [key, index]));
+/** What is about a whole workbook comes first. */
+const tableOrder = new Map<TableKey | null, number>([null, ...tableKeys].map((key, index) => [key, index]));
 
 function byPlace(a: Finding, b: Finding): number {
   const byTable = (tableOrder.get(a.table) ?? 0) - (tableOrder.get(b.table) ?? 0);

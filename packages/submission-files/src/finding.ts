@@ -7,8 +7,12 @@ export type Severity = 'error' | 'warning';
 export interface Finding {
   readonly rule: string;
   readonly severity: Severity;
-  readonly table: TableKey;
-  /** Line of the file as an editor counts it, 1 for the header (of a record that spans lines: its first). Null when about the whole file. */
+  /** Null when about a whole workbook rather than one of its tables. */
+  readonly table: TableKey | null;
+  /**
+   * Line of the file as an editor counts it, 1 for the header (of a record that spans lines: its first), or row of the
+   * sheet. Null when about the whole file or sheet.
+   */
   readonly line: number | null;
   /** Column key of the dictionary, or the header as written when the dictionary has no such column. Null when about the whole row or file. */
   readonly column: string | null;

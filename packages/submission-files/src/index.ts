@@ -1,6 +1,6 @@
 /** Submission files: bytes to typed rows and findings, the same in the browser and on the server. */
-export { defaultLimits } from './limits.ts';
-export type { ReadLimits } from './limits.ts';
+export { defaultLimits, defaultWorkbookLimits } from './limits.ts';
+export type { ReadLimits, WorkbookLimits } from './limits.ts';
 export type { Finding, RuleFindings, RuleText, Severity } from './finding.ts';
 export { FindingLog } from './finding-log.ts';
 export type { KeptFindings, Report } from './finding-log.ts';
@@ -10,7 +10,10 @@ export { decode } from './reading/decode.ts';
 export type { Decoded } from './reading/decode.ts';
 export type { Encoding } from './reading/byte-decoder.ts';
 export { readCsv, readTable } from './reading/read-csv.ts';
-export type { ByteSource } from './reading/read-csv.ts';
+export type { ByteSource } from './reading/byte-source.ts';
+export { readWorkbook } from './reading/workbook/read-workbook.ts';
+export { readWorkbookText } from './reading/workbook/read-workbook-text.ts';
+export type { TextTable } from './reading/workbook/read-workbook-text.ts';
 export { isFormulaLike } from './table/formula-like.ts';
 export { TableBuilder } from './table/table-builder.ts';
 export { tableFromRows } from './table/table-from-rows.ts';

@@ -1,4 +1,5 @@
 import type { ReadLimits } from '../limits.ts';
+import type { ByteSource } from './byte-source.ts';
 import { UnreadableFile } from './unreadable-file.ts';
 
 /** Small pieces are put together, so that a sender of single bytes does not make every one a piece of work. */
@@ -13,7 +14,7 @@ export interface Piece {
  * The bytes of a file in pieces of a workable size, counted against the limit as they arrive.
  * @throws UnreadableFile as soon as there are more bytes than allowed.
  */
-export async function* gatherBytes(source: Uint8Array | AsyncIterable<Uint8Array>, limits: ReadLimits): AsyncGenerator<Piece> {
+export async function* gatherBytes(source: ByteSource, limits: ReadLimits): AsyncGenerator<Piece> {
   let total = 0;
   let held = new Uint8Array(pieceSize);
   let filled = 0;

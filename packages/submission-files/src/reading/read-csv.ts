@@ -7,13 +7,12 @@ import { HeaderNames } from '../table/header-names.ts';
 import { TableBuilder } from '../table/table-builder.ts';
 import type { TypedTable } from '../table/typed-table.ts';
 import { ByteDecoder } from './byte-decoder.ts';
+import type { ByteSource } from './byte-source.ts';
 import { countLineBreaks } from './count-line-breaks.ts';
 import { detectDelimiter } from './detect-delimiter.ts';
 import { gatherBytes } from './gather-bytes.ts';
 import { RecordScanner } from './record-scanner.ts';
 import { UnreadableFile } from './unreadable-file.ts';
-
-export type ByteSource = Uint8Array | AsyncIterable<Uint8Array>;
 
 const batchRows = 10_000;
 
@@ -55,7 +54,7 @@ async function* fillFromCsv(builder: TableBuilder, source: ByteSource): AsyncGen
   let commaSeparated = true;
   const onRecord = (cells: readonly string[], count: number, line: number, strayQuote: boolean): void => {
     if (builder.hasHeader) builder.row(cells, count, line);
-    else builder.header(cells, count, line, { commaSeparated });
+    else builder.header(cells, count, line, { commaMayMarkThousands: commaSeparated });
     if (strayQuote) findings.add({ rule: 'F04', table, line, column: null, found: 'Text follows a closing quotation mark.' });
   };
 

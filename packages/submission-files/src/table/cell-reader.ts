@@ -1,12 +1,16 @@
 import type { TableKey } from '@cairnstep/dictionary';
 import type { FindingLog } from '../finding-log.ts';
+import type { CellKind } from './cell-kind.ts';
 import type { ColumnStore } from './column-store.ts';
 import { isFormulaLike } from './formula-like.ts';
 
 /** Turns the cells of one column into numbers or words, stores them, and reports the cells it cannot read. */
 export interface CellReader {
-  /** @param text The cell as the file has it, never empty. A cell of blanks only counts as empty. */
-  read(text: string, row: number, line: number): void;
+  /**
+   * @param text The cell as the file has it, never empty. A cell of blanks only counts as empty.
+   * @param kind A `number` is written with a decimal point, whatever other cells do.
+   */
+  read(text: string, row: number, line: number, kind: CellKind): void;
 }
 
 /** Where a reader stores and reports. */

@@ -16,7 +16,7 @@ export type HeaderMeaning =
   | { readonly kind: 'undeclared' };
 
 /** Compatibility forms become plain, and case, spaces, underscores, hyphens and full stops do not count. */
-const foldName = (text: string): string =>
+export const foldName = (text: string): string =>
   text
     .normalize('NFKC')
     .toLowerCase()

@@ -1,4 +1,5 @@
 import { measureOf, measureParser, measures } from '@cairnstep/dictionary';
+import type { CellKind } from './cell-kind.ts';
 import { rejectCell, trimmed } from './cell-reader.ts';
 import type { CellPlace, CellReader } from './cell-reader.ts';
 import type { ColumnStore } from './column-store.ts';
@@ -15,11 +16,11 @@ export class MeasuredReader implements CellReader {
   ) {}
 
   /** The naming cell of the row must have been read before. */
-  read(text: string, row: number, line: number): void {
+  read(text: string, row: number, line: number, kind: CellKind): void {
     const measure = this.naming.prefix + this.naming.store.wordAt(row);
     const parseGrade = gradeParsers.get(measure);
     if (!parseGrade) {
-      this.numbers.read(text, row, line);
+      this.numbers.read(text, row, line, kind);
       return;
     }
     const parsed = parseGrade(trimmed(text));

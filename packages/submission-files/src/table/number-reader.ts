@@ -1,3 +1,4 @@
+import type { CellKind } from './cell-kind.ts';
 import { rejectCell, trimmed } from './cell-reader.ts';
 import type { CellPlace, CellReader } from './cell-reader.ts';
 import type { UnitFactor } from './header-names.ts';
@@ -6,8 +7,8 @@ import type { ReadNumber } from './read-number.ts';
 
 /** How a file writes its decimals; shared by the readers of all its columns. */
 export interface DecimalManner {
-  /** Whether cells are separated by commas, so that `1,234` may be a thousand as well as a decimal number. */
-  readonly commaSeparated: boolean;
+  /** Whether `1,234` may be a thousand as well as a decimal number. */
+  readonly commaMayMarkThousands: boolean;
   /** Character code of the first decimal mark met; 0 until then. */
   mark: number;
 }
@@ -27,7 +28,7 @@ export class NumberReader implements CellReader {
     this.whole = place.store.variable.type === 'integer';
   }
 
-  read(cell: string, row: number, line: number): void {
+  read(cell: string, row: number, line: number, kind: CellKind): void {
     const { into, manner } = this;
     let text = cell;
     let failure = readNumber(text, this.factor, into);
@@ -37,6 +38,7 @@ export class NumberReader implements CellReader {
       failure = readNumber(text, this.factor, into);
     }
     const at = { row, line, text };
+    const mark = kind === 'number' ? 0 : into.mark;
     if (failure === 'not-a-number') {
       const example = this.whole ? 'a whole number such as 12' : 'a number such as 12.5';
       rejectCell(this.place, at, 'F10', 'Something other than a number.', `Write ${example}, without a unit, or leave the cell empty.`);
@@ -44,7 +46,7 @@ export class NumberReader implements CellReader {
       rejectCell(this.place, at, 'F10', 'A number with more digits than can be kept.', 'Write at most 40 digits.');
     } else if (this.whole && !Number.isInteger(into.value)) {
       rejectCell(this.place, at, 'F10', 'A number with a fraction where only whole numbers stand.', 'Write a whole number.');
-    } else if (into.mark === COMMA && manner.commaSeparated && perhapsThousands.test(text)) {
+    } else if (mark === COMMA && manner.commaMayMarkThousands && perhapsThousands.test(text)) {
       rejectCell(
         this.place,
         at,
@@ -52,7 +54,7 @@ export class NumberReader implements CellReader {
         'A comma that could mark thousands or decimals.',
         'Write a decimal point, or no mark at all when the number is whole.',
       );
-    } else if (into.mark !== 0 && manner.mark !== 0 && into.mark !== manner.mark) {
+    } else if (mark !== 0 && manner.mark !== 0 && mark !== manner.mark) {
       rejectCell(
         this.place,
         at,
@@ -61,7 +63,7 @@ export class NumberReader implements CellReader {
         'Write all numbers of the file with the same decimal mark.',
       );
     } else {
-      if (into.mark !== 0) manner.mark = into.mark;
+      if (mark !== 0) manner.mark = mark;
       this.place.store.setNumber(row, into.value);
     }
   }

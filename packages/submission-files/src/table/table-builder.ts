@@ -7,12 +7,15 @@ import type { TableKey, Variable } from '@cairnstep/dictionary';
 import type { FindingLog } from '../finding-log.ts';
 import type { ReadLimits } from '../limits.ts';
 import { UnreadableFile } from '../reading/unreadable-file.ts';
+import { faultOfKind } from './cell-kind.ts';
+import type { CellKind } from './cell-kind.ts';
 import type { CellReader } from './cell-reader.ts';
 import { CodeReader } from './code-reader.ts';
 import { ColumnStore } from './column-store.ts';
 import { isFormulaLike } from './formula-like.ts';
-import { HeaderNames } from './header-names.ts';
-import type { HeaderMeaning, UnitFactor } from './header-names.ts';
+import type { UnitFactor } from './header-names.ts';
+import { columnLetters, columnName, lastFilled, readHeaderRow } from './header-row.ts';
+import type { HeaderColumn } from './header-row.ts';
 import { MeasuredReader } from './measured-reader.ts';
 import { NumberReader } from './number-reader.ts';
 import type { DecimalManner } from './number-reader.ts';
@@ -20,26 +23,19 @@ import { ParticipantReader } from './participant-reader.ts';
 import { TypedTable } from './typed-table.ts';
 
 const firstCapacity = 1_024;
-const longestShownHeader = 60;
 
 const isBlank = (cells: readonly string[], count: number): boolean => {
   for (let index = 0; index < count; index += 1) if (cells[index]?.trim()) return false;
   return true;
 };
 
-/** The column as a spreadsheet names it: A to Z, AA, AB, … */
-function columnLetters(position: number): string {
-  const letter = String.fromCharCode(65 + (position % 26));
-  return position < 26 ? letter : columnLetters(Math.floor(position / 26) - 1) + letter;
-}
-
 export class TableBuilder {
   private readonly variables: readonly Variable[];
   private readonly stores: ColumnStore[];
   private readonly present = new Set<string>();
-  private manner: DecimalManner = { commaSeparated: true, mark: 0 };
+  private manner: DecimalManner = { commaMayMarkThousands: true, mark: 0 };
   /** Per position in the file the reader of its column, in the order in which a row's cells must be read. */
-  private readers: { readonly position: number; readonly reader: CellReader }[] = [];
+  private readers: { readonly position: number; readonly store: ColumnStore; readonly reader: CellReader }[] = [];
   private width = 0;
   private capacity = firstCapacity;
   private rows = 0;
@@ -66,17 +62,14 @@ export class TableBuilder {
 
   /**
    * The first row that is not blank names the columns.
-   * @param manner Whether the cells were separated by commas.
+   * @param manner Whether a comma in a number could mark thousands: where commas separate cells, or nothing tells.
    * @throws UnreadableFile when it names none of the table's columns: the file is another table, or has no header.
    */
-  header(cells: readonly string[], count: number, line: number, manner: { readonly commaSeparated: boolean }): void {
+  header(cells: readonly string[], count: number, line: number, manner: { readonly commaMayMarkThousands: boolean }): void {
     if (isBlank(cells, count)) return;
     this.manner = { ...manner, mark: 0 };
-    const names = new HeaderNames(this.table);
-    const headers = cells.slice(0, lastFilled(cells, count) + 1);
-    const meanings = headers.map((header) => names.meaning(header));
-    const recognised = meanings.filter((meaning) => meaning.kind === 'column').length;
-    if (recognised === 0) {
+    const columns = readHeaderRow(this.table, cells, count);
+    if (!columns.some(({ meaning }) => meaning.kind === 'column')) {
       throw new UnreadableFile(
         'F05',
         'The first row names no column of this table.',
@@ -84,29 +77,19 @@ export class TableBuilder {
         line,
       );
     }
-    this.width = headers.length;
-    // Where most of the row is not a header, its cells may be somebody's data and are not repeated.
-    const mayShow = recognised * 2 >= headers.length;
-    meanings.forEach((meaning, position) =>
-      this.takeColumn(meaning, position, line, shownHeader(headers[position] ?? '', position, mayShow)),
-    );
+    this.width = columns.length;
+    columns.forEach((column, position) => this.takeColumn(column, position, line));
     this.readers.sort((a, b) => Number(a.reader instanceof MeasuredReader) - Number(b.reader instanceof MeasuredReader));
     this.reportMissing(line);
   }
 
-  private takeColumn(meaning: HeaderMeaning, position: number, line: number, shown: string): void {
+  private takeColumn({ meaning, shown }: HeaderColumn, position: number, line: number): void {
     const { table, findings } = this;
     if (meaning.kind === 'undeclared') {
-      if (shown === '') findings.add({ rule: 'F06', table, line, column: columnLetters(position), found: 'A column without a header.' });
-      else if (isFormulaLike(shown))
-        findings.add({
-          rule: 'F13',
-          table,
-          line,
-          column: columnLetters(position),
-          found: 'A header that begins like a spreadsheet formula.',
-        });
-      else findings.add({ rule: 'F06', table, line, column: shown, found: 'A column that the dictionary does not have.' });
+      const where = { table, line, column: columnName({ meaning, shown }, position) };
+      if (shown === '') findings.add({ rule: 'F06', ...where, found: 'A column without a header.' });
+      else if (isFormulaLike(shown)) findings.add({ rule: 'F13', ...where, found: 'A header that begins like a spreadsheet formula.' });
+      else findings.add({ rule: 'F06', ...where, found: 'A column that the dictionary does not have.' });
       return;
     }
     const { key } = meaning.variable;
@@ -121,12 +104,12 @@ export class TableBuilder {
       return;
     }
     this.present.add(key);
-    this.readers.push({ position, reader: this.readerFor(meaning.position, meaning.factor) });
+    const store = this.stores[meaning.position] as ColumnStore;
+    this.readers.push({ position, store, reader: this.readerFor(store, meaning.factor) });
   }
 
-  private readerFor(column: number, factor: UnitFactor): CellReader {
+  private readerFor(store: ColumnStore, factor: UnitFactor): CellReader {
     const { table, findings, stores, manner } = this;
-    const store = stores[column] as ColumnStore;
     const place = { table, findings, store };
     const { type, measuredBy } = store.variable;
     if (type === 'pseudonym') return new ParticipantReader(place);
@@ -144,8 +127,11 @@ export class TableBuilder {
     }
   }
 
-  /** @throws UnreadableFile beyond the limit of rows. */
-  row(cells: readonly string[], count: number, line: number): void {
+  /**
+   * @param kinds What a workbook says of each cell; left out where a file has nothing but text.
+   * @throws UnreadableFile beyond the limit of rows.
+   */
+  row(cells: readonly string[], count: number, line: number, kinds?: readonly CellKind[]): void {
     if (isBlank(cells, count)) return;
     if (this.rowsInAll >= this.limits.rows) {
       throw new UnreadableFile(
@@ -161,9 +147,16 @@ export class TableBuilder {
     this.rowsInAll += 1;
     this.lines[row] = line;
     if (count !== this.width) this.reportWidth(cells, count, line);
-    for (const { position, reader } of this.readers) {
+    for (const { position, reader, store } of this.readers) {
       const cell = position < count ? cells[position] : '';
-      if (cell) reader.read(cell, row, line);
+      if (!cell) continue;
+      const kind = kinds?.[position] ?? 'text';
+      const fault = kinds && faultOfKind(kind);
+      if (!fault) reader.read(cell, row, line, kind);
+      else {
+        store.setUnreadable(row);
+        this.findings.add({ ...fault, table: this.table, line, column: store.variable.key });
+      }
     }
   }
 
@@ -190,18 +183,4 @@ export class TableBuilder {
     this.rows = 0;
     return taken;
   }
-}
-
-function lastFilled(cells: readonly string[], count: number): number {
-  let last = count - 1;
-  while (last >= 0 && !cells[last]?.trim()) last -= 1;
-  return last;
-}
-
-/** The header as a finding may show it: without control and direction marks, cut to a readable length; or the column's letters. */
-function shownHeader(header: string, position: number, mayShow: boolean): string {
-  if (header.trim() === '') return '';
-  if (!mayShow) return columnLetters(position);
-  const plain = header.replace(/[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]+/gu, ' ').trim();
-  return plain.length > longestShownHeader ? `${plain.slice(0, longestShownHeader)}…` : plain;
 }
