@@ -19,7 +19,7 @@ export function GridChoice({ account, known: { outcomes, releases }, address: { 
   const sites = sitesOf(account);
   const newest = releases[0]?.number;
   return (
-    <div className="grid grid-cols-1 gap-x-8 gap-y-5 sm:grid-cols-2">
+    <div className="grid grid-cols-1 items-start gap-x-8 gap-y-5 sm:grid-cols-2">
       <div className="grid grid-cols-1 content-start gap-3">
         <Select
           id="outcome"

@@ -24,9 +24,12 @@ export function GridWithLevels(props: LevelGradeGridProps) {
   });
   const layout = { '--grid-rows': `auto auto ${rows.join(' ')} auto`, '--level-rows': runs.length } as CSSProperties;
   return (
-    <div style={layout} className="lg:grid lg:grid-cols-[156px_72px_repeat(7,minmax(0,1fr))] lg:[grid-template-rows:var(--grid-rows)]">
+    <div
+      style={layout}
+      className="beside:grid beside:grid-cols-[156px_88px_repeat(7,minmax(0,1fr))] beside:[grid-template-rows:var(--grid-rows)]"
+    >
       {scale !== null && (
-        <div className="mb-4 lg:col-start-2 lg:col-end-[-1] lg:row-start-1 lg:self-end">
+        <div className="mb-4 beside:col-start-2 beside:col-end-[-1] beside:row-start-1 beside:self-end">
           <IntervalKey grid={grid} scale={scale} />
         </div>
       )}
@@ -35,14 +38,14 @@ export function GridWithLevels(props: LevelGradeGridProps) {
         aria-expanded={columnOpen}
         aria-controls="level-column"
         onClick={() => setColumnOpen(!columnOpen)}
-        className="not-printed mb-3 min-h-10 rounded-sm border border-edge px-4 font-semibold lg:hidden"
+        className="not-printed mb-3 min-h-10 rounded-sm border border-edge px-4 font-semibold beside:hidden"
       >
         {columnOpen ? 'Close the level column' : 'Choose by level'}
       </button>
       {/* Its two parts, the typed range and the column, take their places above and beside the rows of the grid. */}
       <div
         id="level-column"
-        className={`${columnOpen ? 'mb-6' : 'hidden'} not-printed lg:contents lg:[&_form]:col-start-1 lg:[&_form]:row-start-1 lg:[&_form]:mr-4 lg:[&_form]:mb-4 lg:[&_form]:self-end lg:[&_ul]:col-start-1 lg:[&_ul]:mr-4 lg:[&_ul]:self-start lg:[&_ul]:[grid-row:3/span_var(--level-rows)] lg:[&>div]:contents`}
+        className={`${columnOpen ? 'mb-6' : 'hidden'} not-printed beside:contents beside:[&_form]:col-start-1 beside:[&_form]:row-start-1 beside:[&_form]:mr-4 beside:[&_form]:mb-4 beside:[&_form]:self-end beside:[&_ul]:col-start-1 beside:[&_ul]:mr-4 beside:[&_ul]:self-start beside:[&_ul]:[grid-row:3/span_var(--level-rows)] beside:[&>div]:contents`}
       >
         <LevelColumn
           label="Participants by level of injury"
@@ -50,11 +53,11 @@ export function GridWithLevels(props: LevelGradeGridProps) {
           range={rangeOf(grid, chosen)}
           onRangeChange={(range: LevelRange | null) => onChoose((before) => chooseLevels(grid, before, range))}
         />
-        <p className="mt-1 text-small text-quiet lg:col-start-1 lg:row-start-2 lg:mt-0 lg:mr-4 lg:mb-2 lg:self-end">
+        <p className="mt-1 text-small text-quiet beside:col-start-1 beside:row-start-2 beside:mt-0 beside:mr-4 beside:mb-2 beside:self-end">
           People at each level{grid.site === null && ', to the nearest 5'}
         </p>
       </div>
-      <div className="scrolls overflow-x-auto lg:contents">
+      <div className="scrolls overflow-x-auto beside:contents">
         <LevelGradeGrid {...props} />
       </div>
     </div>

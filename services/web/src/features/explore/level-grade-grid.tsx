@@ -103,13 +103,13 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
       aria-labelledby={labelledBy}
       aria-multiselectable="true"
       onKeyDown={onKeyDown}
-      className="block w-full border-separate border-spacing-0 columns:table columns:table-fixed lg:col-start-2 lg:col-end-[-1] lg:row-start-2 lg:row-end-[-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
+      className="block w-full border-separate border-spacing-0 columns:table columns:table-fixed beside:col-start-2 beside:col-end-[-1] beside:row-start-2 beside:row-end-[-1] beside:grid beside:grid-cols-subgrid beside:grid-rows-subgrid"
     >
       <thead
         role="rowgroup"
-        className="hidden columns:table-header-group lg:sticky lg:top-0 lg:z-10 lg:col-span-full lg:row-start-1 lg:grid lg:grid-cols-subgrid"
+        className="hidden columns:table-header-group beside:sticky beside:top-0 beside:z-10 beside:col-span-full beside:row-start-1 beside:grid beside:grid-cols-subgrid"
       >
-        <tr role="row" className="lg:col-span-full lg:grid lg:grid-cols-subgrid">
+        <tr role="row" className="beside:col-span-full beside:grid beside:grid-cols-subgrid">
           <td role="gridcell" className={`${headLook} columns:w-22`}>
             <span className="text-small text-quiet">Level</span>
           </td>
@@ -132,7 +132,7 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
       </thead>
       <tbody
         role="rowgroup"
-        className="block columns:table-row-group lg:col-span-full lg:[grid-row:2/-1] lg:grid lg:grid-cols-subgrid lg:grid-rows-subgrid"
+        className="block columns:table-row-group beside:col-span-full beside:[grid-row:2/-1] beside:grid beside:grid-cols-subgrid beside:grid-rows-subgrid"
       >
         {rows.map(({ levelGroup, label, cells, total }, row) => (
           <tr key={levelGroup} role="row" className={rowLook}>
@@ -190,12 +190,12 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
 }
 
 const headLook =
-  'border-b border-edge bg-sheet pr-2 pb-2 pl-3 text-left align-bottom font-normal focus-visible:-outline-offset-2 lg:flex lg:flex-col lg:justify-end';
-const rowLook = 'block border-b border-hairline columns:table-row lg:col-span-full lg:grid lg:grid-cols-subgrid';
+  'border-b border-edge bg-sheet pr-2 pb-2 pl-3 text-left align-bottom font-normal focus-visible:-outline-offset-2 beside:flex beside:flex-col beside:justify-end';
+const rowLook = 'block border-b border-hairline columns:table-row beside:col-span-full beside:grid beside:grid-cols-subgrid';
 const rowHeadLook =
-  'block bg-sheet pt-4 pb-1 text-left font-semibold columns:text-small lg:text-base print:text-[9pt] focus-visible:-outline-offset-2 columns:table-cell columns:border-b columns:border-hairline columns:py-2 columns:pr-2 columns:align-top lg:border-0';
+  'block bg-sheet pt-4 pb-1 text-left font-semibold columns:text-small print:text-[9pt] focus-visible:-outline-offset-2 columns:table-cell columns:border-b columns:border-hairline columns:py-2 columns:pr-1 columns:align-top beside:border-0';
 const cellLook =
-  'relative block scroll-mt-28 scroll-mb-32 py-1.5 pr-1 pl-3 columns:table-cell columns:border-b columns:border-b-hairline columns:align-top lg:block lg:border-b-0';
+  'relative block scroll-mt-28 scroll-mb-32 py-1.5 pr-0.5 pl-2.5 columns:table-cell columns:border-b columns:border-b-hairline columns:align-top beside:block beside:border-b-0';
 const totalRowLook = 'columns:border-t columns:border-t-edge';
 const totalColumnLook = 'columns:border-l columns:border-l-edge';
 

@@ -19,9 +19,18 @@ export interface Draft {
   readonly cohortBrought: boolean;
 }
 
+/** Drafts left while something was still to be kept: whoever comes back finds what they typed, and one keeper alone writes a draft. */
+const left = new Map<string, DraftKeeper<RequestForm>>();
+
+function keeperOf({ id, form }: AccessRequest, save: (draft: RequestForm) => Promise<unknown>): DraftKeeper<RequestForm> {
+  const before = left.get(id);
+  left.delete(id);
+  return before?.isBehind === true ? before : new DraftKeeper(form, save);
+}
+
 export function useDraft(request: AccessRequest): Draft {
   const save = useSaveRequest(request.id);
-  const [keeper] = useState(() => new DraftKeeper<RequestForm>(request.form, (draft) => save.mutateAsync(draft)));
+  const [keeper] = useState(() => keeperOf(request, (draft) => save.mutateAsync(draft)));
   const [search] = useSearchParams();
   const [brought] = useState(() => cohortIn(search));
   const changeAddress = useAddressChange();
@@ -41,9 +50,10 @@ export function useDraft(request: AccessRequest): Draft {
     window.addEventListener('beforeunload', warn);
     return () => {
       window.removeEventListener('beforeunload', warn);
+      if (keeper.isBehind) left.set(request.id, keeper);
       void keeper.flush().catch(() => undefined);
     };
-  }, [keeper]);
+  }, [keeper, request.id]);
 
   return {
     form: useSyncExternalStore(keeper.subscribe, keeper.current),
