@@ -8,6 +8,7 @@ import type { ColumnRole } from './detection-context.ts';
 import { headerHits } from './header-rules.ts';
 import type { Hit } from './hit.ts';
 import type { IdentifierFinding } from './identifier-finding.ts';
+import { hitsInHeader, showableHeader } from './showable-header.ts';
 
 /** How one column is screened. */
 export interface ScreenedColumn {
@@ -33,22 +34,16 @@ export class ColumnScreen {
   private readonly statistics: ColumnStatistics;
   private readonly known = new Map<string, readonly Hit[]>();
   private readonly counts = new Map<string, { readonly hit: Hit; count: number; line: number | null }>();
-  /** The header may be shown: it does not look like somebody's name, date or number. */
-  private readonly isHeaderShown: boolean;
+  private readonly shownHeader: string | null;
 
   constructor(private readonly column: ScreenedColumn) {
     const { header, variable, role, isSafeHeader } = column;
     this.traits = columnTraits(header, variable === undefined ? role : roleOf(variable));
     this.isAllowed = variable === undefined ? () => false : declaredCells(variable);
     this.statistics = new ColumnStatistics(this.traits);
-    if (variable !== undefined || isSafeHeader) {
-      this.isHeaderShown = true;
-      return;
-    }
-    // A file without a header row has its first person there.
-    const inHeader = detectCell(header, columnTraits('', 'text'));
-    this.isHeaderShown = inHeader.length === 0 && header.trim() !== '';
-    for (const hit of [...headerHits(header), ...inHeader]) this.count(hit, 0, null);
+    const isTrusted = variable !== undefined || isSafeHeader;
+    this.shownHeader = isTrusted ? header : showableHeader(header);
+    if (!isTrusted) for (const hit of [...headerHits(header), ...hitsInHeader(header)]) this.count(hit, 0, null);
   }
 
   add(cell: string, line: number): void {
@@ -77,8 +72,8 @@ export class ColumnScreen {
   }
 
   findings(): IdentifierFinding[] {
-    const { table, number, header } = this.column;
-    const place = { table, columnNumber: number, column: this.isHeaderShown ? header : null };
+    const { table, number } = this.column;
+    const place = { table, columnNumber: number, column: this.shownHeader };
     const all = new Map(this.counts);
     for (const { count, line, ...hit } of this.statistics.hits()) {
       const key = `${hit.class}:${hit.strength}`;

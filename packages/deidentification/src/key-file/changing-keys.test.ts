@@ -3,6 +3,7 @@ import { drawSecret } from '../pseudonyms/keyed-hash.ts';
 import { usualNormalisation } from '../pseudonyms/normalise-local-id.ts';
 import { CodeBook } from './code-book.ts';
 import { joinLocalIds } from './join-local-ids.ts';
+import { joinPeople } from './join-people.ts';
 import { KeyFileRefusal } from './key-file-refusal.ts';
 import { mergeKeys } from './merge-keys.ts';
 import { rotateKey } from './rotate-key.ts';
@@ -15,7 +16,7 @@ const newKey = (mode: PseudonymMode): SiteKey => ({
   idType: 'mrn',
   normalisation: usualNormalisation,
   generations: [{ keyId: '2026-01', secret: drawSecret(), codes: new Map(), replacedBy: new Map() }],
-  indexDates: new Map(),
+  people: new Map(),
   matches: new Map(),
   idLengths: new Map(),
 });
@@ -27,7 +28,7 @@ async function withPeople(key: SiteKey, people: Readonly<Record<string, string>>
   for (const [localId, indexDate] of Object.entries(people)) {
     const { code } = await book.codeOf(localId);
     codes[localId] = code;
-    if (indexDate !== '') book.indexDates.set(code, indexDate);
+    if (indexDate !== '') book.remember(code, { indexDate });
   }
   return { key: book.close(), codes };
 }
@@ -45,15 +46,15 @@ describe.each(['random', 'hmac'] as const)('a code book in %s mode', (mode) => {
 
   it('does not list record numbers', async () => {
     const { key } = await withPeople(newKey(mode), { '00482913': '2026-01-15' });
-    expect(JSON.stringify([...key.generations[0].codes, ...key.indexDates])).not.toContain('00482913');
+    expect(JSON.stringify([...key.generations[0].codes, ...key.people])).not.toContain('00482913');
   });
 
   it('carries people over to a new secret, some at once and the others when they are met', async () => {
     const before = await withPeople(newKey(mode), { A1: '2026-01-15', B2: '2026-02-20' });
     const { key, replaced } = await rotateKey(before.key, '2027-01', ['A1', 'NEW']);
     expect(replaced).toEqual([{ from: before.codes['A1'], to: expect.not.stringContaining(before.codes['A1'] ?? '') as string }]);
-    expect(key.indexDates.get(replaced[0]?.to ?? '')).toBe('2026-01-15');
-    expect(key.indexDates.has(before.codes['A1'] ?? '')).toBe(false);
+    expect(key.people.get(replaced[0]?.to ?? '')).toEqual({ indexDate: '2026-01-15' });
+    expect(key.people.has(before.codes['A1'] ?? '')).toBe(false);
     await expect(rotateKey(key, '2026-01', [])).rejects.toThrow(RangeError);
 
     const later = await CodeBook.open(key);
@@ -61,7 +62,7 @@ describe.each(['random', 'hmac'] as const)('a code book in %s mode', (mode) => {
     const carried = await later.codeOf('B2');
     expect(carried.isNew).toBe(false);
     expect(later.replacedCodes).toEqual([{ from: before.codes['B2'], to: carried.code }]);
-    expect(later.indexDates.get(carried.code)).toBe('2026-02-20');
+    expect(later.person(carried.code)).toEqual({ indexDate: '2026-02-20' });
 
     const again = await CodeBook.open(later.close());
     expect((await again.codeOf('B2')).code).toBe(carried.code);
@@ -72,7 +73,7 @@ describe.each(['random', 'hmac'] as const)('a code book in %s mode', (mode) => {
     const before = await withPeople(newKey(mode), { A1: '2026-02-20', B2: '2026-01-15' });
     const joined = await joinLocalIds(before.key, 'A1', 'B2');
     expect(joined.replaced).toEqual([{ from: before.codes['B2'], to: before.codes['A1'] }]);
-    expect([...joined.key.indexDates]).toEqual([[before.codes['A1'], '2026-01-15']]);
+    expect([...joined.key.people]).toEqual([[before.codes['A1'], { indexDate: '2026-01-15' }]]);
     expect((await joinLocalIds(joined.key, 'A1', 'B2')).replaced).toEqual([]);
 
     const { key, replaced } = await rotateKey(joined.key, '2027-01', ['B2']);
@@ -91,6 +92,17 @@ describe.each(['random', 'hmac'] as const)('a code book in %s mode', (mode) => {
   });
 });
 
+describe('facts of two people who turn out to be one', () => {
+  it('are joined so that the earlier day and the higher age stay', () => {
+    expect(joinPeople({ indexDate: '2026-02-01', age: 61, lastDay: 40 }, { indexDate: '2026-01-15', age: 62 })).toEqual({
+      indexDate: '2026-01-15',
+      age: 62,
+      lastDay: 40,
+    });
+    expect(joinPeople({}, undefined)).toEqual({});
+  });
+});
+
 describe('two copies of a key', () => {
   it('become one: the code that sorts first stays, and the earlier first training day counts', async () => {
     const start = await withPeople(newKey('random'), { A1: '2026-01-15' });
@@ -101,8 +113,8 @@ describe('two copies of a key', () => {
     const [kept = '', retired = ''] = [mine.codes['B2'] ?? '', theirs.codes['B2'] ?? ''].sort();
     expect(merged.replaced).toEqual([{ from: retired, to: kept }]);
     expect(merged.indexDatesMoved).toEqual([kept]);
-    expect(merged.key.indexDates.get(kept)).toBe('2026-02-18');
-    expect(merged.key.indexDates.has(retired)).toBe(false);
+    expect(merged.key.people.get(kept)).toEqual({ indexDate: '2026-02-18' });
+    expect(merged.key.people.has(retired)).toBe(false);
     const book = await CodeBook.open(merged.key);
     expect((await book.codeOf('A1')).code).toBe(start.codes['A1']);
     expect((await book.codeOf('B2')).code).toBe(kept);
@@ -111,7 +123,7 @@ describe('two copies of a key', () => {
 
     const turned = mergeKeys(theirs.key, mine.key);
     expect(turned.replaced).toEqual(merged.replaced);
-    expect([...turned.key.indexDates].sort()).toEqual([...merged.key.indexDates].sort());
+    expect(new Map([...turned.key.people].sort())).toEqual(new Map([...merged.key.people].sort()));
   });
 
   it('become one when both went on after a rotation', async () => {
@@ -122,7 +134,7 @@ describe('two copies of a key', () => {
     const merged = mergeKeys(mine.key, theirs.key);
     const kept = [mine.codes['A1'] ?? '', theirs.codes['A1'] ?? ''].sort()[0] ?? '';
     expect(merged.key.generations[1]?.replacedBy.get(start.codes['A1'] ?? '')).toBe(kept);
-    expect([...merged.key.indexDates]).toEqual([[kept, '2026-01-15']]);
+    expect([...merged.key.people]).toEqual([[kept, { indexDate: '2026-01-15' }]]);
   });
 
   it('take the column matches of the copy that was saved more often', () => {

@@ -3,7 +3,8 @@ import { pseudonymFromHmac } from '../pseudonyms/pseudonym-from-hmac.ts';
 import { randomPseudonym } from '../pseudonyms/random-pseudonym.ts';
 import type { ReplacedCode } from '../preparation/month.ts';
 import { toBase64 } from './base64.ts';
-import type { KeyGeneration, SiteKey } from './site-key.ts';
+import { joinPeople } from './join-people.ts';
+import type { KeyGeneration, KnownPerson, SiteKey } from './site-key.ts';
 
 export interface FoundCode {
   readonly code: string;
@@ -27,8 +28,7 @@ interface OpenGeneration {
  * present secret, and the pair is remembered for the registry.
  */
 export class CodeBook {
-  /** First training days by code, to be read and filled while the book is open. */
-  readonly indexDates: Map<string, string>;
+  private readonly people: Map<string, KnownPerson>;
   private readonly replaced: ReplacedCode[] = [];
   private readonly found = new Map<string, FoundCode>();
 
@@ -36,7 +36,7 @@ export class CodeBook {
     private readonly key: SiteKey,
     private readonly generations: readonly [OpenGeneration, ...OpenGeneration[]],
   ) {
-    this.indexDates = new Map(key.indexDates);
+    this.people = new Map(key.people);
   }
 
   static async open(key: SiteKey): Promise<CodeBook> {
@@ -61,13 +61,23 @@ export class CodeBook {
     return found;
   }
 
+  /** What is remembered of the person with this code. */
+  person(code: string): KnownPerson {
+    return this.people.get(code) ?? {};
+  }
+
+  remember(code: string, facts: KnownPerson): void {
+    this.people.set(code, { ...this.person(code), ...facts });
+  }
+
   /** Lets a record number lead to the code of another one: the same person, twice in the clinic's system. */
   async join(localId: string, code: string): Promise<void> {
     const { code: own, isNew } = await this.codeOf(localId);
     if (own === code) return;
     this.generations[0].codes.set(await this.lookUpIn(this.generations[0], localId), code);
     this.found.set(localId, { code, isNew: false });
-    if (!isNew) this.replace(own, code);
+    if (isNew) this.people.delete(own);
+    else this.replace(own, code);
   }
 
   /** Codes that others replaced while the book was open. */
@@ -79,7 +89,11 @@ export class CodeBook {
   close(): SiteKey {
     const closeGeneration = ({ keyId, secret, codes, replacedBy }: OpenGeneration): KeyGeneration => ({ keyId, secret, codes, replacedBy });
     const [current, ...earlier] = this.generations;
-    return { ...this.key, indexDates: this.indexDates, generations: [closeGeneration(current), ...earlier.map(closeGeneration)] };
+    return {
+      ...this.key,
+      people: this.people,
+      generations: [closeGeneration(current), ...earlier.map(closeGeneration)],
+    };
   }
 
   /** The present code of somebody known, carried over from an older secret where needed. */
@@ -98,7 +112,7 @@ export class CodeBook {
     const remembered = generation.codes.get(await this.lookUpIn(generation, localId));
     if (remembered !== undefined || this.key.mode === 'random') return remembered;
     const code = await this.computed(generation, localId);
-    return this.indexDates.has(code) || generation.replacedBy.has(code) ? code : undefined;
+    return this.people.has(code) || generation.replacedBy.has(code) ? code : undefined;
   }
 
   /** The code under the present secret of somebody known under an older one. */
@@ -116,18 +130,16 @@ export class CodeBook {
 
   private async makeCode(localId: string): Promise<string> {
     const [current] = this.generations;
-    if (this.key.mode === 'hmac') return this.computed(current, localId);
-    const code = await randomPseudonym();
-    current.codes.set(await this.lookUpIn(current, localId), code);
+    const code = this.key.mode === 'hmac' ? await this.computed(current, localId) : await randomPseudonym();
+    if (this.key.mode === 'random') current.codes.set(await this.lookUpIn(current, localId), code);
+    this.people.set(code, {});
     return code;
   }
 
-  /** The earlier of two first training days is the first one. */
   private replace(from: string, to: string): void {
     this.replaced.push({ from, to });
-    const [lost, kept] = [this.indexDates.get(from), this.indexDates.get(to)];
-    this.indexDates.delete(from);
-    if (lost !== undefined && (kept === undefined || lost < kept)) this.indexDates.set(to, lost);
+    this.people.set(to, joinPeople(this.people.get(to), this.people.get(from)));
+    this.people.delete(from);
   }
 
   private computed({ hmac }: OpenGeneration, localId: string): Promise<string> {

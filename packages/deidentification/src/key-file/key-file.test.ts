@@ -83,7 +83,10 @@ describe('a key file', () => {
           replacedBy: new Map([['S0', 'S1']]),
         },
       ],
-      indexDates: new Map([['S1', '2026-01-15']]),
+      people: new Map([
+        ['S1', { indexDate: '2026-01-15', age: 61, lastDay: -3 }],
+        ['S2', {}],
+      ]),
       matches: new Map([
         [
           'sessions',
@@ -110,7 +113,7 @@ describe('a key file', () => {
   });
 
   it('shows none of it', () => {
-    for (const word of ['2026-01-15', 'session_day', 'MRN', '240', 'indexDates']) expect(file).not.toContain(word);
+    for (const word of ['2026-01-15', 'session_day', 'MRN', '240', 'people']) expect(file).not.toContain(word);
   });
 
   it('is refused when it is older than one used before', async () => {

@@ -36,7 +36,7 @@ export async function createKeyFile(settings: KeySettings, passphrase: string): 
     idType,
     normalisation,
     generations: [{ keyId, secret: drawSecret(), codes: new Map(), replacedBy: new Map() }],
-    indexDates: new Map(),
+    people: new Map(),
     matches: new Map(),
     idLengths: new Map(),
   };

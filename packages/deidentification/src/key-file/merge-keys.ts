@@ -1,9 +1,9 @@
-import type { IsoDate } from '../dates/date-format.ts';
 import type { ReplacedCode } from '../preparation/month.ts';
 import { canonicalJson } from './canonical-json.ts';
+import { joinPeople } from './join-people.ts';
 import { KeyFileRefusal } from './key-file-refusal.ts';
 import type { KeyChange } from './rotate-key.ts';
-import type { KeyGeneration, SiteKey } from './site-key.ts';
+import type { KeyGeneration, KnownPerson, SiteKey } from './site-key.ts';
 
 export interface MergedKey extends KeyChange {
   /** People whose first training day differed between the files. Rows sent with the later one have to be sent again. */
@@ -36,12 +36,12 @@ export function mergeKeys(one: SiteKey, other: SiteKey): MergedKey {
     codes: new Map([...kept(codes), ...kept(pair.codes)]),
     replacedBy: new Map([...kept(replacedBy), ...kept(pair.replacedBy)]),
   }));
-  const { indexDates, moved } = mergeIndexDates([...newer.indexDates, ...older.indexDates], same);
+  const { people, moved } = mergePeople([...newer.people, ...older.people], same);
   return {
     key: {
       ...newer,
       generations: merged as unknown as SiteKey['generations'],
-      indexDates,
+      people,
       matches: new Map([...older.matches, ...newer.matches]),
     },
     replaced: same.replaced(),
@@ -54,19 +54,19 @@ function originOf({ site, mode, idType, normalisation, generations }: SiteKey): 
   return canonicalJson({ site, mode, idType, normalisation, secrets: generations.map(({ keyId, secret }) => [keyId, [...secret]]) });
 }
 
-function mergeIndexDates(
-  all: readonly (readonly [string, IsoDate])[],
+function mergePeople(
+  all: readonly (readonly [string, KnownPerson])[],
   same: SameCodes,
-): { indexDates: Map<string, IsoDate>; moved: string[] } {
-  const indexDates = new Map<string, IsoDate>();
+): { people: Map<string, KnownPerson>; moved: string[] } {
+  const people = new Map<string, KnownPerson>();
   const moved = new Set<string>();
-  for (const [code, date] of all) {
+  for (const [code, person] of all) {
     const kept = same.keptOf(code);
-    const before = indexDates.get(kept);
-    if (before !== undefined && before !== date) moved.add(kept);
-    if (before === undefined || date < before) indexDates.set(kept, date);
+    const before = people.get(kept);
+    if (before?.indexDate !== undefined && person.indexDate !== undefined && before.indexDate !== person.indexDate) moved.add(kept);
+    people.set(kept, joinPeople(before, person));
   }
-  return { indexDates, moved: [...moved].sort() };
+  return { people, moved: [...moved].sort() };
 }
 
 /** Codes that turn out to be one person's, in groups; of each group the code that sorts first is kept. */

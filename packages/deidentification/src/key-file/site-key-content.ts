@@ -7,7 +7,7 @@ import type { ColumnMatch } from '../preparation/column-match.ts';
 import { fromBase64, toBase64 } from './base64.ts';
 import { canonicalJson } from './canonical-json.ts';
 import { KeyFileRefusal } from './key-file-refusal.ts';
-import type { KeyGeneration, SiteKey } from './site-key.ts';
+import type { KeyGeneration, KnownPerson, SiteKey } from './site-key.ts';
 
 const generationContent = ({ secret, codes, replacedBy }: KeyGeneration) => ({
   secret: toBase64(secret),
@@ -16,7 +16,7 @@ const generationContent = ({ secret, codes, replacedBy }: KeyGeneration) => ({
 });
 
 export function contentOf(key: SiteKey): string {
-  const { revision, mode, idType, normalisation, generations, indexDates, matches, idLengths } = key;
+  const { revision, mode, idType, normalisation, generations, people, matches, idLengths } = key;
   const [current, ...earlier] = generations;
   return canonicalJson({
     ...generationContent(current),
@@ -24,7 +24,7 @@ export function contentOf(key: SiteKey): string {
     mode,
     idType,
     normalisation,
-    indexDates: [...indexDates],
+    people: [...people],
     matches: [...matches],
     idLengths: [...idLengths],
     earlier: earlier.map((generation) => ({ keyId: generation.keyId, ...generationContent(generation) })),
@@ -82,6 +82,16 @@ function columnMatch(value: unknown): ColumnMatch {
   }
 }
 
+function person(value: unknown): KnownPerson {
+  const { indexDate, age, lastDay } = fields(value);
+  if (lastDay !== undefined && !Number.isSafeInteger(lastDay)) refuse();
+  return {
+    ...(indexDate === undefined ? {} : { indexDate: text(indexDate) }),
+    ...(age === undefined ? {} : { age: count(age) }),
+    ...(lastDay === undefined ? {} : { lastDay: Number(lastDay) }),
+  };
+}
+
 function generation(content: Fields, keyId: string): KeyGeneration {
   return {
     keyId,
@@ -111,7 +121,7 @@ export function keyFromContent(content: string, site: string, keyId: string): Si
         generation(parsed, keyId),
         ...list(parsed['earlier'] ?? [], (each) => generation(fields(each), text(fields(each)['keyId']))),
       ],
-      indexDates: pairs(parsed['indexDates'], text, text),
+      people: pairs(parsed['people'], text, person),
       matches: pairs(
         parsed['matches'],
         (table) => oneOf<TableKey>(table, tableKeys),

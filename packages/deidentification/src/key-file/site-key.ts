@@ -16,6 +16,16 @@ export interface KeyGeneration {
   readonly replacedBy: ReadonlyMap<string, string>;
 }
 
+/** What is remembered of one person. */
+export interface KnownPerson {
+  /** First training day. */
+  readonly indexDate?: IsoDate;
+  /** Age on that day as last sent, before a study day made it 90. */
+  readonly age?: number;
+  /** Highest study day sent so far: with the age it may tell of an age over 89. */
+  readonly lastDay?: number;
+}
+
 /** Everything that links a site's people to their codes: the content of its key file. Never sent to the registry. */
 export interface SiteKey {
   readonly site: string;
@@ -27,8 +37,8 @@ export interface SiteKey {
   readonly normalisation: NormalisationOptions;
   /** Newest first; never empty. */
   readonly generations: readonly [KeyGeneration, ...KeyGeneration[]];
-  /** Participant code → first training day. */
-  readonly indexDates: ReadonlyMap<string, IsoDate>;
+  /** Participant code → what later months need. */
+  readonly people: ReadonlyMap<string, KnownPerson>;
   /** How the clinic's columns were matched last time. */
   readonly matches: StoredMatches;
   /** Length of a normalised record number → how many had it in the last month prepared. */

@@ -19,6 +19,8 @@ export interface MonthInput {
   readonly key: SiteKey;
   /** First training days the coordinator states, by record number as the files write it. */
   readonly indexDates?: ReadonlyMap<string, IsoDate>;
+  /** Headers that a steward has marked as safe for this site. */
+  readonly safeHeaders?: ReadonlySet<string>;
 }
 
 /** Rows ready to be sent: the columns of the dictionary that the file has, and typed cells written as text; '' where a cell is empty. */
@@ -33,6 +35,7 @@ export interface CleanTable {
 export type ProblemKind =
   | 'no-participant-column'
   | 'column-matched-twice'
+  | 'repeated-header'
   | 'no-such-column'
   | 'no-such-variable'
   | 'identifiers-in-column'
@@ -43,10 +46,10 @@ export type ProblemKind =
   | 'index-date-differs'
   | 'unreadable-cell'
   | 'value-withheld'
-  | 'age-unknown'
-  | 'short-row';
+  | 'age-to-correct'
+  | 'long-row';
 
-/** Something the site has to mend or confirm. Holds no cell and no header that looks like an identifier. */
+/** Something the site has to mend or confirm. Holds no cell and no header. */
 export interface PreparationProblem {
   readonly kind: ProblemKind;
   readonly table: TableKey;
@@ -63,9 +66,8 @@ export interface PreparationProblem {
 
 export interface DroppedColumn {
   readonly table: TableKey;
+  /** Position of the column in the clinic's file, 1 for the first. */
   readonly columnNumber: number;
-  /** The header; null when it looks like an identifier itself, or is empty. */
-  readonly column: string | null;
   readonly reason: 'not-in-the-dictionary' | 'left-out' | 'holds-identifiers';
 }
 
@@ -105,11 +107,14 @@ export interface PreparedMonth {
   readonly newParticipants: readonly NewParticipant[];
   readonly replacedCodes: readonly ReplacedCode[];
   readonly problems: readonly PreparationProblem[];
+  /** What the detectors saw in columns that stay behind or were taken for values. No header is repeated: one may be a name. */
   readonly findings: readonly IdentifierFinding[];
+  /** Participants whose age became 90 because they are older, or because a study day of this month tells so. */
+  readonly agesTopCoded: number;
   readonly preview: readonly TablePreview[];
   /** Null when there is no last month to compare with. */
   readonly lengthChange: LengthChange | null;
-  /** How each table's columns were matched, to be shown, changed and given back. */
+  /** How each table's columns were matched, to be shown, changed and given back; with the headers, so for the site alone. */
   readonly matches: readonly { readonly table: TableKey; readonly matches: readonly ColumnMatch[] }[];
   /** The key with what this month added. Save it before sending; never send it. */
   readonly key: SiteKey;
