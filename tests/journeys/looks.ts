@@ -21,6 +21,7 @@ export async function look(page: Page, name: string): Promise<void> {
     await page.emulateMedia({ colorScheme: scheme });
     for (const size of sizes) {
       await page.setViewportSize(size);
+      await drawn(page);
       const { violations } = await new AxeBuilder({ page }).analyze();
       const found = violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`);
       expect(found, `${name}, ${scheme}, ${size.width} px`).toEqual([]);
@@ -31,4 +32,9 @@ export async function look(page: Page, name: string): Promise<void> {
   }
   await page.emulateMedia({ colorScheme: 'light' });
   if (before !== null) await page.setViewportSize(before);
+}
+
+/** The scheme changes while the page lives, and what inherits a colour may be a frame behind. */
+function drawn(page: Page): Promise<void> {
+  return page.evaluate(() => new Promise((done) => requestAnimationFrame(() => requestAnimationFrame(() => done()))));
 }
