@@ -42,7 +42,7 @@ const sessions: RawTable = {
 const month = (tables: readonly RawTable[], more: Partial<MonthInput> = {}): MonthInput => ({ tables, key: newKey(), ...more });
 const kinds = ({ problems }: PreparedMonth) => problems.map(({ kind, variable }) => (variable === null ? kind : `${kind} ${variable}`));
 const cellsOf = (prepared: PreparedMonth, table: number, column: string) => {
-  const { headers, rows } = prepared.clean[table] ?? { headers: [], rows: [] };
+  const { headers, rows } = prepared.clean[table] ?? { headers: [] as readonly string[], rows: [] as readonly (readonly string[])[] };
   return rows.map((row) => row[headers.indexOf(column)]);
 };
 
