@@ -31,7 +31,10 @@ test('invites a researcher by mail, who takes the role, works with it, and loses
   await look(page, 'administrator-1-missing');
 
   await page.getByRole('textbox', { name: 'E-mail' }).fill(guest.email);
-  await page.getByText('researcher', { exact: true }).last().click();
+  await page
+    .locator('label')
+    .filter({ hasText: /^researcher/ })
+    .click();
   await page.getByRole('button', { name: 'Send the invitation' }).click();
   await expect(page.getByText(`Done. An invitation is on its way to ${guest.email}.`)).toBeVisible();
   await expect(page.getByRole('row', { name: new RegExp(`^${guest.email} researcher sent, not used yet`) })).toBeVisible();
@@ -73,16 +76,19 @@ test('invites a researcher by mail, who takes the role, works with it, and loses
   await theirs.goto('/explore');
   await expect(theirs).toHaveURL(/\/whom-to-ask$/);
   await elsewhere.close();
+
+  await page.getByRole('navigation', { name: 'Pages' }).getByRole('link', { name: 'Audit' }).click();
+  for (const act of ['role ended', 'invitation sent']) {
+    await expect(page.getByRole('row', { name: new RegExp(`Ruth Adeyemi administrator ${act}`) }).first()).toBeVisible();
+  }
+  await look(page, 'administrator-7-audit');
 });
 
-test('cannot change the own account, and finds what was done in the log', async ({ page }) => {
+test('cannot change the own account', async ({ page }) => {
   await signIn(page, 'Ruth Adeyemi');
   await page.getByRole('textbox', { name: 'Search' }).fill('ruth');
   await page.getByRole('link', { name: 'Ruth Adeyemi' }).click();
   await expect(page.getByText('Nobody can change their own roles or account.')).toBeVisible();
   await expect(page.getByRole('button', { name: /role|account/ })).toHaveCount(0);
   await look(page, 'administrator-6-own-account');
-  await page.getByRole('navigation', { name: 'Pages' }).getByRole('link', { name: 'Audit' }).click();
-  await expect(page.getByRole('row', { name: /Ruth Adeyemi administrator role ended/ }).first()).toBeVisible();
-  await look(page, 'administrator-7-audit');
 });

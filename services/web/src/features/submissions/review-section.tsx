@@ -72,7 +72,7 @@ export function ChangeCounts({ id, caption, tables, fileName, linked = false }: 
       header: word,
       kind: 'number' as const,
       value: (row: TableChange) => row[kind],
-      cell: (row: TableChange) => (linked ? <CountLink row={row} kind={kind} /> : formatNumber(row[kind])),
+      cell: (row: TableChange) => (linked ? <CountLink row={row} kind={kind} word={word} /> : formatNumber(row[kind])),
     })),
   ];
   return (
@@ -88,7 +88,7 @@ export function ChangeCounts({ id, caption, tables, fileName, linked = false }: 
   );
 }
 
-function CountLink({ row, kind }: { readonly row: TableChange; readonly kind: ChangeKind }) {
+function CountLink({ row, kind, word }: { readonly row: TableChange; readonly kind: ChangeKind; readonly word: string }) {
   const [search] = useSearchParams();
   const count = formatNumber(row[kind]);
   if (row[kind] === 0) return count;
@@ -101,7 +101,7 @@ function CountLink({ row, kind }: { readonly row: TableChange; readonly kind: Ch
       {kind === 'removed' ? <strong className="font-semibold text-oxide">{count}</strong> : count}
       <span className="sr-only">
         {' '}
-        {kind} rows of {tableName(row.table).toLowerCase()}
+        {word.toLowerCase()} rows of {tableName(row.table).toLowerCase()}
       </span>
     </TextLink>
   );
