@@ -6,6 +6,7 @@ import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
+import { joinWholeTables } from '../../database/join-whole-tables.ts';
 import { Refusal } from '../../http/refusal.ts';
 import { readRelease, type ReleaseRecord } from './explore.repository.ts';
 
@@ -58,8 +59,7 @@ const digestOfFacts = `${consenting}
 
 export async function freeze(tx: Tx, madeBy: string | null, note: string): Promise<ReleaseRecord> {
   await tx.query("select pg_advisory_xact_lock(hashtext('release'))");
-  // Whole tables are joined here; a planner that has not counted them yet (a first release) would loop over them row by row.
-  await tx.query('set local enable_nestloop = off');
+  await joinWholeTables(tx);
   const newest = await readRelease(tx, undefined);
   const [facts] = (await tx.query(digestOfFacts)) as [{ digest: string; totals: ReleaseRecord['totals'] }];
   if (newest?.digest === facts.digest)

@@ -4,6 +4,7 @@ import { tableKeys, type TableKey } from '@cairnstep/dictionary';
 import type { z } from 'zod';
 import type { Tx } from '../../database/as-actor.ts';
 import { bind } from '../../database/bind.ts';
+import { joinWholeTables } from '../../database/join-whole-tables.ts';
 import { clearFacts, courseFacts, outcomeFacts } from './facts-sql.ts';
 import { tableSql } from './table-sql.ts';
 
@@ -18,6 +19,7 @@ const run = (tx: Tx, sql: string, values: Readonly<Record<string, unknown>>): Pr
 
 /** What a commit would do to each table, as the registry stands in this transaction. */
 export async function countChanges(tx: Tx, of: Applied): Promise<z.output<typeof TableChange>[]> {
+  await joinWholeTables(tx);
   const changes: z.output<typeof TableChange>[] = [];
   // Bouts go with their sessions, so they are looked at whenever sessions came.
   for (const table of tableKeys.filter((key) => of.tables.includes(key) || (key === 'bouts' && of.tables.includes('sessions')))) {
@@ -41,6 +43,7 @@ const order: readonly TableKey[] = ['participants', 'consents', 'exams', 'assess
 
 /** Does what the preview counted; the caller has made sure that it still holds. */
 export async function applyChanges(tx: Tx, of: Applied, preview: readonly z.output<typeof TableChange>[]): Promise<void> {
+  await joinWholeTables(tx);
   for (const table of order) {
     const change = preview.find((one) => one.table === table);
     if (!change) continue;

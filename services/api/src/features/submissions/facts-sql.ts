@@ -26,7 +26,8 @@ walked as (
   select s.participant, s.course_no, count(*)::int as bouts, coalesce(sum(b.duration_s), 0) / 60.0 as walking_min,
          coalesce(sum(b.distance_m), 0) as distance_m, coalesce(sum(b.steps), 0)::bigint as steps
     from sessions s join bouts b on b.site_id = s.site_id and b.participant = s.participant and b.session_day = s.session_day and b.session_no = s.session_no
-   where s.site_id = :site and s.participant = any(:people::text[]) and b.activity = 'walking' group by s.participant, s.course_no),
+   where s.site_id = :site and s.participant = any(:people::text[]) and b.participant = any(:people::text[]) and b.activity = 'walking'
+   group by s.participant, s.course_no),
 courses as (
   select participant, 1 as course_no from participants where site_id = :site and participant = any(:people::text[])
   union select participant, course_no from trained

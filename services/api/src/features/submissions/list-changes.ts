@@ -7,6 +7,7 @@ import type { Actor } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { bind } from '../../database/bind.ts';
+import { joinWholeTables } from '../../database/join-whole-tables.ts';
 import { visibleSubmission } from './read-submissions.ts';
 import { readFiles } from './submissions.repository.ts';
 import { tableSql } from './table-sql.ts';
@@ -51,6 +52,7 @@ export const listChanges = (
     if (total === 0 || settled) return { items: [], page, pageSize: rowsPerPage, total: settled ? 0 : total };
     const { rowKey, variables } = tableOf(table);
     const values = variables.map((variable) => variable.key).filter((column) => !rowKey.includes(column));
+    await joinWholeTables(tx);
     const rows = (await tx.query(
       ...bind(tableSql(table).list[kind], {
         submission: submissionId,
