@@ -10,6 +10,8 @@ export interface Measured {
   readonly peerName: string;
   /** What ours should not exceed, in the same unit. */
   readonly goal?: number;
+  /** What else was seen, printed below the table. */
+  readonly note?: string;
 }
 
 export interface Scenario {

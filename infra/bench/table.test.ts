@@ -13,6 +13,14 @@ describe('benchTable', () => {
     expect(missed).toContain('10 ms, missed');
   });
 
+  it('prints notes below the lines', () => {
+    expect(
+      benchTable([{ ...row, note: 'warm' }, row])
+        .split('\n')
+        .slice(3),
+    ).toEqual(['', 'grid: warm']);
+  });
+
   it('calls a goal missed only when there is one and ours is above it', () => {
     expect(missesGoal(row)).toBe(false);
     expect(missesGoal({ ...row, goal: 12.345 })).toBe(false);

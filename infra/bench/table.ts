@@ -16,16 +16,16 @@ function cellsOf(row: Row): string[] {
   return [name, `${figure(ours)} ${unit}`, `${figure(peer)} ${unit}`, figure(ours / peer), verdict, peerName];
 }
 
-/** One line a scenario; the ratio is ours divided by the peer's. */
+/** One line a scenario; the ratio is ours divided by the peer's. Notes follow. */
 export function benchTable(rows: readonly Row[]): string {
   const lines = [['scenario', 'ours', 'peer', 'ratio', 'goal', 'the peer'], ...rows.map(cellsOf)];
   const widths = lines[0]?.map((_, column) => Math.max(...lines.map((line) => line[column]?.length ?? 0))) ?? [];
-  return lines
-    .map((line) =>
-      line
-        .map((cell, column) => cell.padEnd(widths[column] ?? 0))
-        .join('  ')
-        .trimEnd(),
-    )
-    .join('\n');
+  const table = lines.map((line) =>
+    line
+      .map((cell, column) => cell.padEnd(widths[column] ?? 0))
+      .join('  ')
+      .trimEnd(),
+  );
+  const notes = rows.flatMap(({ name, note }) => (note === undefined ? [] : [`${name}: ${note}`]));
+  return [...table, ...(notes.length > 0 ? ['', ...notes] : [])].join('\n');
 }

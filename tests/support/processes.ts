@@ -8,6 +8,7 @@ import { answers } from '../../infra/start/ready.ts';
 import type { Config } from '../../services/api/src/config.ts';
 
 export interface TestProcess {
+  readonly pid: number;
   /** SIGKILL: no chance to finish anything. Resolves when it is gone. */
   kill(): Promise<void>;
   /** SIGTERM, and waits until it has ended in order. */
@@ -49,6 +50,7 @@ function launch(source: string, environment: NodeJS.ProcessEnv): TestProcess & {
   };
   return {
     child,
+    pid: child.pid ?? 0,
     kill: () => end('SIGKILL'),
     stop: () => end('SIGTERM'),
     hasEnded: () => child.exitCode !== null || child.signalCode !== null,
