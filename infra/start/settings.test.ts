@@ -18,7 +18,7 @@ describe('readSettings', () => {
       PORT: '8080',
       CAIRNSTEP_DATA_DIR: 'elsewhere',
       DATABASE_URL: 'postgres://admin@db.example/registry',
-      PUBLIC_URL: 'https://registry.example/',
+      PUBLIC_URL: 'https://cairnstep.example/',
       TRUST_PROXY: '1',
       LOG_LEVEL: 'debug',
     });
@@ -26,7 +26,7 @@ describe('readSettings', () => {
       port: 8080,
       dataFolder: 'elsewhere',
       databaseUrl: 'postgres://admin@db.example/registry',
-      publicUrl: 'https://registry.example',
+      publicUrl: 'https://cairnstep.example',
       trustProxy: 1,
       logLevel: 'debug',
     });
@@ -37,7 +37,7 @@ describe('readSettings', () => {
     ['PORT', '70000', 'PORT: expected 1 to 65535'],
     ['PORT', '', 'PORT: expected 1 to 65535'],
     ['DATABASE_URL', 'mysql://secret@db.example/registry', 'DATABASE_URL: expected an address such as postgres://'],
-    ['PUBLIC_URL', 'registry.example', 'PUBLIC_URL: expected an address such as https://'],
+    ['PUBLIC_URL', 'cairnstep.example', 'PUBLIC_URL: expected an address such as https://'],
     ['PUBLIC_URL', 'https://clinic.example/registry', 'PUBLIC_URL: expected an address without a path'],
     ['TRUST_PROXY', 'yes', 'TRUST_PROXY: expected the number of reverse proxies'],
     ['LOG_LEVEL', 'chatty', 'LOG_LEVEL: expected fatal, error'],

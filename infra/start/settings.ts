@@ -3,10 +3,10 @@ import { z } from 'zod';
 import { StartError } from './start-error.ts';
 
 const Origin = z
-  .url({ protocol: /^https?$/, error: 'expected an address such as https://registry.example', abort: true })
+  .url({ protocol: /^https?$/, error: 'expected an address such as https://cairnstep.example', abort: true })
   .refine(
     (address) => new URL(address).pathname === '/' && new URL(address).search === '',
-    'expected an address without a path, such as https://registry.example',
+    'expected an address without a path, such as https://cairnstep.example',
   )
   .transform((address) => new URL(address).origin);
 

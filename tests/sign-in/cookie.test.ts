@@ -8,14 +8,14 @@ afterEach(() => test.close());
 
 describe('the session cookie', () => {
   it('behind TLS carries the host prefix, Secure, HttpOnly and SameSite=Lax, and no domain', async () => {
-    test = await startSignInTest({ PUBLIC_URL: 'https://registry.example', TRUST_PROXY: '1' });
+    test = await startSignInTest({ PUBLIC_URL: 'https://cairnstep.example', TRUST_PROXY: '1' });
     const answer = await supertest(test.server.url).get('/api/sign-in').set('X-Forwarded-Proto', 'https').expect(303);
     const cookie = String(answer.headers['set-cookie']);
     expect(cookie).toMatch(/^__Host-cairnstep=/);
     for (const attribute of ['Path=/', 'Secure', 'HttpOnly', 'SameSite=Lax']) expect(cookie).toContain(attribute);
     expect(cookie).not.toContain('Domain');
     expect(new URL(answer.headers['location'] as string).searchParams.get('redirect_uri')).toBe(
-      'https://registry.example/api/sign-in/callback',
+      'https://cairnstep.example/api/sign-in/callback',
     );
     expect(answer.headers['strict-transport-security']).toBeDefined();
   });

@@ -142,7 +142,7 @@ describe('signing in', () => {
     const router = renderRoutes(routes, '/start');
     await heading('Nobody has given this account a role yet');
     expect(router.state.location.pathname).toBe('/whom-to-ask');
-    expect(screen.getByText('office@registry.example')).toBeTruthy();
+    expect(screen.getByText('office@cairnstep.example')).toBeTruthy();
   });
 
   it('sends a stranger from there to signing in', async () => {

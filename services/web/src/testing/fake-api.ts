@@ -56,7 +56,7 @@ export const nobody: Account = {
   grants: [],
   may: [],
   demonstration: false,
-  contact: 'office@registry.example',
+  contact: 'office@cairnstep.example',
 };
 
 export const site = { id: '6f1de0c4-52f6-4f3a-9d0e-2b7f3f1c8a11', code: 'S01', name: 'North Harbour Clinic' };
