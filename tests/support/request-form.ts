@@ -1,28 +1,7 @@
 /** Access requests as a researcher fills them in. */
-import type { RequestForm } from '../../packages/contract/src/index.ts';
+import { emptyRequestForm, type RequestForm } from '../../packages/contract/src/index.ts';
 
-export const emptyForm: RequestForm = {
-  title: '',
-  question: '',
-  laySummary: '',
-  purpose: null,
-  ethicsCommittee: '',
-  ethicsReference: '',
-  ethicsExpiresOn: null,
-  organisationType: null,
-  country: null,
-  commercialInterest: null,
-  funding: '',
-  storage: '',
-  tables: [],
-  team: [],
-  months: null,
-  agreesToPublish: null,
-  agreesToCollaborate: null,
-  agreesToReturn: null,
-  termsAccepted: false,
-  cohort: { outcome: 'tmwt_ss', inDevice: false, cells: [] },
-};
+export const emptyForm: RequestForm = emptyRequestForm({ outcome: 'tmwt_ss', inDevice: false, cells: [] });
 
 export const completeForm: RequestForm = {
   ...emptyForm,

@@ -2,6 +2,7 @@ export * from './account.ts';
 export * from './audit.ts';
 export * from './endpoint.ts';
 export * from './endpoints.ts';
+export * from './empty-request-form.ts';
 export * from './explore.ts';
 export * from './health.ts';
 export * from './people.ts';

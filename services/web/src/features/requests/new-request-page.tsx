@@ -1,4 +1,5 @@
 /** Where a choice in the grid leads: the cohort in words, a working title, and a draft begins. */
+import { emptyRequestForm } from '@cairnstep/contract';
 import { useState } from 'react';
 import { useNavigate, useSearchParams } from 'react-router-dom';
 import type { Cohort } from '../../lib/cohort.ts';
@@ -11,7 +12,6 @@ import { TextField } from '../../ui/text-field.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { gridAddress } from './cohort-address.ts';
 import { CohortInWords } from './cohort-in-words.tsx';
-import { emptyForm } from './empty-form.ts';
 import { useCreateRequest } from './requests.queries.ts';
 
 /** Where nothing was chosen in the grid: everyone, looked at by the outcome the grid opens with. */
@@ -25,7 +25,7 @@ export default function NewRequestPage() {
   const cohort = cohortIn(search) ?? everyone;
   const begin = () =>
     create.mutate(
-      { ...emptyForm(cohort), title: title.trim() },
+      { ...emptyRequestForm(cohort), title: title.trim() },
       { onSuccess: ({ id }) => void navigate(`/requests/${id}`, { replace: true }) },
     );
   return (

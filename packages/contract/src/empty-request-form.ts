@@ -1,7 +1,7 @@
-import type { RequestForm } from '@cairnstep/contract';
+import type { RequestForm } from './requests.ts';
 
 /** A draft of which nothing but the cohort is known. */
-export const emptyForm = (cohort: RequestForm['cohort']): RequestForm => ({
+export const emptyRequestForm = (cohort: RequestForm['cohort']): RequestForm => ({
   title: '',
   question: '',
   laySummary: '',
