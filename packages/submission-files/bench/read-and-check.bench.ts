@@ -45,7 +45,7 @@ await measure('bytes to typed and checked rows, all four files', async () => {
 const findings = new FindingLog();
 const tables = await readAll(findings);
 const { bouts } = tables;
-if (bouts) await measure('typed rows to COPY bytes, bouts only', () => copyRows(bouts, [...bouts.present]));
+if (bouts) await measure('typed rows to COPY bytes, bouts only', () => [...copyRows(bouts, [...bouts.present])]);
 await measure('for comparison: cells as text by csv-parse, bouts only', () => parse(files.bouts));
 checkSubmission(tables, context, findings);
 console.log(

@@ -3,15 +3,11 @@ import type { TableKey } from '@cairnstep/dictionary';
 import type { FindingLog } from '../finding-log.ts';
 import { defaultLimits } from '../limits.ts';
 import type { ReadLimits } from '../limits.ts';
-import { HeaderNames } from '../table/header-names.ts';
 import { TableBuilder } from '../table/table-builder.ts';
 import type { TypedTable } from '../table/typed-table.ts';
-import { ByteDecoder } from './byte-decoder.ts';
 import type { ByteSource } from './byte-source.ts';
-import { countLineBreaks } from './count-line-breaks.ts';
-import { detectDelimiter } from './detect-delimiter.ts';
-import { gatherBytes } from './gather-bytes.ts';
-import { RecordScanner } from './record-scanner.ts';
+import { scanCsv } from './scan-csv.ts';
+import type { OnCsvRecord } from './scan-csv.ts';
 import { UnreadableFile } from './unreadable-file.ts';
 
 const batchRows = 10_000;
@@ -49,26 +45,14 @@ export async function readTable(
 /** Fills the builder; stops at each piece of the file, so that rows can be taken, and a last time at its end. */
 async function* fillFromCsv(builder: TableBuilder, source: ByteSource): AsyncGenerator<{ readonly ended: boolean }> {
   const { table, findings, limits } = builder;
-  const decoder = new ByteDecoder();
-  let scanner: RecordScanner | null = null;
-  let commaSeparated = true;
-  const onRecord = (cells: readonly string[], count: number, line: number, strayQuote: boolean): void => {
+  const onRecord: OnCsvRecord = (cells, count, line, strayQuote, commaSeparated) => {
     if (builder.hasHeader) builder.row(cells, count, line);
     else builder.header(cells, count, line, { commaMayMarkThousands: commaSeparated });
     if (strayQuote) findings.add({ rule: 'F04', table, line, column: null, found: 'Text follows a closing quotation mark.' });
   };
 
   try {
-    for await (const { bytes, last } of gatherBytes(source, limits)) {
-      const text = decoder.decode(bytes, last, (before) => scanner?.lineAfter(before) ?? 1 + countLineBreaks(before));
-      if (!scanner) {
-        const delimiter = detectDelimiter(text, new HeaderNames(table));
-        commaSeparated = delimiter === ',';
-        scanner = new RecordScanner(delimiter, limits, onRecord);
-      }
-      scanner.push(text, last);
-      yield { ended: false };
-    }
+    for await (const _ of scanCsv(table, source, limits, onRecord)) yield { ended: false };
     if (!builder.hasHeader) throw new UnreadableFile('F05', 'The file is empty.', 'Begin with the header row of the template.', null);
   } catch (error) {
     if (!(error instanceof UnreadableFile)) throw error;

@@ -5,7 +5,7 @@ import { bout, someone } from '../test-support/a-month.ts';
 import { copyRows } from './copy-rows.ts';
 import { formatNumber } from './format-number.ts';
 
-const text = (bytes: Uint8Array): string => new TextDecoder().decode(bytes);
+const text = (pieces: Iterable<Uint8Array>): string => [...pieces].map((piece) => new TextDecoder().decode(piece)).join('');
 
 describe('copyRows', () => {
   it('writes rows as the text format of COPY has them', () => {
@@ -15,9 +15,11 @@ describe('copyRows', () => {
     );
   });
 
-  it('begins each line with what it is given, special characters escaped', () => {
-    const table = tableFromRows('bouts', [bout()]);
-    expect(text(copyRows(table, ['bout_no'], ['7', null, 'a\tb\\c\n']))).toBe('7\t\\N\ta\\tb\\\\c\\n\t1\n');
+  it('adds the line of the file and further cells, special characters escaped', () => {
+    const table = tableFromRows('bouts', [bout(), bout({ bout_no: 2 })]);
+    expect(text(copyRows(table, ['bout_no'], { withLine: true, further: (row) => [`a\tb\\c\n${row}`, null] }))).toBe(
+      '1\t0\ta\\tb\\\\c\\n0\t\\N\n2\t0\ta\\tb\\\\c\\n1\t\\N\n',
+    );
   });
 
   it('writes every number as a file has it', () => {
@@ -34,10 +36,11 @@ describe('copyRows', () => {
     );
   });
 
-  it('writes more rows than the first piece of memory holds', () => {
+  it('hands over the rows in pieces that end with a row', () => {
     const rows = Array.from({ length: 5_000 }, (_, index) => bout({ bout_no: index }));
-    const lines = text(copyRows(tableFromRows('bouts', rows), ['participant', 'bout_no'])).split('\n');
-    expect(lines).toHaveLength(5_001);
-    expect(lines[4_999]).toBe(`${someone}\t4999`);
+    const pieces = [...copyRows(tableFromRows('bouts', rows), ['participant', 'bout_no'])];
+    expect(pieces.length).toBeGreaterThan(1);
+    for (const piece of pieces) expect(text([piece])).toMatch(/\n$/);
+    expect(text(pieces)).toBe(rows.map((row) => `${someone}\t${row['bout_no']}\n`).join(''));
   });
 });

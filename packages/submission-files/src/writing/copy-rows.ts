@@ -18,9 +18,12 @@ const encoder = new TextEncoder();
 const encoded = (text: string): Uint8Array => encoder.encode(text.replace(/[\\\t\n\r]/g, (character) => escapes[character] ?? character));
 const empty = encoder.encode('\\N');
 
+/** Large enough that the call for each piece costs nothing beside its rows. */
+const pieceBytes = 65_536;
+
 /** Bytes that grow as they are written. */
 class ByteText {
-  private bytes = new Uint8Array(65_536);
+  private bytes = new Uint8Array(2 * pieceBytes);
   private length = 0;
 
   /** Makes room for so many more bytes. */
@@ -74,8 +77,15 @@ class ByteText {
     this.length += width;
   }
 
+  get size(): number {
+    return this.length;
+  }
+
+  /** Hands over what was written and begins anew. */
   take(): Uint8Array {
-    return this.bytes.subarray(0, this.length);
+    const taken = this.bytes.slice(0, this.length);
+    this.length = 0;
+    return taken;
   }
 }
 
@@ -99,25 +109,35 @@ function cellWriter(column: TypedColumn, to: ByteText): (row: number) => void {
   };
 }
 
+export interface CopyOptions {
+  /** Adds the line of the file on which the row begins. */
+  readonly withLine?: boolean;
+  /** Cells of a row that come last, such as what is worked out from it; null for an empty one. */
+  readonly further?: (row: number) => readonly (string | null)[];
+}
+
 /**
- * The rows of a table in PostgreSQL's COPY text format, one line each, in UTF-8.
- * @param columns Keys of the columns, in the order of the COPY statement.
- * @param leading Cells that every line begins with, such as the number of the submission; null for an empty one.
+ * The rows of a table in PostgreSQL's COPY text format, one line each, in UTF-8, piece by piece; a piece ends with a row.
+ * @param columns Keys of the columns, in the order of the COPY statement; line and further cells come after them.
  */
-export function copyRows(table: TypedTable, columns: readonly string[], leading: readonly (string | null)[] = []): Uint8Array {
+export function* copyRows(table: TypedTable, columns: readonly string[], { withLine, further }: CopyOptions = {}): Generator<Uint8Array> {
   const text = new ByteText();
-  const start = leading.map((cell) => (cell === null ? empty : encoded(cell)));
   const writers = columns.map((key) => cellWriter(table.column(key), text));
   for (let row = 0; row < table.length; row += 1) {
-    for (const bytes of start) {
-      text.copy(bytes);
-      text.byte(TAB);
-    }
     writers.forEach((write, index) => {
       if (index > 0) text.byte(TAB);
       write(row);
     });
+    if (withLine) {
+      text.byte(TAB);
+      text.number(table.lines[row] ?? 0);
+    }
+    for (const cell of further?.(row) ?? []) {
+      text.byte(TAB);
+      text.copy(cell === null ? empty : encoded(cell));
+    }
     text.byte(LF);
+    if (text.size >= pieceBytes) yield text.take();
   }
-  return text.take();
+  if (text.size > 0) yield text.take();
 }

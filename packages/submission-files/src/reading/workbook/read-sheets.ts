@@ -3,7 +3,6 @@ import type { TableKey } from '@cairnstep/dictionary';
 import type { FindingLog } from '../../finding-log.ts';
 import type { WorkbookLimits } from '../../limits.ts';
 import type { ByteSource } from '../byte-source.ts';
-import { gatherBytes } from '../gather-bytes.ts';
 import { UnreadableFile } from '../unreadable-file.ts';
 import { CellDetector } from './cell-detector.ts';
 import { openWorkbook } from './open-workbook.ts';
@@ -13,6 +12,7 @@ import { meaningOfSheet } from './sheet-names.ts';
 import { SheetReader } from './sheet-reader.ts';
 import { TableSheet } from './table-sheet.ts';
 import type { RowSink } from './table-sheet.ts';
+import { wholeFile } from './whole-file.ts';
 
 /** Reads every sheet that is a table; `sinkFor` is asked once for each. */
 export async function readSheets(
@@ -100,21 +100,4 @@ async function reportingUnreadable<T>(findings: FindingLog, table: TableKey | nu
     findings.addStopping({ rule: error.rule, table, line: error.line, column: null, found: error.found, mend: error.mend });
     return null;
   }
-}
-
-/** A zip archive is read from its end, so that its bytes must all be there first. */
-async function wholeFile(source: ByteSource, limits: WorkbookLimits): Promise<Uint8Array> {
-  const pieces: Uint8Array[] = [];
-  let size = 0;
-  for await (const { bytes } of gatherBytes(source, limits)) {
-    pieces.push(bytes);
-    size += bytes.length;
-  }
-  const whole = new Uint8Array(size);
-  let at = 0;
-  for (const piece of pieces) {
-    whole.set(piece, at);
-    at += piece.length;
-  }
-  return whole;
 }
