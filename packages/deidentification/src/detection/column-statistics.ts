@@ -1,6 +1,7 @@
 import { isNationalNumber } from './cells/numbers-of-people.ts';
 import type { ColumnTraits } from './column-traits.ts';
 import type { Hit } from './hit.ts';
+import { isBareNumber } from './is-bare-number.ts';
 import { normaliseText } from './normalise-text.ts';
 
 /** A hit in a column as a whole, with the cells that led to it and the line of the first. */
@@ -16,7 +17,6 @@ const mostRemembered = 20_000;
 /** From so many cells on, a column that nobody declared is taken for numbers when most of its cells are. */
 const numericRows = 20;
 
-const bareNumber = /^[+-]?\d{1,30}(?:[.,]\d{1,15})?$/;
 const codeLike = /^(?=[^\d]{0,38}\d)(?=[^\p{L}]{0,38}\p{L})[\p{L}\d_./-]{4,40}$|^\d{6,40}$/u;
 /** Spreadsheet day numbers of 1954 to 2064. */
 const isDaySerial = (cell: string): boolean => /^\d{5}(?:\.\d{1,15})?$/.test(cell) && Number(cell) >= 20_000 && Number(cell) <= 60_000;
@@ -50,7 +50,7 @@ export class ColumnStatistics {
     this.filled.add(line);
     this.remember(text);
     if (hasSentence(text.slice(0, 2_000))) this.sentences.add(line);
-    if (!bareNumber.test(text)) return false;
+    if (!isBareNumber(text)) return false;
     this.numbers.add(line);
     if (this.traits.isDate && isDaySerial(text)) this.daySerials.add(line);
     if (!isNationalNumber(text)) return false;

@@ -1,10 +1,8 @@
 import type { DetectionContext } from './detection-context.ts';
 import type { IdentifierFinding } from './identifier-finding.ts';
+import { lineOf } from './line-of.ts';
 import { IdentifierScreen } from './identifier-screen.ts';
 import type { TextTable } from './text-table.ts';
-
-/** Line of the first row when nothing else is said: the header stands on line 1. */
-const firstLine = 2;
 
 /**
  * Everything in a table that seems to identify somebody: one finding for each column, class and strength.
@@ -13,7 +11,7 @@ const firstLine = 2;
  */
 export function detectIdentifiers(table: TextTable, context: DetectionContext = {}): IdentifierFinding[] {
   const screen = new IdentifierScreen(table.headers, context);
-  table.rows.forEach((cells, row) => screen.row(cells, table.lines?.[row] ?? row + firstLine));
+  table.rows.forEach((cells, row) => screen.row(cells, lineOf(table, row)));
   return screen.findings();
 }
 
@@ -27,7 +25,7 @@ export async function screenCsvText(
   context: DetectionContext = {},
 ): Promise<IdentifierFinding[]> {
   const screen = new IdentifierScreen(headers, context);
-  let line = firstLine;
-  for await (const cells of rows) screen.row(cells, line++);
+  let row = 0;
+  for await (const cells of rows) screen.row(cells, lineOf({}, row++));
   return screen.findings();
 }

@@ -15,7 +15,7 @@ export const aboutDateWords = 'accuracy estimated flag format known missing offs
 export const numberWords = 'id ident identifier identity ids no nr num number numbers nummer numero';
 
 export const dateWords = `
-  date dates datum datetime fecha dato dob dod doa doi dateofbirth birthdate birthday birthdate geburtsdatum geburtstag injurydate
+  date dates datum datetime fecha dato dob dod doa doi dateofbirth birthdate birthday geburtsdatum geburtstag injurydate
   admissiondate sessiondate visitdate unfalldatum aufnahmedatum
 `;
 

@@ -9,11 +9,12 @@ const pieces = [
   'March ', '1 March ', '12/12/', '2024-', 'S/N ', 'MRN ', 'www.', '.jpg', '12 Aa ', '1.1234, ', '9 yo ', '\u0301', '\u200b', '\ufdfa',
 ]; // prettier-ignore
 
+/** Processor time, which other work on the machine does not lengthen. */
 function workOn(text: string): number {
   const rows = [headers.map(() => text)];
-  const begun = performance.now();
+  const begun = process.cpuUsage();
   detectIdentifiers({ headers, rows });
-  return performance.now() - begun;
+  return process.cpuUsage(begun).user / 1000;
 }
 
 describe('the work on a cell', () => {
@@ -28,7 +29,7 @@ describe('the work on a cell', () => {
       const long = piece.repeat(Math.ceil(50_000 / piece.length));
       const short = workOn(long.slice(0, 12_500));
       // Four times the length: four times the work. A pattern that started over at every character would take sixteen times as long.
-      expect(Math.min(workOn(long), workOn(long)) / Math.max(short, 5), JSON.stringify(piece)).toBeLessThan(12);
+      expect(workOn(long) / Math.max(short, 5), JSON.stringify(piece)).toBeLessThan(12);
     }
   });
 });

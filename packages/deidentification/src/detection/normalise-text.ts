@@ -1,4 +1,5 @@
-const invisible = /[\u200b-\u200d\u2060\ufeff\u00ad]/g;
+/** Zero-width and soft characters, marks of direction, selectors and controls; blanks and line ends are none of them. */
+const invisible = /[\p{Cf}\ufe00-\ufe0f]|(?!\s)\p{Cc}/gu;
 /** Whole words in one character, up to eighteen long when spelt out: a cell of them would swell, and no identifier has one. */
 const wordLigatures = /[\ufdf0-\ufdfd]/g;
 const dashes = /[\p{Pd}\u2212]/gu;

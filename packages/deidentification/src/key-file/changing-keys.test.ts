@@ -64,6 +64,8 @@ describe.each(['random', 'hmac'] as const)('a code book in %s mode', (mode) => {
     expect(later.replacedCodes).toEqual([{ from: before.codes['B2'], to: carried.code }]);
     expect(later.person(carried.code)).toEqual({ indexDate: '2026-02-20' });
 
+    expect(later.presentCodeOf(before.codes['B2'] ?? '')).toBe(carried.code);
+    expect(later.presentCodeOf(carried.code)).toBe(carried.code);
     const again = await CodeBook.open(later.close());
     expect((await again.codeOf('B2')).code).toBe(carried.code);
     expect(again.replacedCodes).toEqual([]);

@@ -61,6 +61,11 @@ export class CodeBook {
     return found;
   }
 
+  /** The present code of somebody whose code stands in the file already. */
+  presentCodeOf(code: string): string {
+    return this.generations.reduceRight((present, { replacedBy }) => replacedBy.get(present) ?? present, code);
+  }
+
   /** What is remembered of the person with this code. */
   person(code: string): KnownPerson {
     return this.people.get(code) ?? {};

@@ -5,7 +5,7 @@ import type { DateProblem, IsoDate } from '../dates/date-format.ts';
 import { parseDate } from '../dates/parse-date.ts';
 import { studyDay } from '../dates/study-day.ts';
 import type { CodeBook } from '../key-file/code-book.ts';
-import { lineOf } from './line-of.ts';
+import { lineOf } from '../detection/line-of.ts';
 import type { CleanTable, ProblemKind } from './month.ts';
 import type { ProblemLog } from './problem-log.ts';
 import type { DateColumn, DayColumn, TablePlan, ValueColumn } from './table-plan.ts';

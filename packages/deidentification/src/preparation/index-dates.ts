@@ -2,7 +2,7 @@
 import type { IsoDate } from '../dates/date-format.ts';
 import { parseDate } from '../dates/parse-date.ts';
 import type { CodeBook } from '../key-file/code-book.ts';
-import { lineOf } from './line-of.ts';
+import { lineOf } from '../detection/line-of.ts';
 import type { NewParticipant } from './month.ts';
 import type { PeopleOfMonth, Place } from './people-of-month.ts';
 import type { ProblemLog } from './problem-log.ts';

@@ -3,7 +3,7 @@ import type { CodeBook } from '../key-file/code-book.ts';
 import type { SiteKey } from '../key-file/site-key.ts';
 import { normaliseLocalId } from '../pseudonyms/normalise-local-id.ts';
 import { hasValidCheckCharacter } from '../pseudonyms/participant-code.ts';
-import { lineOf } from './line-of.ts';
+import { lineOf } from '../detection/line-of.ts';
 import type { LengthChange } from './month.ts';
 import type { TablePlan } from './table-plan.ts';
 
@@ -40,7 +40,7 @@ export async function peopleOfMonth(plans: readonly TablePlan[], key: SiteKey, b
         continue;
       }
       const isCode = await hasValidCheckCharacter(cell);
-      const { code, isNew } = isCode ? { code: cell, isNew: false } : await book.codeOf(localId);
+      const { code, isNew } = isCode ? { code: book.presentCodeOf(cell), isNew: false } : await book.codeOf(localId);
       if (!isCode) localIds.add(localId);
       if (isNew) newCodes.add(code);
       if (!firstPlaces.has(code)) firstPlaces.set(code, { table: plan.raw.table, line: lineOf(plan.raw, row) });

@@ -1,6 +1,6 @@
 import type { NormalisationOptions } from './normalisation-options.ts';
 
-const invisible = /[\p{Cc}\u200b-\u200d\u2060\ufeff\u00ad]/gu;
+const invisible = /[\p{Cc}\p{Cf}\ufe00-\ufe0f]/gu;
 const separators = /[\s\p{Pd}\u2212_.,:;/\\|#'’]/gu;
 
 /** What sites start with: leading zeros stay, because 0042 and 42 may be two people. */

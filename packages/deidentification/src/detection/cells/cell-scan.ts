@@ -31,13 +31,12 @@ export class CellScan {
     judge: (match: string, groups: readonly (string | undefined)[]) => Judgement = () => 'block',
   ): void {
     this.rest = this.rest.replace(pattern, (match: string, ...more: unknown[]) => {
-      const judgement = judge(
-        match,
-        more.slice(
-          0,
-          more.findIndex((each) => typeof each === 'number'),
-        ) as (string | undefined)[],
-      );
+      // Behind the groups come the place of the match and the whole text.
+      const groups = more.slice(
+        0,
+        more.findIndex((each) => typeof each === 'number'),
+      ) as (string | undefined)[];
+      const judgement = judge(match, groups);
       if (judgement === 'not-it') return match;
       this.add(name, judgement);
       return taken;

@@ -104,6 +104,8 @@ describe('cells', () => {
     ['Jane.Doe@ExAmple.ORG', 'notes', ['email:block']],
     ['2024\u201103\u201105', 'notes', ['full_date:block']],
     ['20\u200b24-03-05', 'notes', ['full_date:block']],
+    ['jane.doe@exa\u200emple\u0001.org', 'notes', ['email:block']],
+    ['two\nlines\there', 'notes', []],
   ] as const)('finds in "%s" under "%s": %j', (cell, header, expected) => {
     expect(found(cell, header)).toEqual(expected);
   });

@@ -1,5 +1,6 @@
 import type { ColumnTraits } from '../column-traits.ts';
 import type { Hit } from '../hit.ts';
+import { isBareNumber } from '../is-bare-number.ts';
 import { detectNetworkAddresses } from './addresses-on-networks.ts';
 import { detectAges } from './ages.ts';
 import { CellScan } from './cell-scan.ts';
@@ -56,14 +57,13 @@ const ofNumbers: readonly Detector[] = [
 
 /** A number as it stands in most cells of a month: too short for anything but an age, a part of a date or of a postal code. */
 const shortNumber = /^-?\d{1,4}(?:[.,]\d{1,3})?$/;
-const anyNumber = /^[+-]?\d{1,30}(?:[.,]\d{1,15})?$/;
 
 /** The identifiers in one cell. */
 export function detectCell(cell: string, traits: ColumnTraits): Hit[] {
   if (shortNumber.test(cell) && !traits.isAge && !traits.isPostal && !traits.isDate) return [];
   const scan = new CellScan(cell);
   if (scan.text === '') return [];
-  const detectors = traits.role === 'number' && anyNumber.test(scan.text) ? ofNumbers : ofAnyText;
+  const detectors = traits.role === 'number' && isBareNumber(scan.text) ? ofNumbers : ofAnyText;
   for (const { detect, needs } of detectors) if (needs.test(scan.text)) detect(scan, traits);
   return scan.hits();
 }

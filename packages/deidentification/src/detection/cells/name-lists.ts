@@ -43,7 +43,7 @@ export const doubtfulGivenNames = wordSet(`
 /** Surnames. Those that are common words are in the second list. */
 export const surnames = wordSet(`
   abbott abdi adams adeyemi afzal ahmed akhtar ali allen almeida alvarez andersen anderson andersson andrews armstrong arnold bailey baker
-  banerjee barnes bauer baumann beck becker begum bell bennett berger bergmann bernard bianchi boateng bonnet bouchard brennan brooks brown
+  banerjee barnes bauer baumann beck becker begum bell bennett berger bergmann bernard bianchi boateng bonnet bouchard brennan brown
   bruno bryant burke burns butler byrne campbell carlson carroll carter castillo castro chan chang chen cheng choi christensen clark clarke
   cohen coleman collins colombo connolly cooper costa cox cruz cunningham davies davis delgado diaz dietrich doherty doyle dubois dunn dupont
   durand edwards ellis engel evans fernandes fernandez ferrari ferreira fischer fitzgerald fleming flores foster fournier fraser friedrich
@@ -76,19 +76,19 @@ export const noNames = wordSet(`
   clonus completed complained complains continued continues contraction course crutch crutches cycle cycled daily day declined delayed denied
   denies device did difficulty discharged distance doctor does donned down due during education elbow emg ended energy equipment eval
   evaluation exam exercise exercises exoskeleton extension fair fall fatigue fatigued feels fell fes felt finished fist flexion foot for frame
-  fim friday from full gait gave glove good grade grip gym had hand handed happy harness has have he heart heel helped her high hip his hold
+  fim friday from full gait gave glove good grade grip gym had half hand handed happy harness has have he heart heel helped her high hip his hold
   hospital hours housing if improved in independent index initial instructed intact is it joint keen knee knees lateral left leg legs lesion
   level lift lifted limb line lost low lying managed maneuver manoeuvre manual march mat maximal maximum medial min mins mobility moderate
   modified monday motivated motor moved muscle muscles needed neck needs negative new no normal not note noted notes nurse of off on ongoing
   onto or orthosis orthotic out outdoor overground pain palsy parallel paralysis partial passive performed phase plan pelvis pinprick placed
   plantar poor position positive post pre present presented progress progressing progressed protocol provided pulley pump push quad quads
-  raised range reached ready reflex refused reported reports requested requires rest rested resting result results review reviewed right robot
+  raised range reached ready reflex refused reported reports requested requires rest rested resting result results review reviewed right ring robot rods
   rocker rolled rom rotation said sat saturday scale scored score seated seen sensation session sessions set she shoe shoes shoulder showed
   side sign sit sitting skin sling slow spasm spasms spasticity speed splint stage stair stairs stance stand standing stated states step
   stepped steps stick stopped strap stretch stretched strength strike strong sunday support swing syndrome table test therapist therapy
   thigh thursday timed tired to today toe toes tolerance tolerated tolerates tone total transfer transferred transfers treadmill trial trunk
   tuesday turn turned unable unaided unilateral unit unstable until up upper upright using valve verbalised verbalized very walk walked walker
-  walking walks wanted wants warm was wednesday week weight well went wheelchair while will with without workshop wrist yes
+  walking walks wanted wants warm was wednesday week weight well went wheelchair while will wire with without workshop wrist yes
 `);
 
 /** Words after which the words before name a sign, test or tool: Thomas Test, May Thurner syndrome. */

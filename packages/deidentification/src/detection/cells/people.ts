@@ -27,7 +27,7 @@ const when = (holds: boolean): Judgement => (holds ? 'block' : 'not-it');
 
 /** Titles of staff; "PT" and "OT" are also a patient and a therapy, and count only before a listed name. */
 const titledStaff = boundedPattern(
-  `${start}(?:Dr|Prof|Professor|Doctor|Nurse|Physio|Physiotherapist|Therapist|Surgeon)\\.? (?:\\p{Lu}\\.? )?(${capital})(?: (${capital}))?${end}`,
+  `${start}(?:Dr|Prof|Professor|Doctor|Nurse|Physio|Physiotherapist|Therapist|Surgeon)\\.? (?:\\p{Lu}\\.? )?(${capital})(?: ${capital})?${end}`,
 );
 const shortTitledStaff = boundedPattern(`${start}(?:PT|OT|RN|DPT)\\.?:? (\\p{Lu}\\.? ?)?(${capital})${end}(?! \\p{Lu}\\p{Ll})`);
 const initialAndSurname = boundedPattern(`${start}(?:by|with|w/|per|from) (?:\\p{Lu}\\. ?){1,2}(${capital})${end}`);
