@@ -11,6 +11,9 @@ import { Progress } from '../../ui/progress.tsx';
 import { placesOf, progressWords } from './stack-steps.ts';
 import { useCheck } from './submissions.queries.ts';
 
+/** The button that comes after the files have arrived. */
+export const beginCheckId = 'begin-check';
+
 export interface CheckSectionProps {
   readonly submission: Submission;
   readonly isCoordinator: boolean;
@@ -54,11 +57,12 @@ export function CheckSection({ submission, isCoordinator, unsent, isStale, onBeg
         {unsent > 0 && status !== 'checking' && (
           <p className="font-semibold text-amber">{formatCount(unsent, 'file is', 'files are')} not sent yet and would not be checked.</p>
         )}
-        {isCoordinator && status !== 'checking' && (
+        {isCoordinator && (
           <Button
+            id={beginCheckId}
             variant={status === 'open' || isStale ? 'primary' : 'secondary'}
             isDisabled={files.length === 0}
-            isPending={check.isPending}
+            isPending={check.isPending || status === 'checking'}
             onPress={begin}
           >
             {status === 'checked' ? `Check ${month} again` : `Check ${month}`}

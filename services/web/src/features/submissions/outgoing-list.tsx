@@ -1,10 +1,12 @@
 /** The files about to be sent: each with the table it is of, and how far it has come. */
+import { useEffect, useRef } from 'react';
 import { formatBytes, formatCount } from '../../lib/format.ts';
 import { announce } from '../../ui/announcer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ErrorNotice } from '../../ui/error-notice.tsx';
 import { Progress } from '../../ui/progress.tsx';
 import { Select } from '../../ui/select.tsx';
+import { beginCheckId } from './check-section.tsx';
 import { obstacleOf } from './outgoing-files.ts';
 import type { Outgoing, OutgoingFile } from './outgoing-files.ts';
 import type { TableKey } from './submissions.queries.ts';
@@ -21,11 +23,21 @@ export interface OutgoingListProps {
 export function OutgoingList({ outgoing, held }: OutgoingListProps) {
   const { files, isSending } = outgoing;
   const obstacle = obstacleOf(files);
+  const mayCheck = files.length === 0 && held.length > 0;
+  const goesOn = useRef(false);
+  useEffect(() => {
+    if (!mayCheck || !goesOn.current) return;
+    goesOn.current = false;
+    // The button just pressed is gone with the last file: go on where the work goes on.
+    document.getElementById(beginCheckId)?.focus();
+  }, [mayCheck]);
   if (files.length === 0) return null;
 
   async function send(): Promise<void> {
+    goesOn.current = true;
     const arrived = await outgoing.send();
     announce(`${formatCount(arrived, 'file')} of ${formatCount(files.length, 'file')} arrived.`);
+    if (arrived < files.length) goesOn.current = false;
   }
 
   return (

@@ -26,6 +26,7 @@ const longest = 500;
 export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, drafts }: ReasonFormProps) {
   const acknowledge = useAcknowledge(submissionId);
   const [isOpen, setOpen] = useState(acknowledgedReason === null);
+  const [wasKept, setWasKept] = useState(false);
   const [attempt, setAttempt] = useState(0);
   const reason = drafts.of(rule) ?? acknowledgedReason ?? '';
   const problem = attempt > 0 ? problemOf(reason) : undefined;
@@ -39,6 +40,7 @@ export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, 
         onSuccess: () => {
           setAttempt(0);
           setOpen(false);
+          setWasKept(true);
           announce(`The reason for rule ${rule} is kept.`);
         },
       },
@@ -50,7 +52,7 @@ export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, 
       <p className="max-w-2xl">
         <span className="text-quiet">Your reason: </span>
         {acknowledgedReason}{' '}
-        <Button variant="quiet" onPress={() => setOpen(true)} aria-label={`Change the reason for rule ${rule}`}>
+        <Button variant="quiet" autoFocus={wasKept} onPress={() => setOpen(true)} aria-label={`Change the reason for rule ${rule}`}>
           Change
         </Button>
       </p>

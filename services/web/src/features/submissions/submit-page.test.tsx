@@ -67,7 +67,7 @@ describe('files of a month', () => {
     await press('Send 2 files');
     await waitFor(() => expect(screen.queryByRole('list', { name: 'Files not sent yet' })).toBeNull());
     expect(puts(asked)).toEqual(['/files/sessions?fileName=S01+sessions.csv', '/files/adverse_events?fileName=adverse-events.csv']);
-    expect(screen.getByRole('button', { name: 'Check November 2026' })).toBeTruthy();
+    await waitFor(() => expect(document.activeElement).toBe(screen.getByRole('button', { name: 'Check November 2026' })));
   });
 
   it('wait for the reader when a name does not tell, or two are for one table', async () => {
