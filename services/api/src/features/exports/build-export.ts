@@ -10,8 +10,18 @@ import { addressesOf, readRequest, type RequestRecord } from '../requests/reques
 import { codebookCsv, exportCsv } from './export-csv.ts';
 import { exportTables, type ExportCell, type ExportTableKey } from './export-tables.ts';
 import { generalise } from './generalise.ts';
-import { readCohort, readExport, readNewestConsents, readOutcomeRows, readSessionRows, replacePseudonyms, setExportStatus, storeExport, type ExportRecord } from './exports.repository.ts';
-import { exportReadme, hiddenSmall } from './readme.ts';
+import {
+  readCohort,
+  readExport,
+  readNewestConsents,
+  readOutcomeRows,
+  readSessionRows,
+  replacePseudonyms,
+  setExportStatus,
+  storeExport,
+  type ExportRecord,
+} from './exports.repository.ts';
+import { exportReadme } from './readme.ts';
 import { zipFiles } from './zip-files.ts';
 
 const alphabet = '0123456789ABCDEFGHJKMNPQRSTVWXYZ';
@@ -22,12 +32,19 @@ type Row = Readonly<Record<string, string | number | null>>;
 
 const tableOrder: readonly ExportTableKey[] = ['participants', 'outcomes', 'sessions'];
 
-async function build(tx: Tx, record: ExportRecord, request: RequestRecord, today: string): Promise<{ content: Buffer; people: number } | null> {
+async function build(
+  tx: Tx,
+  record: ExportRecord,
+  request: RequestRecord,
+  today: string,
+): Promise<{ content: Buffer; people: number } | null> {
   const { form, releaseNumber } = request;
   if (releaseNumber === null || request.accessEndsOn === null) return null;
   const cohort = await readCohort(tx, releaseNumber, form.cohort.cells);
   const consents = await readNewestConsents(tx, cohort);
-  const consenting = cohort.filter((person) => verdictOn(consents.get(`${person.siteId} ${person.participant}`), form, today).verdict === 'permitted');
+  const consenting = cohort.filter(
+    (person) => verdictOn(consents.get(`${person.siteId} ${person.participant}`), form, today).verdict === 'permitted',
+  );
   const generalised = generalise(consenting);
   if (!generalised) return null;
 
@@ -44,7 +61,11 @@ async function build(tx: Tx, record: ExportRecord, request: RequestRecord, today
   /** Rows of other tables, by code and then in the order they were read. */
   const withCodes = (table: ExportTableKey, rows: readonly Row[]): ExportCell[][] =>
     rows
-      .map((row) => exportTables[table].map(({ key }) => (key === 'participant' ? (pseudonyms.get(`${row['site_id']} ${row['participant']}`) ?? null) : (row[key] ?? null))))
+      .map((row) =>
+        exportTables[table].map(({ key }) =>
+          key === 'participant' ? (pseudonyms.get(`${row['site_id']} ${row['participant']}`) ?? null) : (row[key] ?? null),
+        ),
+      )
       .sort((a, b) => (String(a[0]) < String(b[0]) ? -1 : String(a[0]) > String(b[0]) ? 1 : 0));
   const rowsOf: Readonly<Record<ExportTableKey, () => Promise<ExportCell[][]>>> = {
     participants: async () => kept.map((person) => [person.pseudonym, ...person.values]),
@@ -64,7 +85,7 @@ async function build(tx: Tx, record: ExportRecord, request: RequestRecord, today
       form,
       accessEndsOn: request.accessEndsOn,
       generalised,
-      notConsenting: hiddenSmall(cohort.length - consenting.length),
+      notIncluded: cohort.length - kept.length,
       people: kept.length,
     }),
   });
@@ -83,7 +104,12 @@ export async function buildExport({ config, database, clock }: Context, exportId
       const built = request.status === 'approved' ? await build(tx, record, request, clock().toISOString().slice(0, 10)) : null;
       if (!built) {
         await setExportStatus(tx, exportId, 'failed');
-        await recordAudit(tx, registry, { act: 'export.build', object: exportId, result: 'refused', reason: request.status === 'approved' ? 'too-few-people' : 'not-approved' });
+        await recordAudit(tx, registry, {
+          act: 'export.build',
+          object: exportId,
+          result: 'refused',
+          reason: request.status === 'approved' ? 'too-few-people' : 'not-approved',
+        });
         return;
       }
       const sha256 = createHash('sha256').update(built.content).digest('hex');

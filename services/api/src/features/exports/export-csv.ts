@@ -7,11 +7,8 @@ import { exportTables, type ExportCell, type ExportColumn, type ExportTableKey }
 
 export const pseudonymPattern = /^R[0-9A-HJKMNP-TV-Z]{12}$/;
 
-/** Shortest decimal that reads back as the same number, without exponent. */
-function decimal(value: number): string {
-  const text = String(value);
-  return /^-?\d+(\.\d+)?$/.test(text) ? text : value.toFixed(12).replace(/0+$/, '').replace(/\.$/, '');
-}
+/** At most six decimals, which is finer than any instrument here and drops the dust of binary sums; never an exponent. */
+const decimal = (value: number): string => (Number.isInteger(value) ? String(value) : value.toFixed(6).replace(/\.?0+$/, ''));
 
 function written(column: ExportColumn, cell: ExportCell): string {
   if (cell === null) return '';

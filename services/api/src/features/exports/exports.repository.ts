@@ -19,13 +19,17 @@ const columns = `e.id, e.number, e.request_id as "requestId", r.form->>'title' a
   octet_length(e.content) as bytes, e.sha256, coalesce(r.access_ends_on, e.created_at::date)::text as "accessEndsOn"`;
 
 export async function readExport(tx: Tx, id: string): Promise<ExportRecord | null> {
-  const [row] = (await tx.query(`select ${columns} from exports e join access_requests r on r.id = e.request_id where e.id = $1`, [id])) as ExportRecord[];
+  const [row] = (await tx.query(`select ${columns} from exports e join access_requests r on r.id = e.request_id where e.id = $1`, [
+    id,
+  ])) as ExportRecord[];
   return row ?? null;
 }
 
 /** Only those of the actor's own teams: a steward sees that exports exist in the request, not here. */
 export const listTeamExports = async (tx: Tx): Promise<ExportRecord[]> =>
-  (await tx.query(`select ${columns} from exports e join access_requests r on r.id = e.request_id where actor_is_member(e.request_id) order by e.created_at desc`)) as ExportRecord[];
+  (await tx.query(
+    `select ${columns} from exports e join access_requests r on r.id = e.request_id where actor_is_member(e.request_id) order by e.created_at desc`,
+  )) as ExportRecord[];
 
 export async function findBuilding(tx: Tx, requestId: string): Promise<string | null> {
   const [row] = (await tx.query("select id from exports where request_id = $1 and status = 'building'", [requestId])) as { id: string }[];
@@ -36,14 +40,25 @@ export async function insertExport(tx: Tx, requestId: string, requestedBy: strin
   await tx.query("select pg_advisory_xact_lock(hashtext('export-number'))");
   const [{ next }] = (await tx.query('select next_export_number($1) as next', [`EX-${year}-`])) as [{ next: string }];
   const id = randomUUID();
-  await tx.query("insert into exports (id, number, request_id, requested_by, status) values ($1, $2, $3, $4, 'building')", [id, next, requestId, requestedBy]);
+  await tx.query("insert into exports (id, number, request_id, requested_by, status) values ($1, $2, $3, $4, 'building')", [
+    id,
+    next,
+    requestId,
+    requestedBy,
+  ]);
   return id;
 }
 
-export const setExportStatus = (tx: Tx, id: string, status: ExportRecord['status']): Promise<unknown> => tx.query('update exports set status = $2 where id = $1', [id, status]);
+export const setExportStatus = (tx: Tx, id: string, status: ExportRecord['status']): Promise<unknown> =>
+  tx.query('update exports set status = $2 where id = $1', [id, status]);
 
 export async function storeExport(tx: Tx, id: string, built: { content: Buffer; sha256: string; participants: number }): Promise<void> {
-  await tx.query("update exports set status = 'ready', built_at = now(), content = $2, sha256 = $3, participants = $4 where id = $1", [id, built.content, built.sha256, built.participants]);
+  await tx.query("update exports set status = 'ready', built_at = now(), content = $2, sha256 = $3, participants = $4 where id = $1", [
+    id,
+    built.content,
+    built.sha256,
+    built.participants,
+  ]);
 }
 
 export async function readExportContent(tx: Tx, id: string): Promise<Buffer | null> {
@@ -51,14 +66,16 @@ export async function readExportContent(tx: Tx, id: string): Promise<Buffer | nu
   return row?.content ?? null;
 }
 
-export async function replacePseudonyms(tx: Tx, exportId: string, people: readonly { pseudonym: string; siteId: string; participant: string }[]): Promise<void> {
+export async function replacePseudonyms(
+  tx: Tx,
+  exportId: string,
+  people: readonly { pseudonym: string; siteId: string; participant: string }[],
+): Promise<void> {
   await tx.query('delete from export_pseudonyms where export_id = $1', [exportId]);
-  await tx.query('insert into export_pseudonyms (export_id, pseudonym, site_id, participant) select $1, * from unnest($2::text[], $3::uuid[], $4::text[])', [
-    exportId,
-    people.map((one) => one.pseudonym),
-    people.map((one) => one.siteId),
-    people.map((one) => one.participant),
-  ]);
+  await tx.query(
+    'insert into export_pseudonyms (export_id, pseudonym, site_id, participant) select $1, * from unnest($2::text[], $3::uuid[], $4::text[])',
+    [exportId, people.map((one) => one.pseudonym), people.map((one) => one.siteId), people.map((one) => one.participant)],
+  );
 }
 
 /** People of an export whose newest consent is no longer the one in force. */
@@ -82,7 +99,11 @@ export interface CohortPerson {
 }
 
 /** First courses of a release in the chosen cells; all of them when none is chosen. */
-export async function readCohort(tx: Tx, release: number, cells: readonly { levelGroup: string; grade: string }[]): Promise<CohortPerson[]> {
+export async function readCohort(
+  tx: Tx,
+  release: number,
+  cells: readonly { levelGroup: string; grade: string }[],
+): Promise<CohortPerson[]> {
   return (await tx.query(
     `select site_id as "siteId", participant, level_group as "levelGroup", ais, age, sex from release_courses
       where release_number = $1 and course_no = 1 and (cardinality($2::text[]) = 0 or level_group || ' ' || ais = any($2::text[])) order by site_id, participant`,
@@ -91,7 +112,10 @@ export async function readCohort(tx: Tx, release: number, cells: readonly { leve
 }
 
 /** The newest consent row of each person, as stored. */
-export async function readNewestConsents(tx: Tx, people: readonly { siteId: string; participant: string }[]): Promise<Map<string, Record<string, string | number | null>>> {
+export async function readNewestConsents(
+  tx: Tx,
+  people: readonly { siteId: string; participant: string }[],
+): Promise<Map<string, Record<string, string | number | null>>> {
   const rows = (await tx.query(
     `select distinct on (c.site_id, c.participant) to_jsonb(c) as row from consents c
        join unnest($1::uuid[], $2::text[]) as p(site_id, participant) using (site_id, participant) order by c.site_id, c.participant, c.consent_no desc`,

@@ -11,7 +11,16 @@ import { Refusal } from '../../http/refusal.ts';
 import { route, type FileAnswer, type Route } from '../../http/route.ts';
 import { enqueue } from '../../jobs/enqueue.ts';
 import { isTeamMember, readRequest, type RequestRecord } from '../requests/requests.repository.ts';
-import { countNoLongerConsenting, findBuilding, insertExport, listTeamExports, readExport, readExportContent, setExportStatus, type ExportRecord } from './exports.repository.ts';
+import {
+  countNoLongerConsenting,
+  findBuilding,
+  insertExport,
+  listTeamExports,
+  readExport,
+  readExportContent,
+  setExportStatus,
+  type ExportRecord,
+} from './exports.repository.ts';
 
 const present = (record: ExportRecord): DataExport => ({ ...record, builtAt: record.builtAt?.toISOString() ?? null });
 
@@ -20,7 +29,9 @@ async function requireAccess(tx: Tx, request: RequestRecord): Promise<void> {
   const ended = () => new Refusal('access-ended', 'Access under this request has ended. A new request can be written.');
   if (request.status === 'ended') throw ended();
   if (request.status !== 'approved') throw new Refusal('request-not-in-state', 'Only an approved request gives access to rows.');
-  const [{ valid }] = (await tx.query(`select $1::date >= (now() at time zone 'UTC')::date as valid`, [request.form.ethicsExpiresOn])) as [{ valid: boolean | null }];
+  const [{ valid }] = (await tx.query(`select $1::date >= (now() at time zone 'UTC')::date as valid`, [request.form.ethicsExpiresOn])) as [
+    { valid: boolean | null },
+  ];
   if (valid !== true) throw new Refusal('access-ended', 'The ethics approval named in the request has run out.');
 }
 
@@ -47,8 +58,10 @@ export function exportRoutes({ database, clock }: Context): Route[] {
       const found = requireFound(await readExport(tx, exportId));
       if (!(await isTeamMember(tx, found.requestId))) requireFound(null);
       await requireAccess(tx, requireFound(await readRequest(tx, found.requestId)));
-      if (found.status === 'stale') throw new Refusal('export-stale', 'Somebody in it has withdrawn. Build it again, and destroy earlier copies.');
-      if (found.status !== 'ready') throw new Refusal('export-not-ready', 'It is still being built, or building it failed. Look again in a moment.');
+      if (found.status === 'stale')
+        throw new Refusal('export-stale', 'Somebody in it has withdrawn. Build it again, and destroy earlier copies.');
+      if (found.status !== 'ready')
+        throw new Refusal('export-not-ready', 'It is still being built, or building it failed. Look again in a moment.');
       return found;
     });
     return asActor(database, registry, async (tx) => {

@@ -34,7 +34,7 @@ const variables: readonly GeneralisedVariable<Person>[] = [
     levels: [
       { name: 'level groups as on screen', of: (person) => person.levelGroup },
       { name: 'cervical, thoracic, lumbosacral', of: (person) => region(person.levelGroup) },
-      { name: 'left out', of: notGiven },
+      { name: 'not given (the code not_given in every row)', of: notGiven },
     ],
   },
   {
@@ -42,7 +42,7 @@ const variables: readonly GeneralisedVariable<Person>[] = [
     levels: [
       { name: 'grades A to E', of: (person) => person.ais },
       { name: 'A or B against C to E', of: (person) => (person.ais === 'ND' ? 'ND' : ['A', 'B'].includes(person.ais) ? 'AB' : 'CDE') },
-      { name: 'left out', of: notGiven },
+      { name: 'not given (the code not_given in every row)', of: notGiven },
     ],
   },
   {
@@ -50,14 +50,14 @@ const variables: readonly GeneralisedVariable<Person>[] = [
     levels: [
       { name: 'ten-year bands', of: (person) => bandOf(person.age, [20, 30, 40, 50, 60, 70], tenYearBands) },
       { name: 'three bands', of: (person) => bandOf(person.age, [40, 60], threeBands) },
-      { name: 'left out', of: notGiven },
+      { name: 'not given (the code not_given in every row)', of: notGiven },
     ],
   },
   {
     key: 'sex',
     levels: [
       { name: 'as recorded', of: (person) => person.sex },
-      { name: 'left out', of: notGiven },
+      { name: 'not given (the code not_given in every row)', of: notGiven },
     ],
   },
 ];

@@ -89,8 +89,7 @@ export async function checkSubmission({ database, clock }: Context, submissionId
   const tables: Partial<Record<TableKey, TypedTable>> = {};
   for (const [index, file] of files.entries()) {
     await progress('read', index, files.length);
-    const content = await asActor(database, registry, (tx) => readContent(tx, submissionId, file.table));
-    tables[file.table] = await readTable(file.table, content ?? new Uint8Array(), log);
+    tables[file.table] = await asActor(database, registry, (tx) => readTable(file.table, readContent(tx, submissionId, file.table), log));
   }
   await progress('check', 0, 1);
   const context = await asActor(database, registry, (tx) =>

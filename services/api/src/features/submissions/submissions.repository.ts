@@ -141,11 +141,18 @@ export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
   )) as FileRecord[];
 }
 
-export async function readContent(tx: Tx, id: string, table: TableKey): Promise<Buffer | null> {
-  const [row] = (await tx.query('select content from submission_files where submission_id = $1 and table_key = $2', [id, table])) as {
-    content: Buffer | null;
-  }[];
-  return row?.content ?? null;
+const contentPieceBytes = 1 << 20;
+
+/** Piece by piece: PostgreSQL sends bytes as text of twice their number, all of which would have to be held. */
+export async function* readContent(tx: Tx, id: string, table: TableKey): AsyncGenerator<Uint8Array> {
+  for (let from = 1; ; from += contentPieceBytes) {
+    const [row] = (await tx.query(
+      'select substring(content from $3 for $4) as piece from submission_files where submission_id = $1 and table_key = $2',
+      [id, table, from, contentPieceBytes],
+    )) as { piece: Buffer | null }[];
+    if (!row?.piece?.length) return;
+    yield row.piece;
+  }
 }
 
 export async function putFile(

@@ -10,7 +10,9 @@ import { classColumns } from '../../database/entities/registry.ts';
 export const monthTables: readonly TableKey[] = ['exams', 'assessments', 'sessions', 'bouts', 'adverse_events'];
 
 export interface TableSql {
-  /** Columns of the staged rows in the order COPY sends them. */
+  /** What a file says: keys, then values. */
+  readonly fileColumns: readonly string[];
+  /** Columns of the staged rows beside submission and site, in the order COPY sends them: of the file, its line, derived. */
   readonly stagedColumns: readonly string[];
   readonly counts: string;
   readonly list: { readonly added: string; readonly changed: string; readonly unchanged: string; readonly removed: string };
@@ -60,7 +62,8 @@ function build(key: TableKey): TableSql {
   const page = (before: string, after: string, rows: string, order: string) =>
     `select ${before} as before, ${after} as after ${rows} ${order}`;
   return {
-    stagedColumns: ['submission_id', 'site_id', ...all, 'line'],
+    fileColumns: [...keys, ...values],
+    stagedColumns: [...keys, ...values, 'line', ...derived],
     counts: `select (select count(*)::int from staged_${key} where submission_id = :submission) as staged,
       (select count(*)::int ${known}) as known, (select count(*)::int ${known} and ${differs}) as changed, (select count(*)::int ${removed}) as removed`,
     list: {
