@@ -4,8 +4,8 @@ import { expect, test } from './support/journey.ts';
 import { mailTo } from './support/mails.ts';
 import { chooseAtProvider, signIn } from './support/sign-in.ts';
 
-// Every page is looked at in four ways.
-test.describe.configure({ timeout: 360_000 });
+// Every page is looked at in four ways, which takes its time on a busy machine.
+test.describe.configure({ timeout: 900_000 });
 
 const guest = { name: 'Felix Brandt', email: 'felix.brandt@elsewhere.example' };
 

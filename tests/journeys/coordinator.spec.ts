@@ -18,8 +18,8 @@ async function sendFiles(page: Page, { files }: ExampleMonth): Promise<void> {
   await expect(page.getByRole('list', { name: 'Files not sent yet' })).toBeHidden();
 }
 
-// Every page is looked at in four ways.
-test.describe.configure({ timeout: 360_000 });
+// Every page is looked at in four ways, which takes its time on a busy machine.
+test.describe.configure({ timeout: 900_000 });
 
 const nextStep = (page: Page) => page.locator('#next');
 
