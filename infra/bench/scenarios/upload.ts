@@ -79,7 +79,7 @@ async function copyBare({ cluster }: RunningProduct, files: Files): Promise<numb
   for (const key of tableKeys.filter((table) => files[table])) {
     const table = await readTable(key, files[key] ?? new Uint8Array(), new FindingLog());
     const columns = table.columns.map((column) => column.variable.key);
-    rows.set(key, { columns: columns.join(', '), bytes: copyRows(table, columns) });
+    rows.set(key, { columns: columns.join(', '), bytes: Buffer.concat([...copyRows(table, columns)]) });
   }
   const client = await cluster.connect();
   for (const [key, { columns }] of rows) await client.query(`create table bare_${key} as select ${columns} from ${key} with no data`);
