@@ -75,7 +75,7 @@ function OneFile({ file: { id, file, table, sent, error }, outgoing, replaces }:
             <Select
               id={`table-of-${id}`}
               label={file.name}
-              hint={replaces && table !== null ? `${size}, takes the place of the file sent before` : size}
+              hint={replaces && table !== null ? `${size}, replaces the file sent before` : size}
               placeholder="Choose its table"
               value={table}
               options={options}
