@@ -15,6 +15,7 @@ import type { FixtureCase } from './fixture.ts';
 import { casesOf } from './fixture.ts';
 import { groupsOf } from './groups-of.ts';
 import fixture from './rank-tests.json' with { type: 'json' };
+import secondRoute from './rank-tests-second-route.json' with { type: 'json' };
 
 const caseOf = (id: string): FixtureCase => casesOf(fixture, id)[0] as FixtureCase;
 
@@ -65,6 +66,20 @@ const { k: _anorexiaK, ...anorexiaInterval } = anorexia.expected.hodges_lehmann;
 const { k: _depressionK, ...depressionInterval } = depression.expected.hodges_lehmann;
 const { k: _permeabilityK, ...permeabilityInterval } = permeability.expected.hodges_lehmann;
 const { k: _ozoneK, ...ozoneInterval } = ozone.expected.hodges_lehmann;
+
+/** Large samples, where the normal approximation takes over, and small ones with ties, counted one by one. */
+const secondRouteChecks: readonly ReferenceCheck[] = [
+  ...secondRoute.mannWhitney.map((one): ReferenceCheck => ({
+    ...one,
+    method: 'mann-whitney',
+    compute: () => shiftMembers(mannWhitneyTest(one.first, one.second)),
+  })),
+  ...secondRoute.signedRank.map((one): ReferenceCheck => ({
+    ...one,
+    method: 'signed-rank',
+    compute: () => signedRankMembers(signedRankTest(one.differences)),
+  })),
+];
 
 export const rankTestChecks: readonly ReferenceCheck[] = [
   check(depression, 'signed-rank', () => signedRankMembers(signedRankChange(depression.inputs.y, depression.inputs.x)), {
@@ -155,4 +170,5 @@ export const rankTestChecks: readonly ReferenceCheck[] = [
       one.expected,
     ),
   ),
+  ...secondRouteChecks,
 ];

@@ -1,11 +1,19 @@
 /** Sites pooled and compared, and agreement of raters, against R. */
 
-import { intraclassCorrelation, proportionFunnel, proportionFunnelLimit, randomEffectsPooling, raterAgreement } from '../src/index.ts';
+import {
+  intraclassCorrelation,
+  meanFunnel,
+  proportionFunnel,
+  proportionFunnelLimit,
+  randomEffectsPooling,
+  raterAgreement,
+} from '../src/index.ts';
+import type { FunnelPlot } from '../src/index.ts';
 import type { ReferenceCheck } from './agreement.ts';
 import { limits, membersOf } from './figures.ts';
 import fixture from './sites.json' with { type: 'json' };
 
-const { funnelLimits, funnelPlot, intraclass, raters } = fixture;
+const { funnelLimits, funnelPlot, intraclass, raters, meanFunnel: means, widenedFunnel } = fixture;
 
 const poolingChecks = fixture.pooling.map((one): ReferenceCheck => {
   const sites = one.site.map((site, i) => ({ site, estimate: one.estimate[i], standardError: Math.sqrt(one.variance[i] as number) }));
@@ -22,6 +30,14 @@ const poolingChecks = fixture.pooling.map((one): ReferenceCheck => {
         shrunken: pooled.sites.map((site) => site.shrunken),
       })),
   };
+});
+
+const funnelMembers = (plot: FunnelPlot) => ({
+  ...plot,
+  value: plot.sites.map((site) => site.value),
+  z: plot.sites.map((site) => site.z),
+  limits95: plot.sites.map((site) => limits(site.limits95)),
+  limits998: plot.sites.map((site) => limits(site.limits998)),
 });
 
 export const siteChecks: readonly ReferenceCheck[] = [
@@ -41,13 +57,33 @@ export const siteChecks: readonly ReferenceCheck[] = [
         proportionFunnel(
           funnelPlot.site.map((site, i) => ({ site, events: funnelPlot.events[i] as number, total: funnelPlot.totals[i] as number })),
         ),
-        (plot) => ({
-          ...plot,
-          value: plot.sites.map((site) => site.value),
-          z: plot.sites.map((site) => site.z),
-          limits95: plot.sites.map((site) => limits(site.limits95)),
-          limits998: plot.sites.map((site) => limits(site.limits998)),
-        }),
+        funnelMembers,
+      ),
+  },
+  {
+    ...widenedFunnel,
+    id: 'widened limits of proportions',
+    method: 'funnel',
+    compute: () =>
+      membersOf(
+        proportionFunnel(
+          widenedFunnel.events.map((events, i) => ({ site: `site ${i}`, events, total: widenedFunnel.totals[i] as number })),
+        ),
+        funnelMembers,
+      ),
+  },
+  {
+    ...means,
+    id: 'widened limits of means',
+    method: 'funnel',
+    compute: () =>
+      membersOf(
+        meanFunnel(
+          means.mean.map((mean, i) => ({ site: `site ${i}`, mean, n: means.n[i] as number })),
+          means.target,
+          means.sdWithin,
+        ),
+        funnelMembers,
       ),
   },
   {

@@ -1,7 +1,9 @@
-/** Survival curves, the log-rank test and Cox regression against R. */
+/** Survival curves, the log-rank test and Cox regression against R, Cox regression also against statsmodels. */
 
+import type { CoxModel } from '../src/index.ts';
 import { coxRegression, indicatorPredictors, kaplanMeier, logRankTest, survivalAt, survivalQuantile } from '../src/index.ts';
 import type { ReferenceCheck } from './agreement.ts';
+import coxFixture from './cox-covariates.json' with { type: 'json' };
 import { membersOf } from './figures.ts';
 import fixture from './survival.json' with { type: 'json' };
 
@@ -35,6 +37,14 @@ const curveChecks = fixture.curves.map((one): ReferenceCheck => ({
     }),
 }));
 
+const coxMembers = (model: CoxModel) => ({
+  ...model,
+  coefficients: model.coefficients.map((row) => row.estimate),
+  standardErrors: model.coefficients.map((row) => row.standardError),
+  hazardRatio: model.coefficients.map((row) => row.hazardRatio),
+  scoreStatistic: model.scoreTest.statistic,
+});
+
 const groupChecks = fixture.groups.flatMap((one): ReferenceCheck[] => {
   const { id, source, tolerance } = one;
   return [
@@ -60,15 +70,21 @@ const groupChecks = fixture.groups.flatMap((one): ReferenceCheck[] => {
       method: 'cox',
       expected: one.cox,
       compute: () =>
-        membersOf(coxRegression({ ...one, predictors: indicatorPredictors('group', one.group, one.logRank.groups) }), (model) => ({
-          ...model,
-          coefficients: model.coefficients.map((row) => row.estimate),
-          standardErrors: model.coefficients.map((row) => row.standardError),
-          hazardRatio: model.coefficients.map((row) => row.hazardRatio),
-          scoreStatistic: model.scoreTest.statistic,
-        })),
+        membersOf(coxRegression({ ...one, predictors: indicatorPredictors('group', one.group, one.logRank.groups) }), coxMembers),
     },
   ];
 });
 
-export const survivalChecks: readonly ReferenceCheck[] = [...curveChecks, ...groupChecks];
+/** Covariates that are numbers, on the data of a case above. */
+const covariateChecks = coxFixture.models.map((one): ReferenceCheck => {
+  const data = fixture.groups.find(({ id }) => id === one.data);
+  const predictors = Object.entries(one.predictors).map(([name, values]) => ({ name, values }));
+  return {
+    ...one,
+    id: `Cox ${one.id}`,
+    method: 'cox',
+    compute: () => data && membersOf(coxRegression({ time: data.time, event: data.event, predictors }), coxMembers),
+  };
+});
+
+export const survivalChecks: readonly ReferenceCheck[] = [...curveChecks, ...groupChecks, ...covariateChecks];

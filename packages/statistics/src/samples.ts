@@ -80,6 +80,7 @@ function nearestWhole(steps: number): number {
  */
 export function roundToResolution(value: number, resolution: number): number {
   if (!(resolution > 0) || !Number.isFinite(resolution)) throw new RangeError('A resolution is a positive number.');
+  if (Number.isNaN(value)) throw new RangeError('Only a number can be rounded.');
   const steps = Math.abs(value / resolution);
   if (!(steps < 2 ** 53)) return value;
   const whole = Math.sign(value) * nearestWhole(steps);

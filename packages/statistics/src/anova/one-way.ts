@@ -54,12 +54,14 @@ export function oneWayAnova(given: readonly Group[]): OneWayAnova | NotEstimable
   const meanSquareWithin = within / dfWithin;
   const excess = between - dfBetween * meanSquareWithin;
   const unit = centred.factor;
+  const squares = { between: between * unit * unit, within: within * unit * unit };
+  if (!Number.isFinite(squares.between + squares.within)) return notEstimable(reasons.tooLarge, basis);
   return {
     kind: 'test',
     ...basis,
     ...fFigures(between / dfBetween / meanSquareWithin, dfBetween, dfWithin),
-    sumOfSquaresBetween: between * unit * unit,
-    sumOfSquaresWithin: within * unit * unit,
+    sumOfSquaresBetween: squares.between,
+    sumOfSquaresWithin: squares.within,
     residualSd: Math.sqrt(meanSquareWithin) * unit,
     etaSquared: between / (between + within),
     omegaSquared: excess / (between + within + meanSquareWithin),

@@ -10,7 +10,9 @@ export function quantileOfSorted(sorted: Float64Array, p: number): number {
   if (!(p >= 0 && p <= 1)) throw new RangeError('A quantile is asked for at a share between 0 and 1.');
   if (sorted.length === 0) throw new RangeError('A quantile needs at least one value.');
   // The declaration asks for an array; the code reads length and elements only.
-  return quantileSorted(sorted as unknown as number[], p);
+  const found = quantileSorted(sorted as unknown as number[], p);
+  if (!Number.isFinite(found)) throw new RangeError('Values as large as these cannot be computed with.');
+  return found;
 }
 
 /** Of finite values in any order, which are left as they are. */

@@ -23,6 +23,7 @@ export function fTails(f: number, df1: number, df2: number): Tails {
 export function fQuantile(p: number, df1: number, df2: number, tail: Tail = 'lower'): number {
   requireProbability(p);
   requirePositive(df1, 'The numerator degrees of freedom');
+  if (df1 === Infinity) throw new RangeError('The numerator degrees of freedom are finite.');
   requirePositive(df2, 'The denominator degrees of freedom');
   if (df2 > knownDenominator) return chiSquareQuantile(p, df1, tail) / df1;
   return (df2 / df1) * Math.exp(betaLogitQuantile(p, df1 / 2, df2 / 2, tail));

@@ -9,6 +9,9 @@ import { mirrored, noneAbove, noneBelow, requirePositive, requireProbability, ta
 /** The work grows with the square root of the parameters; beyond this a question is refused rather than answered slowly. */
 const largestParameter = 1e12;
 
+/** Below this the variate over the parameter leaves the range of a double. */
+const smallestParameter = 1e-280;
+
 /**
  * ln of x^a y^b / B(a, b), y = 1 - x: Loader's saddle-point form of the binomial density. The deviation of n x from a is taken from
  * the smaller of x and y, where it has its digits.
@@ -40,11 +43,16 @@ function betaFraction(a: number, b: number, x: number): number {
   return h;
 }
 
-/** Both `x` and `y` = 1 - x are given, because near 1 one of them cannot be had from the other. */
-export function incompleteBeta(a: number, b: number, x: number, y: number): Tails {
+function requireParameters(a: number, b: number): void {
   requirePositive(a, 'The first parameter of a beta distribution');
   requirePositive(b, 'The second parameter of a beta distribution');
-  if (Math.max(a, b) > largestParameter) throw new RangeError('The parameters of a beta distribution are at most 1e12.');
+  if (Math.max(a, b) > largestParameter || Math.min(a, b) < smallestParameter)
+    throw new RangeError('The parameters of a beta distribution lie between 1e-280 and 1e12.');
+}
+
+/** Both `x` and `y` = 1 - x are given, because near 1 one of them cannot be had from the other. */
+export function incompleteBeta(a: number, b: number, x: number, y: number): Tails {
+  requireParameters(a, b);
   if (!(x >= 0 && x <= 1 && y >= 0 && y <= 1)) throw new RangeError('A beta variate lies between 0 and 1.');
   if (x === 0) return noneBelow;
   if (y === 0) return noneAbove;
@@ -62,8 +70,7 @@ function incompleteBetaBelow(a: number, b: number, x: number, y: number): Tails 
  */
 export function betaLogitQuantile(p: number, a: number, b: number, tail: Tail): number {
   requireProbability(p);
-  requirePositive(a, 'The first parameter of a beta distribution');
-  requirePositive(b, 'The second parameter of a beta distribution');
+  requireParameters(a, b);
   if (p === 0 || p === 1) return (p === 0) === (tail === 'lower') ? -Infinity : Infinity;
   const smaller = Math.min(p, 1 - p);
   const direct: Tail = p <= 0.5 === (tail === 'lower') ? 'lower' : 'upper';

@@ -1,5 +1,5 @@
 /**
- * Distribution functions, quantiles and masses. All are this package's own, held to 766 values computed with mpmath
+ * Distribution functions, quantiles and masses. All are this package's own, held to values computed with mpmath
  * (`reference/distribution-values.json`). What the two packages at hand give, measured on the same values (correct digits, worst case):
  *
  * | function             | jstat 1.9.6                    | simple-statistics 7.12.1        | used here                        |

@@ -50,7 +50,13 @@ function panelNodes(from: number, to: number, panels: number): Nodes {
   return { at, weight };
 }
 
-/** Peak of a concave function on [from, to] by golden section; exactness is not needed, only a place near the top. */
+/** Enough halvings to come from the largest double down to the smallest. */
+const mostSteps = 1600;
+
+/**
+ * Peak of a concave function on [from, to] by golden section; exactness is not needed, only a place near the top. It may lie very close
+ * to `from`, so the bracket is held against its distance from there.
+ */
 function peakOf(log: (x: number) => number, from: number, to: number): number {
   const golden = (Math.sqrt(5) - 1) / 2;
   let a = from;
@@ -59,7 +65,7 @@ function peakOf(log: (x: number) => number, from: number, to: number): number {
   let right = a + golden * (b - a);
   let atLeft = log(left);
   let atRight = log(right);
-  for (let i = 0; i < 60 && b - a > 1e-4 * (to - from); i++) {
+  for (let i = 0; i < mostSteps && b - a > 1e-4 * (b - from); i++) {
     if (atLeft >= atRight) {
       [b, right, atRight] = [right, left, atLeft];
       left = b - golden * (b - a);
@@ -78,7 +84,7 @@ function cut(log: (x: number) => number, peak: number, end: number, floor: numbe
   if (log(end) >= floor) return end;
   let inside = peak;
   let outside = end;
-  for (let i = 0; i < 40 && Math.abs(outside - inside) > 0.02 * Math.abs(outside - peak); i++) {
+  for (let i = 0; i < mostSteps && Math.abs(outside - inside) > 0.02 * Math.abs(outside - peak); i++) {
     const middle = (inside + outside) / 2;
     if (log(middle) >= floor) inside = middle;
     else outside = middle;
@@ -99,6 +105,7 @@ function relevantRange(log: (x: number) => number, from: number, to: number): { 
  */
 export function logIntegral(log: (x: number) => number, from: number, to: number, shape = log, panels = 6): number {
   const range = relevantRange(shape, from, to);
+  if (range.logPeak === -Infinity) return -Infinity;
   const nodes = panelNodes(range.from, range.to, panels);
   let sum = 0;
   for (let i = 0; i < nodes.at.length; i++) sum += (nodes.weight[i] as number) * Math.exp(log(nodes.at[i] as number) - range.logPeak);

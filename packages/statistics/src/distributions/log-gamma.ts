@@ -25,9 +25,10 @@ export function logGammaOnePlus(x: number): number {
   return logGammaOnePlusShifted(x) - Math.log1p(x);
 }
 
-/** ln Gamma(x), x > 0. */
+/** ln Gamma(x), x > 0; Infinity where it leaves the range of a double. */
 export function logGamma(x: number): number {
   if (!(x > 0)) throw new RangeError('The gamma function is used for positive numbers only.');
+  if (x > 1e300) return (Math.log(x) - 1) * x;
   if (x < 0.5) return logGammaOnePlus(x) - Math.log(x);
   if (x <= 1.5) return logGammaOnePlus(x - 1);
   if (x >= 10) return (x - 0.5) * Math.log(x) - x + halfLogTwoPi + stirlingError(x);
@@ -58,7 +59,8 @@ export function stirlingError(x: number): number {
   return added + series;
 }
 
-/** ln B(a, b), a and b > 0. */
+/** ln B(a, b), a and b > 0, up to 1e300. */
 export function logBeta(a: number, b: number): number {
+  if (Math.max(a, b) > 1e300) throw new RangeError('The beta function is used for numbers up to 1e300.');
   return logGamma(a) + logGamma(b) - logGamma(a + b);
 }

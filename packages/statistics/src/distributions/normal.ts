@@ -24,7 +24,7 @@ const highest = scaledTail.length - 1;
 
 /** exp(x²/2) P(X > x) for x >= 0. */
 function scaledUpper(x: number): number {
-  const twice = (2 * (x - 5)) / (x + 5);
+  const twice = 2 * ((x - 5) / (x + 5));
   let next = 0;
   let afterNext = 0;
   for (let i = highest; i > 0; i--) {
@@ -42,11 +42,14 @@ function exponentialOfHalfSquare(x: number): number {
 }
 
 export function normalDensity(x: number): number {
+  requireNumber(x, 'A normal deviate');
+  if (Math.abs(x) > 40) return 0;
   return inverseRootTwoPi * exponentialOfHalfSquare(Math.abs(x));
 }
 
 /** P(X > x) alone, for loops that need nothing else. */
 export function normalUpper(x: number): number {
+  requireNumber(x, 'A normal deviate');
   if (x === 0) return 0.5;
   const size = Math.abs(x);
   if (size > 40) return x > 0 ? 0 : 1;
@@ -54,9 +57,10 @@ export function normalUpper(x: number): number {
   return x > 0 ? small : 1 - small;
 }
 
-/** ln P(X <= x) alone; finite for every finite x. */
+/** ln P(X <= x) alone; finite as long as x² is. */
 export function normalLogLower(x: number): number {
-  return x > 0 ? Math.log1p(-normalUpper(x)) : (-x * x) / 2 + Math.log(scaledUpper(-x));
+  if (x === -Infinity) return -Infinity;
+  return x > 0 || Number.isNaN(x) ? Math.log1p(-normalUpper(x)) : (-x * x) / 2 + Math.log(scaledUpper(-x));
 }
 
 export function normalTails(x: number): Tails {

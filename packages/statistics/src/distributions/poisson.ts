@@ -18,7 +18,8 @@ export function poissonTails(x: number, mean: number): Tails {
 export function poissonMass(x: number, mean: number): number {
   requireCount(x, 'A Poisson count');
   requirePositive(mean, 'A Poisson mean');
-  return x === 0 ? Math.exp(-mean) : Math.exp(logGammaTerm(x, mean));
+  if (x === 0 || mean === Infinity) return Math.exp(-mean);
+  return Math.exp(logGammaTerm(x, mean));
 }
 
 /** Smallest x with P(X <= x) >= p; Infinity at p = 1. */

@@ -51,17 +51,21 @@ interface LogRange {
   readonly rough: (w: number, groups: number) => number;
 }
 
-/** df >= 1, or Infinity for the range of standard normals. */
+/** Beyond this, squares leave the range of a double. */
+const largest = 1e150;
+
+/** df >= 1, or Infinity for the range of standard normals. A finite q beyond 1e150 has the tails of 1e150, where P(range > q) < 1e-149. */
 export function studentisedRangeTails(q: number, groups: number, df: number): Tails {
   requireNumber(q, 'A studentised range');
   requireGroups(groups);
   if (!(df >= 1)) throw new RangeError('The studentised range is computed for 1 degree of freedom or more.');
   if (q <= 0) return noneBelow;
   if (q === Infinity) return noneAbove;
+  const within = Math.min(q, largest);
   const logOf = (range: LogRange) => {
-    if (df >= knownError) return range.exact(q, groups);
+    if (df >= knownError) return range.exact(within, groups);
     const density = chiDensity(df);
-    const product = (log: (w: number, groups: number) => number) => (s: number) => density.log(s) + log(q * s, groups);
+    const product = (log: (w: number, groups: number) => number) => (s: number) => density.log(s) + log(within * s, groups);
     return logIntegral(product(range.exact), density.from, density.to, product(range.rough));
   };
   const upper = tailsFrom('upper', logOf({ exact: logRangeUpper, rough: roughLogRangeUpper }));

@@ -19,9 +19,7 @@ export function minimalDetectableChange(sd: number, icc: number, level = 0.95): 
   if (!(sd > 0) || !Number.isFinite(sd)) throw new RangeError('A standard deviation is a positive number.');
   if (!(icc >= 0 && icc <= 1)) throw new RangeError('A reliability lies between 0 and 1.');
   const standardErrorOfMeasurement = sd * Math.sqrt(1 - icc);
-  return {
-    standardErrorOfMeasurement,
-    minimalDetectableChange: normalMultiplier(level) * Math.SQRT2 * standardErrorOfMeasurement,
-    level,
-  };
+  const change = normalMultiplier(level) * Math.SQRT2 * standardErrorOfMeasurement;
+  if (!Number.isFinite(change)) throw new RangeError('A standard deviation as large as this cannot be computed with.');
+  return { standardErrorOfMeasurement, minimalDetectableChange: change, level };
 }

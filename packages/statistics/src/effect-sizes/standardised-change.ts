@@ -46,18 +46,24 @@ export function standardisedChange(
   const sd = sampleSd(change);
   const srm = change.mean / sd;
   const interval = noncentralInterval(srm * Math.sqrt(n), n - 1, 1 / Math.sqrt(n), level);
+  if (interval === undefined) return notEstimable(reasons.tooSmall, basis);
   return {
     kind: 'estimate',
     ...basis,
     estimate: srm,
     interval,
     corrected: n === 2 ? noFigure('the small-sample factor needs three pairs') : corrected(srm, interval, n - 1),
-    baselineEffectSize:
-      before.least === before.greatest ? noFigure('all values equal at baseline') : figure(change.mean / sampleSd(before)),
+    baselineEffectSize: baselineEffectSize(change.mean, before),
     sdOfChange: sd * scaled.factor,
     method: `Standardised response mean (mean change over SD of change) with ${percentText(level)} interval from the noncentral t.`,
     failedAssumptions: verySmallSample(n),
   };
+}
+
+function baselineEffectSize(meanChange: number, before: Moments): Figure {
+  if (before.least === before.greatest) return noFigure('all values equal at baseline');
+  const size = meanChange / sampleSd(before);
+  return Number.isFinite(size) ? figure(size) : noFigure(reasons.tooSmall);
 }
 
 function corrected(srm: number, interval: Interval, df: number): Figure<{ estimate: number; interval: Interval }> {

@@ -44,6 +44,7 @@ export function standardisedDifference(
   const cohenD = (a.mean - b.mean) / pooledSd;
   const unit = Math.sqrt(1 / one.n + 1 / two.n);
   const cohenDInterval = noncentralInterval(cohenD / unit, df, unit, level);
+  if (cohenDInterval === undefined) return notEstimable(reasons.tooSmall, basis);
   const factor = smallSampleFactor(df);
   return {
     kind: 'estimate',

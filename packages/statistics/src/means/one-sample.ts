@@ -35,6 +35,8 @@ export function meanFigures(sample: Sample, level: number, expected = 0): Omit<O
   if (of.least === of.greatest) return notEstimable(reasons.allEqual, sample, mean);
   const sd = sampleSd(of);
   const se = sd / Math.sqrt(n);
+  const t = (of.mean - expected / factor) / se;
+  if (!Number.isFinite(t)) return notEstimable(reasons.tooSmall, sample, mean);
   const reach = tMultiplier(level, n - 1) * se * factor;
   return {
     kind: 'estimate',
@@ -42,7 +44,7 @@ export function meanFigures(sample: Sample, level: number, expected = 0): Omit<O
     interval: { lower: mean - reach, upper: mean + reach, level },
     sd: sd * factor,
     se: se * factor,
-    test: tFigures((of.mean - expected / factor) / se, n - 1),
+    test: tFigures(t, n - 1),
     n,
     leftOut,
     failedAssumptions: verySmallSample(n),

@@ -9,7 +9,7 @@ export const distributionsPage: MethodPage = {
     't, F, beta, binomial: incomplete beta function with the saddle-point prefactor',
     'chi-square, gamma, Poisson: incomplete gamma function with the same prefactor',
     'normal: Chebyshev fit of the tail',
-    'noncentral t, studentised range: Gauss-Legendre panels over the chi density',
+    'noncentral t, studentised range: Gauss-Legendre panels over the chi density, or the normal one where that is the smoother',
     'both tails are computed; none is 1 minus the other',
   ],
   whenUsed: 'Behind every p-value and interval.',

@@ -36,7 +36,7 @@ export function rubinsRules(analyses: readonly ImputedAnalysis[], completeDf: nu
   const m = analyses.length;
   const basis = { n: m, leftOut: nothingLeftOut };
   if (m === 0) return notEstimable(reasons.noData, basis);
-  const estimate = analyses.reduce((sum, one) => sum + one.estimate, 0) / m;
+  const estimate = analyses.reduce((sum, one) => sum + one.estimate / m, 0);
   if (m === 1) return notEstimable('one analysis: the variance between imputations is not known', basis, estimate);
   const varianceWithin = analyses.reduce((sum, one) => sum + one.variance, 0) / m;
   const varianceBetween = analyses.reduce((sum, one) => sum + (one.estimate - estimate) ** 2, 0) / (m - 1);

@@ -12,6 +12,7 @@ import { requireEventCount } from './counts.ts';
 
 /** Limits alone, for `total` of at least 1. At no event the lower limit is 0 exactly, at all events the upper is 1. */
 export function wilsonLimits({ events, total }: EventCount, level: number): Interval {
+  if (!(total >= 1)) throw new RangeError('A proportion needs at least one person.');
   const z = normalMultiplier(level);
   const share = events / total;
   const widening = (z * z) / total;

@@ -4,8 +4,12 @@
  * Statistical Software Newsletter 12:10-17.
  */
 
+import { requireCount } from '../distributions/binomial.ts';
 import type { Tails } from '../distributions/tails.ts';
-import { noneAbove, noneBelow } from '../distributions/tails.ts';
+import { noneAbove, noneBelow, requireNumber } from '../distributions/tails.ts';
+
+/** Pairs of values up to which arrangements are counted: about a second of work. */
+const mostPairs = 40_000;
 
 /** Shares of the C(m + n, m) arrangements without ties that give U = 0, 1, …, mn. */
 export function rankSumShares(m: number, n: number): Float64Array {
@@ -40,9 +44,13 @@ export function tailsOfShares(shares: Float64Array, u: number): { readonly lower
 
 /** P(U <= u) and P(U > u) for groups of m and n without ties. */
 export function rankSumTails(u: number, m: number, n: number): Tails {
+  requireNumber(u, 'A count of pairs');
+  requireCount(m, 'The size of a group');
+  requireCount(n, 'The size of a group');
   const whole = Math.floor(u);
   if (whole < 0) return noneBelow;
   if (whole >= m * n) return noneAbove;
+  if (m * n > mostPairs) throw new RangeError('Arrangements are counted for at most 40,000 pairs of values.');
   const { lower, upper } = tailsOfShares(rankSumShares(m, n), whole);
   return { lower, upper, logLower: Math.log(lower), logUpper: Math.log(upper) };
 }

@@ -4,18 +4,23 @@
  * Newsletter 12:10-17.
  */
 
+import { requireCount } from '../distributions/binomial.ts';
 import type { Tails } from '../distributions/tails.ts';
-import { noneAbove, noneBelow } from '../distributions/tails.ts';
+import { noneAbove, noneBelow, requireNumber } from '../distributions/tails.ts';
 
 /** Beyond this the number of patterns, 2^n, leaves the range of a double. */
 const mostScores = 1000;
+
+function requireCountable(differences: number): void {
+  if (differences > mostScores) throw new RangeError('Sign patterns are counted for at most 1000 differences.');
+}
 
 /**
  * Shares of the sign patterns whose sum is 0, 1, …, `limit`. `scores` are whole numbers: ranks, or doubled midranks when there are ties.
  * Work: number of scores × limit.
  */
 export function signedSumShares(scores: ArrayLike<number>, limit: number): Float64Array {
-  if (scores.length > mostScores) throw new RangeError('Sign patterns are counted for at most 1000 differences.');
+  requireCountable(scores.length);
   const patterns = new Float64Array(limit + 1);
   patterns[0] = 1;
   let reached = 0;
@@ -39,10 +44,13 @@ function ranksTo(n: number): Float64Array {
 
 /** P(V <= v) and P(V > v) for n differences without ties. */
 export function signedRankTails(v: number, n: number): Tails {
+  requireNumber(v, 'A sum of ranks');
+  requireCount(n, 'The number of differences');
   const greatest = (n * (n + 1)) / 2;
   const whole = Math.floor(v);
   if (whole < 0) return noneBelow;
   if (whole >= greatest) return noneAbove;
+  requireCountable(n);
   // The distribution is symmetric, so the smaller tail serves for both sides.
   const lowerIsSmall = whole < greatest / 2;
   const small = shareOfSumsUpTo(ranksTo(n), lowerIsSmall ? whole : greatest - whole - 1);

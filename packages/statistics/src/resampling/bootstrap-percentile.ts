@@ -64,6 +64,7 @@ export function bootstrapPercentile({
   if (!resampled.every(Number.isFinite)) return notEstimable('the statistic cannot be computed in some resamples', basis, estimate);
   const mean = resampled.reduce((sum, value) => sum + value, 0) / replicates;
   const spread = resampled.reduce((sum, value) => sum + (value - mean) ** 2, 0) / (replicates - 1);
+  if (!Number.isFinite(spread)) return notEstimable(reasons.tooLarge, basis, estimate);
   return {
     kind: 'estimate',
     ...basis,

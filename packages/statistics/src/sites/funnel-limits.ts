@@ -28,5 +28,7 @@ export function meanFunnelLimit(target: number, sdWithin: number, n: number, p: 
     throw new RangeError('A funnel needs a finite value and a positive standard deviation.');
   if (!(Number.isSafeInteger(n) && n >= 1)) throw new RangeError('A site has at least one person.');
   if (!(p > 0 && p < 1)) throw new RangeError('A limit of a funnel is asked for at a probability strictly between 0 and 1.');
-  return target + (normalQuantile(p) * sdWithin) / Math.sqrt(n);
+  const limit = target + (normalQuantile(p) * sdWithin) / Math.sqrt(n);
+  if (!Number.isFinite(limit)) throw new RangeError('A funnel as wide as this cannot be computed.');
+  return limit;
 }

@@ -82,7 +82,7 @@ function timeAt(curve: readonly CurvePoint[], share: number): number | undefined
   const reached = curve.find((point) => point.share <= share + sameShare);
   if (reached === undefined || reached.share < share - sameShare) return reached?.time;
   const below = curve.find((point) => point.share < share - sameShare) ?? curve.at(-1);
-  return below && (reached.time + below.time) / 2;
+  return below && reached.time + (below.time - reached.time) / 2;
 }
 
 /** The time by which the share `p` has had the event. */

@@ -14,6 +14,7 @@ export function numberText(value: number, decimals: number): string {
 
 /** Means, medians, quantiles and SDs carry one decimal more than the data. */
 export function summaryDecimals(dataDecimals: number): number {
+  if (!(Number.isInteger(dataDecimals) && dataDecimals >= 0)) throw new RangeError('The number of decimals is a whole number from 0 up.');
   return dataDecimals + 1;
 }
 
