@@ -2,6 +2,7 @@
 import { tableOf, type Row, type TableKey } from '@cairnstep/dictionary';
 import { tableFromRows, type RegistryContext, type TypedTable, type TypedTables } from '@cairnstep/submission-files';
 import type { Tx } from '../../database/as-actor.ts';
+import { monthTables } from './table-sql.ts';
 
 type StoredRow = Readonly<Record<string, string | number | null>>;
 const withoutNulls = (row: StoredRow): Row =>
@@ -47,9 +48,11 @@ export async function loadRegistryContext(
     }
   }
   const codes = [...people];
+  // Only a table that came with a file is replaced; people and consents stay in any case.
+  const replacedMonth = (key: TableKey): string => (tables[key] && monthTables.includes(key) ? month : '');
   const held: Partial<Record<TableKey, TypedTable>> = {};
   for (const key of ['participants', 'consents', 'exams', 'assessments', 'sessions', 'adverse_events'] as const) {
-    const table = await readHeld(tx, key, siteId, month, codes, null);
+    const table = await readHeld(tx, key, siteId, replacedMonth(key), codes, null);
     if (table) held[key] = table;
   }
   const sessions = ofStagedSessions(tables.sessions);
@@ -60,7 +63,7 @@ export async function loadRegistryContext(
       tx,
       'bouts',
       siteId,
-      month,
+      replacedMonth('bouts'),
       codes,
       `(t.participant || '|' || t.session_day || '|' || t.session_no) in (select key from checked_sessions)`,
     );
