@@ -105,6 +105,7 @@ const ofPeople: Readonly<Record<string, Analysis>> = {
   friedmanTest: ({ rows }) => statistics.friedmanTest([column(rows, 'x'), column(rows, 'y'), column(rows, 'z')]),
   standardisedDifference: ({ rows }) => statistics.standardisedDifference(part(rows, 'A'), part(rows, 'B')),
   standardisedChange: ({ rows }) => statistics.standardisedChange(column(rows, 'x'), column(rows, 'y')),
+  largestNumberImbalance: ({ rows }) => statistics.largestNumberImbalance(groups(rows)),
   numberBalance: ({ rows }) => statistics.numberBalance(part(rows, 'A'), part(rows, 'B')),
   pearsonCorrelation: ({ rows }) => statistics.pearsonCorrelation(column(rows, 'x'), column(rows, 'y')),
   spearmanCorrelation: ({ rows }) => statistics.spearmanCorrelation(column(rows, 'x'), column(rows, 'y')),
@@ -158,6 +159,8 @@ const others: Readonly<Record<string, Analysis>> = {
   },
   minimalDetectableChange: ({ rows }) =>
     computed(rows).map(({ x, y }) => statistics.minimalDetectableChange(Math.abs(x), Math.min(1, Math.abs(y)))),
+  largestClassImbalance: ({ counts }) => statistics.largestClassImbalance(counts.map((line, i) => ({ name: `group ${i}`, counts: line }))),
+  responderBounds: (given) => events(given).map((one) => statistics.responderBounds(one, cell(given, 0, 1))),
   classBalance: (given) => statistics.classBalance(given.counts[0] ?? [], given.counts[1] ?? []),
   bootstrapPercentile: ({ rows }) => {
     const values = computed(rows).map(({ x }) => x);
@@ -333,6 +336,18 @@ function expectAlike(one: unknown, other: unknown, path: string): void {
   for (const [key, member] of Object.entries(one)) expectAlike(member, (other as Record<string, unknown>)[key], `${path}.${key}`);
 }
 
+/** Tested against a number of the caller's, which has a unit of its own. */
+const testedAgainstANumber: readonly string[] = ['oneSampleTest'];
+
+const times = (value: Observation, unit: number): Observation => (typeof value === 'number' ? value * unit : value);
+
+/** Every p in an answer, in the order of its members. */
+function probabilities(value: unknown, key = ''): number[] {
+  if (key === 'p' && typeof value === 'number') return [value];
+  if (typeof value !== 'object' || value === null) return [];
+  return Object.entries(value).flatMap(([name, member]) => probabilities(member, name));
+}
+
 const slow: readonly string[] = ['tukeyKramer', 'ancova', 'randomSlopeModel', 'standardisedDifference', 'standardisedChange'];
 const runs = (name: string): number => (slow.includes(name) ? 25 : 120);
 
@@ -376,6 +391,19 @@ group('every exported function', () => {
         },
       ),
       { seed, numRuns: slow.includes(name) ? 10 : 40 },
+    );
+  });
+
+  it.each(Object.keys(ofPeople).filter((name) => !testedAgainstANumber.includes(name)))('%s gives the same p in any unit', (name) => {
+    fc.assert(
+      fc.property(ordinaryRows, (rows) => {
+        const inUnit = (unit: number) =>
+          rows.map((row) => ({ ...row, x: times(row.x, unit), y: times(row.y, unit), z: times(row.z, unit) }));
+        const plain = probabilities(answerOf(() => ofPeople[name]?.({ rows, counts: [] })));
+        const other = probabilities(answerOf(() => ofPeople[name]?.({ rows: inUnit(1024), counts: [] })));
+        expectAlike(plain, other, name);
+      }),
+      { seed, numRuns: slow.includes(name) ? 8 : 25 },
     );
   });
 

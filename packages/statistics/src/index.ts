@@ -26,6 +26,7 @@ export * from './effect-sizes/standardised-difference.ts';
 export * from './effect-sizes/standardised-change.ts';
 export * from './effect-sizes/minimal-detectable-change.ts';
 export * from './effect-sizes/balance.ts';
+export * from './effect-sizes/largest-imbalance.ts';
 export { smallSampleFactor } from './effect-sizes/small-sample-factor.ts';
 export * from './wording/rounding.ts';
 export * from './wording/number-text.ts';

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { agreement } from '../../reference/agreement.ts';
 import { effectSizeChecks } from '../../reference/effect-sizes.checks.ts';
 import { classBalance, numberBalance } from './balance.ts';
+import { largestClassImbalance, largestNumberImbalance } from './largest-imbalance.ts';
 import { minimalDetectableChange } from './minimal-detectable-change.ts';
 import { smallSampleFactor } from './small-sample-factor.ts';
 import { standardisedChange } from './standardised-change.ts';
@@ -150,5 +151,40 @@ describe('the balance of two groups', () => {
     expect(numberBalance([1, 1e301], [2, 2])).toMatchObject({ reason: 'values too large to compute with' });
     expect(() => classBalance([1], [1, 2])).toThrow(RangeError);
     expect(() => classBalance([1.5], [1])).toThrow(RangeError);
+  });
+});
+
+describe('the balance of three or more groups', () => {
+  const groups = [
+    { name: 'A', values: [1, 2, 3, 4] },
+    { name: 'B', values: [2, 3, 4, 5] },
+    { name: 'C', values: [9, 7, 8, null] },
+    { name: 'D', values: [5] },
+  ];
+
+  it('is that of the pair that differs most', () => {
+    const answer = largestNumberImbalance(groups);
+    expect(answer).toMatchObject({ kind: 'balance', first: 'A', second: 'C', pairsCompared: 3, concern: 'large', groupSizes: [4, 3] });
+    expect(answer).toMatchObject({ difference: (numberBalance([1, 2, 3, 4], [9, 7, 8]) as { difference: number }).difference });
+  });
+
+  it('of classes likewise', () => {
+    const counts = [
+      { name: 'A', counts: [10, 20, 5] },
+      { name: 'B', counts: [11, 19, 5] },
+      { name: 'C', counts: [3, 9, 20] },
+    ];
+    expect(largestClassImbalance(counts)).toMatchObject({ first: 'B', second: 'C', pairsCompared: 3 });
+  });
+
+  it('is none without a pair that can be compared', () => {
+    expect(largestNumberImbalance([])).toMatchObject({ kind: 'not-estimable', reason: 'no comparison possible' });
+    expect(largestNumberImbalance(groups.slice(3))).toMatchObject({ kind: 'not-estimable' });
+    expect(
+      largestClassImbalance([
+        { name: 'A', counts: [0, 0] },
+        { name: 'B', counts: [1, 2] },
+      ]),
+    ).toMatchObject({ kind: 'not-estimable' });
   });
 });

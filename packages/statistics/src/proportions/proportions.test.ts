@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { agreement } from '../../reference/agreement.ts';
 import { proportionChecks } from '../../reference/proportions.checks.ts';
-import { clopperPearsonProportion, newcombeDifference, wilsonProportion } from './index.ts';
+import { clopperPearsonProportion, newcombeDifference, responderBounds, wilsonProportion } from './index.ts';
 
 const seed = 41;
 const count = fc
@@ -95,5 +95,36 @@ describe('proportions', () => {
   it.each([0, 1, -0.5, Number.NaN])('refuses the level %d', (level) => {
     expect(() => wilsonProportion(1, 2, level)).toThrow(RangeError);
     expect(() => wilsonProportion(1, 2, 0.9)).not.toThrow();
+  });
+});
+
+describe('the bounds of a proportion with results missing', () => {
+  it('hold the share of those who have a result, and meet it when nothing is missing', () => {
+    fc.assert(
+      fc.property(count, fc.nat({ max: 300 }), ({ events, total }, missing) => {
+        const bounds = responderBounds({ events, total }, missing);
+        if (bounds.kind !== 'bounds') throw new Error(bounds.reason);
+        expect(bounds.lowest).toBeLessThanOrEqual(events / total);
+        expect(bounds.highest).toBeGreaterThanOrEqual(events / total);
+        expect(bounds.highest - bounds.lowest).toBeCloseTo(missing / (total + missing), 12);
+        // The complement turns them round.
+        expect(responderBounds({ events: total - events, total }, missing)).toMatchObject({
+          lowest: expect.closeTo(1 - bounds.highest, 12),
+        });
+      }),
+      { seed },
+    );
+  });
+
+  it('mark a loss of more than a fifth', () => {
+    expect(responderBounds({ events: 12, total: 40 }, 10)).toMatchObject({ lowest: 0.24, highest: 0.44, failedAssumptions: [] });
+    expect(responderBounds({ events: 12, total: 40 }, 11)).toMatchObject({ failedAssumptions: ['11 of 51 people have no result'] });
+    expect(responderBounds({ events: 0, total: 0 }, 3)).toMatchObject({ n: 0, lowest: 0, highest: 1 });
+  });
+
+  it('say no data for nobody, and refuse counts that are none', () => {
+    expect(responderBounds({ events: 0, total: 0 }, 0)).toMatchObject({ kind: 'not-estimable', reason: 'no data' });
+    expect(() => responderBounds({ events: 1, total: 2 }, -1)).toThrow(RangeError);
+    expect(() => responderBounds({ events: 1, total: 2 }, 0.5)).toThrow(RangeError);
   });
 });
