@@ -4,6 +4,7 @@ import { useId } from 'react';
 import { hasRole, sitesOf, useAccount } from '../../lib/account.ts';
 import { cohortPhrases } from '../../lib/cohort.ts';
 import { formatDate } from '../../lib/format.ts';
+import { saveFile } from '../../lib/save-file.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { EmptyState } from '../../ui/empty-state.tsx';
@@ -11,7 +12,8 @@ import { Page, Section } from '../../ui/page.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { CohortStrip } from './cohort-strip.tsx';
 import { gridQuery, outcomesQuery } from './explore.queries.ts';
-import { downloadGrid, GridAsTable } from './grid-as-table.tsx';
+import { downloadGrid, fileNameOf, GridAsTable } from './grid-as-table.tsx';
+import { gridPicture } from './grid-picture.ts';
 import { GridChoice } from './grid-choice.tsx';
 import { GridWithLevels } from './grid-with-levels.tsx';
 import { cohortCount, gridInWords, sourceOf, statisticNames, unitText } from './grid-words.ts';
@@ -97,9 +99,14 @@ function GridSection({ grid, isOld, address: { cells, asTable, draft, chooseCell
               {asTable ? 'Show as grid' : 'Show as table'}
             </Button>
             {!asTable && (
-              <Button variant="quiet" onPress={() => downloadGrid(grid)}>
-                Download CSV
-              </Button>
+              <>
+                <Button variant="quiet" onPress={() => downloadGrid(grid)}>
+                  Download CSV
+                </Button>
+                <Button variant="quiet" onPress={() => saveFile(`${fileNameOf(grid)}.svg`, gridPicture(grid), 'image/svg+xml')}>
+                  Download as picture (SVG)
+                </Button>
+              </>
             )}
             <Button variant="quiet" onPress={() => window.print()}>
               Print the cohort sheet

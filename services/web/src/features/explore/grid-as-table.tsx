@@ -67,7 +67,7 @@ function Absent({ cell }: { readonly cell: Cell }) {
 }
 
 /** "cairnstep-release-3-tmwt_ss-without-device-change" */
-function fileNameOf({ release, site, outcome, statistic }: Grid): string {
+export function fileNameOf({ release, site, outcome, statistic }: Grid): string {
   const source = site !== null ? `site-${site.code}` : `release-${release?.number ?? 'none'}`;
   return ['cairnstep', source, outcome.key, outcome.inDevice ? 'in-device' : 'without-device', statistic].join('-');
 }
