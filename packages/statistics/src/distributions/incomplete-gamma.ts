@@ -50,5 +50,7 @@ export function incompleteGamma(a: number, x: number): Tails {
   if (a > largestShape) throw new RangeError('The shape of a gamma distribution is at most 1e12.');
   if (x <= 0) return noneBelow;
   if (x === Infinity) return noneAbove;
+  // Whatever the shape, ln P(X > x) is -x there to the last digit.
+  if (x > 1e200) return tailsFrom('upper', -x);
   return x < a + 1 ? tailsFrom('lower', logLowerSeries(a, x)) : tailsFrom('upper', logUpperFraction(a, x));
 }
