@@ -14,7 +14,7 @@ export const signedRankPage: MethodPage = {
   ],
   whenUsed: 'Change within the same people on an ordinal scale, or with n < 15 and |G1| > 1.',
   smallN:
-    'One non-zero difference is enough; p below 0.05 is impossible below 6. The smallest possible p (2/2^n) and the level the interval really reaches are given. No difference at all: no test.',
+    'One non-zero difference is enough; p below 0.05 is impossible below 6. The smallest possible p (2 in 2ⁿ) and the level the interval really reaches are given. No difference at all: no test.',
   source:
     'Wilcoxon (1945) Biometrics Bull 1:80-83; Hodges & Lehmann (1963) Ann Math Stat 34:598-611; Hollander & Wolfe (1973) chapter 3; Streitberg & Roehmel (1986) Stat Softw Newsl 12:10-17.',
   computedBy: computations.ranks,
