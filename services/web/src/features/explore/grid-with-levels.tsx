@@ -26,7 +26,7 @@ export function GridWithLevels(props: LevelGradeGridProps) {
   return (
     <div
       style={layout}
-      className="beside:grid beside:grid-cols-[156px_88px_repeat(7,minmax(0,1fr))] beside:[grid-template-rows:var(--grid-rows)]"
+      className="beside:grid beside:grid-cols-[156px_94px_repeat(7,minmax(0,1fr))] beside:[grid-template-rows:var(--grid-rows)]"
     >
       {scale !== null && (
         <div className="mb-4 beside:col-start-2 beside:col-end-[-1] beside:row-start-1 beside:self-end">

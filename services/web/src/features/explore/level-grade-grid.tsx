@@ -193,7 +193,7 @@ const headLook =
   'border-b border-edge bg-sheet pr-2 pb-2 pl-3 text-left align-bottom font-normal focus-visible:-outline-offset-2 beside:flex beside:flex-col beside:justify-end';
 const rowLook = 'block border-b border-hairline columns:table-row beside:col-span-full beside:grid beside:grid-cols-subgrid';
 const rowHeadLook =
-  'block bg-sheet pt-4 pb-1 text-left font-semibold columns:text-small print:text-[9pt] focus-visible:-outline-offset-2 columns:table-cell columns:border-b columns:border-hairline columns:py-2 columns:pr-1 columns:align-top beside:border-0';
+  'block bg-sheet pt-4 pb-1 text-left font-semibold wrap-normal columns:text-small print:text-[9pt] focus-visible:-outline-offset-2 columns:table-cell columns:border-b columns:border-hairline columns:py-2 columns:pr-1 columns:align-top beside:border-0';
 const cellLook =
   'relative block scroll-mt-28 scroll-mb-32 py-1.5 pr-0.5 pl-2.5 columns:table-cell columns:border-b columns:border-b-hairline columns:align-top beside:block beside:border-b-0';
 const totalRowLook = 'columns:border-t columns:border-t-edge';
