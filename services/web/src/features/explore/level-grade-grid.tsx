@@ -110,7 +110,7 @@ export function LevelGradeGrid({ grid, scale, labelledBy, chosen, onChoose }: Le
         className="hidden columns:table-header-group beside:sticky beside:top-0 beside:z-10 beside:col-span-full beside:row-start-1 beside:grid beside:grid-cols-subgrid"
       >
         <tr role="row" className="beside:col-span-full beside:grid beside:grid-cols-subgrid">
-          <td role="gridcell" className={`${headLook} columns:w-22`}>
+          <td role="gridcell" className={`${headLook} columns:w-22 beside:w-auto`}>
             <span className="text-small text-quiet">Level</span>
           </td>
           {grades.map((grade, column) => (
