@@ -2,6 +2,8 @@ import { decodeEntities } from './decode-entities.ts';
 import { MalformedXml } from './malformed-xml.ts';
 
 const SPACE = 32;
+const SLASH = 47;
+const GREATER = 62;
 const EQUALS = 61;
 const APOSTROPHE = 39;
 const QUOTE = 34;
@@ -13,38 +15,47 @@ const fields = 4;
 
 /** The attributes of one tag, kept as places in the text: most tags of a sheet are asked for one or two of many. */
 export class TagAttributes {
+  /** Whether the tag closes itself: `<a/>`. */
+  isEmptyTag = false;
   private source = '';
   private count = 0;
   private readonly places = new Int32Array(mostAttributes * fields);
 
   /**
-   * @param start Behind the tag's name. @param end Before the mark that ends the tag.
+   * Reads on from behind a tag's name to its end.
+   * @returns where the `>` stands, or -1 when it has not arrived.
    * @throws MalformedXml
    */
-  read(source: string, start: number, end: number): void {
+  read(source: string, start: number): number {
     this.source = source;
     this.count = 0;
+    this.isEmptyTag = false;
     let at = start;
     for (;;) {
-      while (at < end && source.charCodeAt(at) <= SPACE) at += 1;
-      if (at >= end) return;
-      const nameStart = at;
       let character = source.charCodeAt(at);
-      while (character > SPACE && character !== EQUALS) {
-        at += 1;
-        character = source.charCodeAt(at);
+      while (character <= SPACE) character = source.charCodeAt((at += 1));
+      if (character === SLASH) {
+        this.isEmptyTag = true;
+        character = source.charCodeAt((at += 1));
+        if (at < source.length && character !== GREATER) throw new MalformedXml('a tag that does not end');
       }
+      if (character === GREATER) return at;
+
+      const nameStart = at;
+      while (character > SPACE && character !== EQUALS && character !== GREATER) character = source.charCodeAt((at += 1));
       const nameEnd = at;
-      while (source.charCodeAt(at) <= SPACE) at += 1;
-      if (at >= end || source.charCodeAt(at) !== EQUALS || nameEnd === nameStart) throw new MalformedXml('an attribute without a value');
-      at += 1;
-      while (source.charCodeAt(at) <= SPACE) at += 1;
-      const quote = source.charCodeAt(at);
-      if (at >= end || (quote !== QUOTE && quote !== APOSTROPHE)) throw new MalformedXml('an attribute without quotation marks');
+      while (character <= SPACE) character = source.charCodeAt((at += 1));
+      if (at >= source.length) return -1;
+      if (character !== EQUALS || nameEnd === nameStart) throw new MalformedXml('an attribute without a value');
+      do character = source.charCodeAt((at += 1));
+      while (character <= SPACE);
+      if (at >= source.length) return -1;
+      if (character !== QUOTE && character !== APOSTROPHE) throw new MalformedXml('an attribute without quotation marks');
+      const quote = character;
       const valueStart = at + 1;
-      at = valueStart;
-      while (at < end && source.charCodeAt(at) !== quote) at += 1;
-      if (at >= end) throw new MalformedXml('an attribute that does not end');
+      do character = source.charCodeAt((at += 1));
+      while (character !== quote && at < source.length);
+      if (at >= source.length) return -1;
       this.keep(nameStart, nameEnd, valueStart, at);
       at += 1;
     }

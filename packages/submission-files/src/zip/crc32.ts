@@ -11,6 +11,6 @@ const table = Uint32Array.from({ length: 256 }, (_, byte) => {
  */
 export function crc32(bytes: Uint8Array, before = 0): number {
   let checksum = ~before;
-  for (const byte of bytes) checksum = (checksum >>> 8) ^ (table[(checksum ^ byte) & 0xff] ?? 0);
+  for (let at = 0; at < bytes.length; at += 1) checksum = (checksum >>> 8) ^ (table[(checksum ^ (bytes[at] ?? 0)) & 0xff] ?? 0);
   return ~checksum >>> 0;
 }

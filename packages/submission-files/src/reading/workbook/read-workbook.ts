@@ -2,9 +2,9 @@
  * XLSX workbooks (ECMA-376) to the tables of a submission, the same in browser and server.
  *
  * Own reader over fflate's inflater (MIT, 8 kB, no dependencies). The one well-known alternative, exceljs 4.4.0, streams
- * only through Node's streams: its build for browsers holds the whole workbook as objects, and weighs 930 kB. It also
- * follows whatever an archive unpacks to, where here sizes are checked before and while unpacking. For the 50,000 bouts
- * of `bench/workbook.bench.ts` it needs several times the time; figures in the bench.
+ * only through Node's streams: its build for browsers weighs 930 kB and holds the whole workbook as objects (680 MB for the
+ * 50,000 bouts of `bench/workbook.bench.ts`). It checks none of the sizes, names and places that a hostile archive lies
+ * about, and streaming in Node it takes half as long again without typing a cell as this reader does with it (2.7 and 1.8 s).
  *
  * The packed bytes are held, up to the limit; parts are unpacked, scanned and typed piece by piece, so that beyond them
  * memory grows only with the typed rows and the texts that cells share.

@@ -63,7 +63,8 @@ function rowXml({ line, cells, style, styles, height }: PlannedRow, letters: rea
 function valueXml(value: PlannedValue): string {
   if (value === null) return '/>';
   if (typeof value === 'number') return `><v>${formatNumber(value)}</v></c>`;
-  return ` t="inlineStr"><is><t xml:space="preserve">${escapeXml(value)}</t></is></c>`;
+  const preserves = value.trim() === value ? '' : ' xml:space="preserve"';
+  return ` t="inlineStr"><is><t${preserves}>${escapeXml(value)}</t></is></c>`;
 }
 
 function* validationsXml(validations: readonly PlannedValidation[]): Generator<string> {

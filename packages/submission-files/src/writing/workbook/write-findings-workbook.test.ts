@@ -58,7 +58,7 @@ describe('writeFindingsWorkbook', () => {
     const { sheet } = await findingsIn(csv('bouts', file));
     const row = (line: number): string => new RegExp(`<row r="${line}"[^>]*>(.*?)</row>`).exec(sheet('Bouts'))?.[1] ?? '';
     const texts = (line: number): string[] =>
-      [...row(line).matchAll(/<t [^>]*>([^<]*)<\/t>|<v>([^<]*)<\/v>/g)].map(([, text, number]) => text ?? `number ${number}`);
+      [...row(line).matchAll(/<t[^>]*>([^<]*)<\/t>|<v>([^<]*)<\/v>/g)].map(([, text, number]) => text ?? `number ${number}`);
     expect(texts(1)).toEqual(['colour', 'bout_no', 'steps', 'distance_m', 'stop_reason']);
     expect(texts(2)).toEqual(['red', 'number 1', 'many', '12,5', 'pain']);
     expect([row(3), texts(4), texts(5)]).toEqual([
@@ -76,7 +76,7 @@ describe('writeFindingsWorkbook', () => {
   it('lists every finding and links it to its cell', async () => {
     const found = await findingsIn(csv('bouts', file));
     const list = found.sheet('Findings');
-    const places = [...list.matchAll(/<row r="(\d+)"><c [^>]*><is><t [^>]*>(?:error|warning)<.*?<t [^>]*>([A-Z]\d\d)</g)].map(
+    const places = [...list.matchAll(/<row r="(\d+)"><c [^>]*><is><t[^>]*>(?:error|warning)<.*?<t[^>]*>([A-Z]\d\d)</g)].map(
       ([, line, rule]) => `${line} ${rule}`,
     );
     expect(places).toEqual(['2 F06', '3 F09', '4 F10', '5 F10', '6 F11', '7 F13']);
