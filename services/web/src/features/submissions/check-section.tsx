@@ -49,8 +49,8 @@ export function CheckSection({ submission, isCoordinator, unsent, isStale, onBeg
         {isStale && status === 'checked' && (
           <Notice kind="error" title="The registry changed since this preview was made." urgent>
             <p>
-              Nothing was committed, and your files and reasons are kept. Somebody of your site committed another submission meanwhile.
-              Check again to see what would change now.
+              Nothing was committed, and your files and reasons are kept. Another submission of your site was committed meanwhile. Check
+              again to see what would change now.
             </p>
           </Notice>
         )}

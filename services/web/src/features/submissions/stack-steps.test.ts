@@ -27,6 +27,11 @@ describe('the stones of a submission', () => {
     expect(states(checked(), 1)).toBe('done current done waiting waiting');
   });
 
+  it('go back to the check when the registry changed under the preview', () => {
+    const steps = stackSteps(checked(), 0, true);
+    expect(steps.map(({ state }) => state).join(' ')).toBe('done done current waiting waiting');
+  });
+
   it('say how far the check is, and wait in words until it is taken up', () => {
     const checking = (progress: Submission['progress']) => remark(sample({ files, status: 'checking', progress }), 'check');
     expect(checking({ step: 'read', done: 0, of: 1 })).toBe('waiting to be taken up');

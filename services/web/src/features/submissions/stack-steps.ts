@@ -13,8 +13,8 @@ const step = (key: Key, state: StepState, remark?: string): Step => ({
   ...(remark !== undefined && { remark }),
 });
 
-/** `unsent`: files chosen in this browser that the registry does not have yet. */
-export function stackSteps(submission: Submission, unsent: number): readonly Step[] {
+/** `unsent`: files chosen in this browser that the registry does not have yet. `isStale`: the preview no longer holds. */
+export function stackSteps(submission: Submission, unsent: number, isStale = false): readonly Step[] {
   const { files, status } = submission;
   const settled = status === 'accepted' || status === 'superseded';
   const begun = files.length + unsent > 0 || settled;
@@ -30,9 +30,9 @@ export function stackSteps(submission: Submission, unsent: number): readonly Ste
       !begun ? 'waiting' : prepared || settled ? 'done' : 'current',
       unsent > 0 ? `${formatCount(unsent, 'file')} not sent yet` : begun ? 'each with its table, sent' : undefined,
     ),
-    checkStep(submission, prepared),
-    reviewStep(submission, prepared),
-    commitStep(submission, prepared),
+    ...(isStale && submission.status === 'checked'
+      ? [step('check', 'current', 'has to be repeated'), step('review', 'waiting'), step('commit', 'waiting')]
+      : [checkStep(submission, prepared), reviewStep(submission, prepared), commitStep(submission, prepared)]),
   ];
 }
 

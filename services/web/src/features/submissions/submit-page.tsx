@@ -66,7 +66,7 @@ function Submit({ submission, isCutOff }: { readonly submission: Submission; rea
     >
       {status !== 'discarded' && (
         <Section note={<p>Nothing enters the registry before the last stone. Until then files can be replaced and the check repeated.</p>}>
-          <StackProgress label="Steps of the submission" steps={stackSteps(submission, unsent)} />
+          <StackProgress label="Steps of the submission" steps={stackSteps(submission, unsent, isStale)} />
         </Section>
       )}
       {isCutOff && (
