@@ -21,7 +21,7 @@ export interface TextFieldProps extends TextProps {
   readonly ref?: Ref<HTMLInputElement>;
 }
 
-/** One line of text. Takes what `Controller` of react-hook-form hands out: `<TextField {...field} …>`. Dates are typed here as ISO. */
+/** One line of text. Dates are typed here as ISO. */
 export function TextField({ label, hint, error, ref, ...rest }: TextFieldProps) {
   return (
     <AriaTextField {...rest} isInvalid={error !== undefined} validationBehavior="aria" className="grid max-w-xl gap-1">
