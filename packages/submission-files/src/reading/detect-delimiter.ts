@@ -5,7 +5,7 @@ import { UnreadableFile } from './unreadable-file.ts';
 
 export type Delimiter = ',' | ';' | '\t';
 
-const candidates: readonly Delimiter[] = [',', ';', '\t'];
+export const delimiters: readonly Delimiter[] = [',', ';', '\t'];
 
 /**
  * The separator under which the first row names most columns of the table; of equals, the one that gives most cells.
@@ -14,7 +14,7 @@ const candidates: readonly Delimiter[] = [',', ';', '\t'];
  */
 export function detectDelimiter(beginning: string, names: HeaderNames): Delimiter {
   let best: { delimiter: Delimiter; recognised: number; cells: number } = { delimiter: ',', recognised: -1, cells: 0 };
-  for (const delimiter of candidates) {
+  for (const delimiter of delimiters) {
     const header = firstRecord(beginning, delimiter);
     const recognised = header.filter((cell) => names.meaning(cell).kind !== 'undeclared').length;
     if (recognised > best.recognised || (recognised === best.recognised && header.length > best.cells))
