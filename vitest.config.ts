@@ -28,7 +28,12 @@ export default defineConfig({
         ...shared,
         test: {
           name: 'unit',
-          include: ['packages/*/src/**/*.test.ts', 'services/{api,fake-oidc,mail-catcher}/src/**/*.test.ts', 'infra/**/*.test.ts'],
+          include: [
+            'packages/*/src/**/*.test.ts',
+            'services/{api,fake-oidc,mail-catcher}/src/**/*.test.ts',
+            'services/web/build/*.test.ts',
+            'infra/**/*.test.ts',
+          ],
           testTimeout: 60_000,
         },
       },

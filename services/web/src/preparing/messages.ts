@@ -1,6 +1,9 @@
 /**
  * What the page that prepares a month and the page around it say to each other. The preparing page sees record numbers, dates and the
  * site key, and may connect to nothing; the page around it talks to the registry and sees only what is parsed here.
+ *
+ * The preparing page is built into one file that runs in a sandbox (origin `null`) here and from a clinic's disk elsewhere. So it has
+ * no storage, imports its worker as `./….ts?worker`, and posts to `parent` with `'*'` as the origin: nobody else may frame it.
  */
 import { tableKeys } from '@cairnstep/dictionary';
 import { z } from 'zod';
