@@ -42,6 +42,7 @@ beforeAll(async () => {
     requestId: request.body.id,
     exportId,
     table: 'bouts',
+    month: '2026-02',
     token: randomBytes(32).toString('base64url'),
     personId: otherResearcher.id,
     grantId: randomUUID(),
@@ -72,7 +73,7 @@ function send(
   return who.delete(address);
 }
 const anyId = (name: string): string =>
-  name === 'table' ? 'bouts' : name === 'token' ? randomBytes(32).toString('base64url') : randomUUID();
+  name === 'table' ? 'bouts' : name === 'month' ? '2026-02' : name === 'token' ? randomBytes(32).toString('base64url') : randomUUID();
 const codeOf = (answer: supertest.Response): string | undefined => /^\/problems\/(.+)$/.exec(answer.body?.type ?? '')?.[1];
 
 describe.each(all)('%s', (name, endpoint) => {

@@ -32,6 +32,7 @@ const siteTables = [
   'submission_files',
   'submission_findings',
   'row_history',
+  'month_closures',
   'course_facts',
   'outcome_facts',
   ...tableKeys,
@@ -84,6 +85,7 @@ async function fillSite(siteId: string): Promise<void> {
     before: '{}',
     submission_id: submission,
   });
+  await insert('month_closures', { site_id: siteId, month: '2025-02', closed_by: randomUUID(), closed_at: new Date() });
   await insert('course_facts', {
     site_id: siteId,
     participant: 'P',
@@ -168,6 +170,7 @@ async function otherRow(table: string, siteId: string): Promise<string> {
   for (const column of ['participant', 'row_key']) if (column in row) row[column] = column === 'row_key' ? {} : 'OTHER';
   if (table.startsWith('sub')) row[table === 'submissions' ? 'id' : 'submission_id'] = randomUUID();
   if (table === 'row_history') row['id'] = 900_000;
+  if (table === 'month_closures') row['month'] = '2025-03';
   return JSON.stringify(row);
 }
 

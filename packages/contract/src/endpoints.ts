@@ -3,6 +3,7 @@ import * as account from './account.ts';
 import * as audit from './audit.ts';
 import * as explore from './explore.ts';
 import * as health from './health.ts';
+import * as months from './months.ts';
 import * as people from './people.ts';
 import * as requests from './requests.ts';
 import * as submissions from './submissions.ts';
@@ -21,7 +22,9 @@ export const endpoints = {
   endGrant: people.endGrant,
   setPersonStatus: people.setPersonStatus,
   listSites: people.listSites,
-  listMonths: submissions.listMonths,
+  listMonths: months.listMonths,
+  listCalendar: months.listCalendar,
+  closeMonth: months.closeMonth,
   openSubmission: submissions.openSubmission,
   listSubmissions: submissions.listSubmissions,
   getSubmission: submissions.getSubmission,

@@ -5,6 +5,7 @@ export * from './endpoints.ts';
 export * from './empty-request-form.ts';
 export * from './explore.ts';
 export * from './health.ts';
+export * from './months.ts';
 export * from './people.ts';
 export * from './problems.ts';
 export * from './requests.ts';

@@ -22,6 +22,7 @@ export const problems = {
   'submission-busy': { status: 409, title: 'This submission is being checked' },
   'submission-empty': { status: 409, title: 'No file has been added yet' },
   'month-not-open': { status: 409, title: 'This month cannot be submitted' },
+  'month-not-empty': { status: 409, title: 'Something has been submitted for this month' },
   'file-unreadable': { status: 422, title: 'The file could not be read' },
   'request-incomplete': { status: 409, title: 'The request is not complete' },
   'request-not-in-state': { status: 409, title: 'The request has moved on' },

@@ -74,27 +74,6 @@ export type Submission = z.output<typeof Submission>;
 
 const SubmissionParams = z.strictObject({ submissionId: Id });
 
-export const listMonths = endpoint({
-  method: 'GET',
-  path: '/api/sites/:siteId/months',
-  summary: "A site's months, newest first, with what is due",
-  params: z.strictObject({ siteId: Id }),
-  response: z.strictObject({
-    site: Site,
-    months: z.array(
-      z.strictObject({
-        month: Month,
-        state: z.enum(['not-yet-due', 'due', 'overdue', 'in-progress', 'accepted']),
-        dueOn: z.iso.date(),
-        submissionId: Id.nullable(),
-        acceptedAt: Instant.nullable(),
-        rows: z.number().int().nullable(),
-      }),
-    ),
-  }),
-  problems: ['not-found'],
-});
-
 export const openSubmission = endpoint({
   method: 'POST',
   path: '/api/submissions',

@@ -11,6 +11,7 @@ import { auditRoutes } from './features/audit/audit.routes.ts';
 import { exploreRoutes } from './features/explore/explore.routes.ts';
 import { exportRoutes } from './features/exports/exports.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
+import { monthRoutes } from './features/months/months.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { requestRoutes } from './features/requests/requests.routes.ts';
 import { makeProvider } from './features/sign-in/provider.ts';
@@ -54,6 +55,7 @@ export function allRoutes(context: Context): Route[] {
     ...healthRoutes(context),
     ...accountRoutes(context, provider),
     ...peopleRoutes(context),
+    ...monthRoutes(context),
     ...submissionRoutes(context),
     ...exploreRoutes(context),
     ...requestRoutes(context),

@@ -56,6 +56,8 @@ export const entries = {
   setPersonStatus: 'manage-people',
   listSites: 'see-sites',
   listMonths: 'see-site-rows',
+  listCalendar: 'see-site-rows',
+  closeMonth: 'submit',
   openSubmission: 'submit',
   listSubmissions: 'see-site-rows',
   getSubmission: 'see-site-rows',

@@ -3,6 +3,7 @@ import 'reflect-metadata';
 import { DataSource, DefaultNamingStrategy, type Table } from 'typeorm';
 import { CourseFactRow, OutcomeFactRow, ReleaseCourseRow, ReleaseOutcomeRow, ReleaseRow, ReleaseSessionRow } from './entities/facts.ts';
 import { AccountRow, GrantRow, InvitationRow, SiteRow, WebSessionRow } from './entities/people.ts';
+import { MonthClosureRow } from './entities/months.ts';
 import { AuditEntryRow, MailMessageRow } from './entities/records.ts';
 import { registrySchemas, stagedSchemas } from './entities/registry.ts';
 import { AccessRequestMemberRow, AccessRequestRow, AccessRequestVoteRow, ExportPseudonymRow, ExportRow } from './entities/requests.ts';
@@ -26,6 +27,7 @@ export const entities = [
   SubmissionFileRow,
   SubmissionFindingRow,
   RowHistoryRow,
+  MonthClosureRow,
   CourseFactRow,
   OutcomeFactRow,
   ReleaseRow,

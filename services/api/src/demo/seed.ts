@@ -18,7 +18,7 @@ import { makeDataSource } from '../database/data-source.ts';
 import { freeze } from '../features/explore/make-release.ts';
 import { checkSubmission } from '../features/submissions/check-submission.ts';
 import { accept } from '../features/submissions/commit-submission.ts';
-import { monthOf } from '../features/submissions/months.ts';
+import { monthOf } from '../features/months/months.ts';
 import { beginCheck, insertSubmission, lockSubmission, putFile, setFindingGroups } from '../features/submissions/submissions.repository.ts';
 
 const monthBefore = (month: string): string => monthOf(new Date(Date.parse(`${month}-01T00:00:00Z`) - 86_400_000));

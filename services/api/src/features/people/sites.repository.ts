@@ -11,3 +11,6 @@ export async function readSite(tx: Tx, siteId: string): Promise<(Site & { firstM
   })[];
   return site ?? null;
 }
+
+export const listSitesWithFirstMonth = async (tx: Tx): Promise<(Site & { firstMonth: string })[]> =>
+  (await tx.query('select id, code, name, first_month as "firstMonth" from sites order by code')) as (Site & { firstMonth: string })[];

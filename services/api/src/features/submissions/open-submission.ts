@@ -5,9 +5,9 @@ import type { Actor } from '../../authority/actor.ts';
 import { requireFound, requireMayAtSite, requirePerson } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
-import { Refusal } from '../../http/refusal.ts';
+import { lockMonth } from '../months/months.repository.ts';
+import { requireOpenMonth } from '../months/require-open-month.ts';
 import { readSite } from '../people/sites.repository.ts';
-import { monthOf } from './months.ts';
 import { present } from './read-submissions.ts';
 import { findUnsettled, insertSubmission } from './submissions.repository.ts';
 
@@ -21,9 +21,8 @@ export const openSubmission = (
   asActor(database, actor, async (tx) => {
     requireMayAtSite(actor, 'submit', siteId);
     const site = requireFound(await readSite(tx, siteId));
-    if (month >= monthOf(clock())) throw new Refusal('month-not-open', 'A month can be submitted once it has ended.');
-    if (month < site.firstMonth) throw new Refusal('month-not-open', 'The site had not joined the registry in that month.');
-    await tx.query('select pg_advisory_xact_lock(hashtext($1))', [`${siteId} ${month}`]);
+    requireOpenMonth(month, site, clock());
+    await lockMonth(tx, siteId, month);
     const existing = await findUnsettled(tx, siteId, month);
     if (existing !== null) return present(tx, existing);
     const id = await insertSubmission(tx, siteId, month, requirePerson(actor).accountId);

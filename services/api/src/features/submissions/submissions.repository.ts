@@ -203,25 +203,6 @@ export async function listSubmissions(
   return { items, total };
 }
 
-export interface MonthLine {
-  readonly month: string;
-  readonly unsettled: string | null;
-  readonly accepted: string | null;
-  readonly acceptedAt: Date | null;
-  readonly rows: number | null;
-}
-
-export async function readMonths(tx: Tx, siteId: string): Promise<MonthLine[]> {
-  return (await tx.query(
-    `select month, max(id::text) filter (where status in ('open', 'checking', 'checked')) as unsettled,
-            max(id::text) filter (where status = 'accepted') as accepted, max(settled_at) filter (where status = 'accepted') as "acceptedAt",
-            max(rows) filter (where status = 'accepted') as rows
-       from (select m.*, (select sum(f.rows)::int from submission_files f where f.submission_id = m.id) as rows from submissions m where m.site_id = $1) m
-      group by month`,
-    [siteId],
-  )) as MonthLine[];
-}
-
 export interface FindingRecord {
   readonly id: number;
   readonly rule: string;

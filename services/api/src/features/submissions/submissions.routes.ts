@@ -6,11 +6,10 @@ import { discardSubmission } from './discard-submission.ts';
 import { listChanges } from './list-changes.ts';
 import { openSubmission } from './open-submission.ts';
 import { putSubmissionFile, removeSubmissionFile } from './put-submission-file.ts';
-import { getReceipt, getSubmission, listMonths, listSubmissionFindings, listSubmissionsOfSite } from './read-submissions.ts';
+import { getReceipt, getSubmission, listSubmissionFindings, listSubmissionsOfSite } from './read-submissions.ts';
 import { requestCheck } from './request-check.ts';
 
 export const submissionRoutes = (context: Context): Route[] => [
-  route('listMonths', (actor, input) => listMonths(context, actor, input)),
   route('listSubmissions', (actor, input) => listSubmissionsOfSite(context, actor, input)),
   route('openSubmission', (actor, input, { requestId }) => openSubmission(context, actor, input, requestId)),
   route('getSubmission', (actor, input) => getSubmission(context, actor, input)),

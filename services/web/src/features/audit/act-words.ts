@@ -12,6 +12,8 @@ const words: Readonly<Record<string, string>> = {
   'invitation.accept': 'invitation accepted',
   'invitation.revoke': 'invitation taken back',
   'invitation.send': 'invitation sent',
+  'month.close': 'month closed: nothing to report',
+  'month.remind': 'reminder of a month sent',
   'release.make': 'release made',
   'request.begin': 'access request begun',
   'request.reach': 'reach of a request asked for',

@@ -116,6 +116,11 @@ export const explanations: Readonly<Record<ProblemCode, Explanation>> = {
     kept: nothingChanged,
     next: 'Choose another month. If the agreement’s dates are wrong, ask an administrator.',
   },
+  'month-not-empty': {
+    meaning: 'A month can be closed as “nothing to report” only while nothing was submitted for it and no submission of it is under way.',
+    kept: nothingChanged,
+    next: 'Give up the submission that is under way, or correct the one that was accepted.',
+  },
   'file-unreadable': {
     meaning: 'The file is not a CSV file in UTF-8 with the columns of the template, or it is damaged.',
     kept: 'The file was not added. Files added before are still there.',

@@ -1,17 +1,10 @@
 /** A site's months by year as stones: which are in, which are missing. The table beside it says the same in words. */
 import { formatMonth } from '../../lib/format.ts';
-import { monthStates } from './months.ts';
+import { monthStateWords } from '../../lib/month-states.ts';
+import { MonthStone } from '../../ui/month-stone.tsx';
 import type { Month } from './months.ts';
 
 const letters = ['J', 'F', 'M', 'A', 'M', 'J', 'J', 'A', 'S', 'O', 'N', 'D'];
-const looks: Readonly<Record<Month['state'], string>> = {
-  accepted: 'fill-lichen stroke-lichen',
-  'in-progress': 'fill-chosen stroke-lichen stroke-2',
-  due: 'fill-transparent stroke-ink stroke-2',
-  overdue: 'fill-transparent stroke-oxide stroke-2',
-  'not-yet-due': 'fill-transparent stroke-edge [stroke-dasharray:2_2]',
-};
-
 export function MonthCalendar({ months }: { readonly months: readonly Month[] }) {
   const years = [...new Set(months.map(({ month }) => month.slice(0, 4)))].sort();
   const byMonth = new Map(months.map((month) => [month.month, month]));
@@ -54,10 +47,10 @@ function Stone({ month }: { readonly month: Month | undefined }) {
   if (month === undefined) return null;
   return (
     <>
-      <svg aria-hidden="true" width="20" height="12" viewBox="0 0 20 12" className="mx-auto">
-        <rect x="1" y="1" width="18" height="10" rx="5" className={looks[month.state]} />
-      </svg>
-      <span className="sr-only">{monthStates[month.state]}</span>
+      <span className="grid justify-items-center">
+        <MonthStone state={month.state} />
+      </span>
+      <span className="sr-only">{monthStateWords[month.state]}</span>
     </>
   );
 }

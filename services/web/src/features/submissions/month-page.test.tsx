@@ -14,6 +14,7 @@ const month = (name: string, state: Month['state'], dueOn: string, more: Partial
   submissionId: null,
   acceptedAt: null,
   rows: null,
+  closed: null,
   ...more,
 });
 const months = [
@@ -60,7 +61,7 @@ describe('the months of a site', () => {
       `/submissions/${submissionId}/receipt`,
     );
     expect(within(table).getByRole('row', { name: /^December 2026 not over yet/ })).toBeTruthy();
-    expect(screen.getByText('1 of 2 months are accepted.')).toBeTruthy();
+    expect(screen.getByText('1 of 2 months are accepted or closed.')).toBeTruthy();
   });
 
   it('offer to go on where a month was begun', async () => {
@@ -74,6 +75,20 @@ describe('the months of a site', () => {
     const section = await next();
     expect(section.getByText('Nothing is due')).toBeTruthy();
     expect(section.getByText(/December 2026 can be submitted once it is over, and is due on 15 January 2027/)).toBeTruthy();
+  });
+
+  it('close a month with nothing to report, once the reader has seen what follows', async () => {
+    const closed = month('2026-11', 'nothing-to-report', '2026-12-15', { closed: { at: '2026-12-01T10:00:00.000Z', by: 'Mara Lind' } });
+    const { asked } = open(coordinator, { [`POST /api/sites/${site.id}/months/2026-11/nothing-to-report`]: closed });
+    fireEvent.click((await next()).getByRole('button', { name: 'Nothing to report for November 2026' }));
+    const dialog = within(await screen.findByRole('alertdialog', { name: 'Nothing to report for November 2026?' }));
+    expect(dialog.getByText(/no session, assessment or event in November 2026/)).toBeTruthy();
+    fireEvent.click(dialog.getByRole('button', { name: 'Close November 2026' }));
+    expect(await screen.findByText('2 of 2 months are accepted or closed.')).toBeTruthy();
+    const row = screen.getByRole('row', { name: /^November 2026 nothing to report/ });
+    expect(within(row).getByText(/said by Mara Lind/)).toBeTruthy();
+    expect(within(row).getByRole('button', { name: 'Submit after all November 2026' })).toBeTruthy();
+    expect(asked.filter(({ method }) => method === 'POST')).toHaveLength(1);
   });
 
   it('say why a month could not be opened', async () => {

@@ -3,6 +3,7 @@ import type { listMonths, ResponseOf, Site } from '@cairnstep/contract';
 import { useQuery } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
 import { formatDate, formatInstant, formatMonth, formatShare } from '../../lib/format.ts';
+import { monthStateWords } from '../../lib/month-states.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ErrorNotice } from '../../ui/error-notice.tsx';
@@ -11,8 +12,9 @@ import { Table } from '../../ui/table.tsx';
 import type { Column } from '../../ui/table.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { ForChosenSite, maySubmit } from './chosen-site.tsx';
+import { CloseMonth } from './close-month.tsx';
 import { MonthCalendar } from './month-calendar.tsx';
-import { monthStates } from './months.ts';
+import { settledMonths } from './months.ts';
 import type { Month } from './months.ts';
 import { NextStepSection } from './next-step-section.tsx';
 import { monthsQuery, useOpenSubmission } from './submissions.queries.ts';
@@ -22,7 +24,12 @@ export default function MonthPage() {
     <Page
       title="This month"
       lead={<p>Once a month the clinic’s training logs and assessments become one accepted submission.</p>}
-      note={<p>A month is due on the 15th of the month after it. It can be submitted as soon as it is over, and corrected later.</p>}
+      note={
+        <>
+          <p>A month is due on the 15th of the month after it. It can be submitted as soon as it is over, and corrected later.</p>
+          <p>Coordinators are reminded by e-mail five days before, the day after, and then weekly, four times.</p>
+        </>
+      }
     >
       <ForChosenSite>{(site, account) => <MonthsOf key={site.id} site={site} isCoordinator={maySubmit(account, site)} />}</ForChosenSite>
     </Page>
@@ -52,7 +59,6 @@ function Months({ site, months, isCoordinator }: MonthsProps) {
     open.mutate({ siteId: site.id, month }, { onSuccess: (submission) => void navigate(`/submit/${submission.id}`) });
   const opening = open.isPending ? open.variables.month : null;
   const past = months.filter(({ state }) => state !== 'not-yet-due');
-  const accepted = past.filter(({ acceptedAt }) => acceptedAt !== null);
   return (
     <>
       <NextStepSection site={site} months={months} isCoordinator={isCoordinator} opening={opening} onOpen={openMonth}>
@@ -63,7 +69,9 @@ function Months({ site, months, isCoordinator }: MonthsProps) {
         id="months"
         note={
           <>
-            <p>A filled stone is an accepted month, an empty one waits, a dashed one is not over yet.</p>
+            <p>
+              A filled stone is an accepted month, one with a bar had nothing to report, an empty one waits, a dashed one is not over yet.
+            </p>
             <p>
               <TextLink to={`/submissions?site=${site.code}`}>Every submission of this site</TextLink>
             </p>
@@ -71,12 +79,12 @@ function Months({ site, months, isCoordinator }: MonthsProps) {
         }
       >
         <div className="grid gap-6">
-          <p>{formatShare(accepted.length, past.length)} months are accepted.</p>
+          <p>{formatShare(settledMonths(past).length, past.length)} months are accepted or closed.</p>
           <MonthCalendar months={months} />
           <Table
             id="months"
             caption={`Months of ${site.name}`}
-            columns={columnsFor(isCoordinator, opening, openMonth)}
+            columns={columnsFor(site, isCoordinator, opening, openMonth)}
             rows={months}
             rowKey={({ month }) => month}
             empty="The site has no month to submit yet."
@@ -88,10 +96,10 @@ function Months({ site, months, isCoordinator }: MonthsProps) {
   );
 }
 
-function columnsFor(isCoordinator: boolean, opening: string | null, onOpen: (month: string) => void): readonly Column<Month>[] {
+function columnsFor(site: Site, isCoordinator: boolean, opening: string | null, onOpen: (month: string) => void): readonly Column<Month>[] {
   return [
     { key: 'month', header: 'Month', value: ({ month }) => month, cell: ({ month }) => formatMonth(month), isRowHeader: true },
-    { key: 'state', header: 'State', value: ({ state }) => monthStates[state], cell: (month) => <StateWords month={month} /> },
+    { key: 'state', header: 'State', value: wordsOf, cell: (month) => <StateWords month={month} /> },
     { key: 'due', header: 'Due', value: ({ dueOn }) => dueOn, cell: ({ dueOn }) => formatDate(dueOn) },
     {
       key: 'accepted',
@@ -105,26 +113,45 @@ function columnsFor(isCoordinator: boolean, opening: string | null, onOpen: (mon
       header: 'Next',
       value: () => null,
       isAct: true,
-      cell: (month) => <MonthActs month={month} isCoordinator={isCoordinator} isOpening={opening === month.month} onOpen={onOpen} />,
+      cell: (month) => (
+        <MonthActs site={site} month={month} isCoordinator={isCoordinator} isOpening={opening === month.month} onOpen={onOpen} />
+      ),
     },
   ];
 }
 
-function StateWords({ month: { state, acceptedAt } }: { readonly month: Month }) {
-  const words = state === 'in-progress' && acceptedAt !== null ? 'accepted, correction begun' : monthStates[state];
-  return <span className={state === 'overdue' ? 'font-semibold text-oxide' : state === 'due' ? 'font-semibold' : ''}>{words}</span>;
+const wordsOf = ({ state, acceptedAt, closed }: Month): string => {
+  const begunAgain = state === 'in-progress' || state === 'checking';
+  if (begunAgain && acceptedAt !== null) return 'accepted, correction begun';
+  if (begunAgain && closed !== null) return 'nothing to report, submission begun after all';
+  return monthStateWords[state];
+};
+
+function StateWords({ month }: { readonly month: Month }) {
+  const { state, closed } = month;
+  return (
+    <>
+      <span className={state === 'overdue' ? 'font-semibold text-oxide' : state === 'due' ? 'font-semibold' : ''}>{wordsOf(month)}</span>
+      {closed !== null && (
+        <span className="block text-small text-quiet">
+          {state === 'accepted' ? 'before: nothing to report, ' : ''}said by {closed.by}, {formatInstant(closed.at)}
+        </span>
+      )}
+    </>
+  );
 }
 
 interface MonthActsProps {
+  readonly site: Site;
   readonly month: Month;
   readonly isCoordinator: boolean;
   readonly isOpening: boolean;
   readonly onOpen: (month: string) => void;
 }
 
-function MonthActs({ month: { month, state, submissionId }, isCoordinator, isOpening, onOpen }: MonthActsProps) {
+function MonthActs({ site, month: { month, state, submissionId }, isCoordinator, isOpening, onOpen }: MonthActsProps) {
   const name = formatMonth(month);
-  if (state === 'in-progress' && submissionId !== null) {
+  if ((state === 'in-progress' || state === 'checking') && submissionId !== null) {
     return (
       <TextLink to={`/submit/${submissionId}`}>
         {isCoordinator ? 'Go on' : 'Look'}
@@ -147,5 +174,12 @@ function MonthActs({ month: { month, state, submissionId }, isCoordinator, isOpe
       </>
     );
   }
-  return isCoordinator && (state === 'due' || state === 'overdue') ? act('Submit') : null;
+  if (!isCoordinator || state === 'not-yet-due') return null;
+  if (state === 'nothing-to-report') return act('Submit after all');
+  return (
+    <>
+      {act('Submit')}
+      <CloseMonth site={site} month={month} variant="quiet" />
+    </>
+  );
 }

@@ -9,13 +9,14 @@ const month = (name: string, state: Month['state'], more: Partial<Month> = {}): 
   submissionId: null,
   acceptedAt: null,
   rows: null,
+  closed: null,
   ...more,
 });
 const accepted = { acceptedAt: '2026-10-20T10:00:00.000Z', rows: 900 };
 const today = '2026-11-30';
 
 describe('what a site does next', () => {
-  it('is the oldest month that was never accepted, and says how many wait behind it', () => {
+  it('is the oldest month that nothing has settled, and says how many wait behind it', () => {
     const months = [month('2026-12', 'not-yet-due'), month('2026-11', 'due'), month('2026-10', 'in-progress'), month('2026-09', 'overdue')];
     const next = nextStep(months, today);
     expect(next).toMatchObject({ begun: false, late: true, others: 2 });
@@ -31,6 +32,12 @@ describe('what a site does next', () => {
     const correction = month('2026-09', 'in-progress', accepted);
     expect(nextStep([month('2026-11', 'due'), correction], today)?.month.month).toBe('2026-11');
     expect(nextStep([month('2026-12', 'not-yet-due'), correction], today)).toMatchObject({ correction: true, begun: true, late: false });
+  });
+
+  it('is not a month that had nothing to report, until a submission of it was begun after all', () => {
+    const closed = { closed: { at: '2026-10-02T10:00:00.000Z', by: 'Mara Lind' } };
+    expect(nextStep([month('2026-09', 'nothing-to-report', closed), month('2026-08', 'accepted', accepted)], today)).toBeNull();
+    expect(nextStep([month('2026-09', 'checking', closed)], today)).toMatchObject({ correction: true, begun: true, late: false });
   });
 
   it('is nothing while all past months are accepted', () => {

@@ -1,21 +1,13 @@
 /** What a site's months ask for next. */
-import type { listMonths, ResponseOf } from '@cairnstep/contract';
+import type { SiteMonth } from '@cairnstep/contract';
 
-export type Month = ResponseOf<typeof listMonths>['months'][number];
-
-export const monthStates: Readonly<Record<Month['state'], string>> = {
-  accepted: 'accepted',
-  'in-progress': 'begun',
-  due: 'due',
-  overdue: 'overdue',
-  'not-yet-due': 'not over yet',
-};
+export type Month = SiteMonth;
 
 export interface NextStep {
   readonly month: Month;
   /** Opened before, with or without files. */
   readonly begun: boolean;
-  /** A month accepted before is being replaced. */
+  /** A month accepted or closed before is being replaced. */
   readonly correction: boolean;
   /** The day it was due on has passed. */
   readonly late: boolean;
@@ -23,13 +15,19 @@ export interface NextStep {
   readonly others: number;
 }
 
-/** The oldest month that waits for its first acceptance; else a correction that was begun; else nothing. `today`: `2026-12-01`. */
+const isSettled = ({ acceptedAt, closed }: Month): boolean => acceptedAt !== null || closed !== null;
+const isBegun = ({ state }: Month): boolean => state === 'in-progress' || state === 'checking';
+
+/** Accepted, or closed as having nothing to report; also while a correction is under way. */
+export const settledMonths = (months: readonly Month[]): readonly Month[] => months.filter(isSettled);
+
+/** The oldest month that nothing has settled yet; else a correction that was begun; else nothing. `today`: `2026-12-01`. */
 export function nextStep(months: readonly Month[], today: string): NextStep | null {
   const oldestFirst = [...months].sort((a, b) => a.month.localeCompare(b.month));
-  const waiting = oldestFirst.filter(({ state, acceptedAt }) => state !== 'not-yet-due' && acceptedAt === null);
-  const corrections = oldestFirst.filter(({ state, acceptedAt }) => state === 'in-progress' && acceptedAt !== null);
+  const waiting = oldestFirst.filter((month) => month.state !== 'not-yet-due' && !isSettled(month));
+  const corrections = oldestFirst.filter((month) => isBegun(month) && isSettled(month));
   const [month, ...others] = [...waiting, ...corrections];
   if (month === undefined) return null;
-  const correction = month.acceptedAt !== null;
-  return { month, begun: month.state === 'in-progress', correction, late: !correction && month.dueOn < today, others: others.length };
+  const correction = isSettled(month);
+  return { month, begun: isBegun(month), correction, late: !correction && month.dueOn < today, others: others.length };
 }

@@ -5,6 +5,7 @@ import { formatCount, formatDate, formatMonth } from '../../lib/format.ts';
 import { Button, LinkButton } from '../../ui/button.tsx';
 import { Section } from '../../ui/page.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
+import { CloseMonth } from './close-month.tsx';
 import { nextStep } from './months.ts';
 import type { Month, NextStep } from './months.ts';
 
@@ -37,7 +38,7 @@ export function NextStepSection({ site, months, isCoordinator, opening, onOpen, 
     >
       <div className="grid justify-items-start gap-4">
         {next === null ? <NothingDue months={months} /> : <Due next={next} />}
-        {next !== null && isCoordinator && <Act next={next} isOpening={opening === next.month.month} onOpen={onOpen} />}
+        {next !== null && isCoordinator && <Act site={site} next={next} isOpening={opening === next.month.month} onOpen={onOpen} />}
         {next !== null && !isCoordinator && <p className="text-quiet">The site coordinator submits. You can follow it here.</p>}
         {children}
       </div>
@@ -68,10 +69,12 @@ function Due({ next }: { readonly next: NextStep }) {
 }
 
 function Act({
+  site,
   next,
   isOpening,
   onOpen,
 }: {
+  readonly site: Site;
   readonly next: NextStep;
   readonly isOpening: boolean;
   readonly onOpen: (month: string) => void;
@@ -83,9 +86,12 @@ function Act({
       Go on with {name}
     </LinkButton>
   ) : (
-    <Button variant="primary" isPending={isOpening} onPress={() => onOpen(month.month)}>
-      Submit {name}
-    </Button>
+    <div className="flex flex-wrap gap-3">
+      <Button variant="primary" isPending={isOpening} onPress={() => onOpen(month.month)}>
+        Submit {name}
+      </Button>
+      <CloseMonth site={site} month={month.month} variant="secondary" />
+    </div>
   );
 }
 

@@ -2,6 +2,7 @@
 import {
   acknowledgeFindings,
   checkSubmission,
+  closeMonth,
   commitSubmission,
   discardSubmission,
   getReceipt,
@@ -86,6 +87,18 @@ function useChange<Input>(change: (input: Input) => Promise<Submission>) {
 }
 
 export const useOpenSubmission = () => useChange((month: CallOf<typeof openSubmission>) => call(openSubmission, month));
+
+export function useCloseMonth(siteId: string) {
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: (month: string) => call(closeMonth, { siteId, month }),
+    onSuccess: (closed) =>
+      cache.setQueryData(
+        monthsQuery(siteId).queryKey,
+        (before) => before && { ...before, months: before.months.map((one) => (one.month === closed.month ? closed : one)) },
+      ),
+  });
+}
 
 export const useRemoveFile = (submissionId: string) => useChange((table: TableKey) => call(removeSubmissionFile, { submissionId, table }));
 

@@ -10,6 +10,12 @@ export function nextMonth(month: string): string {
   return number === 12 ? `${year + 1}-01` : `${year}-${String(number + 1).padStart(2, '0')}`;
 }
 
+/** The month so many months before: `monthsBefore('2026-02', 3)` is `2025-11`. */
+export function monthsBefore(month: string, count: number): string {
+  const [year, number] = month.split('-').map(Number) as [number, number];
+  return monthOf(new Date(Date.UTC(year, number - 1 - count, 1)));
+}
+
 /** From the first to the last, both included; empty when the last lies before the first. */
 export function monthsBetween(first: string, last: string): string[] {
   const months: string[] = [];
