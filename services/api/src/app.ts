@@ -1,6 +1,4 @@
 /** The server as one ordered list: who asks, may they, what they ask for, how it is answered. */
-import { existsSync } from 'node:fs';
-import path from 'node:path';
 import express, { type ErrorRequestHandler, type Express } from 'express';
 import { rateLimit } from 'express-rate-limit';
 import helmet from 'helmet';
@@ -23,6 +21,7 @@ import { openApiDocument } from './http/open-api.ts';
 import { Refusal } from './http/refusal.ts';
 import type { Route } from './http/route.ts';
 import { sameOrigin } from './http/same-origin.ts';
+import { serveWeb } from './http/serve-web.ts';
 import { sessions } from './http/session.ts';
 import { toProblem } from './http/to-problem.ts';
 
@@ -37,6 +36,8 @@ const contentSecurityPolicy = (secure: boolean) => ({
     fontSrc: ["'self'"],
     connectSrc: ["'self'"],
     workerSrc: ["'self'"],
+    // The page that prepares a month's files.
+    frameSrc: ["'self'"],
     manifestSrc: ["'self'"],
     formAction: ["'self'"],
     baseUri: ["'none'"],
@@ -128,15 +129,4 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
     response.status(problem.status).type('application/problem+json').send(JSON.stringify(problem));
   }) satisfies ErrorRequestHandler);
   return app;
-}
-
-/** The built client: hashed files for ever, the page itself always asked for anew. */
-function serveWeb(app: Express, folder: string | undefined): void {
-  if (!folder || !existsSync(path.join(folder, 'index.html'))) return;
-  app.use('/assets', express.static(path.join(folder, 'assets'), { immutable: true, maxAge: '1y', fallthrough: false }));
-  app.use(express.static(folder, { index: false, maxAge: '1h' }));
-  app.get('/{*path}', (_request, response) => {
-    response.setHeader('Cache-Control', 'no-cache');
-    response.sendFile(path.join(folder, 'index.html'));
-  });
 }
