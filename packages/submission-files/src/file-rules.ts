@@ -1,7 +1,8 @@
 /**
  * Rules that are about files and single cells rather than about medicine: F01-F05 stop the reading of a file, F06-F15
  * are about its columns and cells, F20-F25 about single values against the dictionary, F30-F37 about rows and records,
- * F40 and up about workbooks (F40 and F41 stop the reading of one).
+ * F40-F48 about workbooks (F40 and F41 stop the reading of one), F50 and up about what identifies a person and about the
+ * files of a submission together.
  * Rules across fields (C, E, T, A, R) are the dictionary's.
  */
 import type { RuleText } from './finding.ts';
@@ -272,5 +273,40 @@ export const fileRules: readonly RuleText[] = [
     statement: 'The example row of the template stays as it was, or is deleted.',
     why: 'A row that is still marked as the example is not read, so a row written over it could be lost.',
     mend: 'Write the participant in place of the word EXAMPLE, or delete the row.',
+  },
+  {
+    id: 'F50',
+    severity: 'error',
+    statement: 'Nothing in a file identifies a person.',
+    why: 'Names, dates, numbers and addresses of people stay at the clinic. A file with any of them is not kept.',
+    mend: 'Prepare the file on the submission page, which takes such cells out, and send it again.',
+  },
+  {
+    id: 'F51',
+    severity: 'warning',
+    statement: 'Nothing in a file might identify a person.',
+    why: 'What looks like a name, a number or running text sometimes is none. Somebody has to look and say why it may stay.',
+    mend: 'Look at the column. Take it out, or say why it identifies nobody.',
+  },
+  {
+    id: 'F52',
+    severity: 'error',
+    statement: 'Every file of the submission is still there.',
+    why: 'A file that identified somebody, or could not be read to its end, was deleted when it was checked.',
+    mend: 'Send a file in its place, or take it out of the submission.',
+  },
+  {
+    id: 'F53',
+    severity: 'error',
+    statement: 'The rows of a table come in one file.',
+    why: 'Of two files with rows of the same table nobody can tell which one counts.',
+    mend: 'Take one of the two files out, or empty the sheet.',
+  },
+  {
+    id: 'F54',
+    severity: 'error',
+    statement: 'Every cell that was mended on screen is in its file.',
+    why: 'A value without a row would be lost.',
+    mend: 'Send the file again; what was mended on screen goes with the earlier one.',
   },
 ];

@@ -23,6 +23,8 @@ export type { SheetsOfWorkbook, TextSheet } from './reading/workbook/read-workbo
 export { exampleMark } from './table/example-cells.ts';
 export { isFormulaLike } from './table/formula-like.ts';
 export { TableBuilder } from './table/table-builder.ts';
+export type { CellWatch, Mends, TableOptions } from './table/table-options.ts';
+export { columnLetters } from './table/header-row.ts';
 export { tableFromRows } from './table/table-from-rows.ts';
 export { TypedColumn, TypedTable } from './table/typed-table.ts';
 export type { Cell } from './table/typed-table.ts';
@@ -34,4 +36,4 @@ export type { SubmittedFile } from './writing/workbook/submitted-tables.ts';
 export { writeTemplate } from './writing/workbook/write-template.ts';
 export type { TemplateFor } from './writing/workbook/write-template.ts';
 export type { RegistryContext, TypedTables } from './registry-context.ts';
-export { checkSubmission } from './check-submission.ts';
+export { checkSteps, checkSubmission } from './check-submission.ts';

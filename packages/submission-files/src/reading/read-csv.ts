@@ -4,6 +4,7 @@ import type { FindingLog } from '../finding-log.ts';
 import { defaultLimits } from '../limits.ts';
 import type { ReadLimits } from '../limits.ts';
 import { TableBuilder } from '../table/table-builder.ts';
+import type { TableOptions } from '../table/table-options.ts';
 import type { TypedTable } from '../table/typed-table.ts';
 import type { ByteSource } from './byte-source.ts';
 import { scanCsv } from './scan-csv.ts';
@@ -36,8 +37,9 @@ export async function readTable(
   source: ByteSource,
   findings: FindingLog,
   limits: ReadLimits = defaultLimits,
+  options: TableOptions = {},
 ): Promise<TypedTable> {
-  const builder = new TableBuilder(table, findings, limits);
+  const builder = new TableBuilder(table, findings, limits, options);
   for await (const _ of fillFromCsv(builder, source));
   return builder.take();
 }

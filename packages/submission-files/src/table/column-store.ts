@@ -1,3 +1,4 @@
+import { fitsRange } from '@cairnstep/dictionary';
 import type { Variable } from '@cairnstep/dictionary';
 import { TypedColumn } from './typed-table.ts';
 
@@ -55,6 +56,14 @@ export class ColumnStore {
   setUnreadable(row: number): void {
     this.unreadable ??= new Uint8Array(this.capacity);
     this.unreadable[row] = 1;
+  }
+
+  /** Whether the row holds nothing, or just what the dictionary allows here. */
+  isAllowed(row: number): boolean {
+    if (this.unreadable?.[row]) return false;
+    const number = this.numbers?.[row] ?? Number.NaN;
+    const { hard } = this.variable;
+    return Number.isNaN(number) || (hard !== undefined && fitsRange(number, hard));
   }
 
   /** The word already stored in a row, '' when there is none. */

@@ -12,14 +12,25 @@ export interface HeaderColumn {
   readonly shown: string;
 }
 
-/** The columns of a header row up to the last one that is filled. */
-export function readHeaderRow(table: TableKey, cells: readonly string[], count: number): readonly HeaderColumn[] {
+/**
+ * The columns of a header row up to the last one that is filled.
+ * @param mayShow Whether findings may repeat a header that the dictionary does not have.
+ */
+export function readHeaderRow(
+  table: TableKey,
+  cells: readonly string[],
+  count: number,
+  mayShow: (header: string) => boolean = () => true,
+): readonly HeaderColumn[] {
   const names = new HeaderNames(table);
   const headers = cells.slice(0, lastFilled(cells, count) + 1);
   const meanings = headers.map((header) => names.meaning(header));
   // Where most of the row is not a header, its cells may be somebody's data and are not repeated.
-  const mayShow = meanings.filter(({ kind }) => kind === 'column').length * 2 >= headers.length;
-  return meanings.map((meaning, position) => ({ meaning, shown: shownHeader(headers[position] ?? '', position, mayShow) }));
+  const isHeaderRow = meanings.filter(({ kind }) => kind === 'column').length * 2 >= headers.length;
+  return meanings.map((meaning, position) => {
+    const header = headers[position] ?? '';
+    return { meaning, shown: shownHeader(header, position, isHeaderRow && (meaning.kind !== 'undeclared' || mayShow(header))) };
+  });
 }
 
 /** The name by which findings about cells of a column call it. */
@@ -42,9 +53,9 @@ export function lastFilled(cells: readonly string[], count: number): number {
 }
 
 /** The header without control and direction marks, cut to a readable length; or the column's letters. */
-function shownHeader(header: string, position: number, mayShow: boolean): string {
+function shownHeader(header: string, position: number, isShowable: boolean): string {
   if (header.trim() === '') return '';
-  if (!mayShow) return columnLetters(position);
+  if (!isShowable) return columnLetters(position);
   const plain = header.replace(/[\p{Cc}\p{Cf}\p{Zl}\p{Zp}]+/gu, ' ').trim();
   return plain.length > longestShownHeader ? `${plain.slice(0, longestShownHeader)}…` : plain;
 }

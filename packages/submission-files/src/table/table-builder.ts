@@ -20,9 +20,12 @@ import { MeasuredReader } from './measured-reader.ts';
 import { NumberReader } from './number-reader.ts';
 import type { DecimalManner } from './number-reader.ts';
 import { ParticipantReader } from './participant-reader.ts';
+import type { TableOptions } from './table-options.ts';
 import { TypedTable } from './typed-table.ts';
 
 const firstCapacity = 1_024;
+
+const isNumber = ({ type }: Variable): boolean => type === 'integer' || type === 'decimal';
 
 const isBlank = (cells: readonly string[], count: number): boolean => {
   for (let index = 0; index < count; index += 1) if (cells[index]?.trim()) return false;
@@ -37,6 +40,7 @@ export class TableBuilder {
   /** Per position in the file the reader of its column, in the order in which a row's cells must be read. */
   private readers: { readonly position: number; readonly store: ColumnStore; readonly reader: CellReader }[] = [];
   private width = 0;
+  private watchesEveryRow = false;
   private capacity = firstCapacity;
   private rows = 0;
   private rowsInAll = 0;
@@ -46,6 +50,7 @@ export class TableBuilder {
     readonly table: TableKey,
     readonly findings: FindingLog,
     readonly limits: ReadLimits,
+    private readonly options: TableOptions = {},
   ) {
     this.variables = tableOf(table).variables;
     this.stores = this.variables.map((variable) => new ColumnStore(variable, firstCapacity));
@@ -68,7 +73,8 @@ export class TableBuilder {
   header(cells: readonly string[], count: number, line: number, manner: { readonly commaMayMarkThousands: boolean }): void {
     if (isBlank(cells, count)) return;
     this.manner = { ...manner, mark: 0 };
-    const columns = readHeaderRow(this.table, cells, count);
+    const { watch } = this.options;
+    const columns = readHeaderRow(this.table, cells, count, watch && ((header) => watch.mayShowHeader(header)));
     if (!columns.some(({ meaning }) => meaning.kind === 'column')) {
       throw new UnreadableFile(
         'F05',
@@ -79,6 +85,12 @@ export class TableBuilder {
     }
     this.width = columns.length;
     columns.forEach((column, position) => this.takeColumn(column, position, line));
+    // A number column without limits of its own allows nothing by itself, and one that the dictionary has not allows nothing at all.
+    this.watchesEveryRow =
+      this.readers.length < columns.length ||
+      this.readers.some(({ store: { variable } }) => variable.hard === undefined && isNumber(variable));
+    watch?.header(columns.map(({ meaning }, position) => (meaning.kind === 'undeclared' ? (cells[position] ?? '') : meaning.variable.key)));
+    this.addMendedColumns();
     this.readers.sort((a, b) => Number(a.reader instanceof MeasuredReader) - Number(b.reader instanceof MeasuredReader));
     this.reportMissing(line);
   }
@@ -106,6 +118,17 @@ export class TableBuilder {
     this.present.add(key);
     const store = this.stores[meaning.position] as ColumnStore;
     this.readers.push({ position, store, reader: this.readerFor(store, meaning.factor) });
+  }
+
+  /** Columns that the file lacks and somebody has filled in for some rows stand behind those it has. */
+  private addMendedColumns(): void {
+    const mended = new Set([...(this.options.mends?.values() ?? [])].flatMap((row) => [...row.keys()]));
+    let position = this.width;
+    for (const store of this.stores) {
+      if (!mended.has(store.variable.key) || this.present.has(store.variable.key)) continue;
+      this.readers.push({ position, store, reader: this.readerFor(store, { times: 1, dividedBy: 1 }) });
+      position += 1;
+    }
   }
 
   private readerFor(store: ColumnStore, factor: UnitFactor): CellReader {
@@ -147,6 +170,12 @@ export class TableBuilder {
     this.rowsInAll += 1;
     this.lines[row] = line;
     if (count !== this.width) this.reportWidth(cells, count, line);
+    const mends = this.options.mends?.get(line);
+    if (mends) this.readCells(...this.mended(cells, kinds, count, mends), row, line);
+    else this.readCells(cells, kinds, count, row, line);
+  }
+
+  private readCells(cells: readonly string[], kinds: readonly CellKind[] | undefined, count: number, row: number, line: number): void {
     for (const { position, reader, store } of this.readers) {
       const cell = position < count ? cells[position] : '';
       if (!cell) continue;
@@ -158,6 +187,28 @@ export class TableBuilder {
         this.findings.add({ ...fault, table: this.table, line, column: store.variable.key });
       }
     }
+    const { watch } = this.options;
+    if (watch && (this.watchesEveryRow || count > this.width || !this.readers.every(({ store }) => store.isAllowed(row))))
+      watch.row(cells.slice(0, count), line);
+  }
+
+  /** The row with what was typed in place of its cells. */
+  private mended(
+    cells: readonly string[],
+    kinds: readonly CellKind[] | undefined,
+    count: number,
+    mends: ReadonlyMap<string, string>,
+  ): [cells: readonly string[], kinds: readonly CellKind[] | undefined, count: number] {
+    const length = Math.max(count, ...this.readers.map(({ position }) => position + 1));
+    const texts = Array.from({ length }, (_, position) => (position < count ? (cells[position] ?? '') : ''));
+    const newKinds = kinds && Array.from({ length }, (_, position): CellKind => (position < count ? (kinds[position] ?? 'text') : 'text'));
+    for (const { position, store } of this.readers) {
+      const text = mends.get(store.variable.key);
+      if (text === undefined) continue;
+      texts[position] = text;
+      if (newKinds) newKinds[position] = 'text';
+    }
+    return [texts, newKinds, length];
   }
 
   private reportWidth(cells: readonly string[], count: number, line: number): void {

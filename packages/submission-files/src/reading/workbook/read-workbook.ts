@@ -15,6 +15,7 @@ import { defaultWorkbookLimits } from '../../limits.ts';
 import type { WorkbookLimits } from '../../limits.ts';
 import type { TypedTables } from '../../registry-context.ts';
 import { TableBuilder } from '../../table/table-builder.ts';
+import type { TableOptions } from '../../table/table-options.ts';
 import type { TypedTable } from '../../table/typed-table.ts';
 import type { ByteSource } from '../byte-source.ts';
 import { readSheets } from './read-sheets.ts';
@@ -31,11 +32,15 @@ export async function readWorkbook(
   source: ByteSource,
   findings: FindingLog,
   limits: WorkbookLimits = defaultWorkbookLimits,
+  optionsOf: (table: TableKey) => TableOptions = () => ({}),
 ): Promise<TypedTables> {
   const builders = new Map<TableKey, TableBuilder>();
   await readSheets(source, findings, limits, (table) => {
-    const builder = new TableBuilder(table, findings, limits);
+    const options = optionsOf(table);
+    const builder = new TableBuilder(table, findings, limits, options);
+    const { watch } = options;
     return {
+      ...(watch ? { mayShowHeader: (header: string) => watch.mayShowHeader(header) } : {}),
       header(cells, _, line) {
         builder.header(cells, cells.length, line, { commaMayMarkThousands: true });
         builders.set(table, builder);

@@ -10,6 +10,8 @@ import type { SheetEvents } from './sheet-reader.ts';
 
 /** Takes the rows of a table's sheet. The arrays are used again for the next row. */
 export interface RowSink {
+  /** Whether findings may repeat a header that the dictionary does not have; any when left out. */
+  mayShowHeader?(header: string): boolean;
   header(cells: readonly string[], columns: readonly HeaderColumn[], line: number): void;
   /** @param count As many cells as the header has, or more where more are filled. */
   row(cells: readonly string[], kinds: readonly CellKind[], count: number, line: number): void;
@@ -61,7 +63,7 @@ export class TableSheet implements SheetEvents {
   }
 
   private takeHeader(cells: readonly string[], count: number, line: number): void {
-    const columns = readHeaderRow(this.table, cells, count);
+    const columns = readHeaderRow(this.table, cells, count, (header) => this.sink.mayShowHeader?.(header) ?? true);
     if (columns.length === 0) return;
     this.sink.header(cells.slice(0, columns.length), columns, line);
     this.columns = columns;
