@@ -4,6 +4,7 @@ import { formatShare } from '../../lib/format.ts';
 import { announce } from '../../ui/announcer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
+import { LeaveQuestion } from '../../ui/leave-question.tsx';
 import { Page } from '../../ui/page.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { CellLine } from './cell-line.tsx';
@@ -14,7 +15,6 @@ import { OrderChoice } from './order-choice.tsx';
 import { ExamGrid } from './exam-grid.tsx';
 import { isBlankSheet } from './exam-sheet.ts';
 import { IssueList } from './issue-list.tsx';
-import { LeaveQuestion } from './leave-question.tsx';
 import { allCells } from './places.ts';
 import { readSheet, whyOf } from './reading.ts';
 import type { Reading } from './reading.ts';
@@ -129,7 +129,13 @@ export default function ExamPage() {
         </div>
       </section>
       <Explanations />
-      <LeaveQuestion isNeeded={!isBlank} />
+      <LeaveQuestion
+        isNeeded={!isBlank}
+        title="Leave this exam?"
+        consequence="What you typed is kept nowhere. When you leave, it is gone."
+        leave="Leave and forget it"
+        stay="Stay with the exam"
+      />
     </Page>
   );
 }

@@ -1,5 +1,6 @@
 /** Files chosen in this browser that the registry does not have yet. */
-import { useCallback, useEffect, useRef, useState } from 'react';
+import { useCallback, useRef, useState } from 'react';
+import { useStayOnPage } from '../../lib/use-stay-on-page.ts';
 import { recogniseTable } from './recognise-table.ts';
 import { useSendFile } from './submissions.queries.ts';
 import type { TableKey } from './submissions.queries.ts';
@@ -79,16 +80,6 @@ export function useOutgoingFiles(submissionId: string): Outgoing {
     send,
     stop: () => control?.abort(),
   };
-}
-
-/** The browser asks before the page is closed on a file that is on its way. */
-function useStayOnPage(needed: boolean): void {
-  useEffect(() => {
-    if (!needed) return;
-    const ask = (event: BeforeUnloadEvent) => event.preventDefault();
-    window.addEventListener('beforeunload', ask);
-    return () => window.removeEventListener('beforeunload', ask);
-  }, [needed]);
 }
 
 /** What keeps these files from being sent, in words; `null` when nothing does. */

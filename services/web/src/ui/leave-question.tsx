@@ -1,21 +1,25 @@
-/** Asks before a sheet that is kept nowhere is left behind. */
-import { memo, useEffect } from 'react';
+/** Asks before a page is left whose work is kept nowhere. */
+import { memo } from 'react';
 import { Dialog } from 'react-aria-components/Dialog';
 import { Heading } from 'react-aria-components/Heading';
 import { Modal, ModalOverlay } from 'react-aria-components/Modal';
 import { useBlocker } from 'react-router-dom';
-import { Button } from '../../ui/button.tsx';
+import { useStayOnPage } from '../lib/use-stay-on-page.ts';
+import { Button } from './button.tsx';
 
-export const LeaveQuestion = memo(function LeaveQuestion({ isNeeded }: { readonly isNeeded: boolean }) {
+export interface LeaveQuestionProps {
+  readonly isNeeded: boolean;
+  /** "Leave this exam?" */
+  readonly title: string;
+  /** What would be lost, as a sentence. */
+  readonly consequence: string;
+  readonly leave: string;
+  readonly stay: string;
+}
+
+export const LeaveQuestion = memo(function LeaveQuestion({ isNeeded, title, consequence, leave, stay }: LeaveQuestionProps) {
   const blocker = useBlocker(({ currentLocation, nextLocation }) => isNeeded && currentLocation.pathname !== nextLocation.pathname);
-
-  // Closing the tab or loading it again: the browser asks in its own words.
-  useEffect(() => {
-    if (!isNeeded) return;
-    const ask = (event: BeforeUnloadEvent) => event.preventDefault();
-    window.addEventListener('beforeunload', ask);
-    return () => window.removeEventListener('beforeunload', ask);
-  }, [isNeeded]);
+  useStayOnPage(isNeeded);
 
   return (
     <ModalOverlay
@@ -28,14 +32,14 @@ export const LeaveQuestion = memo(function LeaveQuestion({ isNeeded }: { readonl
       <Modal className="w-full max-w-lg rounded-sm border border-edge bg-sheet text-ink">
         <Dialog role="alertdialog" className="grid gap-4 p-6 outline-none">
           <Heading slot="title" className="text-section font-semibold">
-            Leave this exam?
+            {title}
           </Heading>
-          <p>What you typed is kept nowhere. When you leave, it is gone.</p>
+          <p>{consequence}</p>
           <div className="flex flex-wrap gap-3">
             <Button variant="danger" onPress={() => blocker.proceed?.()}>
-              Leave and forget it
+              {leave}
             </Button>
-            <Button onPress={() => blocker.reset?.()}>Stay with the exam</Button>
+            <Button onPress={() => blocker.reset?.()}>{stay}</Button>
           </div>
         </Dialog>
       </Modal>
