@@ -60,6 +60,12 @@ export const pages: readonly PageEntry[] = [
     load: () => import('../features/submissions/submissions-page.tsx'),
   },
   {
+    path: '/calendar',
+    audience: ['steward', 'coordinator', 'therapist'],
+    nav: 'Calendar',
+    load: () => import('../features/months/calendar-page.tsx'),
+  },
+  {
     path: '/submissions/:submissionId/receipt',
     audience: ['coordinator', 'therapist', 'steward'],
     load: () => import('../features/submissions/receipt-page.tsx'),

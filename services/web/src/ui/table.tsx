@@ -41,6 +41,8 @@ export interface TableProps<Row> {
   /** Shown instead of an empty body: says what to do next. */
   readonly empty: ReactNode;
   readonly isSortable?: boolean;
+  /** Keeps the cells that name the rows in sight while wide tables scroll sideways. */
+  readonly pinsRowHeaders?: boolean;
   /** Name of the CSV file, without its ending; no file name, no copying and downloading. */
   readonly fileName?: string;
 }
@@ -50,7 +52,17 @@ interface Sort {
   readonly descending: boolean;
 }
 
-export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortable = true, fileName }: TableProps<Row>) {
+export function Table<Row>({
+  id,
+  caption,
+  columns,
+  rows,
+  rowKey,
+  empty,
+  isSortable = true,
+  pinsRowHeaders = false,
+  fileName,
+}: TableProps<Row>) {
   const captionId = useId();
   const [overflows, frame] = useOverflow();
   const [sortText, setSortText] = useAddressParam(`sort-${id}`);
@@ -75,6 +87,7 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
                 <HeaderCell
                   key={column.key}
                   column={column}
+                  isPinned={pinsRowHeaders && column.isRowHeader === true}
                   direction={sort?.key === column.key ? (sort.descending ? 'descending' : 'ascending') : undefined}
                   onSort={isSortable && column.isAct !== true ? () => setSortText(nextSort(column, sort)) : undefined}
                 />
@@ -85,7 +98,7 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
             {ordered.map((row) => (
               <tr key={rowKey(row)} className="hover:bg-paper">
                 {columns.map((column) => (
-                  <BodyCell key={column.key} column={column} row={row} />
+                  <BodyCell key={column.key} column={column} row={row} isPinned={pinsRowHeaders && column.isRowHeader === true} />
                 ))}
               </tr>
             ))}
@@ -101,12 +114,17 @@ export function Table<Row>({ id, caption, columns, rows, rowKey, empty, isSortab
 const cellLook = 'border-b px-3 py-2 font-normal wrap-normal first:pl-0 last:pr-0';
 const alignment = (kind: 'text' | 'number' = 'text') => (kind === 'number' ? 'numbers text-right' : 'text-left');
 
+/** Above the cells that scroll under it; narrow enough to leave them room. */
+const pinned = 'sticky left-0 max-w-36 bg-sheet pr-3';
+
 function HeaderCell<Row>({
   column,
+  isPinned,
   direction,
   onSort,
 }: {
   readonly column: Column<Row>;
+  readonly isPinned: boolean;
   readonly direction: 'ascending' | 'descending' | undefined;
   readonly onSort: (() => void) | undefined;
 }) {
@@ -120,7 +138,7 @@ function HeaderCell<Row>({
     <th
       scope="col"
       aria-sort={direction}
-      className={`${cellLook} sticky top-0 border-edge bg-sheet align-bottom ${alignment(column.kind)}`}
+      className={`${cellLook} sticky top-0 border-edge bg-sheet align-bottom ${alignment(column.kind)} ${isPinned ? `${pinned} z-2` : 'z-1'}`}
     >
       {onSort === undefined ? (
         words
@@ -152,8 +170,8 @@ function SortMark({ direction }: { readonly direction: 'ascending' | 'descending
   );
 }
 
-function BodyCell<Row>({ column, row }: { readonly column: Column<Row>; readonly row: Row }) {
-  const look = `${cellLook} border-hairline align-top ${alignment(column.kind)}`;
+function BodyCell<Row>({ column, row, isPinned }: { readonly column: Column<Row>; readonly row: Row; readonly isPinned: boolean }) {
+  const look = `${cellLook} border-hairline align-top ${alignment(column.kind)} ${isPinned ? pinned : ''}`;
   const content = column.cell === undefined ? plain(column, row) : column.cell(row);
   // Buttons are as tall as a row: they must not make it taller.
   const shown = column.isAct === true ? <div className="-my-2 flex min-h-10 flex-wrap items-center gap-x-4">{content}</div> : content;
