@@ -1,4 +1,3 @@
-import { fitsRange } from '@cairnstep/dictionary';
 import type { Variable } from '@cairnstep/dictionary';
 import { TypedColumn } from './typed-table.ts';
 
@@ -26,11 +25,17 @@ export class ColumnStore {
   private numbers: Float64Array | null = null;
   private words: Uint32Array | null = null;
   private unreadable: Uint8Array | null = null;
+  /** The hard limits; none is allowed by a column that has no limits. */
+  private readonly least: number;
+  private readonly most: number;
 
   constructor(
     readonly variable: Variable,
     private capacity: number,
-  ) {}
+  ) {
+    this.least = variable.hard?.min ?? Infinity;
+    this.most = variable.hard?.max ?? -Infinity;
+  }
 
   grow(capacity: number): void {
     this.capacity = capacity;
@@ -60,10 +65,11 @@ export class ColumnStore {
 
   /** Whether the row holds nothing, or just what the dictionary allows here. */
   isAllowed(row: number): boolean {
-    if (this.unreadable?.[row]) return false;
-    const number = this.numbers?.[row] ?? Number.NaN;
-    const { hard } = this.variable;
-    return Number.isNaN(number) || (hard !== undefined && fitsRange(number, hard));
+    const { numbers, unreadable } = this;
+    if (unreadable !== null && unreadable[row] === 1) return false;
+    if (numbers === null) return true;
+    const number = numbers[row] ?? Number.NaN;
+    return number !== number || (number >= this.least && number <= this.most);
   }
 
   /** The word already stored in a row, '' when there is none. */

@@ -188,8 +188,13 @@ export class TableBuilder {
       }
     }
     const { watch } = this.options;
-    if (watch && (this.watchesEveryRow || count > this.width || !this.readers.every(({ store }) => store.isAllowed(row))))
-      watch.row(cells.slice(0, count), line);
+    if (watch && (this.watchesEveryRow || count > this.width || !this.isAllowed(row))) watch.row(cells.slice(0, count), line);
+  }
+
+  /** Whether every cell of the row is just what the dictionary allows. */
+  private isAllowed(row: number): boolean {
+    for (const { store } of this.readers) if (!store.isAllowed(row)) return false;
+    return true;
   }
 
   /** The row with what was typed in place of its cells. */
