@@ -54,6 +54,12 @@ export const pages: readonly PageEntry[] = [
     load: () => import('../features/submissions/submit-page.tsx'),
   },
   {
+    path: '/submit/:submissionId/prepare',
+    audience: ['coordinator', 'therapist', 'steward'],
+    load: () => import('../features/submissions/prepare-page.tsx'),
+  },
+  { path: '/prepare-without-the-server', audience: 'anyone', load: () => import('../features/public/preparing-file-page.tsx') },
+  {
     path: '/submissions',
     audience: ['coordinator', 'therapist', 'steward'],
     nav: 'Submissions',

@@ -59,14 +59,16 @@ export function LinkButton({ variant = 'secondary', ...rest }: LinkButtonProps) 
 
 export interface AddressButtonProps {
   readonly href: string;
+  /** The name to save it under: it is a file. */
+  readonly download?: string;
   readonly variant?: ButtonVariant;
   readonly children: ReactNode;
 }
 
 /** Leaves the client: a file, or the sign-in service. */
-export function AddressButton({ href, variant = 'secondary', children }: AddressButtonProps) {
+export function AddressButton({ href, download, variant = 'secondary', children }: AddressButtonProps) {
   return (
-    <a href={href} className={`${shape} ${variants[variant]}`}>
+    <a href={href} download={download} className={`${shape} ${variants[variant]}`}>
       {children}
     </a>
   );

@@ -1,0 +1,65 @@
+/** Sends what the preparing page hands over, table by table, and tells it how far that has come. */
+import type { Submission } from '@cairnstep/contract';
+import { useState } from 'react';
+import { ProblemError, UnreachableError } from '../../lib/problem-error.ts';
+import { useStayOnPage } from '../../lib/use-stay-on-page.ts';
+import type { PreparedTable, Sending } from '../../preparing/messages.ts';
+import { announce } from '../../ui/announcer.tsx';
+import { faultOf } from './prepared-tables.ts';
+import { useSendFile } from './submissions.queries.ts';
+
+export interface PreparedSending {
+  readonly sending: Sending | null;
+  readonly isUnderWay: boolean;
+  readonly send: (tables: readonly PreparedTable[]) => Promise<void>;
+}
+
+export function usePreparedSending(submission: Submission): PreparedSending {
+  const [sending, setSending] = useState<Sending | null>(null);
+  const { mutateAsync } = useSendFile(submission.id);
+  const isUnderWay = sending?.state === 'under-way';
+  useStayOnPage(isUnderWay);
+
+  async function send(tables: readonly PreparedTable[]): Promise<void> {
+    const of = tables.reduce((sum, { csv }) => sum + csv.byteLength, 0);
+    let done = 0;
+    const tell = (state: Sending['state'], message: string | null = null) => setSending({ kind: 'sending', state, done, of, message });
+    const fault = tables.map(faultOf).find((found) => found !== null);
+    if (fault !== undefined)
+      return tell('failed', `${fault} Nothing was sent. Prepare the files again; if it stays so, tell the registry’s office.`);
+    tell('under-way');
+    let arrived = 0;
+    try {
+      for (const { table, csv } of tables) {
+        const before = done;
+        await mutateAsync({
+          table,
+          file: new File([csv], `${table}.csv`, { type: 'text/csv' }),
+          signal: neverStopped,
+          onSent: (part) => {
+            done = before + Math.floor(csv.byteLength * part);
+            tell('under-way');
+          },
+        });
+        done = before + csv.byteLength;
+        arrived += 1;
+      }
+      tell('done');
+      announce('Everything prepared has arrived.');
+    } catch (error) {
+      done = 0;
+      tell('failed', `${wordsOf(error)} ${arrived} of ${tables.length} tables arrived; sending again replaces them.`);
+    }
+  }
+
+  return { sending, isUnderWay, send };
+}
+
+/** Half a month is no use: once begun it is sent whole, or fails. */
+const neverStopped = new AbortController().signal;
+
+function wordsOf(error: unknown): string {
+  if (error instanceof ProblemError) return `${error.title}. ${error.detail}`;
+  if (error instanceof UnreachableError) return 'The registry cannot be reached. Look at your connection, then send again.';
+  return 'The registry answered in a way that is not understood here. Load the page again.';
+}
