@@ -14,8 +14,20 @@ import { cellRules, submissionRules } from './rules/index.ts';
  * @param findings The log that reading the files has already written to; a new one when left out.
  */
 export function checkSubmission(tables: TypedTables, context: RegistryContext, findings = new FindingLog()): FindingLog {
+  for (const _ of checkSteps(tables, context, findings));
+  return findings;
+}
+
+/** The same one rule after the other, for callers that do something else in between. Each step says how many of how many rules are through. */
+export function* checkSteps(
+  tables: TypedTables,
+  context: RegistryContext,
+  findings: FindingLog,
+): Generator<{ readonly done: number; readonly of: number }> {
   const submission = new Submission(tables, context);
   const rules = findings.incomplete.size > 0 ? cellRules : submissionRules;
-  for (const { id, evaluate } of rules) evaluate(submission, new RuleReport(id, findings));
-  return findings;
+  for (const [index, { id, evaluate }] of rules.entries()) {
+    evaluate(submission, new RuleReport(id, findings));
+    yield { done: index + 1, of: rules.length };
+  }
 }

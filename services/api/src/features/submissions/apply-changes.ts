@@ -1,10 +1,12 @@
 /** Brings a checked submission into the registry: set-based, inside the caller's transaction, all or nothing. */
 import type { TableChange } from '@cairnstep/contract';
 import { tableKeys, type TableKey } from '@cairnstep/dictionary';
+import type { QueryResult } from 'typeorm';
 import type { z } from 'zod';
 import type { Tx } from '../../database/as-actor.ts';
 import { bind } from '../../database/bind.ts';
 import { joinWholeTables } from '../../database/join-whole-tables.ts';
+import { Refusal } from '../../http/refusal.ts';
 import { clearFacts, courseFacts, outcomeFacts } from './facts-sql.ts';
 import { tableSql } from './table-sql.ts';
 
@@ -13,6 +15,14 @@ export interface Applied {
   readonly site: string;
   readonly month: string;
   readonly tables: readonly TableKey[];
+}
+
+export const checkAgain = 'Nothing was committed. Check again to see a fresh preview; your files are still here.';
+
+/** Runs a statement and says how many rows it wrote. */
+async function countRows(tx: Tx, sql: string, values: Readonly<Record<string, unknown>>): Promise<number> {
+  const result = (await tx.queryRunner?.query(...bind(sql, values), true)) as QueryResult;
+  return result.affected ?? 0;
 }
 
 const run = (tx: Tx, sql: string, values: Readonly<Record<string, unknown>>): Promise<unknown> => tx.query(...bind(sql, values));
@@ -41,7 +51,13 @@ export async function countChanges(tx: Tx, of: Applied): Promise<z.output<typeof
 /** Bouts before sessions when rows go, so that a bout still finds the session it goes with. */
 const order: readonly TableKey[] = ['participants', 'consents', 'exams', 'assessments', 'bouts', 'sessions', 'adverse_events'];
 
-/** Does what the preview counted; the caller has made sure that it still holds. */
+/**
+ * Does what the preview counted, to the row; the caller has made sure that it still holds.
+ *
+ * Staged rows are not kept through a crash of the database. Were they gone, a table of the month would look as if its file were empty.
+ *
+ * @throws Refusal when it would do anything else
+ */
 export async function applyChanges(tx: Tx, of: Applied, preview: readonly z.output<typeof TableChange>[]): Promise<void> {
   await joinWholeTables(tx);
   for (const table of order) {
@@ -49,7 +65,10 @@ export async function applyChanges(tx: Tx, of: Applied, preview: readonly z.outp
     if (!change) continue;
     const { apply } = tableSql(table);
     for (const kind of ['removed', 'changed', 'added'] as const) {
-      if (change[kind] > 0) for (const statement of apply[kind]) await run(tx, statement, { ...of });
+      if (change[kind] === 0) continue;
+      for (const statement of apply[kind]) {
+        if ((await countRows(tx, statement, { ...of })) !== change[kind]) throw new Refusal('submission-stale', checkAgain);
+      }
     }
   }
   const people = await touchedPeople(tx, of);
@@ -57,7 +76,7 @@ export async function applyChanges(tx: Tx, of: Applied, preview: readonly z.outp
 }
 
 async function touchedPeople(tx: Tx, { submission, tables }: Applied): Promise<string[]> {
-  const staged = tables.map((table) => `select participant from staged_${table} where submission_id = :submission`);
+  const staged = tables.map((table) => `select distinct participant from staged_${table} where submission_id = :submission`);
   const rows = (await run(
     tx,
     `${staged.join(' union ')} union select row_key->>'participant' from row_history where submission_id = :submission`,

@@ -1,13 +1,7 @@
 /** The job that reads and checks a submission and works out what a commit would change. What it writes, it writes in one transaction at its end. */
+import { setImmediate as nextTurn } from 'node:timers/promises';
 import { tableKeys, type TableKey } from '@cairnstep/dictionary';
-import {
-  checkSubmission as checkTables,
-  FindingLog,
-  readTable,
-  type Finding,
-  type RuleFindings,
-  type TypedTable,
-} from '@cairnstep/submission-files';
+import { checkSteps, FindingLog, readTable, type Finding, type RuleFindings, type TypedTable } from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
@@ -95,29 +89,57 @@ export async function checkSubmission({ database, clock }: Context, submissionId
   const context = await asActor(database, registry, (tx) =>
     loadRegistryContext(tx, submission.siteId, submission.month, tables, clock().getUTCFullYear()),
   );
-  checkTables(tables, context, log);
-  const checked: Checked = { tables, groups: log.byRule(), errors: log.counts.errors };
-  await progress('compare', 0, 1);
-  await asActor(database, registry, (tx) => writeOutcome(tx, submission, checked));
+  await asActor(database, registry, async (tx) => {
+    await tx.query('savepoint before');
+    const staging = stage(tx, submission, tables, log);
+    for (const _ of checkSteps(tables, context, log)) await nextTurn();
+    const { failure } = await staging;
+    const checked: Checked = { tables, groups: log.byRule(), errors: log.counts.errors };
+    if (checked.errors > 0) {
+      await tx.query('rollback to savepoint before');
+      await clearStaged(tx, tableKeys, submissionId);
+    } else if (failure) throw failure.error;
+    await progress('compare', 0, 1);
+    // Another run of this job has finished, or the files have changed since: what was staged here goes.
+    if (!(await writeOutcome(tx, submission, checked))) await tx.query('rollback to savepoint before');
+  });
 }
 
-async function writeOutcome(tx: Tx, before: SubmissionRecord, { tables, ...checked }: Checked): Promise<void> {
+/**
+ * Stages the rows in place of earlier ones, while the caller checks them: the database works on the one, this process on the other. Rows with
+ * errors may fail to be staged, which matters only when the check finds none.
+ */
+async function stage(
+  tx: Tx,
+  submission: SubmissionRecord,
+  tables: Checked['tables'],
+  log: FindingLog,
+): Promise<{ readonly failure: { readonly error: unknown } | null }> {
+  if (log.counts.errors > 0) return { failure: null };
+  try {
+    await clearStaged(tx, tableKeys, submission.id);
+    for (const table of Object.values(tables)) await stageRows(tx, table, submission.id, submission.siteId);
+    return { failure: null };
+  } catch (error) {
+    return { failure: { error } };
+  }
+}
+
+/** False when the submission is no longer being checked; then nothing was written. */
+async function writeOutcome(tx: Tx, before: SubmissionRecord, checked: Checked): Promise<boolean> {
   const submission = await lockSubmission(tx, before.id);
-  // Another run of this job has finished, or the files have changed since.
-  if (submission?.status !== 'checking') return;
+  if (submission?.status !== 'checking') return false;
   await clearCheck(tx, submission.id);
-  await clearStaged(tx, tableKeys, submission.id);
   await insertFindings(
     tx,
     submission,
     checked.groups.flatMap((group) => group.kept),
   );
-  for (const table of Object.values(tables)) await setFileRows(tx, submission.id, table.key, table.length);
-  const findings = groupsOf({ tables, ...checked }, submission.findings);
+  for (const table of Object.values(checked.tables)) await setFileRows(tx, submission.id, table.key, table.length);
+  const findings = groupsOf(checked, submission.findings);
   if (checked.errors > 0) {
     await finishCheck(tx, submission.id, { findings, preview: null, previewDigest: null, siteRevision: null });
   } else {
-    for (const table of Object.values(tables)) await stageRows(tx, table, submission.id, submission.siteId);
     const [{ revision }] = (await tx.query('select revision from sites where id = $1', [submission.siteId])) as [{ revision: number }];
     const files = await readFiles(tx, submission.id);
     const changes = await countChanges(tx, {
@@ -138,4 +160,5 @@ async function writeOutcome(tx: Tx, before: SubmissionRecord, { tables, ...check
       warnings: findings.filter((group) => group.severity === 'warning').reduce((sum, group) => sum + group.count, 0),
     },
   });
+  return true;
 }

@@ -8,7 +8,7 @@ import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
-import { applyChanges } from './apply-changes.ts';
+import { applyChanges, checkAgain } from './apply-changes.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
 import { readFiles, settle, supersedeEarlier, type SubmissionRecord } from './submissions.repository.ts';
 
@@ -29,7 +29,7 @@ export async function accept(tx: Tx, person: Person, submission: SubmissionRecor
   }
   const stale =
     preview === null || submission.previewDigest === null || submission.previewDigest !== digest || submission.siteRevision !== revision;
-  if (stale) throw new Refusal('submission-stale', 'Nothing was committed. Check again to see a fresh preview; your files are still here.');
+  if (stale) throw new Refusal('submission-stale', checkAgain);
   if (submission.findings.some((group) => group.acknowledgedReason === null)) {
     throw new Refusal('submission-has-open-warnings', 'Say why each of these warnings stands, or mend the rows. Nothing was committed.');
   }

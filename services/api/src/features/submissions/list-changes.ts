@@ -8,6 +8,7 @@ import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { bind } from '../../database/bind.ts';
 import { joinWholeTables } from '../../database/join-whole-tables.ts';
+import { Refusal } from '../../http/refusal.ts';
 import { visibleSubmission } from './read-submissions.ts';
 import { readFiles } from './submissions.repository.ts';
 import { tableSql } from './table-sql.ts';
@@ -63,5 +64,11 @@ export const listChanges = (
         offset: (page - 1) * rowsPerPage,
       }),
     )) as { before: Stored | null; after: Stored | null }[];
+    if (rows.length === 0 && total > (page - 1) * rowsPerPage) {
+      throw new Refusal(
+        'submission-stale',
+        'What was checked has been lost in a fault of the database. Your files are still here: check again.',
+      );
+    }
     return { items: rows.map((row) => presentRow(kind, rowKey, values, row.before, row.after)), page, pageSize: rowsPerPage, total };
   });
