@@ -10,12 +10,19 @@ export interface Mail {
   readonly body: string;
 }
 
-export async function queueMail(tx: Tx, mail: Mail): Promise<void> {
+/** False when this event has mailed this person before. */
+export async function queueMail(tx: Tx, mail: Mail): Promise<boolean> {
   const id = randomUUID();
   // The recipient enters the key as a hash, so the unique index needs no address.
   const event = `${mail.event}:${createHash('sha256').update(mail.recipient.toLowerCase()).digest('hex').slice(0, 16)}`;
-  const inserted = (await tx.query('select queue_mail($1, $2, $3, $4, $5) as queued', [id, event, mail.recipient, mail.subject, mail.body])) as [
-    { queued: boolean },
-  ];
-  if (inserted[0].queued) await enqueue(tx, 'send-mail', { mailId: id });
+  const inserted = (await tx.query('select queue_mail($1, $2, $3, $4, $5) as queued', [
+    id,
+    event,
+    mail.recipient,
+    mail.subject,
+    mail.body,
+  ])) as [{ queued: boolean }];
+  const { queued } = inserted[0];
+  if (queued) await enqueue(tx, 'send-mail', { mailId: id });
+  return queued;
 }

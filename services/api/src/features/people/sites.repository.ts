@@ -12,5 +12,9 @@ export async function readSite(tx: Tx, siteId: string): Promise<(Site & { firstM
   return site ?? null;
 }
 
-export const listSitesWithFirstMonth = async (tx: Tx): Promise<(Site & { firstMonth: string })[]> =>
-  (await tx.query('select id, code, name, first_month as "firstMonth" from sites order by code')) as (Site & { firstMonth: string })[];
+export interface SiteWithFirstMonth extends Site {
+  readonly firstMonth: string;
+}
+
+export const listSitesWithFirstMonth = async (tx: Tx): Promise<SiteWithFirstMonth[]> =>
+  (await tx.query('select id, code, name, first_month as "firstMonth" from sites order by code')) as SiteWithFirstMonth[];
