@@ -1,20 +1,11 @@
 import type { ReadLimits } from '../../limits.ts';
+import { joined } from '../../zip/joined.ts';
 import type { ByteSource } from '../byte-source.ts';
 import { gatherBytes } from '../gather-bytes.ts';
 
 /** A zip archive is read from its end, so that its bytes must all be there first; no more of them than allowed are kept. */
 export async function wholeFile(source: ByteSource, limits: ReadLimits): Promise<Uint8Array> {
   const pieces: Uint8Array[] = [];
-  let size = 0;
-  for await (const { bytes } of gatherBytes(source, limits)) {
-    pieces.push(bytes);
-    size += bytes.length;
-  }
-  const whole = new Uint8Array(size);
-  let at = 0;
-  for (const piece of pieces) {
-    whole.set(piece, at);
-    at += piece.length;
-  }
-  return whole;
+  for await (const { bytes } of gatherBytes(source, limits)) pieces.push(bytes);
+  return joined(pieces);
 }
