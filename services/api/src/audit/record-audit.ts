@@ -15,8 +15,15 @@ export interface AuditEvent {
   readonly detail?: { readonly [key: string]: Canonical };
 }
 
-const rolesOf = (actor: Actor): string =>
-  actor.kind === 'person' ? [...new Set(actor.grants.map((grant) => grant.role))].sort().join(' ') : actor.kind === 'system' ? 'system' : '';
+function rolesOf(actor: Actor): string {
+  if (actor.kind === 'person') return [...new Set(actor.grants.map((grant) => grant.role))].sort().join(' ');
+  return actor.kind === 'nobody' ? '' : actor.kind;
+}
+
+function nameOf(actor: Actor): string {
+  if (actor.kind === 'person') return actor.accountId;
+  return actor.kind === 'site-system' ? actor.systemId : actor.kind;
+}
 
 /**
  * `audit_head()` takes the one lock that serialises writers until the transaction ends, so the chain cannot fork.
@@ -27,7 +34,7 @@ export async function recordAudit(tx: Tx, actor: Actor, event: AuditEvent): Prom
     { seq: string; hash: string; at: string },
   ];
   const seq = Number(head.seq) + 1;
-  const who = actor.kind === 'person' ? actor.accountId : actor.kind;
+  const who = nameOf(actor);
   const full: { [key: string]: Canonical } = { seq, at: head.at, actor: who, role: rolesOf(actor), act: event.act, result: event.result ?? 'ok' };
   if (event.object !== undefined) full['object'] = event.object;
   if (event.site !== undefined) full['site'] = event.site;

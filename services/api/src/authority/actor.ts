@@ -10,10 +10,13 @@ export interface ActiveGrant {
 export type Actor =
   | { readonly kind: 'nobody' }
   | { readonly kind: 'person'; readonly accountId: string; readonly name: string; readonly institution: string | null; readonly grants: readonly ActiveGrant[] }
+  /** A site's own system, known by its access token. It may do what the authority table says in its column, at this one site. */
+  | { readonly kind: 'site-system'; readonly systemId: string; readonly label: string; readonly siteId: string }
   /** The registry's own processes: sign-in, jobs, statistics. `part` names the reach the database gives it. */
   | { readonly kind: 'system'; readonly part: 'registry' | 'statistics' };
 
 export type Person = Extract<Actor, { kind: 'person' }>;
+export type SiteSystem = Extract<Actor, { kind: 'site-system' }>;
 
 /** Reads and writes for the registry itself: jobs, sign-in, releases. */
 export const registry: Actor = { kind: 'system', part: 'registry' };

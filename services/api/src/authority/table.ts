@@ -7,20 +7,33 @@ import type { EndpointName, Role } from '@cairnstep/contract';
 /** `own-site`: only rows of a site the grant names. `own`: only what the person made or belongs to. `all`: the whole registry. */
 export type Reach = 'no' | 'own-site' | 'own' | 'all';
 
-type Line = Readonly<Record<Role, Reach>>;
+/** The columns of the table: the roles of people, and a site's system, which acts without a person. */
+export type Column = Role | 'site-system';
 
-const line = (therapist: Reach, coordinator: Reach, researcher: Reach, steward: Reach, administrator: Reach): Line => ({
+type Line = Readonly<Record<Column, Reach>>;
+
+const line = (
+  therapist: Reach,
+  coordinator: Reach,
+  researcher: Reach,
+  steward: Reach,
+  administrator: Reach,
+  siteSystem: Reach = 'no',
+): Line => ({
   therapist,
   coordinator,
   researcher,
   steward,
   administrator,
+  'site-system': siteSystem,
 });
 
 export const authority = {
-  //                       therapist    coordinator  researcher  steward  administrator
+  //                       therapist    coordinator  researcher  steward  administrator  site's system
   'see-site-rows':    line('own-site', 'own-site', 'no',  'all', 'no'),
-  'submit':           line('no',       'own-site', 'no',  'no',  'no'),
+  'see-submissions':  line('own-site', 'own-site', 'no',  'all', 'no',  'own-site'),
+  'submit':           line('no',       'own-site', 'no',  'no',  'no',  'own-site'),
+  'mark-safe-header': line('no',       'no',       'no',  'all', 'no'),
   'see-aggregates':   line('all',      'all',      'all', 'all', 'no'),
   'see-site-figures': line('own-site', 'own-site', 'no',  'all', 'no'),
   'write-request':    line('no',       'no',       'own', 'no',  'no'),
@@ -32,7 +45,7 @@ export const authority = {
   'see-releases':     line('all',      'all',      'all', 'all', 'no'),
   'see-people':       line('no',       'no',       'no',  'all', 'all'),
   'manage-people':    line('no',       'no',       'no',  'no',  'all'),
-  'see-sites':        line('own-site', 'own-site', 'no',  'all', 'all'),
+  'see-sites':        line('own-site', 'own-site', 'no',  'all', 'all', 'own-site'),
   'read-audit':       line('no',       'own',      'own', 'all', 'own'),
   'verify-audit':     line('no',       'no',       'no',  'all', 'no'),
 } as const satisfies Readonly<Record<string, Line>>; // prettier-ignore
@@ -55,21 +68,31 @@ export const entries = {
   endGrant: 'manage-people',
   setPersonStatus: 'manage-people',
   listSites: 'see-sites',
-  listMonths: 'see-site-rows',
-  listCalendar: 'see-site-rows',
+  listMonths: 'see-submissions',
+  listCalendar: 'see-submissions',
   closeMonth: 'submit',
   openSubmission: 'submit',
-  listSubmissions: 'see-site-rows',
-  getSubmission: 'see-site-rows',
+  listSubmissions: 'see-submissions',
+  getSubmission: 'see-submissions',
   putSubmissionFile: 'submit',
   removeSubmissionFile: 'submit',
+  putSubmissionWorkbook: 'submit',
+  removeSubmissionWorkbook: 'submit',
+  mendCells: 'submit',
   checkSubmission: 'submit',
-  listFindings: 'see-site-rows',
+  listFindings: 'see-submissions',
+  downloadFindings: 'see-submissions',
+  downloadFindingsWorkbook: 'see-submissions',
   acknowledgeFindings: 'submit',
-  listChanges: 'see-site-rows',
+  listChanges: 'see-submissions',
   commitSubmission: 'submit',
-  getReceipt: 'see-site-rows',
+  getReceipt: 'see-submissions',
   discardSubmission: 'submit',
+  getTemplate: 'see-site-rows',
+  listParticipantCodes: 'see-site-rows',
+  listSafeHeaders: 'see-site-rows',
+  markSafeHeader: 'mark-safe-header',
+  unmarkSafeHeader: 'mark-safe-header',
   getGrid: 'see-aggregates',
   listOutcomes: 'see-aggregates',
   makeRelease: 'make-release',

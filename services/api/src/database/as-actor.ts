@@ -10,8 +10,8 @@ export type Tx = EntityManager;
 const scopeOf = (actor: Actor) => ({
   account: actor.kind === 'person' ? actor.accountId : '',
   roles: actor.kind === 'person' ? [...new Set(actor.grants.map((grant) => grant.role))].join(',') : actor.kind === 'system' ? actor.part : '',
-  reads: sitesOf(actor, 'therapist', 'coordinator').join(','),
-  writes: sitesOf(actor, 'coordinator').join(','),
+  reads: actor.kind === 'site-system' ? actor.siteId : sitesOf(actor, 'therapist', 'coordinator').join(','),
+  writes: actor.kind === 'site-system' ? actor.siteId : sitesOf(actor, 'coordinator').join(','),
 });
 
 const scopeQuery = `select set_config('role', 'cairnstep_app', true), set_config('cairnstep.account', $1, true),

@@ -11,6 +11,7 @@ import { demonstrationPeople } from '@cairnstep/fake-oidc/demonstration-people';
 import { pino } from 'pino';
 import { recordAudit } from '../audit/record-audit.ts';
 import { registry, type Person } from '../authority/actor.ts';
+import { requireSubmitter } from '../authority/require-may.ts';
 import { readConfig } from '../config.ts';
 import type { Context } from '../context.ts';
 import { asActor } from '../database/as-actor.ts';
@@ -92,7 +93,7 @@ async function submit(context: Context, site: SeededSite, month: DemoMonth): Pro
     if (!submission?.previewDigest) throw new Error(`The demonstration month ${month.month} of ${site.code} has errors: ${submission?.findings.map((group) => group.rule).join(', ')}`);
     const findings = submission.findings.map((group) => ({ ...group, acknowledgedReason: 'Compared with the record at the clinic; correct.' }));
     await setFindingGroups(tx, id, findings);
-    await accept(tx, site.coordinator, { ...submission, findings }, submission.previewDigest, clock());
+    await accept(tx, requireSubmitter(site.coordinator), { ...submission, findings }, submission.previewDigest, clock());
     await recordAudit(tx, site.coordinator, { act: 'submission.commit', object: id, site: site.id, detail: { month: month.month } });
   });
 }

@@ -3,7 +3,7 @@ import type { InputOf, SiteMonth } from '@cairnstep/contract';
 import type { closeMonth as CloseMonth } from '@cairnstep/contract';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
-import { requireFound, requireMayAtSite, requirePerson } from '../../authority/require-may.ts';
+import { requireFound, requireMayAtSite, requireSubmitter } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
@@ -38,7 +38,7 @@ export const closeMonth = (
         'A submission of this month has been accepted, so there was something. To change it, correct the month. Nothing was changed.',
       );
     }
-    if (await insertClosure(tx, siteId, month, requirePerson(actor).accountId, now)) {
+    if (await insertClosure(tx, siteId, month, requireSubmitter(actor).id, now)) {
       await recordAudit(tx, actor, { act: 'month.close', object: `${site.code} ${month}`, site: siteId, requestId, detail: { month } });
     }
     return presentMonth(month, await read(), now);

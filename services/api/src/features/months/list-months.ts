@@ -18,7 +18,7 @@ export const listMonths = (
   { siteId }: InputOf<typeof ListMonths>,
 ): Promise<ResponseOf<typeof ListMonths>> =>
   asActor(database, actor, async (tx) => {
-    requireMayAtSite(actor, 'see-site-rows', siteId);
+    requireMayAtSite(actor, 'see-submissions', siteId);
     const { id, code, name, firstMonth } = requireFound(await readSite(tx, siteId));
     const now = clock();
     const lines = new Map((await readMonthLines(tx, siteId, firstMonth)).map((line) => [line.month, line]));
@@ -33,7 +33,7 @@ export const listCalendar = ({ database, clock }: Context, actor: Actor): Promis
     const first = monthsBefore(last, calendarMonths - 1);
     const months = monthsBetween(first, last);
     const lines = new Map((await readMonthLines(tx, null, first)).map((line) => [`${line.siteId} ${line.month}`, line]));
-    const sites = (await listSitesWithFirstMonth(tx)).filter(({ id }) => mayAtSite(actor, 'see-site-rows', id));
+    const sites = (await listSitesWithFirstMonth(tx)).filter(({ id }) => mayAtSite(actor, 'see-submissions', id));
     return {
       months,
       sites: sites.map(({ id, code, name, firstMonth }) => ({

@@ -2,8 +2,8 @@
 import type { InputOf, SubmissionReceipt } from '@cairnstep/contract';
 import type { commitSubmission as Commit } from '@cairnstep/contract';
 import { recordAudit } from '../../audit/record-audit.ts';
-import type { Actor, Person } from '../../authority/actor.ts';
-import { requirePerson } from '../../authority/require-may.ts';
+import type { Actor } from '../../authority/actor.ts';
+import { requireSubmitter, type Submitter } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
@@ -18,7 +18,7 @@ async function lockSite(tx: Tx, siteId: string): Promise<number> {
   return site.revision;
 }
 
-export async function accept(tx: Tx, person: Person, submission: SubmissionRecord, digest: string, now: Date): Promise<SubmissionReceipt> {
+export async function accept(tx: Tx, submitter: Submitter, submission: SubmissionRecord, digest: string, now: Date): Promise<SubmissionReceipt> {
   const revision = await lockSite(tx, submission.siteId);
   const { preview } = submission;
   if (submission.findings.some((group) => group.severity === 'error')) {
@@ -46,13 +46,13 @@ export async function accept(tx: Tx, person: Person, submission: SubmissionRecor
     site: { id: submission.siteId, code: submission.siteCode, name: submission.siteName },
     month: submission.month,
     acceptedAt: now.toISOString(),
-    acceptedBy: person.name,
+    acceptedBy: submitter.name,
     digest,
     tables: preview.tables,
     files: files.map(({ table, fileName, sha256, rows }) => ({ table, fileName, sha256, rows: rows ?? 0 })),
     acknowledged: submission.findings.map(({ rule, count, acknowledgedReason }) => ({ rule, count, reason: acknowledgedReason ?? '' })),
   };
-  await settle(tx, submission.id, 'accepted', person.accountId, receipt);
+  await settle(tx, submission.id, 'accepted', submitter.id, receipt);
   return receipt;
 }
 
@@ -75,10 +75,11 @@ export const commitSubmission = (
   requestId: string,
 ): Promise<SubmissionReceipt> =>
   asActor(database, actor, async (tx) => {
-    const person = requirePerson(actor);
+    const submitter = requireSubmitter(actor);
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
-    const receipt = await accept(tx, person, submission, previewDigest, clock());
-    const [account] = (await tx.query('select email from accounts where id = $1', [person.accountId])) as { email: string | null }[];
+    const receipt = await accept(tx, submitter, submission, previewDigest, clock());
+    // A site's system has no address: it fetches the receipt.
+    const [account] = (await tx.query('select email from accounts where id = $1', [submitter.id])) as { email: string | null }[];
     if (account?.email) {
       await queueMail(tx, {
         event: `submission-accepted:${submissionId}`,

@@ -2,7 +2,7 @@ import type { InputOf, Submission } from '@cairnstep/contract';
 import type { discardSubmission as Discard } from '@cairnstep/contract';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
-import { requirePerson } from '../../authority/require-may.ts';
+import { requireSubmitter } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
@@ -17,7 +17,7 @@ export const discardSubmission = (
 ): Promise<Submission> =>
   asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
-    await settle(tx, submissionId, 'discarded', requirePerson(actor).accountId, null);
+    await settle(tx, submissionId, 'discarded', requireSubmitter(actor).id, null);
     await recordAudit(tx, actor, { act: 'submission.discard', object: submissionId, site: submission.siteId, requestId });
     return present(tx, submissionId);
   });

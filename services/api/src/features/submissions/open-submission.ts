@@ -2,7 +2,7 @@ import type { InputOf, Submission } from '@cairnstep/contract';
 import type { openSubmission as OpenSubmission } from '@cairnstep/contract';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
-import { requireFound, requireMayAtSite, requirePerson } from '../../authority/require-may.ts';
+import { requireFound, requireMayAtSite, requireSubmitter } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { lockMonth } from '../months/months.repository.ts';
@@ -25,7 +25,7 @@ export const openSubmission = (
     await lockMonth(tx, siteId, month);
     const existing = await findUnsettled(tx, siteId, month);
     if (existing !== null) return present(tx, existing);
-    const id = await insertSubmission(tx, siteId, month, requirePerson(actor).accountId);
+    const id = await insertSubmission(tx, siteId, month, requireSubmitter(actor).id);
     await recordAudit(tx, actor, { act: 'submission.open', object: id, site: siteId, requestId });
     return present(tx, id);
   });

@@ -17,7 +17,7 @@ const linesPerPage = 50;
 
 export async function visibleSubmission(tx: Tx, actor: Actor, id: string): Promise<SubmissionRecord> {
   const submission = requireFound(await readSubmission(tx, id));
-  requireMayAtSite(actor, 'see-site-rows', submission.siteId);
+  requireMayAtSite(actor, 'see-submissions', submission.siteId);
   return submission;
 }
 
@@ -38,7 +38,7 @@ export const listSubmissionsOfSite = (
   { siteId, page }: InputOf<typeof ListSubmissions>,
 ): Promise<ResponseOf<typeof ListSubmissions>> =>
   asActor(database, actor, async (tx) => {
-    requireMayAtSite(actor, 'see-site-rows', siteId);
+    requireMayAtSite(actor, 'see-submissions', siteId);
     const { items, total } = await listSubmissions(tx, siteId, linesPerPage, (page - 1) * linesPerPage);
     return {
       items: items.map((item) => ({ ...item, createdAt: item.createdAt.toISOString(), settledAt: item.settledAt?.toISOString() ?? null })),
