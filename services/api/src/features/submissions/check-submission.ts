@@ -1,22 +1,24 @@
 /** The job that reads and checks a submission and works out what a commit would change. What it writes, it writes in one transaction at its end. */
 import { setImmediate as nextTurn } from 'node:timers/promises';
-import { tableKeys, type TableKey } from '@cairnstep/dictionary';
-import { checkSteps, FindingLog, readTable, type Finding, type RuleFindings, type TypedTable } from '@cairnstep/submission-files';
+import { tableKeys } from '@cairnstep/dictionary';
+import { checkSteps, FindingLog, type Finding, type RuleFindings } from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { countChanges } from './apply-changes.ts';
+import { tablesOf } from './file-key.ts';
 import { previewDigest } from './preview-digest.ts';
+import { readSubmissionFiles, type FilesRead } from './read-submission-files.ts';
 import { loadRegistryContext } from './registry-context.repository.ts';
 import { clearStaged, stageRows } from './stage-rows.ts';
 import {
   clearCheck,
   finishCheck,
   lockSubmission,
-  readContent,
   readFiles,
   readSubmission,
+  refuseFile,
   setFileRows,
   setProgress,
   type SubmissionRecord,
@@ -24,8 +26,7 @@ import {
 
 type Step = NonNullable<SubmissionRecord['progress']>['step'];
 
-interface Checked {
-  readonly tables: Readonly<Partial<Record<TableKey, TypedTable>>>;
+interface Checked extends FilesRead {
   readonly groups: readonly RuleFindings[];
   readonly errors: number;
 }
@@ -55,7 +56,8 @@ async function insertFindings(tx: Tx, submission: SubmissionRecord, findings: re
 }
 
 /** A reason given for the same warnings before is kept while their number stays the same. */
-function groupsOf(checked: Checked, earlier: SubmissionRecord['findings']): SubmissionRecord['findings'] {
+function groupsOf(checked: Checked, { findings, reasons }: SubmissionRecord): SubmissionRecord['findings'] {
+  const earlier = [...findings, ...(reasons ?? [])];
   return checked.groups.map(({ id, severity, statement, why, mend, count }) => ({
     rule: id,
     severity,
@@ -68,7 +70,8 @@ function groupsOf(checked: Checked, earlier: SubmissionRecord['findings']): Subm
   }));
 }
 
-export async function checkSubmission({ database, clock }: Context, submissionId: string): Promise<void> {
+export async function checkSubmission(context: Context, submissionId: string): Promise<void> {
+  const { database, clock } = context;
   const start = await asActor(database, registry, async (tx) => ({
     submission: await readSubmission(tx, submissionId),
     files: await readFiles(tx, submissionId),
@@ -80,21 +83,17 @@ export async function checkSubmission({ database, clock }: Context, submissionId
     asActor(database, registry, (tx) => setProgress(tx, submissionId, { step, done, of, startedAt }));
 
   const log = new FindingLog();
-  const tables: Partial<Record<TableKey, TypedTable>> = {};
-  for (const [index, file] of files.entries()) {
-    await progress('read', index, files.length);
-    tables[file.table] = await asActor(database, registry, (tx) => readTable(file.table, readContent(tx, submissionId, file.table), log));
-  }
+  const read = await readSubmissionFiles(context, submission, files, log, (done) => progress('read', done, files.length));
   await progress('check', 0, 1);
-  const context = await asActor(database, registry, (tx) =>
-    loadRegistryContext(tx, submission.siteId, submission.month, tables, clock().getUTCFullYear()),
+  const held = await asActor(database, registry, (tx) =>
+    loadRegistryContext(tx, submission.siteId, submission.month, read.tables, clock().getUTCFullYear()),
   );
   await asActor(database, registry, async (tx) => {
     await tx.query('savepoint before');
-    const staging = stage(tx, submission, tables, log);
-    for (const _ of checkSteps(tables, context, log)) await nextTurn();
+    const staging = stage(tx, submission, read.tables, log);
+    for (const _ of checkSteps(read.tables, held, log)) await nextTurn();
     const { failure } = await staging;
-    const checked: Checked = { tables, groups: log.byRule(), errors: log.counts.errors };
+    const checked: Checked = { ...read, groups: log.byRule(), errors: log.counts.errors };
     if (checked.errors > 0) {
       await tx.query('rollback to savepoint before');
       await clearStaged(tx, tableKeys, submissionId);
@@ -125,18 +124,19 @@ async function stage(
   }
 }
 
-/** False when the submission is no longer being checked; then nothing was written. */
+/** False when the submission is no longer being checked, or is by a later run; then nothing was written. */
 async function writeOutcome(tx: Tx, before: SubmissionRecord, checked: Checked): Promise<boolean> {
   const submission = await lockSubmission(tx, before.id);
-  if (submission?.status !== 'checking') return false;
+  if (submission?.status !== 'checking' || submission.progress?.startedAt !== before.progress?.startedAt) return false;
   await clearCheck(tx, submission.id);
   await insertFindings(
     tx,
     submission,
     checked.groups.flatMap((group) => group.kept),
   );
-  for (const table of Object.values(checked.tables)) await setFileRows(tx, submission.id, table.key, table.length);
-  const findings = groupsOf(checked, submission.findings);
+  for (const [file, rows] of checked.rows) await setFileRows(tx, submission.id, file, rows);
+  for (const file of checked.refused) await refuseFile(tx, submission.id, file);
+  const findings = groupsOf(checked, submission);
   if (checked.errors > 0) {
     await finishCheck(tx, submission.id, { findings, preview: null, previewDigest: null, siteRevision: null });
   } else {
@@ -146,7 +146,7 @@ async function writeOutcome(tx: Tx, before: SubmissionRecord, checked: Checked):
       submission: submission.id,
       site: submission.siteId,
       month: submission.month,
-      tables: files.map((file) => file.table),
+      tables: tablesOf(files),
     });
     const digest = previewDigest({ submission: submission.id, revision, files, tables: changes });
     await finishCheck(tx, submission.id, { findings, preview: { tables: changes }, previewDigest: digest, siteRevision: revision });
@@ -158,6 +158,7 @@ async function writeOutcome(tx: Tx, before: SubmissionRecord, checked: Checked):
     detail: {
       errors: checked.errors,
       warnings: findings.filter((group) => group.severity === 'warning').reduce((sum, group) => sum + group.count, 0),
+      ...(checked.refused.length > 0 ? { refused: checked.refused } : {}),
     },
   });
   return true;
