@@ -4,6 +4,7 @@ import { makeApp } from './app.ts';
 import { readConfig, SettingsError } from './config.ts';
 import { makeDataSource } from './database/data-source.ts';
 import { makeLogger } from './http/log.ts';
+import { serverLimits } from './http/server-limits.ts';
 import { makeSessionPool } from './http/session.ts';
 
 /** Longest one request's statement may run; a preview of a very large month is the slowest. */
@@ -14,9 +15,7 @@ try {
   const log = makeLogger(config.LOG_LEVEL, 'api');
   const database = await makeDataSource({ url: config.DATABASE_APP_URL, statementTimeout }).initialize();
   const sessionPool = makeSessionPool(config, log);
-  const server = createServer(makeApp({ config, database, log, clock: () => new Date() }, { sessionPool }));
-  server.requestTimeout = 120_000;
-  server.headersTimeout = 20_000;
+  const server = createServer(serverLimits, makeApp({ config, database, log, clock: () => new Date() }, { sessionPool }));
   server.listen(config.PORT, config.HOST, () => log.info({ port: config.PORT }, 'listening'));
 
   const stop = () => {
