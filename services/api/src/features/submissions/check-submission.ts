@@ -1,6 +1,5 @@
 /** The job that reads and checks a submission and works out what a commit would change. What it writes, it writes in one transaction at its end. */
 import { setImmediate as nextTurn } from 'node:timers/promises';
-import { tableKeys } from '@cairnstep/dictionary';
 import { checkSteps, FindingLog, type Finding, type RuleFindings } from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import { registry } from '../../authority/actor.ts';
@@ -11,7 +10,7 @@ import { tablesOf } from './file-key.ts';
 import { previewDigest } from './preview-digest.ts';
 import { readSubmissionFiles, type FilesRead } from './read-submission-files.ts';
 import { loadRegistryContext } from './registry-context.repository.ts';
-import { clearStaged, stageRows } from './stage-rows.ts';
+import { beginStaging, clearStaged } from './stage-rows.ts';
 import {
   clearCheck,
   finishCheck,
@@ -90,38 +89,19 @@ export async function checkSubmission(context: Context, submissionId: string): P
   );
   await asActor(database, registry, async (tx) => {
     await tx.query('savepoint before');
-    const staging = stage(tx, submission, read.tables, log);
+    // Where reading has found errors, nothing will be staged.
+    const staging = await beginStaging(tx, log.counts.errors > 0 ? [] : Object.values(read.tables), submissionId, submission.siteId);
     for (const _ of checkSteps(read.tables, held, log)) await nextTurn();
-    const { failure } = await staging;
+    const { failure } = await staging.done;
     const checked: Checked = { ...read, groups: log.byRule(), errors: log.counts.errors };
     if (checked.errors > 0) {
       await tx.query('rollback to savepoint before');
-      await clearStaged(tx, tableKeys, submissionId);
+      await clearStaged(tx, submissionId);
     } else if (failure) throw failure.error;
     await progress('compare', 0, 1);
     // Another run of this job has finished, or the files have changed since: what was staged here goes.
     if (!(await writeOutcome(tx, submission, checked))) await tx.query('rollback to savepoint before');
   });
-}
-
-/**
- * Stages the rows in place of earlier ones, while the caller checks them: the database works on the one, this process on the other. Rows with
- * errors may fail to be staged, which matters only when the check finds none.
- */
-async function stage(
-  tx: Tx,
-  submission: SubmissionRecord,
-  tables: Checked['tables'],
-  log: FindingLog,
-): Promise<{ readonly failure: { readonly error: unknown } | null }> {
-  if (log.counts.errors > 0) return { failure: null };
-  try {
-    await clearStaged(tx, tableKeys, submission.id);
-    for (const table of Object.values(tables)) await stageRows(tx, table, submission.id, submission.siteId);
-    return { failure: null };
-  } catch (error) {
-    return { failure: { error } };
-  }
 }
 
 /** False when the submission is no longer being checked, or is by a later run; then nothing was written. */
