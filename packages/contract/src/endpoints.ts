@@ -6,6 +6,7 @@ import * as health from './health.ts';
 import * as months from './months.ts';
 import * as people from './people.ts';
 import * as requests from './requests.ts';
+import * as siteSystems from './site-systems.ts';
 import * as submissions from './submissions.ts';
 
 export const endpoints = {
@@ -22,6 +23,9 @@ export const endpoints = {
   endGrant: people.endGrant,
   setPersonStatus: people.setPersonStatus,
   listSites: people.listSites,
+  listSiteSystems: siteSystems.listSiteSystems,
+  addSiteSystem: siteSystems.addSiteSystem,
+  setSiteSystemStatus: siteSystems.setSiteSystemStatus,
   listMonths: months.listMonths,
   listCalendar: months.listCalendar,
   closeMonth: months.closeMonth,
@@ -30,13 +34,23 @@ export const endpoints = {
   getSubmission: submissions.getSubmission,
   putSubmissionFile: submissions.putSubmissionFile,
   removeSubmissionFile: submissions.removeSubmissionFile,
+  putSubmissionWorkbook: submissions.putSubmissionWorkbook,
+  removeSubmissionWorkbook: submissions.removeSubmissionWorkbook,
+  mendCells: submissions.mendCells,
   checkSubmission: submissions.checkSubmission,
   listFindings: submissions.listFindings,
+  downloadFindings: submissions.downloadFindings,
+  downloadFindingsWorkbook: submissions.downloadFindingsWorkbook,
   acknowledgeFindings: submissions.acknowledgeFindings,
   listChanges: submissions.listChanges,
   commitSubmission: submissions.commitSubmission,
   getReceipt: submissions.getReceipt,
   discardSubmission: submissions.discardSubmission,
+  getTemplate: submissions.getTemplate,
+  listParticipantCodes: submissions.listParticipantCodes,
+  listSafeHeaders: submissions.listSafeHeaders,
+  markSafeHeader: submissions.markSafeHeader,
+  unmarkSafeHeader: submissions.unmarkSafeHeader,
   getGrid: explore.getGrid,
   listOutcomes: explore.listOutcomes,
   makeRelease: explore.makeRelease,

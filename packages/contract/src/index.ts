@@ -9,5 +9,6 @@ export * from './months.ts';
 export * from './people.ts';
 export * from './problems.ts';
 export * from './requests.ts';
+export * from './site-systems.ts';
 export * from './submissions.ts';
 export * from './vocabulary.ts';

@@ -14,6 +14,10 @@ export const problems = {
   'provider-unavailable': { status: 503, title: 'The sign-in service of your organisation does not answer' },
   'sign-in-failed': { status: 400, title: 'Signing in did not work' },
   'invitation-unusable': { status: 410, title: 'This invitation can no longer be used' },
+  'token-refused': { status: 401, title: 'The access token is not accepted' },
+  'token-without-scope': { status: 403, title: 'The access token does not cover this' },
+  'two-identities': { status: 400, title: 'A request comes from a person or from a system, not from both' },
+  'system-registered': { status: 409, title: 'This system is registered already' },
   'grant-to-oneself': { status: 409, title: 'Nobody can change their own roles' },
   'submission-stale': { status: 409, title: 'The registry changed since this preview was made' },
   'submission-has-errors': { status: 409, title: 'The files still hold errors' },
@@ -23,6 +27,7 @@ export const problems = {
   'submission-empty': { status: 409, title: 'No file has been added yet' },
   'month-not-open': { status: 409, title: 'This month cannot be submitted' },
   'month-not-empty': { status: 409, title: 'Something has been submitted for this month' },
+  'identifies-somebody': { status: 422, title: 'What was sent could identify a person' },
   'file-unreadable': { status: 422, title: 'The file could not be read' },
   'request-incomplete': { status: 409, title: 'The request is not complete' },
   'request-not-in-state': { status: 409, title: 'The request has moved on' },
@@ -39,6 +44,9 @@ export type ProblemCode = keyof typeof problems;
 /** Any endpoint may answer with these. */
 export const commonProblems = [
   'not-signed-in',
+  'token-refused',
+  'token-without-scope',
+  'two-identities',
   'no-grant',
   'not-permitted',
   'request-not-from-here',

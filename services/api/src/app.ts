@@ -14,11 +14,14 @@ import { peopleRoutes } from './features/people/people.routes.ts';
 import { requestRoutes } from './features/requests/requests.routes.ts';
 import { makeProvider } from './features/sign-in/provider.ts';
 import { signInRoutes } from './features/sign-in/sign-in.routes.ts';
+import { systemScope } from './features/site-systems/access-token.ts';
+import { siteSystemRoutes } from './features/site-systems/site-systems.routes.ts';
 import { submissionRoutes } from './features/submissions/submissions.routes.ts';
+import { bearerToken, challengeOf, refuseTwoIdentities } from './http/bearer-token.ts';
 import { loadActor } from './http/load-actor.ts';
 import { errorFacts, requestLog } from './http/log.ts';
 import { openApiDocument } from './http/open-api.ts';
-import { Refusal } from './http/refusal.ts';
+import { Refusal, TokenRefusal } from './http/refusal.ts';
 import type { Route } from './http/route.ts';
 import { sameOrigin } from './http/same-origin.ts';
 import { serveWeb } from './http/serve-web.ts';
@@ -56,6 +59,7 @@ export function allRoutes(context: Context): Route[] {
     ...healthRoutes(context),
     ...accountRoutes(context, provider),
     ...peopleRoutes(context),
+    ...siteSystemRoutes(context),
     ...monthRoutes(context),
     ...submissionRoutes(context),
     ...exploreRoutes(context),
@@ -84,9 +88,11 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
   };
   app.use('/api/sign-in', rateLimit({ windowMs: 60_000, limit: config.SIGN_IN_LIMIT_PER_MINUTE, standardHeaders: true, legacyHeaders: false, handler: refuseFlood }));
   app.use('/api', rateLimit({ windowMs: 60_000, limit: config.WRITE_LIMIT_PER_MINUTE, standardHeaders: true, legacyHeaders: false, handler: refuseFlood, skip: (request) => request.method === 'GET' || request.method === 'HEAD' }));
+  app.use('/api', rateLimit({ windowMs: 60_000, limit: config.SYSTEM_LIMIT_PER_MINUTE, standardHeaders: true, legacyHeaders: false, handler: refuseFlood, skip: (request) => bearerToken(request) === null }));
+  app.use('/api', refuseTwoIdentities(config.secure));
   app.use('/api', sameOrigin(config.PUBLIC_URL, ['/sign-in/back-channel-logout']));
 
-  const document = openApiDocument(config.PUBLIC_URL);
+  const document = openApiDocument(config);
   app.get('/api/openapi.json', (_request, response) => void response.json(document));
 
   // Pages and health answer without a session, so they do when the table of sessions does not.
@@ -96,9 +102,9 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
   app.use(signInRoutes(context, provider, sessionPool));
 
   const withoutSession = new Set(['/health/live', '/health/ready', '/public/figures']);
-  const actor = loadActor(context);
+  const actor = loadActor(context, provider);
   app.use('/api', (request, response, next) => {
-    if (!withoutSession.has(request.path)) return session(request, response, next);
+    if (!withoutSession.has(request.path) && bearerToken(request) === null) return session(request, response, next);
     next();
   });
   app.use('/api', (request, response, next) => {
@@ -124,6 +130,7 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
     const problem = toProblem(error, String(request.id));
     if (problem.status >= 500) log.error({ ...errorFacts(error), request: request.id }, 'request failed');
     if (response.headersSent) return void response.destroy();
+    if (problem.status === 401 || error instanceof TokenRefusal) response.setHeader('WWW-Authenticate', challengeOf(error, systemScope));
     // A body still arriving has nobody to read it.
     if (!request.complete) response.setHeader('Connection', 'close');
     response.status(problem.status).type('application/problem+json').send(JSON.stringify(problem));

@@ -31,6 +31,8 @@ const Settings = z.object({
   /** Requests a minute from one address: all writes, and sign-in attempts. */
   WRITE_LIMIT_PER_MINUTE: z.coerce.number().int().positive().default(240),
   SIGN_IN_LIMIT_PER_MINUTE: z.coerce.number().int().positive().default(30),
+  /** All requests of sites' systems from one address, whatever becomes of their tokens. */
+  SYSTEM_LIMIT_PER_MINUTE: z.coerce.number().int().positive().default(300),
 });
 
 export type Config = z.output<typeof Settings> & { readonly secure: boolean };

@@ -2,12 +2,19 @@
 import 'reflect-metadata';
 import { DataSource, DefaultNamingStrategy, type Table } from 'typeorm';
 import { CourseFactRow, OutcomeFactRow, ReleaseCourseRow, ReleaseOutcomeRow, ReleaseRow, ReleaseSessionRow } from './entities/facts.ts';
-import { AccountRow, GrantRow, InvitationRow, SiteRow, WebSessionRow } from './entities/people.ts';
+import { AccountRow, GrantRow, InvitationRow, SiteRow, SiteSystemRow, WebSessionRow } from './entities/people.ts';
 import { MonthClosureRow } from './entities/months.ts';
 import { AuditEntryRow, MailMessageRow } from './entities/records.ts';
 import { registrySchemas, stagedSchemas } from './entities/registry.ts';
 import { AccessRequestMemberRow, AccessRequestRow, AccessRequestVoteRow, ExportPseudonymRow, ExportRow } from './entities/requests.ts';
-import { RowHistoryRow, SubmissionFileRow, SubmissionFindingRow, SubmissionRow } from './entities/submissions.ts';
+import {
+  RowHistoryRow,
+  SafeHeaderRow,
+  SubmissionFileRow,
+  SubmissionFindingRow,
+  SubmissionMendRow,
+  SubmissionRow,
+} from './entities/submissions.ts';
 import { migrations } from './migrations/index.ts';
 
 /** Keys are named after their table, as PostgreSQL itself does. */
@@ -22,10 +29,13 @@ export const entities = [
   AccountRow,
   GrantRow,
   InvitationRow,
+  SiteSystemRow,
   WebSessionRow,
   SubmissionRow,
   SubmissionFileRow,
   SubmissionFindingRow,
+  SubmissionMendRow,
+  SafeHeaderRow,
   RowHistoryRow,
   MonthClosureRow,
   CourseFactRow,

@@ -1,13 +1,13 @@
 /**
  * `node dist/demo/seed.js`: fills an empty registry with the invented demonstration data, through the same check and commit as a clinic's
- * own month. In a filled one it only lets the demonstration's people in under the local provider's present address.
+ * own month. In a filled one it only lets the demonstration's people and systems in under the local provider's present address.
  */
 import { createHash, randomUUID } from 'node:crypto';
 import { mkdir, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { demoCsv, demoRegistry, demoSeed, type DemoFiles, type DemoMonth, type DemoSite } from '@cairnstep/demo-data';
 import { tableKeys, type TableKey } from '@cairnstep/dictionary';
-import { demonstrationPeople } from '@cairnstep/fake-oidc/demonstration-people';
+import { demonstrationPeople, demonstrationSystems } from '@cairnstep/fake-oidc/demonstration-people';
 import { pino } from 'pino';
 import { recordAudit } from '../audit/record-audit.ts';
 import { registry, type Person } from '../authority/actor.ts';
@@ -20,6 +20,7 @@ import { freeze } from '../features/explore/make-release.ts';
 import { checkSubmission } from '../features/submissions/check-submission.ts';
 import { accept } from '../features/submissions/commit-submission.ts';
 import { monthOf } from '../features/months/months.ts';
+import { insertSystem } from '../features/site-systems/site-systems.repository.ts';
 import { beginCheck, insertSubmission, lockSubmission, putFile, setFindingGroups } from '../features/submissions/submissions.repository.ts';
 
 const monthBefore = (month: string): string => monthOf(new Date(Date.parse(`${month}-01T00:00:00Z`) - 86_400_000));
@@ -69,6 +70,18 @@ async function addSites(context: Context, sites: readonly DemoSite[]): Promise<M
   return seeded;
 }
 
+async function addSystems(context: Context, sites: ReadonlyMap<string, SeededSite>): Promise<void> {
+  for (const { clientId, label, site } of demonstrationSystems) {
+    const siteId = sites.get(site)?.id;
+    if (siteId === undefined) throw new Error('A system names a site that is not there.');
+    const id = randomUUID();
+    await asActor(context.database, registry, async (tx) => {
+      await insertSystem(tx, { id, siteId, issuer: context.config.OIDC_ISSUER, subject: clientId, label, addedBy: null });
+      await recordAudit(tx, registry, { act: 'site-system.add', object: id, site: siteId });
+    });
+  }
+}
+
 /** The month's files, in the dictionary's order of tables. */
 const filesOf = ({ tables }: DemoMonth): { table: TableKey; content: Buffer }[] =>
   tableKeys.flatMap((table) => {
@@ -112,11 +125,14 @@ const context: Context = { config, database, log: pino({ level: 'silent' }), clo
 try {
   const [{ sites }] = await asActor(database, registry, async (tx) => (await tx.query('select count(*)::int as sites from sites')) as [{ sites: number }]);
   if (sites > 0) {
-    await asActor(database, registry, (tx) => tx.query("update accounts set issuer = $1 where subject like 'demo-%' and issuer <> $1", [config.OIDC_ISSUER]));
+    for (const table of ['accounts', 'site_systems']) {
+      await asActor(database, registry, (tx) => tx.query(`update ${table} set issuer = $1 where subject like 'demo-%' and issuer <> $1`, [config.OIDC_ISSUER]));
+    }
   } else {
     const nextMonth = monthBefore(monthOf(context.clock()));
     const demo = demoRegistry({ seed: demoSeed, lastMonth: monthBefore(nextMonth) });
     const seeded = await addSites(context, demo.sites);
+    await addSystems(context, seeded);
     for (const month of demo.months()) {
       const site = seeded.get(month.site);
       if (!site) throw new Error('A month names a site that is not there.');

@@ -1,7 +1,9 @@
 /** OpenAPI 3.1 from the contract: zod writes the JSON Schemas. */
 import { commonProblems, endpoints, problems, type Endpoint, type ProblemCode } from '@cairnstep/contract';
 import { z } from 'zod';
-import { entries } from '../authority/table.ts';
+import { authority, entries } from '../authority/table.ts';
+import type { Config } from '../config.ts';
+import { systemAudience, systemScope } from '../features/site-systems/access-token.ts';
 
 type Json = { [key: string]: unknown };
 
@@ -21,6 +23,14 @@ const withStatus = (codes: readonly ProblemCode[]): Map<number, ProblemCode[]> =
   for (const code of codes) byStatus.set(problems[code].status, [...(byStatus.get(problems[code].status) ?? []), code]);
   return byStatus;
 };
+
+/** What lets a caller in: any one of the list. */
+function securityOf(name: keyof typeof endpoints): Json[] {
+  const entry = entries[name];
+  if (entry === 'anyone') return [];
+  const ofSystems = entry !== 'signed-in' && authority[entry]['site-system'] !== 'no';
+  return ofSystems ? [{ session: [] }, { siteSystem: [systemScope] }] : [{ session: [] }];
+}
 
 function operationOf(name: keyof typeof endpoints, endpoint: Endpoint): Json {
   const responses: Json = {};
@@ -46,11 +56,11 @@ function operationOf(name: keyof typeof endpoints, endpoint: Endpoint): Json {
     parameters: [...parametersOf('path', endpoint.params), ...parametersOf('query', endpoint.query)],
     ...(body ? { requestBody: body } : {}),
     responses,
-    security: entries[name] === 'anyone' ? [] : [{ session: [] }],
+    security: securityOf(name),
   };
 }
 
-export function openApiDocument(publicUrl: string): Json {
+export function openApiDocument(config: Pick<Config, 'PUBLIC_URL' | 'OIDC_ISSUER'>): Json {
   const paths: Record<string, Json> = {};
   for (const [name, endpoint] of Object.entries(endpoints) as [keyof typeof endpoints, Endpoint][]) {
     const path = endpoint.path.replace(/:(\w+)/g, '{$1}');
@@ -61,12 +71,20 @@ export function openApiDocument(publicUrl: string): Json {
     info: {
       title: 'Cairnstep',
       version: '1',
-      description: 'What the application’s own pages use. Requests that change something carry the header `X-Cairnstep-Request: 1`. Refusals are `application/problem+json`.',
+      description:
+        'What the application’s own pages use. Requests that change something carry the header `X-Cairnstep-Request: 1`, unless they carry an access token. Refusals are `application/problem+json`.',
     },
-    servers: [{ url: publicUrl }],
+    servers: [{ url: config.PUBLIC_URL }],
     paths,
     components: {
-      securitySchemes: { session: { type: 'apiKey', in: 'cookie', name: 'session', description: 'Set by signing in.' } },
+      securitySchemes: {
+        session: { type: 'apiKey', in: 'cookie', name: 'session', description: 'Set by signing in.' },
+        siteSystem: {
+          type: 'openIdConnect',
+          openIdConnectUrl: `${config.OIDC_ISSUER.replace(/\/$/, '')}/.well-known/openid-configuration`,
+          description: `A site's own system: a JWT access token of the client credentials grant, with audience ${systemAudience(config)} and scope ${systemScope}, in the Authorization header as Bearer. The system is registered by an administrator and reaches one site.`,
+        },
+      },
       schemas: {
         Problem: {
           type: 'object',

@@ -16,3 +16,15 @@ export class Refusal extends Error {
     this.name = 'Refusal';
   }
 }
+
+/** An access token that does not do. `error` is the word of RFC 6750 for the challenge in the answer. */
+export class TokenRefusal extends Refusal {
+  constructor(
+    readonly error: 'invalid_token' | 'insufficient_scope' | 'invalid_request',
+    code: ProblemCode,
+    detail: string,
+  ) {
+    super(code, detail);
+    this.name = 'TokenRefusal';
+  }
+}

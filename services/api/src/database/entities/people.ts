@@ -58,6 +58,23 @@ export class InvitationRow {
   @Column({ type: 'timestamptz', name: 'revoked_at', nullable: true }) revokedAt: Date | null;
 }
 
+/** A site's own system, known by (issuer, subject) of its access tokens. Submits for its site. Disabled, never deleted. */
+@Entity('site_systems')
+@Index('site_systems_identity_key', ['issuer', 'subject'], { unique: true })
+export class SiteSystemRow {
+  @PrimaryColumn({ type: 'uuid' }) id: string;
+  @Column({ type: 'uuid', name: 'site_id' }) siteId: string;
+  @Column({ type: 'text' }) issuer: string;
+  @Column({ type: 'text' }) subject: string;
+  /** Stands where a person's name would. */
+  @Column({ type: 'text' }) label: string;
+  @Column({ type: 'text', default: 'active' }) status: 'active' | 'disabled';
+  /** Null: the registry itself, for the demonstration. */
+  @Column({ type: 'uuid', name: 'added_by', nullable: true }) addedBy: string | null;
+  @Column({ type: 'timestamptz', name: 'added_at', default: () => 'now()' }) addedAt: Date;
+  @Column({ type: 'timestamptz', name: 'last_used_at', nullable: true }) lastUsedAt: Date | null;
+}
+
 /** Sign-in sessions of the browser (connect-pg-simple's shape). */
 @Entity('web_sessions')
 @Index('web_sessions_expire_idx', ['expire'])

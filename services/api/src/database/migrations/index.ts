@@ -1,7 +1,10 @@
 /** In the order they run. A test reads the folder and compares. */
 import { FirstTables1796083200000 } from './1796083200000-first-tables.ts';
 import { Reach1796083200001 } from './1796083200001-reach.ts';
+import { ScreenedFiles1796083200010 } from './1796083200010-screened-files.ts';
 import { MonthClosures1796083200020 } from './1796083200020-month-closures.ts';
+import { SiteSystems1796083200021 } from './1796083200021-site-systems.ts';
 import { QuickerMonths1796083200030 } from './1796083200030-quicker-months.ts';
 
-export const migrations = [FirstTables1796083200000, Reach1796083200001, MonthClosures1796083200020, QuickerMonths1796083200030];
+export const migrations = [FirstTables1796083200000, Reach1796083200001, ScreenedFiles1796083200010, MonthClosures1796083200020,
+  SiteSystems1796083200021, QuickerMonths1796083200030];

@@ -22,8 +22,8 @@ export const auditRoutes = ({ database }: Context): Route[] => [
     asActor(database, actor, async (tx) => {
       const [{ count }] = (await tx.query('select count(*)::int as count from audit_entries')) as [{ count: number }];
       const rows = (await tx.query(
-        `select e.seq, e.at, coalesce(a.name, e.actor) as actor_name, e.role, e.act, e.object, e.result
-           from audit_entries e left join accounts a on a.id::text = e.actor
+        `select e.seq, e.at, coalesce(a.name, y.label, e.actor) as actor_name, e.role, e.act, e.object, e.result
+           from audit_entries e left join accounts a on a.id::text = e.actor left join site_systems y on y.id::text = e.actor
           order by e.seq desc limit $1 offset $2`,
         [pageSize, (page - 1) * pageSize],
       )) as EntryRecord[];

@@ -9,6 +9,8 @@ const words: Readonly<Record<string, string>> = {
   'export.download': 'export downloaded',
   'grant.end': 'role ended',
   'grant.give': 'role given',
+  'header.mark-safe': 'header marked as safe',
+  'header.unmark-safe': 'header screened again',
   'invitation.accept': 'invitation accepted',
   'invitation.revoke': 'invitation taken back',
   'invitation.send': 'invitation sent',
@@ -21,6 +23,9 @@ const words: Readonly<Record<string, string>> = {
   'request.withdraw': 'access request withdrawn',
   'sign-in': 'signed in',
   'sign-out': 'signed out',
+  'site-system.add': 'system of a site registered',
+  'site-system.disable': 'system of a site disabled',
+  'site-system.enable': 'system of a site enabled again',
   'submission.acknowledge': 'reason for warnings given',
   'submission.check': 'check of a submission begun',
   'submission.checked': 'submission checked',
@@ -28,6 +33,7 @@ const words: Readonly<Record<string, string>> = {
   'submission.discard': 'submission given up',
   'submission.file': 'file added to a submission',
   'submission.file-removed': 'file taken out of a submission',
+  'submission.mend': 'cells of a submission mended',
   'submission.open': 'submission opened',
 };
 

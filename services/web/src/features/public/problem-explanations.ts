@@ -75,6 +75,28 @@ export const explanations: Readonly<Record<ProblemCode, Explanation>> = {
     kept: 'Roles given to you before are untouched.',
     next: 'Ask whoever invited you for a new invitation.',
   },
+  'token-refused': {
+    meaning:
+      'A program sent an access token that does not hold: it has expired, was given by another provider or for another address, or its client is not registered for a site, or was disabled.',
+    kept: nothingChanged,
+    next: 'Get a fresh token from the identity provider. If that is refused too, ask an administrator whether the client id is registered and enabled.',
+  },
+  'token-without-scope': {
+    meaning: 'The access token is sound, but the identity provider did not put the scope into it that submitting asks for.',
+    kept: nothingChanged,
+    next: 'Ask for the token with scope=submissions. If the provider does not grant it, ask whoever runs the provider.',
+  },
+  'two-identities': {
+    meaning:
+      'The request carried the session of a signed-in person and the access token of a system. Whose act it would be, nobody could say.',
+    kept: nothingChanged,
+    next: 'Send the token alone: a program keeps no cookies of the registry.',
+  },
+  'system-registered': {
+    meaning: 'A client id of the identity provider belongs to one system of one site, and this one is registered.',
+    kept: nothingChanged,
+    next: 'Enable the system that is registered, or let the provider give out another client id.',
+  },
   'grant-to-oneself': {
     meaning: 'Nobody can give, end or disable their own roles.',
     kept: nothingChanged,
@@ -120,6 +142,11 @@ export const explanations: Readonly<Record<ProblemCode, Explanation>> = {
     meaning: 'A month can be closed as “nothing to report” only while nothing was submitted for it and no submission of it is under way.',
     kept: nothingChanged,
     next: 'Give up the submission that is under way, or correct the one that was accepted.',
+  },
+  'identifies-somebody': {
+    meaning: 'What was typed or sent looks like something that identifies a person: a name, a date, a number or an address.',
+    kept: 'Nothing of it was kept.',
+    next: 'Type study days, plain numbers and codes. Names, dates and numbers of people stay at the clinic.',
   },
   'file-unreadable': {
     meaning: 'The file is not a CSV file in UTF-8 with the columns of the template, or it is damaged.',
