@@ -13,14 +13,22 @@ export const Table = z.enum(tableKeys);
 export const SubmissionStatus = z.enum(['open', 'checking', 'checked', 'accepted', 'superseded', 'discarded']);
 
 export const SubmissionFile = z.strictObject({
-  table: Table,
+  /** Null for the workbook, which has a sheet for each of several tables. */
+  table: Table.nullable(),
+  /** The tables it has rows of; of a workbook known after the check. */
+  tables: z.array(Table).nullable(),
   fileName: z.string(),
   bytes: z.number().int(),
   sha256: Digest,
   addedAt: Instant,
   /** Known after the check. */
   rows: z.number().int().nullable(),
+  /** Cells mended on screen, which count in place of those of the file. */
+  mended: z.number().int(),
+  /** It identified somebody or could not be read to its end, and was deleted. Only its place is kept. */
+  refused: z.boolean(),
 });
+export type SubmissionFile = z.output<typeof SubmissionFile>;
 
 export const Severity = z.enum(['error', 'warning']);
 
@@ -39,7 +47,8 @@ export const Finding = z.strictObject({
   id: z.number().int(),
   rule: z.string(),
   severity: Severity,
-  table: Table,
+  /** Null when about a whole workbook. */
+  table: Table.nullable(),
   /** Line of the file as an editor counts it; 1 is the header. Null when the finding is about the whole file. */
   line: z.number().int().nullable(),
   column: z.string().nullable(),
@@ -132,6 +141,53 @@ export const removeSubmissionFile = endpoint({
   problems: ['not-found', 'submission-closed', 'submission-busy'],
 });
 
+export const workbookType = 'application/vnd.openxmlformats-officedocument.spreadsheetml.sheet';
+
+export const putSubmissionWorkbook = endpoint({
+  method: 'PUT',
+  path: '/api/submissions/:submissionId/workbook',
+  summary: 'Add or replace the workbook: a sheet for each table, as in the template',
+  params: SubmissionParams,
+  query: z.strictObject({ fileName: z.string().min(1).max(200) }),
+  upload: { contentType: workbookType },
+  response: Submission,
+  problems: ['not-found', 'submission-closed', 'submission-busy', 'too-large', 'file-unreadable'],
+});
+
+export const removeSubmissionWorkbook = endpoint({
+  method: 'DELETE',
+  path: '/api/submissions/:submissionId/workbook',
+  summary: 'Take the workbook out again',
+  params: SubmissionParams,
+  response: Submission,
+  problems: ['not-found', 'submission-closed', 'submission-busy'],
+});
+
+export const mendCells = endpoint({
+  method: 'POST',
+  path: '/api/submissions/:submissionId/mends',
+  summary: 'Put values in place of cells of the files that were added; they are checked like any cell',
+  params: SubmissionParams,
+  body: z.strictObject({
+    mends: z
+      .array(
+        z.strictObject({
+          table: Table,
+          /** As in findings: line of the file, or row of the sheet. */
+          line: z.number().int().min(2).max(10_000_000),
+          /** Key of the dictionary. */
+          column: z.string().max(60),
+          /** As one would type it in the file; empty leaves the cell empty. */
+          value: z.string().max(200),
+        }),
+      )
+      .min(1)
+      .max(1_000),
+  }),
+  response: Submission,
+  problems: ['not-found', 'submission-closed', 'submission-busy', 'identifies-somebody'],
+});
+
 export const checkSubmission = endpoint({
   method: 'POST',
   path: '/api/submissions/:submissionId/check',
@@ -150,6 +206,26 @@ export const listFindings = endpoint({
   params: SubmissionParams,
   query: z.strictObject({ rule: z.string().max(40).optional(), table: Table.optional(), severity: Severity.optional(), page: Page }),
   response: pageOf(Finding),
+  problems: ['not-found'],
+});
+
+export const downloadFindings = endpoint({
+  method: 'GET',
+  path: '/api/submissions/:submissionId/findings.csv',
+  summary: 'All findings that were kept, as CSV',
+  params: SubmissionParams,
+  response: z.undefined(),
+  download: { contentType: 'text/csv; charset=utf-8' },
+  problems: ['not-found'],
+});
+
+export const downloadFindingsWorkbook = endpoint({
+  method: 'GET',
+  path: '/api/submissions/:submissionId/findings.xlsx',
+  summary: 'The files as a workbook, with the findings in the cells they are about',
+  params: SubmissionParams,
+  response: z.undefined(),
+  download: { contentType: workbookType },
   problems: ['not-found'],
 });
 
@@ -180,7 +256,7 @@ export const listChanges = endpoint({
   params: SubmissionParams,
   query: z.strictObject({ table: Table, kind: ChangeKind, page: Page }),
   response: pageOf(RowChange),
-  problems: ['not-found'],
+  problems: ['not-found', 'submission-stale'],
 });
 
 export const SubmissionReceipt = z.strictObject({
@@ -191,7 +267,18 @@ export const SubmissionReceipt = z.strictObject({
   acceptedBy: z.string(),
   digest: Digest,
   tables: z.array(TableChange),
-  files: z.array(z.strictObject({ table: Table, fileName: z.string(), sha256: Digest, rows: z.number().int() })),
+  files: z.array(
+    z.strictObject({
+      /** Null for the workbook. */
+      table: Table.nullable(),
+      fileName: z.string(),
+      /** Of the file as it was sent. */
+      sha256: Digest,
+      rows: z.number().int(),
+      /** Cells mended on screen; receipts of earlier versions do not tell. */
+      mended: z.number().int().optional(),
+    }),
+  ),
   acknowledged: z.array(z.strictObject({ rule: z.string(), count: z.number().int(), reason: z.string() })),
 });
 export type SubmissionReceipt = z.output<typeof SubmissionReceipt>;
@@ -230,4 +317,58 @@ export const discardSubmission = endpoint({
   body: z.strictObject({}),
   response: Submission,
   problems: ['not-found', 'submission-closed', 'submission-busy'],
+});
+
+export const getTemplate = endpoint({
+  method: 'GET',
+  path: '/api/sites/:siteId/template',
+  summary: "The workbook to fill in for a month, with the site's participants to choose from",
+  params: z.strictObject({ siteId: Id }),
+  query: z.strictObject({ month: Month }),
+  response: z.undefined(),
+  download: { contentType: workbookType },
+  problems: ['not-found'],
+});
+
+export const listParticipantCodes = endpoint({
+  method: 'GET',
+  path: '/api/sites/:siteId/participant-codes',
+  summary: 'The codes of all participants the registry holds of a site, in their order',
+  params: z.strictObject({ siteId: Id }),
+  response: z.strictObject({ codes: z.array(z.string()) }),
+  problems: ['not-found'],
+});
+
+const SafeHeaders = z.strictObject({
+  headers: z.array(z.strictObject({ header: z.string(), markedAt: Instant, markedBy: z.string() })),
+});
+const Header = z.string().trim().min(1, 'Write the header').max(60, 'Headers of columns are shorter');
+
+export const listSafeHeaders = endpoint({
+  method: 'GET',
+  path: '/api/sites/:siteId/safe-headers',
+  summary: 'Headers that screening would refuse and that a steward has marked as safe in the files of this site',
+  params: z.strictObject({ siteId: Id }),
+  response: SafeHeaders,
+  problems: ['not-found'],
+});
+
+export const markSafeHeader = endpoint({
+  method: 'POST',
+  path: '/api/sites/:siteId/safe-headers',
+  summary: 'Mark a header as safe in the files of this site; its cells are screened all the same',
+  params: z.strictObject({ siteId: Id }),
+  body: z.strictObject({ header: Header }),
+  response: SafeHeaders,
+  problems: ['not-found', 'identifies-somebody'],
+});
+
+export const unmarkSafeHeader = endpoint({
+  method: 'DELETE',
+  path: '/api/sites/:siteId/safe-headers',
+  summary: 'Have a header screened again',
+  params: z.strictObject({ siteId: Id }),
+  query: z.strictObject({ header: Header }),
+  response: SafeHeaders,
+  problems: ['not-found'],
 });

@@ -1,5 +1,6 @@
 /** Identity out of rows: participant codes, study days, key file and detectors; the same code in the browser and on the server. */
 export { identifierClasses } from './detection/identifier-class.ts';
+export { identifierWords } from './detection/identifier-words.ts';
 export type { IdentifierClass, Strength } from './detection/identifier-class.ts';
 export type { IdentifierFinding } from './detection/identifier-finding.ts';
 export type { ColumnRole, DetectionContext } from './detection/detection-context.ts';

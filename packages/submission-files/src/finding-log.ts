@@ -67,6 +67,11 @@ export class FindingLog {
     return this.stopped;
   }
 
+  /** Findings of one rule so far, kept or not. */
+  count(rule: string): number {
+    return this.rules.get(rule)?.count ?? 0;
+  }
+
   /** Exact numbers, kept or not. */
   get counts(): { readonly errors: number; readonly warnings: number } {
     return { errors: this.errors, warnings: this.warnings };

@@ -11,10 +11,14 @@ import { SheetReader } from '../../reading/workbook/sheet-reader.ts';
 import type { SheetSurroundings } from '../../reading/workbook/sheet-reader.ts';
 import { wholeFile } from '../../reading/workbook/whole-file.ts';
 import type { CellKind } from '../../table/cell-kind.ts';
+import type { Mends } from '../../table/table-options.ts';
 import type { ZipEntry } from '../../zip/zip-directory.ts';
+import { mendedRows } from './mended-rows.ts';
 
-/** A file of a submission: the CSV file of one table, or a workbook of several. */
-export type SubmittedFile = { readonly table: TableKey; readonly csv: ByteSource } | { readonly workbook: ByteSource };
+/** A file of a submission, the CSV file of one table or a workbook of several, with what was mended in it on screen. */
+export type SubmittedFile =
+  | { readonly table: TableKey; readonly csv: ByteSource; readonly mends?: Mends }
+  | { readonly workbook: ByteSource; readonly mendsOf?: (table: TableKey) => Mends | undefined };
 
 export interface SubmittedRow {
   readonly line: number;
@@ -33,11 +37,16 @@ export interface SubmittedTable {
 export async function submittedTables(files: readonly SubmittedFile[], limits: WorkbookLimits): Promise<readonly SubmittedTable[]> {
   const tables: SubmittedTable[] = [];
   for (const file of files) {
-    if ('csv' in file) tables.push({ table: file.table, rows: csvRows(file.table, file.csv, limits) });
-    else tables.push(...(await workbookTables(file.workbook, limits)));
+    if ('csv' in file) tables.push(mended({ table: file.table, rows: csvRows(file.table, file.csv, limits) }, file.mends));
+    else for (const table of await workbookTables(file.workbook, limits)) tables.push(mended(table, file.mendsOf?.(table.table)));
   }
   return tables.filter(({ table }, index) => tables.findIndex((other) => other.table === table) === index);
 }
+
+const mended = ({ table, rows }: SubmittedTable, mends: Mends | undefined): SubmittedTable => ({
+  table,
+  rows: mends ? mendedRows(table, rows, mends) : rows,
+});
 
 /** What cannot be read is among the findings already. */
 function refuseOthers(error: unknown): void {

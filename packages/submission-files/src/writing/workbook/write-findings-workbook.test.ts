@@ -174,4 +174,26 @@ describe('writeFindingsWorkbook', () => {
     checkSubmission(read, context, again);
     expect(again.byRule()).toEqual(log.byRule());
   });
+
+  it('shows what was mended on screen in place of the cells, and reads it back', async () => {
+    const mends = new Map([
+      [2, new Map([['steps', '40']])],
+      [
+        4,
+        new Map([
+          ['stop_reason', 'pain'],
+          ['hr_end', '117'],
+        ]),
+      ],
+    ]);
+    const sent = 'bout_no,steps,stop_reason\r\n1,many,pain\r\n2,10,pain\r\n3,11,tired\r\n';
+    const found = await findingsIn({ table: 'bouts', csv: encode(sent), mends });
+    const { bouts } = await readWorkbook(found.bytes, new FindingLog());
+    const cells = (key: string) => [0, 1, 2].map((row) => bouts?.column(key).cell(row));
+    expect([cells('steps'), cells('stop_reason'), cells('hr_end')]).toEqual([
+      [40, 10, 11],
+      ['pain', 'pain', 'pain'],
+      [null, null, 117],
+    ]);
+  });
 });

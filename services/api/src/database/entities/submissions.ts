@@ -21,11 +21,14 @@ export class SubmissionRow {
   /** The site's revision when the preview was made. */
   @Column({ type: 'integer', name: 'site_revision', nullable: true }) siteRevision: number | null;
   @Column({ type: 'jsonb', nullable: true }) receipt: object | null;
+  /** Reasons given for warnings of an earlier check, while the next one has not been made. */
+  @Column({ type: 'jsonb', nullable: true }) reasons: object | null;
 }
 
 @Entity('submission_files')
 export class SubmissionFileRow {
   @PrimaryColumn({ type: 'uuid', name: 'submission_id' }) submissionId: string;
+  /** The table of a CSV file; `workbook` for the workbook. */
   @PrimaryColumn({ type: 'text', name: 'table_key' }) tableKey: string;
   @Column({ type: 'uuid', name: 'site_id' }) siteId: string;
   @Column({ type: 'text', name: 'file_name' }) fileName: string;
@@ -35,6 +38,34 @@ export class SubmissionFileRow {
   @Column({ type: 'integer', nullable: true }) rows: number | null;
   /** The file as sent, until the submission is settled. */
   @Column({ type: 'bytea', nullable: true }) content: Buffer | null;
+  /** What the file has rows of; of a workbook known after the check. */
+  @Column({ type: 'text', array: true, nullable: true }) tables: string[] | null;
+  /** It identified somebody or could not be read to its end, and was deleted. */
+  @Column({ type: 'boolean', default: false }) refused: boolean;
+  /** Cells mended on screen. */
+  @Column({ type: 'integer', default: 0 }) mended: number;
+  /** Over those cells; null when there are none. */
+  @Column({ type: 'text', name: 'mends_digest', nullable: true }) mendsDigest: string | null;
+}
+
+/** A cell typed in place of one in a file, until the submission is settled. */
+@Entity('submission_mends')
+export class SubmissionMendRow {
+  @PrimaryColumn({ type: 'uuid', name: 'submission_id' }) submissionId: string;
+  @PrimaryColumn({ type: 'text', name: 'table_key' }) tableKey: string;
+  @PrimaryColumn({ type: 'integer' }) line: number;
+  @PrimaryColumn({ type: 'text', name: 'column_key' }) columnKey: string;
+  @Column({ type: 'uuid', name: 'site_id' }) siteId: string;
+  @Column({ type: 'text' }) value: string;
+}
+
+/** A header that screening would refuse and that means something harmless in the files of one site. Its cells are screened all the same. */
+@Entity('safe_headers')
+export class SafeHeaderRow {
+  @PrimaryColumn({ type: 'uuid', name: 'site_id' }) siteId: string;
+  @PrimaryColumn({ type: 'text' }) header: string;
+  @Column({ type: 'uuid', name: 'marked_by' }) markedBy: string;
+  @Column({ type: 'timestamptz', name: 'marked_at', default: () => 'now()' }) markedAt: Date;
 }
 
 @Entity('submission_findings')
@@ -44,7 +75,8 @@ export class SubmissionFindingRow {
   @Column({ type: 'uuid', name: 'site_id' }) siteId: string;
   @Column({ type: 'text' }) rule: string;
   @Column({ type: 'text' }) severity: 'error' | 'warning';
-  @Column({ type: 'text', name: 'table_key' }) tableKey: string;
+  /** Null when about a whole workbook. */
+  @Column({ type: 'text', name: 'table_key', nullable: true }) tableKey: string | null;
   @Column({ type: 'integer', nullable: true }) line: number | null;
   @Column({ type: 'text', name: 'column_key', nullable: true }) columnKey: string | null;
   @Column({ type: 'text' }) found: string;

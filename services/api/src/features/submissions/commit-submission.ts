@@ -3,14 +3,15 @@ import type { InputOf, SubmissionReceipt } from '@cairnstep/contract';
 import type { commitSubmission as Commit } from '@cairnstep/contract';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
-import { requireSubmitter, type Submitter } from '../../authority/require-may.ts';
+import { requireFound, requireMayAtSite, requireSubmitter, type Submitter } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
 import { applyChanges, checkAgain } from './apply-changes.ts';
+import { tableOfFile, tablesOf } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
-import { readFiles, settle, supersedeEarlier, type SubmissionRecord } from './submissions.repository.ts';
+import { lockSubmission, readFiles, settle, supersedeEarlier, type SubmissionRecord } from './submissions.repository.ts';
 
 /** Waits for a commit of the same site that is under way, then says what the site's state has become. */
 async function lockSite(tx: Tx, siteId: string): Promise<number> {
@@ -18,7 +19,13 @@ async function lockSite(tx: Tx, siteId: string): Promise<number> {
   return site.revision;
 }
 
-export async function accept(tx: Tx, submitter: Submitter, submission: SubmissionRecord, digest: string, now: Date): Promise<SubmissionReceipt> {
+export async function accept(
+  tx: Tx,
+  submitter: Submitter,
+  submission: SubmissionRecord,
+  digest: string,
+  now: Date,
+): Promise<SubmissionReceipt> {
   const revision = await lockSite(tx, submission.siteId);
   const { preview } = submission;
   if (submission.findings.some((group) => group.severity === 'error')) {
@@ -36,7 +43,7 @@ export async function accept(tx: Tx, submitter: Submitter, submission: Submissio
   const files = await readFiles(tx, submission.id);
   await applyChanges(
     tx,
-    { submission: submission.id, site: submission.siteId, month: submission.month, tables: files.map((file) => file.table) },
+    { submission: submission.id, site: submission.siteId, month: submission.month, tables: tablesOf(files) },
     preview.tables,
   );
   await tx.query('update sites set revision = revision + 1 where id = $1', [submission.siteId]);
@@ -49,11 +56,18 @@ export async function accept(tx: Tx, submitter: Submitter, submission: Submissio
     acceptedBy: submitter.name,
     digest,
     tables: preview.tables,
-    files: files.map(({ table, fileName, sha256, rows }) => ({ table, fileName, sha256, rows: rows ?? 0 })),
+    files: files.map(({ key, fileName, sha256, rows, mended }) => ({ table: tableOfFile(key), fileName, sha256, rows: rows ?? 0, mended })),
     acknowledged: submission.findings.map(({ rule, count, acknowledgedReason }) => ({ rule, count, reason: acknowledgedReason ?? '' })),
   };
   await settle(tx, submission.id, 'accepted', submitter.id, receipt);
   return receipt;
+}
+
+/** The receipt, when this very commit by the same submitter went through before and its answer was lost on the way. */
+async function receiptGivenBefore(tx: Tx, actor: Actor, by: string, id: string, digest: string): Promise<SubmissionReceipt | null> {
+  const { siteId, status, settledBy, receipt } = requireFound(await lockSubmission(tx, id));
+  requireMayAtSite(actor, 'submit', siteId);
+  return status === 'accepted' && settledBy === by && receipt?.digest === digest ? receipt : null;
 }
 
 const receiptText = (receipt: SubmissionReceipt, address: string): string =>
@@ -76,6 +90,8 @@ export const commitSubmission = (
 ): Promise<SubmissionReceipt> =>
   asActor(database, actor, async (tx) => {
     const submitter = requireSubmitter(actor);
+    const before = await receiptGivenBefore(tx, actor, submitter.id, submissionId, previewDigest);
+    if (before) return before;
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     const receipt = await accept(tx, submitter, submission, previewDigest, clock());
     // A site's system has no address: it fetches the receipt.

@@ -9,6 +9,7 @@ import { asActor } from '../../database/as-actor.ts';
 import { bind } from '../../database/bind.ts';
 import { joinWholeTables } from '../../database/join-whole-tables.ts';
 import { Refusal } from '../../http/refusal.ts';
+import { tablesOf } from './file-key.ts';
 import { visibleSubmission } from './read-submissions.ts';
 import { readFiles } from './submissions.repository.ts';
 import { tableSql } from './table-sql.ts';
@@ -59,7 +60,7 @@ export const listChanges = (
         submission: submissionId,
         site: submission.siteId,
         month: submission.month,
-        tables: (await readFiles(tx, submissionId)).map((file) => file.table),
+        tables: tablesOf(await readFiles(tx, submissionId)),
         limit: rowsPerPage,
         offset: (page - 1) * rowsPerPage,
       }),

@@ -1,15 +1,23 @@
-/** Files of a submission come and go until it is settled. Their bytes are kept as sent until then. */
+/** Files of a submission come and go until it is settled. Their bytes are kept until then, those of a workbook without what nobody reads. */
 import { createHash } from 'node:crypto';
 import type { InputOf, Submission } from '@cairnstep/contract';
-import type { putSubmissionFile as PutFile, removeSubmissionFile as RemoveFile } from '@cairnstep/contract';
+import type {
+  putSubmissionFile as PutFile,
+  putSubmissionWorkbook as PutWorkbook,
+  removeSubmissionFile as RemoveFile,
+  removeSubmissionWorkbook as RemoveWorkbook,
+} from '@cairnstep/contract';
+import { defaultWorkbookLimits, plainWorkbook } from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
 import type { RequestFacts } from '../../http/route.ts';
+import type { FileKey } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
 import { present } from './read-submissions.ts';
+import { showableFileName } from './showable-file-name.ts';
 import { putFile, removeFile, reopen } from './submissions.repository.ts';
 
 /** Counts the bytes that arrive, whatever the header announced. */
@@ -28,48 +36,93 @@ async function readLimited(stream: AsyncIterable<Buffer>, limit: number): Promis
   return Buffer.concat(chunks);
 }
 
-export async function putSubmissionFile(
+interface Arriving {
+  readonly submissionId: string;
+  readonly key: FileKey;
+  readonly fileName: string;
+  /** What is kept of the bytes. */
+  readonly keep: (bytes: Buffer) => Buffer;
+}
+
+async function put(
   context: Context,
   actor: Actor,
-  { submissionId, table, fileName }: InputOf<typeof PutFile>,
+  { submissionId, key, fileName, keep }: Arriving,
   facts: RequestFacts,
 ): Promise<Submission> {
   const { database, config, clock } = context;
   // Refuse before reading what would be refused after it.
   await asActor(database, actor, (tx) => lockOwnSubmission(tx, actor, submissionId, clock()));
-  const content = await readLimited(facts.upload, config.UPLOAD_LIMIT_BYTES);
-  const sha256 = createHash('sha256').update(content).digest('hex');
+  const sent = await readLimited(facts.upload, config.UPLOAD_LIMIT_BYTES);
+  const content = keep(sent);
+  const sha256 = createHash('sha256').update(sent).digest('hex');
   return asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     await reopen(tx, submissionId);
-    await putFile(tx, submissionId, submission.siteId, { table, fileName, sha256, content });
+    await putFile(tx, submissionId, submission.siteId, {
+      table: key,
+      fileName: showableFileName(fileName, key, submission),
+      sha256,
+      content,
+    });
     await recordAudit(tx, actor, {
       act: 'submission.file',
       object: submissionId,
       site: submission.siteId,
       requestId: facts.requestId,
-      detail: { table, bytes: content.length, sha256 },
+      detail: { table: key, bytes: sent.length, sha256 },
     });
     return present(tx, submissionId);
   });
 }
 
-export const removeSubmissionFile = (
-  { database, clock }: Context,
+export const putSubmissionFile = (
+  context: Context,
   actor: Actor,
-  { submissionId, table }: InputOf<typeof RemoveFile>,
-  requestId: string,
-): Promise<Submission> =>
+  { submissionId, table, fileName }: InputOf<typeof PutFile>,
+  facts: RequestFacts,
+): Promise<Submission> => put(context, actor, { submissionId, key: table, fileName, keep: (bytes) => bytes }, facts);
+
+export const putSubmissionWorkbook = (
+  context: Context,
+  actor: Actor,
+  { submissionId, fileName }: InputOf<typeof PutWorkbook>,
+  facts: RequestFacts,
+): Promise<Submission> => {
+  const limits = { ...defaultWorkbookLimits, bytes: context.config.UPLOAD_LIMIT_BYTES };
+  const keep = (bytes: Buffer): Buffer => {
+    const plain = plainWorkbook(bytes, limits);
+    if (!plain.ok) throw new Refusal('file-unreadable', `${plain.found} Nothing was kept. ${plain.mend}`);
+    return Buffer.from(plain.bytes.buffer, plain.bytes.byteOffset, plain.bytes.byteLength);
+  };
+  return put(context, actor, { submissionId, key: 'workbook', fileName, keep }, facts);
+};
+
+const takeOut = ({ database, clock }: Context, actor: Actor, submissionId: string, key: FileKey, requestId: string): Promise<Submission> =>
   asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     await reopen(tx, submissionId);
-    await removeFile(tx, submissionId, table);
+    await removeFile(tx, submissionId, key);
     await recordAudit(tx, actor, {
       act: 'submission.file-removed',
       object: submissionId,
       site: submission.siteId,
       requestId,
-      detail: { table },
+      detail: { table: key },
     });
     return present(tx, submissionId);
   });
+
+export const removeSubmissionFile = (
+  context: Context,
+  actor: Actor,
+  { submissionId, table }: InputOf<typeof RemoveFile>,
+  requestId: string,
+): Promise<Submission> => takeOut(context, actor, submissionId, table, requestId);
+
+export const removeSubmissionWorkbook = (
+  context: Context,
+  actor: Actor,
+  { submissionId }: InputOf<typeof RemoveWorkbook>,
+  requestId: string,
+): Promise<Submission> => takeOut(context, actor, submissionId, 'workbook', requestId);

@@ -3,6 +3,8 @@ import { randomUUID } from 'node:crypto';
 import type { Submission, SubmissionReceipt } from '@cairnstep/contract';
 import type { TableKey } from '@cairnstep/dictionary';
 import type { Tx } from '../../database/as-actor.ts';
+import type { FileKey } from './file-key.ts';
+import { clearAllMends, clearMends } from './mends.repository.ts';
 
 export type Status = Submission['status'];
 
@@ -16,17 +18,20 @@ export interface SubmissionRecord {
   readonly createdAt: Date;
   readonly createdBy: string;
   readonly settledAt: Date | null;
+  readonly settledBy: string | null;
   readonly progress: (NonNullable<Submission['progress']> & { readonly startedAt: string }) | null;
   readonly findings: Submission['findings'];
   readonly preview: { readonly tables: NonNullable<Submission['preview']>['tables'] } | null;
   readonly previewDigest: string | null;
   readonly siteRevision: number | null;
   readonly receipt: SubmissionReceipt | null;
+  /** Reasons given after an earlier check, until the next one. */
+  readonly reasons: Submission['findings'] | null;
 }
 
 const columns = `m.id, m.site_id as "siteId", s.code as "siteCode", s.name as "siteName", m.month, m.status, m.created_at as "createdAt",
-  coalesce(account_name(m.created_by), 'a former colleague') as "createdBy", m.settled_at as "settledAt", m.progress, m.findings, m.preview,
-  m.preview_digest as "previewDigest", m.site_revision as "siteRevision", m.receipt`;
+  coalesce(account_name(m.created_by), 'a former colleague') as "createdBy", m.settled_at as "settledAt", m.settled_by as "settledBy", m.progress, m.findings, m.preview,
+  m.preview_digest as "previewDigest", m.site_revision as "siteRevision", m.receipt, m.reasons`;
 
 export async function readSubmission(tx: Tx, id: string): Promise<SubmissionRecord | null> {
   const [row] = (await tx.query(`select ${columns} from submissions m join sites s on s.id = m.site_id where m.id = $1`, [
@@ -62,11 +67,12 @@ export async function insertSubmission(tx: Tx, siteId: string, month: string, cr
   return id;
 }
 
-/** Back to collecting files: what an earlier check found no longer holds. */
+/** Back to collecting files: what an earlier check found no longer holds, but for the reasons given for it, which the next check may take over. */
 export async function reopen(tx: Tx, id: string): Promise<void> {
   await clearCheck(tx, id);
   await tx.query(
-    "update submissions set status = 'open', progress = null, findings = '[]', preview = null, preview_digest = null, site_revision = null where id = $1",
+    `update submissions set status = 'open', progress = null,
+       reasons = case when findings = '[]' then reasons else jsonb_path_query_array(findings, '$[*] ? (@.acknowledgedReason != null)') end, findings = '[]', preview = null, preview_digest = null, site_revision = null where id = $1`,
     [id],
   );
 }
@@ -93,7 +99,7 @@ export interface CheckOutcome {
 
 export async function finishCheck(tx: Tx, id: string, outcome: CheckOutcome): Promise<void> {
   await tx.query(
-    "update submissions set status = 'checked', progress = null, findings = $2, preview = $3, preview_digest = $4, site_revision = $5 where id = $1",
+    "update submissions set status = 'checked', progress = null, findings = $2, preview = $3, preview_digest = $4, site_revision = $5, reasons = null where id = $1",
     [id, JSON.stringify(outcome.findings), outcome.preview, outcome.previewDigest, outcome.siteRevision],
   );
 }
@@ -108,13 +114,12 @@ export async function settle(
   by: string,
   receipt: SubmissionReceipt | null,
 ): Promise<void> {
-  await tx.query('update submissions set status = $2, settled_at = now(), settled_by = $3, receipt = $4, progress = null where id = $1', [
-    id,
-    status,
-    by,
-    receipt,
-  ]);
+  await tx.query(
+    'update submissions set status = $2, settled_at = now(), settled_by = $3, receipt = $4, progress = null, reasons = null where id = $1',
+    [id, status, by, receipt],
+  );
   await tx.query('update submission_files set content = null where submission_id = $1', [id]);
+  await clearAllMends(tx, id);
 }
 
 /** The month's earlier accepted submission makes way; its receipt stays readable. */
@@ -126,17 +131,23 @@ export const supersedeEarlier = (tx: Tx, id: string, siteId: string, month: stri
   ]);
 
 export interface FileRecord {
-  readonly table: TableKey;
+  readonly key: FileKey;
+  /** What it has rows of; of a workbook known after the check. */
+  readonly tables: readonly TableKey[] | null;
   readonly fileName: string;
   readonly bytes: number;
   readonly sha256: string;
   readonly addedAt: Date;
   readonly rows: number | null;
+  readonly mended: number;
+  readonly mendsDigest: string | null;
+  readonly refused: boolean;
 }
 
 export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
   return (await tx.query(
-    'select table_key as "table", file_name as "fileName", bytes, sha256, added_at as "addedAt", rows from submission_files where submission_id = $1 order by table_key',
+    `select table_key as key, tables, file_name as "fileName", bytes, sha256, added_at as "addedAt", rows, refused, mended, mends_digest as "mendsDigest"
+       from submission_files where submission_id = $1 order by table_key`,
     [id],
   )) as FileRecord[];
 }
@@ -144,11 +155,11 @@ export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
 const contentPieceBytes = 1 << 20;
 
 /** Piece by piece: PostgreSQL sends bytes as text of twice their number, all of which would have to be held. */
-export async function* readContent(tx: Tx, id: string, table: TableKey): AsyncGenerator<Uint8Array> {
+export async function* readContent(tx: Tx, id: string, file: FileKey): AsyncGenerator<Uint8Array> {
   for (let from = 1; ; from += contentPieceBytes) {
     const [row] = (await tx.query(
       'select substring(content from $3 for $4) as piece from submission_files where submission_id = $1 and table_key = $2',
-      [id, table, from, contentPieceBytes],
+      [id, file, from, contentPieceBytes],
     )) as { piece: Buffer | null }[];
     if (!row?.piece?.length) return;
     yield row.piece;
@@ -159,21 +170,40 @@ export async function putFile(
   tx: Tx,
   id: string,
   siteId: string,
-  file: { table: TableKey; fileName: string; sha256: string; content: Buffer },
+  file: { table: FileKey; fileName: string; sha256: string; content: Buffer },
 ): Promise<void> {
+  const tables = file.table === 'workbook' ? null : [file.table];
   await tx.query(
-    `insert into submission_files (submission_id, table_key, site_id, file_name, bytes, sha256, content) values ($1, $2, $3, $4, $5, $6, $7)
+    `insert into submission_files (submission_id, table_key, site_id, file_name, bytes, sha256, content, tables) values ($1, $2, $3, $4, $5, $6, $7, $8)
      on conflict (submission_id, table_key) do update
-       set file_name = excluded.file_name, bytes = excluded.bytes, sha256 = excluded.sha256, content = excluded.content, added_at = now(), rows = null`,
-    [id, file.table, siteId, file.fileName, file.content.length, file.sha256, file.content],
+       set file_name = excluded.file_name, bytes = excluded.bytes, sha256 = excluded.sha256, content = excluded.content, tables = excluded.tables,
+           added_at = now(), rows = null, refused = false`,
+    [id, file.table, siteId, file.fileName, file.content.length, file.sha256, file.content, tables],
   );
+  await clearMends(tx, id, file.table);
 }
 
-export const removeFile = (tx: Tx, id: string, table: TableKey): Promise<unknown> =>
-  tx.query('delete from submission_files where submission_id = $1 and table_key = $2', [id, table]);
+export async function removeFile(tx: Tx, id: string, file: FileKey): Promise<void> {
+  await clearMends(tx, id, file);
+  await tx.query('delete from submission_files where submission_id = $1 and table_key = $2', [id, file]);
+}
 
-export const setFileRows = (tx: Tx, id: string, table: TableKey, rows: number): Promise<unknown> =>
-  tx.query('update submission_files set rows = $3 where submission_id = $1 and table_key = $2', [id, table, rows]);
+export const setFileRows = (tx: Tx, id: string, file: FileKey, tables: ReadonlyMap<TableKey, number>): Promise<unknown> =>
+  tx.query('update submission_files set rows = $3, tables = $4 where submission_id = $1 and table_key = $2', [
+    id,
+    file,
+    [...tables.values()].reduce((sum, rows) => sum + rows, 0),
+    [...tables.keys()],
+  ]);
+
+/** Nothing of such a file stays but that it was there. */
+export async function refuseFile(tx: Tx, id: string, file: FileKey): Promise<void> {
+  await clearMends(tx, id, file);
+  await tx.query('update submission_files set content = null, rows = null, refused = true where submission_id = $1 and table_key = $2', [
+    id,
+    file,
+  ]);
+}
 
 export interface SubmissionLine {
   readonly id: string;
@@ -207,7 +237,7 @@ export interface FindingRecord {
   readonly id: number;
   readonly rule: string;
   readonly severity: 'error' | 'warning';
-  readonly table: TableKey;
+  readonly table: TableKey | null;
   readonly line: number | null;
   readonly column: string | null;
   readonly found: string;

@@ -47,7 +47,7 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
             onFiles={outgoing.add}
           />
         )}
-        <OutgoingList outgoing={outgoing} held={submission.files.map(({ table }) => table)} />
+        <OutgoingList outgoing={outgoing} held={submission.files.flatMap(({ table }) => (table === null ? [] : [table]))} />
         <SentFiles submission={submission} isOpen={isOpen && !outgoing.isSending} onChoose={outgoing.add} />
       </div>
     </Section>

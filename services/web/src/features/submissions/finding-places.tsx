@@ -101,7 +101,8 @@ const all = 'all';
 function Filters({ submission, filter }: { readonly submission: Submission; readonly filter: FindingFilter }) {
   const change = useAddressChange();
   const narrow = (name: string) => (value: string) => change({ [name]: value === all ? null : value, page: null });
-  const files = submission.files.map(({ table }) => ({ value: table, label: tableName(table) }));
+  const inFiles = new Set(submission.files.flatMap(({ table, tables: held }) => held ?? (table === null ? [] : [table])));
+  const files = tables.filter(({ key }) => inFiles.has(key)).map(({ key, name }) => ({ value: key, label: name }));
   const rules = submission.findings.map(({ rule, statement }) => ({ value: rule, label: `${rule}: ${statement}` }));
   const severities = [
     { value: 'error', label: 'Errors' },

@@ -78,8 +78,8 @@ function Receipt({ receipt }: { readonly receipt: SubmissionReceipt }) {
           id="files"
           caption={`${formatCount(receipt.files.length, 'file')} as sent`}
           columns={fileColumns}
-          rows={tables.flatMap(({ key }) => receipt.files.filter(({ table }) => table === key))}
-          rowKey={({ table }) => table}
+          rows={[...tables.map(({ key }) => key), null].flatMap((key) => receipt.files.filter(({ table }) => table === key))}
+          rowKey={({ table }) => table ?? 'workbook'}
           empty="No file came with this submission."
           fileName={`${name}-files`}
         />
@@ -102,6 +102,7 @@ const fileColumns: readonly Column<SubmissionReceipt['files'][number]>[] = [
   { key: 'table', header: 'Table', value: ({ table }) => tableName(table), isRowHeader: true },
   { key: 'name', header: 'File', value: ({ fileName }) => fileName },
   { key: 'rows', header: 'Rows', value: ({ rows }) => rows, kind: 'number' },
+  { key: 'mended', header: 'Cells mended on screen', value: ({ mended }) => mended ?? 0, kind: 'number' },
   {
     key: 'sha256',
     header: 'SHA-256',

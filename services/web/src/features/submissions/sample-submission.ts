@@ -1,5 +1,6 @@
 /** A submission as tests meet it: one clinic, November 2026. Never part of the built client. */
 import type { Submission, SubmissionReceipt } from '@cairnstep/contract';
+import type { TableKey } from '@cairnstep/dictionary';
 import { signedInAs, site } from '../../testing/fake-api.ts';
 
 export const submissionId = '2b1b7c2e-8a57-4a0b-9d0a-5d1f0a9b7c33';
@@ -21,13 +22,16 @@ export const sample = (more: Partial<Submission> = {}): Submission => ({
   ...more,
 });
 
-export const fileOf = (table: Submission['files'][number]['table'], rows: number | null = null): Submission['files'][number] => ({
+export const fileOf = (table: TableKey, rows: number | null = null): Submission['files'][number] => ({
   table,
+  tables: [table],
   fileName: `${table}.csv`,
   bytes: 2_400,
   sha256: 'ab'.repeat(32),
   addedAt: '2026-12-01T08:05:00.000Z',
   rows,
+  mended: 0,
+  refused: false,
 });
 
 export const error: Submission['findings'][number] = {

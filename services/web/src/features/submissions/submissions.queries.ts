@@ -16,11 +16,12 @@ import {
   removeSubmissionFile,
 } from '@cairnstep/contract';
 import type { CallOf, Submission } from '@cairnstep/contract';
+import type { TableKey } from '@cairnstep/dictionary';
 import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { QueryClient } from '@tanstack/react-query';
 import { call } from '../../lib/call.ts';
 
-export type TableKey = Submission['files'][number]['table'];
+export type { TableKey };
 
 const everything = ['submissions'];
 const keyOf = (submissionId: string) => [...everything, 'one', submissionId];

@@ -5,7 +5,8 @@ import type { TableKey } from './submissions.queries.ts';
 /** In the order in which the tables refer to each other. */
 export const tables = tableKeys.map((key) => ({ key, name: tableOf(key).name }));
 
-export const tableName = (key: TableKey): string => tableOf(key).name;
+/** "Workbook" for what is about all its tables together. */
+export const tableName = (key: TableKey | null): string => (key === null ? 'Workbook' : tableOf(key).name);
 
 /** "Distance, m"; the key itself for a column no table has. */
 export function columnName(table: TableKey, key: string): string {
@@ -14,4 +15,5 @@ export function columnName(table: TableKey, key: string): string {
   return variable.unit === undefined || variable.unit === '1' ? variable.name : `${variable.name}, ${variable.unit}`;
 }
 
-export const isColumn = (table: TableKey, key: string): boolean => tableOf(table).variables.some((known) => known.key === key);
+export const isColumn = (table: TableKey | null, key: string): boolean =>
+  table !== null && tableOf(table).variables.some((known) => known.key === key);

@@ -1,0 +1,130 @@
+/** The files of a submission to typed tables: screened while they are read, with mended cells in their place. */
+import { type TableKey } from '@cairnstep/dictionary';
+import { FindingLog, readTable, readWorkbook, type TypedTable } from '@cairnstep/submission-files';
+import { registry } from '../../authority/actor.ts';
+import type { Context } from '../../context.ts';
+import { asActor } from '../../database/as-actor.ts';
+import { tableOfFile, type FileKey } from './file-key.ts';
+import { readMends, type MendsByTable } from './mends.repository.ts';
+import { readSafeHeaders } from './safe-headers.repository.ts';
+import { TableScreen } from './screen-table.ts';
+import { readContent, type FileRecord, type SubmissionRecord } from './submissions.repository.ts';
+
+type Tables = Partial<Record<TableKey, TypedTable>>;
+
+export interface FilesRead {
+  readonly tables: Readonly<Tables>;
+  /** What each file that was read has rows of. */
+  readonly rows: ReadonlyMap<FileKey, ReadonlyMap<TableKey, number>>;
+  /** Files that must not be kept: they identify somebody, or were not read to their end, so that nobody knows whether they do. */
+  readonly refused: readonly FileKey[];
+}
+
+/** After these nobody has looked at all of the cells of a workbook. */
+const unscreened = ['F03', 'F05', 'F40', 'F41', 'F42', 'F43', 'F48'];
+const unscreenedIn = (log: FindingLog): number => log.incomplete.size + unscreened.reduce((sum, rule) => sum + log.count(rule), 0);
+
+class SubmissionReader {
+  readonly tables: Tables = {};
+  readonly rows = new Map<FileKey, ReadonlyMap<TableKey, number>>();
+  readonly refused: FileKey[] = [];
+
+  constructor(
+    private readonly context: Context,
+    private readonly submissionId: string,
+    private readonly log: FindingLog,
+    private readonly safeHeaders: ReadonlySet<string>,
+    private readonly mends: MendsByTable,
+  ) {}
+
+  async read(key: FileKey): Promise<void> {
+    const before = unscreenedIn(this.log);
+    const screens: TableScreen[] = [];
+    const found = await asActor(this.context.database, registry, (tx) => {
+      const content = readContent(tx, this.submissionId, key);
+      return key === 'workbook' ? this.readSheets(content, screens) : this.readFile(key, content, screens);
+    });
+    const identifies = screens.map((screen) => screen.report(this.log)).includes(true);
+    if (identifies || unscreenedIn(this.log) > before) this.refused.push(key);
+    this.rows.set(key, new Map(Object.values(found).map((table) => [table.key, table.length])));
+    for (const table of Object.values(found)) this.reportLostMends(table);
+    Object.assign(this.tables, found);
+  }
+
+  private async readFile(key: TableKey, content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<Tables> {
+    return { [key]: await readTable(key, content, this.log, undefined, this.optionsOf(key, screens)) };
+  }
+
+  /** A sheet without a row says nothing about its table: the template is sent as it is where a month has nothing for it. */
+  private async readSheets(content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<Tables> {
+    const read = await readWorkbook(content, this.log, undefined, (table) => this.optionsOf(table, screens));
+    const filled = Object.values(read).filter(({ length }) => length > 0);
+    for (const { key } of filled.filter((table) => this.tables[table.key]))
+      this.log.add({
+        rule: 'F53',
+        table: key,
+        line: null,
+        column: null,
+        found: 'The workbook has rows of a table that came with a file of its own.',
+      });
+    if (Object.values(read).length > 0 && filled.length === 0)
+      this.log.add({
+        rule: 'F05',
+        table: null,
+        line: null,
+        column: null,
+        found: 'No sheet of the workbook has a row below its header and its example.',
+        mend: 'Fill in at least one table. A month in which there was nothing is closed as such.',
+      });
+    return Object.fromEntries(filled.filter((table) => !this.tables[table.key]).map((table) => [table.key, table]));
+  }
+
+  private optionsOf(table: TableKey, screens: TableScreen[]) {
+    const screen = new TableScreen(table, this.safeHeaders);
+    screens.push(screen);
+    const mends = this.tables[table] ? undefined : this.mends[table];
+    return { watch: screen, ...(mends ? { mends } : {}) };
+  }
+
+  private reportLostMends({ key, lines }: TypedTable): void {
+    const mends = this.mends[key];
+    if (!mends) return;
+    const present = new Set(lines);
+    for (const [line, cells] of mends) {
+      if (present.has(line)) continue;
+      for (const column of cells.keys())
+        this.log.add({ rule: 'F54', table: key, line, column, found: 'A value was typed for this line, and the file has no row there.' });
+    }
+  }
+}
+
+/** @param onFile Hears how many files have been read. */
+export async function readSubmissionFiles(
+  context: Context,
+  submission: SubmissionRecord,
+  files: readonly FileRecord[],
+  log: FindingLog,
+  onFile: (done: number) => Promise<unknown>,
+): Promise<FilesRead> {
+  const [safeHeaders, mends] = await asActor(context.database, registry, async (tx) => [
+    new Set((await readSafeHeaders(tx, submission.siteId)).map(({ header }) => header)),
+    await readMends(tx, submission.id),
+  ]);
+  const reader = new SubmissionReader(context, submission.id, log, safeHeaders, mends);
+  // The workbook last: what it has of a table with a file of its own does not count.
+  const kept = files.filter(({ refused }) => !refused).sort((a, b) => Number(a.key === 'workbook') - Number(b.key === 'workbook'));
+  for (const [index, { key }] of kept.entries()) {
+    await onFile(index);
+    await reader.read(key);
+  }
+  for (const { key } of files.filter(({ refused }) => refused))
+    log.addStopping({
+      rule: 'F52',
+      table: tableOfFile(key),
+      line: null,
+      column: null,
+      found: 'The file was deleted when it was checked before.',
+    });
+  const { tables, rows, refused } = reader;
+  return { tables, rows, refused };
+}
