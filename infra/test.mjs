@@ -3,4 +3,4 @@ import { run } from './bootstrap/run.mjs';
 
 const kinds = process.argv.slice(2);
 const hasBrowser = kinds.length === 0 || kinds.includes('journeys');
-await run({ entry: 'infra/test/main.ts', programs: hasBrowser ? ['postgresql', 'chromium'] : ['postgresql'] });
+await run({ entry: 'infra/test/main.ts', programs: hasBrowser ? ['postgresql', 'curl', 'chromium'] : ['postgresql', 'curl'] });

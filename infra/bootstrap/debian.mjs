@@ -17,6 +17,7 @@ const noMainCluster = { file: '/etc/postgresql-common/createcluster.d/cairnstep.
 
 export const programs = {
   postgresql: { title: 'PostgreSQL', isThere: () => hasServer() || onPath('initdb'), before: noMainCluster },
+  curl: { title: 'curl', isThere: () => onPath('curl') },
   chromium: { title: 'Chromium', isThere: () => existsSync('/usr/bin/chromium') },
 };
 

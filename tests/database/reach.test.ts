@@ -26,6 +26,7 @@ const therapistA = person('therapist', siteA);
 const researcher = person('researcher', null, researcherId);
 const steward = person('steward');
 const administrator = person('administrator');
+const systemA: Actor = { kind: 'site-system', systemId: randomUUID(), label: 'A system', siteId: siteA };
 
 const siteTables = [
   'submissions',
@@ -145,22 +146,24 @@ describe.each(siteTables)('rows of a site in %s', (table) => {
     expect(await count(coordinatorA, table)).toBe(1);
     expect(await count(coordinatorA, table, `site_id = '${siteB}'`)).toBe(0);
     expect(await count(therapistA, table)).toBe(1);
+    expect(await count(systemA, table)).toBe(1);
+    expect(await count(systemA, table, `site_id = '${siteB}'`)).toBe(0);
     expect(await count(registry, table)).toBe(2);
     expect(await count(steward, table)).toBe(table.startsWith('staged_') ? 0 : 2);
     for (const stranger of [researcher, administrator, statistics, { kind: 'nobody' } as Actor])
       expect(await count(stranger, table)).toBe(0);
   });
 
-  it('are written by its coordinator alone', async () => {
+  it('are written by its coordinator and its system alone', async () => {
     const copy = (actor: Actor, siteId: string) =>
       asActor(database.app, actor, async (tx) => {
         // The row goes in again under another submission or participant, and out again with the transaction.
         await tx.query(`insert into ${table} select (jsonb_populate_record(null::${table}, $1::jsonb)).*`, [await otherRow(table, siteId)]);
         throw new Error('taken back');
       });
-    await expect(copy(coordinatorA, siteA)).rejects.toThrow('taken back');
+    for (const actor of [coordinatorA, systemA]) await expect(copy(actor, siteA)).rejects.toThrow('taken back');
     for (const actor of [therapistA, steward, researcher, administrator]) await expect(copy(actor, siteA)).rejects.toMatchObject(refused);
-    await expect(copy(coordinatorA, siteB)).rejects.toMatchObject(refused);
+    for (const actor of [coordinatorA, systemA]) await expect(copy(actor, siteB)).rejects.toMatchObject(refused);
   });
 });
 
@@ -171,6 +174,7 @@ async function otherRow(table: string, siteId: string): Promise<string> {
   if (table.startsWith('sub')) row[table === 'submissions' ? 'id' : 'submission_id'] = randomUUID();
   if (table === 'row_history') row['id'] = 900_000;
   if (table === 'month_closures') row['month'] = '2025-03';
+  if (table.startsWith('staged_')) row['line'] = 3;
   return JSON.stringify(row);
 }
 
@@ -192,6 +196,35 @@ describe('rows of people and of the registry', () => {
       expect(await count(registry, table)).toBe(1);
       for (const actor of [researcher, steward, coordinatorA, administrator, statistics]) expect(await count(actor, table)).toBe(0);
     }
+  });
+
+  it("of sites' systems are reached by administrators, stewards and the registry, and not by a system itself", async () => {
+    await database.owner.query(`insert into site_systems (id, site_id, issuer, subject, label) values ($1, $2, 'i', 's', 'A system')`, [
+      randomUUID(),
+      siteA,
+    ]);
+    for (const actor of [registry, steward, administrator]) expect(await count(actor, 'site_systems')).toBe(1);
+    for (const actor of [systemA, coordinatorA, therapistA, researcher, statistics]) expect(await count(actor, 'site_systems')).toBe(0);
+    const change = (actor: Actor) =>
+      asActor(database.app, actor, async (tx) => ((await tx.query("update site_systems set status = 'disabled'")) as [unknown, number])[1]);
+    for (const actor of [steward, systemA, coordinatorA]) expect(await change(actor)).toBe(0);
+    expect(await change(administrator)).toBe(1);
+  });
+
+  it("of people and of requests are out of a system's reach", async () => {
+    await database.owner.query("insert into accounts (id, issuer, subject, name) values ($1, 'i', 's', 'A person')", [randomUUID()]);
+    for (const table of [
+      'accounts',
+      'grants',
+      'invitations',
+      'access_requests',
+      'release_courses',
+      'export_pseudonyms',
+      'mail_messages',
+      'audit_entries',
+    ])
+      expect(await count(systemA, table), table).toBe(0);
+    expect(await count(systemA, 'sites')).toBe(1);
   });
 
   it('of sessions in the browser are out of reach of every request', async () => {
