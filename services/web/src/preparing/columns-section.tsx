@@ -1,0 +1,139 @@
+/** What becomes of each column of the clinic's files. Folded where everything is as last month and nothing needs mending. */
+import { useMemo, useState } from 'react';
+import { tableName } from '../features/submissions/table-names.ts';
+import { formatCount } from '../lib/format.ts';
+import { Button } from '../ui/button.tsx';
+import { Section } from '../ui/page.tsx';
+import { ColumnEditor } from './column-editor.tsx';
+import { FirstDays } from './first-days.tsx';
+import { describeMatch } from './meanings.ts';
+import { ProblemList } from './problem-list.tsx';
+import type { Month } from './use-month.ts';
+import type { ColumnPicture, PreparedPicture, TableColumns } from './worker/protocol.ts';
+
+/** The column whose editor is open, if any: `3:17` is column 17 of source 3. */
+type OpenEditor = string | null;
+
+export function ColumnsSection({ month, prepared }: { readonly month: Month; readonly prepared: PreparedPicture }) {
+  const [open, setOpen] = useState<OpenEditor>(null);
+  const { columns, problems, firstDays } = prepared;
+  return (
+    <Section
+      title="Columns"
+      id="columns"
+      note={
+        <>
+          <p>Headers and example cells are shown here only. What you choose is remembered in the key file for next month.</p>
+          <p>A column that stays behind is not sent, and neither is its header.</p>
+        </>
+      }
+    >
+      <div className="grid gap-6">
+        <ProblemList
+          problems={problems}
+          onChange={(table, columnNumber) => {
+            const source = columns.find((each) => each.table === table)?.source;
+            if (source !== undefined) setOpen(`${source}:${columnNumber}`);
+          }}
+        />
+        {firstDays.length > 0 && <FirstDays month={month} places={firstDays} />}
+        {columns.map((each) => (
+          <TableOfColumns
+            key={each.source}
+            columns={each}
+            month={month}
+            open={open}
+            setOpen={setOpen}
+            needsALook={problems.some(({ table, columnNumber }) => table === each.table && columnNumber !== null)}
+          />
+        ))}
+      </div>
+    </Section>
+  );
+}
+
+interface TableOfColumnsProps {
+  readonly columns: TableColumns;
+  readonly month: Month;
+  readonly open: OpenEditor;
+  readonly setOpen: (open: OpenEditor) => void;
+  readonly needsALook: boolean;
+}
+
+function TableOfColumns({ columns: { source, table, columns }, month, open, setOpen, needsALook }: TableOfColumnsProps) {
+  const sent = columns.filter(({ match }) => match.as !== 'left-out').length;
+  const isNew = columns.some((column) => column.isNew && column.isMatchable);
+  const [isFolded, setFolded] = useState(!isNew && !needsALook);
+  const isOpen = !isFolded || open?.startsWith(`${source}:`) === true;
+  const list = useMemo(
+    () =>
+      columns.map((column) => (
+        <ColumnItem
+          key={column.number}
+          column={column}
+          source={source}
+          table={table}
+          month={month}
+          isEdited={open === `${source}:${column.number}`}
+          setOpen={setOpen}
+        />
+      )),
+    [columns, source, table, month, open, setOpen],
+  );
+  return (
+    <div className="grid gap-2">
+      <div className="flex flex-wrap items-baseline justify-between gap-x-6">
+        <h3 className="font-semibold">{tableName(table)}</h3>
+        <Button variant="quiet" aria-expanded={isOpen} onPress={() => setFolded(isOpen)}>
+          {isOpen ? `Fold the columns of ${tableName(table)}` : `Show the columns of ${tableName(table)}`}
+        </Button>
+      </div>
+      <p className="text-quiet">
+        {formatCount(sent, 'column')} used, {columns.length - sent} {columns.length - sent === 1 ? 'stays' : 'stay'} behind
+        {isNew ? '; some are new since last month' : ', as last month'}.
+      </p>
+      {isOpen && <ul className="border-t border-hairline">{list}</ul>}
+    </div>
+  );
+}
+
+interface ColumnItemProps {
+  readonly column: ColumnPicture;
+  readonly source: number;
+  readonly table: TableColumns['table'];
+  readonly month: Month;
+  readonly isEdited: boolean;
+  readonly setOpen: (open: OpenEditor) => void;
+}
+
+function ColumnItem({ column, source, table, month, isEdited, setOpen }: ColumnItemProps) {
+  const { number, header, examples, match, isMatchable, unknownWords } = column;
+  const name = header.trim() === '' ? `Column ${number}` : header;
+  return (
+    <li className="grid gap-3 border-b border-hairline py-2">
+      <div className="grid items-baseline gap-x-6 gap-y-1 columns:grid-cols-[minmax(0,5fr)_minmax(0,6fr)_auto]">
+        <div className="min-w-0">
+          <p className="font-semibold wrap-anywhere">{name}</p>
+          <p className="text-small text-quiet wrap-anywhere">{examples.length === 0 ? 'empty' : examples.join(' · ')}</p>
+        </div>
+        <p className={match.as === 'left-out' ? 'text-quiet' : ''}>
+          {isMatchable ? describeMatch(table, match) : 'Stays behind: a column needs a header of its own to be used'}
+          {unknownWords.length > 0 && (
+            <span className="block text-small text-amber">{formatCount(unknownWords.length, 'word')} not known</span>
+          )}
+        </p>
+        {isMatchable && (
+          <Button
+            variant="quiet"
+            aria-label={`Change what becomes of ${name}`}
+            aria-expanded={isEdited}
+            onPress={() => setOpen(isEdited ? null : `${source}:${number}`)}
+          >
+            {isEdited ? 'Close' : 'Change'}
+          </Button>
+        )}
+      </div>
+      {isEdited && <ColumnEditor column={column} table={table} onMatch={(chosen) => void month.matchColumn(source, chosen)} />}
+    </li>
+  );
+}
