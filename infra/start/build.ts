@@ -38,7 +38,7 @@ function compiledProjects(): string[] {
 
 const isBuilt: Readonly<Record<Part, () => boolean>> = {
   servers: () => compiledProjects().every((project) => existsSync(join(project, 'dist'))),
-  client: () => existsSync(join(projectRoot, 'services/web/dist/index.html')),
+  client: () => ['index.html', 'prepare.html'].every((page) => existsSync(join(projectRoot, 'services/web/dist', page))),
 };
 
 export interface BuildOptions {

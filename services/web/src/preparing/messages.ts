@@ -42,6 +42,7 @@ export interface Task {
 export interface Sending {
   readonly kind: 'sending';
   readonly state: 'under-way' | 'done' | 'failed';
+  /** Tables; the one under way counts by the part of it that has left. */
   readonly done: number;
   readonly of: number;
   /** What went wrong and what to do, when it failed. */

@@ -123,7 +123,7 @@ export function SendSection({ month, prepared, site, calendarMonth, surroundings
           <Progress
             label="Sending"
             part={sending.of === 0 ? null : sending.done / sending.of}
-            words={`${sending.done} of ${formatCount(sending.of, 'table')} sent`}
+            words={`${Math.floor(sending.done)} of ${formatCount(sending.of, 'table')} sent`}
           />
         )}
         {sending?.state === 'failed' && (

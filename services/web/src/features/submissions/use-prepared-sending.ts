@@ -21,34 +21,24 @@ export function usePreparedSending(submission: Submission): PreparedSending {
   useStayOnPage(isUnderWay);
 
   async function send(tables: readonly PreparedTable[]): Promise<void> {
-    const of = tables.reduce((sum, { csv }) => sum + csv.byteLength, 0);
-    let done = 0;
-    const tell = (state: Sending['state'], message: string | null = null) => setSending({ kind: 'sending', state, done, of, message });
+    const tell = (state: Sending['state'], done: number, message: string | null = null) =>
+      setSending({ kind: 'sending', state, done, of: tables.length, message });
     const fault = tables.map(faultOf).find((found) => found !== null);
     if (fault !== undefined)
-      return tell('failed', `${fault} Nothing was sent. Prepare the files again; if it stays so, tell the registry’s office.`);
-    tell('under-way');
+      return tell('failed', 0, `${fault} Nothing was sent. Prepare the files again; if it stays so, tell the registry’s office.`);
+    tell('under-way', 0);
     let arrived = 0;
     try {
       for (const { table, csv } of tables) {
-        const before = done;
-        await mutateAsync({
-          table,
-          file: new File([csv], `${table}.csv`, { type: 'text/csv' }),
-          signal: neverStopped,
-          onSent: (part) => {
-            done = before + Math.floor(csv.byteLength * part);
-            tell('under-way');
-          },
-        });
-        done = before + csv.byteLength;
+        const file = new File([csv], `${table}.csv`, { type: 'text/csv' });
+        const before = arrived;
+        await mutateAsync({ table, file, signal: neverStopped, onSent: (part) => tell('under-way', before + part) });
         arrived += 1;
       }
-      tell('done');
+      tell('done', arrived);
       announce('Everything prepared has arrived.');
     } catch (error) {
-      done = 0;
-      tell('failed', `${wordsOf(error)} ${arrived} of ${tables.length} tables arrived; sending again replaces them.`);
+      tell('failed', 0, `${wordsOf(error)} ${arrived} of ${tables.length} tables arrived; sending again replaces them.`);
     }
   }
 
