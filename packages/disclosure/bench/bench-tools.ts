@@ -7,13 +7,25 @@ export function seededRandom(seed: number): () => number {
   };
 }
 
-/** Median and longest of several runs, after one to warm up. */
-export function timed(work: () => unknown, runs = 7): string {
+/** Milliseconds of several runs, ascending, after one to warm up. */
+function timesOf(work: () => unknown, runs: number): number[] {
   work();
-  const times = Array.from({ length: runs }, () => {
+  return Array.from({ length: runs }, () => {
     const start = performance.now();
     work();
     return performance.now() - start;
   }).sort((a, b) => a - b);
+}
+
+export const medianTime = (work: () => unknown, runs = 7): number => timesOf(work, runs)[runs >> 1] ?? 0;
+
+/** Median and longest of several runs. */
+export function timed(work: () => unknown, runs = 7): string {
+  const times = timesOf(work, runs);
   return `median ${(times[runs >> 1] ?? 0).toFixed(1)} ms, longest ${(times[runs - 1] ?? 0).toFixed(1)} ms`;
 }
+
+/** Counts with a long tail, as injury levels by grade have. */
+export const countsWithALongTail = (random: () => number, rows: number, columns: number, mean: number) => ({
+  counts: Array.from({ length: rows }, () => Array.from({ length: columns }, () => Math.floor(-mean * Math.log(1 - random() * 0.9999)))),
+});

@@ -3,13 +3,10 @@
  * Run: npx tsx --conditions @cairnstep/source packages/disclosure/bench/tables.bench.ts
  */
 import { intervalAudit, linkedIntervalAudit, linkSlices, loadLinearSolver, protectTable } from '../src/index.ts';
-import { seededRandom, timed } from './bench-tools.ts';
+import { countsWithALongTail, seededRandom, timed } from './bench-tools.ts';
 
 const random = seededRandom(2);
-/** Counts with a long tail, as injury levels by grade have. */
-const table = (rows: number, columns: number, mean: number) => ({
-  counts: Array.from({ length: rows }, () => Array.from({ length: columns }, () => Math.floor(-mean * Math.log(1 - random() * 0.9999)))),
-});
+const table = (rows: number, columns: number, mean: number) => countsWithALongTail(random, rows, columns, mean);
 
 for (const mean of [4, 12, 40]) {
   const counted = table(30, 6, mean);
