@@ -29,7 +29,10 @@ interface Peer {
 
 const asPeer = (inR: InR, what: string): Peer => ({ peer: inR.milliseconds, peerName: `${inR.version}, ${what}` });
 
-const scenario = (name: string, measure: () => { readonly run: () => unknown; readonly peer: Peer } & Partial<Measured>): Scenario => ({
+const scenario = (
+  name: string,
+  measure: () => { readonly run: () => unknown; readonly peer: Peer } & Pick<Measured, 'goal' | 'note'>,
+): Scenario => ({
   name,
   run: async () => {
     const { run, peer, ...rest } = measure();
