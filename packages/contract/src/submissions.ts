@@ -236,7 +236,7 @@ export const acknowledgeFindings = endpoint({
   params: SubmissionParams,
   body: z.strictObject({ rule: z.string().max(40), reason: z.string().trim().min(5, 'Say in a few words why these stand').max(500) }),
   response: Submission,
-  problems: ['not-found', 'submission-closed', 'submission-busy'],
+  problems: ['not-found', 'submission-closed', 'submission-busy', 'identifies-somebody'],
 });
 
 export const ChangeKind = z.enum(['added', 'changed', 'unchanged', 'removed']);

@@ -5,6 +5,7 @@ import { tableOf, type TableKey } from '@cairnstep/dictionary';
 import { isFormulaLike, writeFindingsWorkbook, type Finding, type RuleFindings, type SubmittedFile } from '@cairnstep/submission-files';
 import { stringify } from 'csv-stringify/sync';
 import type { Actor } from '../../authority/actor.ts';
+import { mayAtSite } from '../../authority/require-may.ts';
 import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import type { FileAnswer } from '../../http/route.ts';
@@ -59,12 +60,15 @@ async function groupsOf(tx: Tx, { id, findings }: SubmissionRecord): Promise<Rul
   }));
 }
 
-/** The files that are still there, as they would be checked; those of a settled submission are gone. */
-async function filesOf(tx: Tx, submission: SubmissionRecord): Promise<SubmittedFile[]> {
-  const isSettled = submission.settledAt !== null;
+/**
+ * The files as they were checked, for those who sent them. Rows that are in no registry yet are nobody else's to see, and a file that has not
+ * been screened is not given out again.
+ */
+async function filesFor(tx: Tx, actor: Actor, submission: SubmissionRecord): Promise<SubmittedFile[]> {
+  if (submission.status !== 'checked' || !mayAtSite(actor, 'submit', submission.siteId)) return [];
   const mends = await readMends(tx, submission.id);
   return (await readFiles(tx, submission.id))
-    .filter(({ refused }) => !refused && !isSettled)
+    .filter(({ refused }) => !refused)
     .map(({ key }): SubmittedFile => {
       const content = readContent(tx, submission.id, key);
       if (key !== 'workbook') return { table: key, csv: content, ...mendsIn(mends[key]) };
@@ -81,6 +85,6 @@ export const downloadFindingsWorkbook = (
 ): Promise<FileAnswer> =>
   asActor(database, actor, async (tx) => {
     const submission = await visibleSubmission(tx, actor, submissionId);
-    const workbook = writeFindingsWorkbook(await filesOf(tx, submission), await groupsOf(tx, submission));
+    const workbook = writeFindingsWorkbook(await filesFor(tx, actor, submission), await groupsOf(tx, submission));
     return { fileName: fileName(submission, 'xlsx'), bytes: await allOf(workbook) };
   });
