@@ -1,6 +1,7 @@
 /** Read and prepare: the month's files, chosen, each given its table, and sent. */
 import type { Submission } from '@cairnstep/contract';
 import { formatMonth } from '../../lib/format.ts';
+import { LinkButton } from '../../ui/button.tsx';
 import { FileDrop } from '../../ui/file-drop.tsx';
 import { Notice } from '../../ui/notice.tsx';
 import { Section } from '../../ui/page.tsx';
@@ -38,9 +39,20 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
           </p>
         </Notice>
         {isOpen && (
+          <div className="grid justify-items-start gap-2">
+            <h3 className="font-semibold">The files are as the clinic has them</h3>
+            <p className="max-w-2xl">
+              With names, record numbers and dates: these are taken out in your browser. You see what is left before it is sent.
+            </p>
+            <LinkButton variant={submission.files.length === 0 ? 'primary' : 'secondary'} to={`/submit/${submission.id}/prepare`}>
+              Prepare the clinic’s files
+            </LinkButton>
+          </div>
+        )}
+        {isOpen && (
           <FileDrop
-            label={`CSV files of ${formatMonth(submission.month)}`}
-            hint="All tables of the month at once, or one by one."
+            label={`The files are already prepared: CSV files of ${formatMonth(submission.month)}`}
+            hint="Drop them here, all tables of the month at once or one by one."
             accept={['.csv']}
             multiple
             isDisabled={outgoing.isSending}

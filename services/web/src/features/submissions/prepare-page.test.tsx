@@ -3,13 +3,18 @@ import type { Submission } from '@cairnstep/contract';
 import { act, fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { FromPreparing, ToPreparing } from '../../preparing/messages.ts';
-import { fakeApi, refusal } from '../../testing/fake-api.ts';
+import { fakeApi, refusal, site } from '../../testing/fake-api.ts';
 import { fakeUpload } from '../../testing/fake-upload.ts';
 import { renderRoutes } from '../../testing/render.tsx';
 import PreparePage from './prepare-page.tsx';
 import { checked, coordinator, fileOf, sample, submissionId, therapist } from './sample-submission.ts';
 
 const path = `/api/submissions/${submissionId}`;
+const known = 'S000000000000000000012';
+const knowledge = {
+  [`GET /api/sites/${site.id}/participant-codes`]: { codes: [known] },
+  [`GET /api/sites/${site.id}/safe-headers`]: { headers: [{ header: 'ward', markedAt: '2026-11-03T09:00:00.000Z', markedBy: 'Steward' }] },
+};
 const routes = [
   { path: '/submit/:submissionId', element: <h1>The submission</h1> },
   { path: '/submit/:submissionId/prepare', element: <PreparePage /> },
@@ -26,7 +31,7 @@ beforeEach(() => {
 afterEach(() => vi.restoreAllMocks());
 
 function open(answers: Readonly<Record<string, unknown>> = {}, submission: Submission = sample()) {
-  const asked = fakeApi({ 'GET /api/account': coordinator, [`GET ${path}`]: submission, ...answers });
+  const asked = fakeApi({ 'GET /api/account': coordinator, [`GET ${path}`]: submission, ...knowledge, ...answers });
   fakeUpload();
   return { asked, router: renderRoutes(routes, `/submit/${submissionId}/prepare`) };
 }
@@ -61,6 +66,7 @@ describe('the page that prepares a month', () => {
     expect(shown.style.height).toBe('1234px');
     expect(shown.getAttribute('src')).toBe('/prepare.html');
     expect(told[0]).toMatchObject({ kind: 'task', view: 'prepare', month: '2026-11', site: { code: 'S01' }, theme: 'system' });
+    expect(told[0]).toMatchObject({ knownParticipants: [known], safeHeaders: ['ward'] });
   });
 
   it('hears nobody but the preparing page', async () => {

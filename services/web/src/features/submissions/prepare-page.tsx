@@ -15,8 +15,10 @@ import { TextLink } from '../../ui/text-link.tsx';
 import { maySubmit } from './chosen-site.tsx';
 import { PreparingFrame } from './preparing-frame.tsx';
 import type { PreparingAct } from './preparing-frame.tsx';
+import type { SiteKnowledge } from './preparing.queries.ts';
 import { submissionQuery, useCheck } from './submissions.queries.ts';
 import { usePreparedSending } from './use-prepared-sending.ts';
+import { WithKnowledge } from './with-knowledge.tsx';
 
 export default function PreparePage() {
   const { submissionId = '' } = useParams();
@@ -65,7 +67,7 @@ function Prepare({ submission }: { readonly submission: Submission }) {
           <NoPermission detail={`Only a coordinator of ${site.name} can prepare its files.`} />
         </Section>
       ) : isOpen ? (
-        <PrepareOpen submission={submission} />
+        <WithKnowledge siteId={site.id}>{(knowledge) => <PrepareOpen submission={submission} knowledge={knowledge} />}</WithKnowledge>
       ) : (
         <Section>
           <Notice title={status === 'checking' ? 'The files of this month are being checked.' : 'This submission is settled.'}>
@@ -86,7 +88,7 @@ function Prepare({ submission }: { readonly submission: Submission }) {
   );
 }
 
-function PrepareOpen({ submission }: { readonly submission: Submission }) {
+function PrepareOpen({ submission, knowledge }: { readonly submission: Submission; readonly knowledge: SiteKnowledge }) {
   const { id, site, month } = submission;
   const navigate = useNavigate();
   const check = useCheck(id);
@@ -107,7 +109,7 @@ function PrepareOpen({ submission }: { readonly submission: Submission }) {
     <Section>
       <PreparingFrame
         title={`Preparing the files of ${formatMonth(month)}`}
-        task={{ view: 'prepare', site, month, knownParticipants, safeHeaders }}
+        task={{ view: 'prepare', site, month, ...knowledge }}
         sending={sending}
         onUnsaved={setUnsaved}
         onAct={(said) => void act(said)}
@@ -122,6 +124,3 @@ function PrepareOpen({ submission }: { readonly submission: Submission }) {
     </Section>
   );
 }
-
-const knownParticipants: readonly string[] = [];
-const safeHeaders: readonly string[] = [];
