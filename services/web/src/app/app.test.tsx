@@ -211,10 +211,18 @@ describe('addresses that explain', () => {
   it('list the addresses a program can use', async () => {
     fakeApi({
       ...publicAnswers,
-      'GET /api/openapi.json': { openapi: '3.1.0', paths: { '/api/account': { get: { summary: 'Who is signed in' }, parameters: [] } } },
+      'GET /api/openapi.json': {
+        openapi: '3.1.0',
+        paths: {
+          '/api/account': { get: { summary: 'Who is signed in', security: [] }, parameters: [] },
+          '/api/sites': { get: { summary: 'The sites', security: [{ session: [] }, { siteSystem: ['submissions'] }] } },
+        },
+      },
     });
     renderRoutes(routes, '/developers');
-    expect(await screen.findByRole('row', { name: 'Who is signed in GET /api/account' })).toBeTruthy();
+    expect(await screen.findByRole('row', { name: 'Who is signed in anyone GET /api/account' })).toBeTruthy();
+    expect(screen.getByRole('row', { name: 'The sites people, sites’ systems GET /api/sites' })).toBeTruthy();
+    expect(screen.getByLabelText('Script that submits a month').textContent).toContain('grant_type=client_credentials');
   });
 
   it('say that there is nothing at an unknown address', async () => {

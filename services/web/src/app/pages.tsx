@@ -79,6 +79,12 @@ export const pages: readonly PageEntry[] = [
   { path: '/people', audience: ['administrator', 'steward'], nav: 'People', load: () => import('../features/people/people-page.tsx') },
   { path: '/people/:personId', audience: ['administrator', 'steward'], load: () => import('../features/people/person-page.tsx') },
   {
+    path: '/site-systems',
+    audience: ['administrator', 'steward'],
+    nav: 'Site systems',
+    load: () => import('../features/site-systems/site-systems-page.tsx'),
+  },
+  {
     path: '/audit',
     audience: ['steward', 'administrator', 'coordinator', 'researcher'],
     nav: 'Audit',

@@ -8,13 +8,14 @@ export interface Operation {
   readonly path: string;
   readonly method: string;
   readonly summary: string;
+  readonly callers: 'anyone' | 'people' | 'people and systems';
 }
 
 /** Only what the page shows; the document holds far more. */
 const OpenApiDocument = z.object({
   paths: z.record(z.string(), z.record(z.string(), z.unknown())),
 });
-const OperationObject = z.object({ summary: z.string().default('') });
+const OperationObject = z.object({ summary: z.string().default(''), security: z.array(z.record(z.string(), z.unknown())).default([]) });
 
 const getOpenApi = endpoint({
   method: 'GET',
@@ -37,7 +38,14 @@ function operationsOf({ paths }: z.output<typeof OpenApiDocument>): Operation[] 
   return Object.entries(paths).flatMap(([path, item]) =>
     methods.flatMap((method) => {
       const parsed = OperationObject.safeParse(item[method]);
-      return parsed.success ? [{ path, method: method.toUpperCase(), summary: parsed.data.summary }] : [];
+      if (!parsed.success) return [];
+      const { summary, security } = parsed.data;
+      return [{ path, method: method.toUpperCase(), summary, callers: callersOf(security) }];
     }),
   );
+}
+
+function callersOf(security: readonly Readonly<Record<string, unknown>>[]): Operation['callers'] {
+  if (security.length === 0) return 'anyone';
+  return security.some((way) => 'siteSystem' in way) ? 'people and systems' : 'people';
 }
