@@ -32,6 +32,7 @@ const siteTables = [
   'submissions',
   'submission_files',
   'submission_findings',
+  'submission_mends',
   'row_history',
   'month_closures',
   'course_facts',
@@ -78,6 +79,15 @@ async function fillSite(siteId: string): Promise<void> {
     found: 'x',
     mend: 'x',
   });
+  await insert('submission_mends', {
+    submission_id: submission,
+    table_key: 'bouts',
+    line: 2,
+    column_key: 'steps',
+    site_id: siteId,
+    value: '40',
+  });
+  await insert('safe_headers', { site_id: siteId, header: 'mobile', marked_by: randomUUID() });
   await insert('row_history', {
     site_id: siteId,
     table_key: 'bouts',
@@ -149,7 +159,7 @@ describe.each(siteTables)('rows of a site in %s', (table) => {
     expect(await count(systemA, table)).toBe(1);
     expect(await count(systemA, table, `site_id = '${siteB}'`)).toBe(0);
     expect(await count(registry, table)).toBe(2);
-    expect(await count(steward, table)).toBe(table.startsWith('staged_') ? 0 : 2);
+    expect(await count(steward, table)).toBe(table.startsWith('staged_') || table === 'submission_mends' ? 0 : 2);
     for (const stranger of [researcher, administrator, statistics, { kind: 'nobody' } as Actor])
       expect(await count(stranger, table)).toBe(0);
   });
@@ -177,6 +187,28 @@ async function otherRow(table: string, siteId: string): Promise<string> {
   if (table.startsWith('staged_')) row['line'] = 3;
   return JSON.stringify(row);
 }
+
+describe('headers marked as safe', () => {
+  it('are read at their site, by stewards and by the registry', async () => {
+    for (const actor of [coordinatorA, therapistA, systemA]) expect(await count(actor, 'safe_headers')).toBe(1);
+    for (const actor of [steward, registry]) expect(await count(actor, 'safe_headers')).toBe(2);
+    for (const actor of [researcher, administrator, statistics]) expect(await count(actor, 'safe_headers')).toBe(0);
+  });
+
+  it('are marked by stewards alone', async () => {
+    const mark = (actor: Actor) =>
+      asActor(database.app, actor, async (tx) => {
+        await tx.query("insert into safe_headers (site_id, header, marked_by) values ($1, 'clock', $2)", [siteA, randomUUID()]);
+        throw new Error('taken back');
+      });
+    await expect(mark(steward)).rejects.toThrow('taken back');
+    for (const actor of [coordinatorA, therapistA, systemA, registry, administrator])
+      await expect(mark(actor)).rejects.toMatchObject(refused);
+    const unmark = (actor: Actor) =>
+      asActor(database.app, actor, async (tx) => ((await tx.query('delete from safe_headers')) as [unknown, number])[1]);
+    for (const actor of [coordinatorA, registry, administrator]) expect(await unmark(actor)).toBe(0);
+  });
+});
 
 describe('rows of people and of the registry', () => {
   it('of a draft request are reached by its lead alone', async () => {
