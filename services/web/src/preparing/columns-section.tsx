@@ -90,11 +90,17 @@ function TableOfColumns({ columns: { source, table, columns }, month, open, setO
       </div>
       <p className="text-quiet">
         {formatCount(sent, 'column')} used, {columns.length - sent} {columns.length - sent === 1 ? 'stays' : 'stay'} behind
-        {isNew ? '; some are new since last month' : ', as last month'}.
+        {newsOf(columns)}.
       </p>
       {isOpen && <ul className="border-t border-hairline">{list}</ul>}
     </div>
   );
+}
+
+function newsOf(columns: readonly ColumnPicture[]): string {
+  const fresh = columns.filter(({ isNew, isMatchable }) => isNew && isMatchable).length;
+  if (fresh === 0) return ', as last month';
+  return fresh === columns.length ? '. Look them over: next month they are remembered' : `. ${fresh} not as last month`;
 }
 
 interface ColumnItemProps {
@@ -123,14 +129,16 @@ function ColumnItem({ column, source, table, month, isEdited, setOpen }: ColumnI
           )}
         </p>
         {isMatchable && (
-          <Button
-            variant="quiet"
-            aria-label={`Change what becomes of ${name}`}
-            aria-expanded={isEdited}
-            onPress={() => setOpen(isEdited ? null : `${source}:${number}`)}
-          >
-            {isEdited ? 'Close' : 'Change'}
-          </Button>
+          <div className="justify-self-start">
+            <Button
+              variant="quiet"
+              aria-label={`Change what becomes of ${name}`}
+              aria-expanded={isEdited}
+              onPress={() => setOpen(isEdited ? null : `${source}:${number}`)}
+            >
+              {isEdited ? 'Close' : 'Change'}
+            </Button>
+          </div>
         )}
       </div>
       {isEdited && <ColumnEditor column={column} table={table} onMatch={(chosen) => void month.matchColumn(source, chosen)} />}

@@ -42,50 +42,52 @@ export function FilesSection({ month, monthName }: { readonly month: Month; read
       {!isOpen ? (
         <EmptyState>Open the site key first. Without it nobody in the files can be given a code.</EmptyState>
       ) : (
-        <div className="grid gap-6">
+        <>
           <Arrival label="The key is open. Next: the files of the month." />
-          <FileDrop
-            label={`Files of ${monthName}`}
-            hint="All tables at once, or one by one. A file of the same name takes the place of the earlier one."
-            accept={['.csv', '.txt', '.tsv', '.xlsx']}
-            multiple
-            onFiles={(files) => void month.addFiles(files)}
-          />
-          {picture.refused.map(({ fileName, found, mend, line }) => (
-            <Notice key={fileName} kind="error" title={`${fileName} was not read.`} urgent>
-              <p>
-                {found}
-                {line !== null && ` Line ${line}.`} {mend}
-              </p>
-            </Notice>
-          ))}
-          {picture.sources.length > 0 && (
-            <ul className="grid gap-4">
-              {picture.sources.map((source) => (
-                <SourceItem key={source.id} source={source} month={month} />
-              ))}
-            </ul>
-          )}
-          {obstacle !== null && <Notice kind="warning" title={obstacle} />}
-          {progress !== null && (
-            <div className="grid max-w-xl gap-2">
-              <Progress
-                label={progress.what}
-                part={progress.part}
-                words={progress.part === null ? `${progress.what}.` : `${progress.what}: ${Math.round(progress.part * 100)} of 100 parts`}
-              />
-              <div>
-                <Button onPress={month.stop}>Stop</Button>
+          <div className="grid gap-6">
+            <FileDrop
+              label={`Files of ${monthName}`}
+              hint="All tables at once, or one by one. A file of the same name takes the place of the earlier one."
+              accept={['.csv', '.txt', '.tsv', '.xlsx']}
+              multiple
+              onFiles={(files) => void month.addFiles(files)}
+            />
+            {picture.refused.map(({ fileName, found, mend, line }) => (
+              <Notice key={fileName} kind="error" title={`${fileName} was not read.`} urgent>
+                <p>
+                  {found}
+                  {line !== null && ` Line ${line}.`} {mend}
+                </p>
+              </Notice>
+            ))}
+            {picture.sources.length > 0 && (
+              <ul className="grid gap-4">
+                {picture.sources.map((source) => (
+                  <SourceItem key={source.id} source={source} month={month} />
+                ))}
+              </ul>
+            )}
+            {obstacle !== null && <Notice kind="warning" title={obstacle} />}
+            {progress !== null && (
+              <div className="grid max-w-xl gap-2">
+                <Progress
+                  label={progress.what}
+                  part={progress.part}
+                  words={progress.part === null ? `${progress.what}.` : `${progress.what}: ${Math.round(progress.part * 100)} of 100 parts`}
+                />
+                <div>
+                  <Button onPress={month.stop}>Stop</Button>
+                </div>
               </div>
-            </div>
-          )}
-          {refusal !== null && (
-            <Notice kind="error" title={refusal} urgent>
-              <Button onPress={() => void month.workOut()}>Work the preview out again</Button>
-            </Notice>
-          )}
-          {isStale && progress === null && refusal === null && <p role="status">Working out the preview.</p>}
-        </div>
+            )}
+            {refusal !== null && (
+              <Notice kind="error" title={refusal} urgent>
+                <Button onPress={() => void month.workOut()}>Work the preview out again</Button>
+              </Notice>
+            )}
+            {isStale && progress === null && refusal === null && <p role="status">Working out the preview.</p>}
+          </div>
+        </>
       )}
     </Section>
   );
@@ -119,7 +121,11 @@ function SourceItem({ source, month }: { readonly source: SourcePicture; readonl
         value={table}
         placeholder="Which table is this?"
         options={tableOptions}
-        error={table === null ? 'Its name and columns do not tell. Choose the table, or leave it out.' : undefined}
+        {...(table === null &&
+          sheet !== null && {
+            hint: 'Not used, because neither its name nor its columns tell. Choose the table if it belongs to the month.',
+          })}
+        error={table === null && sheet === null ? 'Neither its name nor its columns tell. Choose the table, or leave it out.' : undefined}
         onChange={(chosen) => {
           const known = tables.find(({ key }) => key === chosen);
           if (known !== undefined) void month.changeSource({ id, table: known.key });

@@ -6,6 +6,7 @@ import '../styles.css';
 import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
 import { I18nProvider } from 'react-aria-components/I18nProvider';
+import { Notice } from '../ui/notice.tsx';
 import { edition } from './edition.ts';
 import { Embedded } from './embedded.tsx';
 import { Offline } from './offline.tsx';
@@ -22,7 +23,13 @@ const today = [now.getFullYear(), now.getMonth() + 1, now.getDate()].map((part) 
 createRoot(root).render(
   <StrictMode>
     <I18nProvider locale="en-GB">
-      {edition === 'offline' ? (
+      {!isSecureContext ? (
+        <Notice kind="error" title="This page cannot lock and open key files here.">
+          <p>
+            Browsers allow that on addresses that begin with https and for files opened from disk. Open the registry by its https address.
+          </p>
+        </Notice>
+      ) : edition === 'offline' ? (
         <Offline workroom={workroom} today={today} />
       ) : (
         <Embedded workroom={workroom} surroundings={surroundingPage()} today={today} />

@@ -58,9 +58,10 @@ export function reduceMonth(state: MonthState, event: MonthEvent): MonthState {
 
 /** Why the files cannot be prepared as they stand; null when they can. */
 export function obstacleOf(sources: readonly SourcePicture[]): string | null {
-  const without = sources.find(({ table }) => table === null);
+  // A workbook may hold sheets that are none of the registry's; a file was chosen to be used.
+  const without = sources.find(({ table, sheet }) => table === null && sheet === null);
   if (without !== undefined) return `Say which table ${nameOf(without)} is, or leave it out.`;
-  const twice = sources.find(({ id, table }) => sources.some((other) => other.id > id && other.table === table));
+  const twice = sources.find(({ id, table }) => table !== null && sources.some((other) => other.id > id && other.table === table));
   return twice === undefined ? null : 'Two files are for the same table. Give one of them another table, or leave it out.';
 }
 

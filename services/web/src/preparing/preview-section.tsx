@@ -62,6 +62,9 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
   );
 });
 
+/** More columns of words than this are folded: an examination has over a hundred. */
+const columnsOpen = 20;
+
 function TablePreview({ table: { table, rows, people, bytes, headers, firstRows, words } }: { readonly table: PreparedTablePicture }) {
   const name = tableName(table);
   const telling = words.filter(({ values }) => values.length > 0);
@@ -106,7 +109,7 @@ function TablePreview({ table: { table, rows, people, bytes, headers, firstRows,
         </table>
       </div>
       {telling.length > 0 && (
-        <details>
+        <details open={telling.length <= columnsOpen}>
           <summary className="link">
             All different words and codes of {name}, {formatCount(telling.length, 'column')}
           </summary>

@@ -59,6 +59,7 @@ export function SendSection({ month, prepared, site, calendarMonth, surroundings
       for (const { name, content, type } of preparedFiles({ site, calendarMonth, prepared, files, replacedCodes }))
         saveFile(name, content, type);
       month.sendingIs({ kind: 'sending', state: 'done', done: files.length, of: files.length, message: null });
+      void month.codesReplaced();
       announce('The cleaned files are saved.');
     });
 

@@ -1,7 +1,7 @@
 /** The month being prepared: the worker's answers as state, and everything a person can do. */
 import type { ColumnMatch, IsoDate } from '@cairnstep/deidentification';
 import type { TableKey } from '@cairnstep/dictionary';
-import { useCallback, useEffect, useMemo, useReducer, useRef } from 'react';
+import { startTransition, useCallback, useEffect, useMemo, useReducer, useRef } from 'react';
 import { saveFile } from '../lib/save-file.ts';
 import { announce } from '../ui/announcer.tsx';
 import type { Sending } from './messages.ts';
@@ -64,11 +64,13 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
         const picture = (await act(signal)) ?? (await look());
         dispatch({ kind: 'picture', picture });
         if (signal.aborted) return;
-        if (picture.key === null || picture.sources.length === 0 || obstacleOf(picture.sources) !== null) {
+        if (picture.key === null || picture.sources.every(({ table }) => table === null) || obstacleOf(picture.sources) !== null) {
           dispatch({ kind: 'nothing-to-prepare' });
           return;
         }
-        dispatch({ kind: 'prepared', ...(await ask('prepare', null, { signal })) });
+        const worked = await ask('prepare', null, { signal });
+        // The preview is large: drawn in slices, the page stays answerable meanwhile.
+        startTransition(() => dispatch({ kind: 'prepared', ...worked }));
         announce('The preview is ready.');
       } catch (error) {
         if (!(error instanceof WorkRefused)) throw error;

@@ -39,7 +39,7 @@ function Folded({ title, children }: { readonly title: string; readonly children
 const replacedWords = (count: number): string =>
   count === 0
     ? 'No code had to be replaced.'
-    : `${formatCount(count, 'code')} ${count === 1 ? 'was' : 'were'} replaced. The registry learns of it when you send.`;
+    : `${formatCount(count, 'code')} ${count === 1 ? 'was' : 'were'} replaced. The registry has to be told: see the end of this page.`;
 
 function MergeKeys({ month }: { readonly month: Month }) {
   const [merged, setMerged] = useState<{ readonly replaced: number; readonly firstDaysMoved: readonly string[] } | null>(null);

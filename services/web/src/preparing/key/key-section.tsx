@@ -33,7 +33,7 @@ export function KeySection({ month, site, held, isWhole }: KeySectionProps) {
           <p>
             The key is opened in the memory of this page and nowhere else. Once the page is left or loaded again, it has to be opened again.
           </p>
-          <p>Nothing of it is sent: what leaves this page is listed under the preview, byte for byte.</p>
+          <p>Nothing of it is ever sent: neither the file, nor its passphrase, nor a record number.</p>
         </>
       }
     >
