@@ -3,7 +3,7 @@ import type { SiteMonth } from '@cairnstep/contract';
 import { useQuery } from '@tanstack/react-query';
 import { hasRole, useAccount } from '../../lib/account.ts';
 import { useAddressParam } from '../../lib/address-state.ts';
-import { formatDate, formatMonth } from '../../lib/format.ts';
+import { formatMonth } from '../../lib/format.ts';
 import { monthStateWords } from '../../lib/month-states.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Checkbox } from '../../ui/checkbox.tsx';
@@ -100,8 +100,8 @@ function shortMonth(month: string): string {
 }
 
 function MonthCell({ line, month }: { readonly line: SiteLine; readonly month: SiteMonth | undefined }) {
-  if (month === undefined) return <span className="text-quiet">not yet in the registry</span>;
-  const { state, submissionId, acceptedAt, dueOn, closed } = month;
+  if (month === undefined) return <span className="text-small text-quiet">not yet in the registry</span>;
+  const { state, submissionId, acceptedAt, closed } = month;
   const word = monthStateWords[state];
   const about = <span className="sr-only">{`, ${line.site.name}, ${formatMonth(month.month)}`}</span>;
   const begunAgain = (state === 'in-progress' || state === 'checking') && (acceptedAt !== null || closed !== null);
@@ -117,7 +117,6 @@ function MonthCell({ line, month }: { readonly line: SiteLine; readonly month: S
         </TextLink>
       )}
       {begunAgain && <span className="text-quiet">{acceptedAt === null ? 'after “nothing to report”' : 'a correction'}</span>}
-      {state === 'due' && <span className="text-quiet">{`by ${formatDate(dueOn)}`}</span>}
       {state === 'nothing-to-report' && closed !== null && <span className="text-quiet">{`said by ${closed.by}`}</span>}
     </span>
   );

@@ -25,11 +25,16 @@ export default function PeoplePage() {
       title="People"
       lead={<p>Who may do what in the registry, and who has been asked to join.</p>}
       note={
-        <p>
-          {isAdministrator
-            ? 'A change counts from the person’s next request on. Accounts are never deleted, only disabled.'
-            : 'You can look. Administrators invite people and give roles.'}
-        </p>
+        <>
+          <p>
+            {isAdministrator
+              ? 'A change counts from the person’s next request on. Accounts are never deleted, only disabled.'
+              : 'You can look. Administrators invite people and give roles.'}
+          </p>
+          <p>
+            Programs of clinics that submit by themselves: <TextLink to="/site-systems">site systems</TextLink>
+          </p>
+        </>
       }
     >
       <Section title="Accounts" id="accounts" wide>

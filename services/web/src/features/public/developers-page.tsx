@@ -50,7 +50,7 @@ export default function DevelopersPage() {
           </>
         }
       >
-        <div className="grid gap-4">
+        <div className="grid grid-cols-1 gap-4">
           <p className="max-w-2xl">
             A training record system can submit the months of its clinic without a person. It gets a client id and a secret from the
             organisation that runs the sign-in, and an administrator of the registry binds the client id to the one site it may submit for.
@@ -69,7 +69,8 @@ export default function DevelopersPage() {
             </li>
             <li>
               The same rules as for people: a preview, a reason for every warning, a commit bound to the preview, a receipt. A month without
-              anything: <code>POST /api/sites/&#123;siteId&#125;/months/&#123;month&#125;/nothing-to-report</code>.
+              anything: <code className="wrap-anywhere">POST /api/sites/&#123;siteId&#125;/months/&#123;month&#125;/nothing-to-report</code>
+              .
             </li>
           </ul>
           <h3 className="font-semibold">A whole month with curl</h3>
@@ -85,7 +86,7 @@ export default function DevelopersPage() {
           </div>
         </div>
       </Section>
-      <Section title="Addresses" id="addresses">
+      <Section title="Addresses" id="addresses" wide>
         <Answer query={description} waiting="Reading the description of the interface.">
           {({ operations }) => (
             <Table

@@ -15,6 +15,7 @@ export default function SiteSystemsPage() {
   return (
     <Page
       title="Site systems"
+      kicker={<TextLink to="/people">People</TextLink>}
       lead={<p>A clinic’s own system can submit the clinic’s months by itself. It reaches that one site and nothing else.</p>}
       note={
         <p>

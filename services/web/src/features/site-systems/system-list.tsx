@@ -15,7 +15,7 @@ const columns: readonly Column<System>[] = [
     key: 'client',
     header: 'Client id',
     value: ({ subject }) => subject,
-    cell: ({ subject }) => <code className="wrap-anywhere">{subject}</code>,
+    cell: ({ subject }) => <code className="inline-block min-w-40 wrap-anywhere">{subject}</code>,
   },
   {
     key: 'status',

@@ -105,7 +105,8 @@ function columnsFor(site: Site, isCoordinator: boolean, opening: string | null, 
       key: 'accepted',
       header: 'Accepted',
       value: ({ acceptedAt }) => acceptedAt,
-      cell: ({ acceptedAt }) => (acceptedAt === null ? <span className="text-quiet">not yet</span> : formatInstant(acceptedAt)),
+      cell: ({ acceptedAt, closed }) =>
+        acceptedAt === null ? <span className="text-quiet">{closed === null ? 'not yet' : 'closed'}</span> : formatInstant(acceptedAt),
     },
     { key: 'rows', header: 'Rows', value: ({ rows }) => rows, kind: 'number' },
     {
