@@ -3,8 +3,10 @@ import PgBoss from 'pg-boss';
 import { readConfig, SettingsError } from './config.ts';
 import { makeDataSource } from './database/data-source.ts';
 import { buildExport } from './features/exports/build-export.ts';
+import { remindCoordinators } from './features/months/remind-coordinators.ts';
 import { checkSubmission } from './features/submissions/check-submission.ts';
 import { errorFacts, makeLogger } from './http/log.ts';
+import { listenForBell } from './jobs/bell.ts';
 import { makeLeases } from './jobs/leases.ts';
 import { tidyUp } from './jobs/tidy-up.ts';
 import { workOff } from './jobs/work-off.ts';
@@ -29,10 +31,14 @@ try {
       'send-mail': ({ mailId }) => sendMail(context, transport, mailId),
       'build-export': ({ exportId }) => buildExport(context, exportId),
       'tidy-up': () => tidyUp(context),
+      'remind-coordinators': () => remindCoordinators(context),
     },
     log,
   );
   await boss.schedule('tidy-up', '*/10 * * * *', {});
+  // Every hour, so that a registry that stood still at the hour of reminding makes up for it; each reminder is mailed once.
+  await boss.schedule('remind-coordinators', '20 * * * *', {});
+  const listening = listenForBell(jobsUrl(config.DATABASE_APP_URL), (queue) => working.wake(queue));
   log.info('ready');
   process.send?.('ready');
 
@@ -41,7 +47,7 @@ try {
     void working
       .stop()
       .then(() => boss.stop({ graceful: false }))
-      .then(() => Promise.all([leases.close(), database.destroy()]))
+      .then(() => Promise.all([listening.close(), leases.close(), database.destroy()]))
       .then(() => process.exit(0));
     setTimeout(() => process.exit(1), 15_000).unref();
   };
