@@ -41,7 +41,8 @@ describe('the preparing page', () => {
     expect(answer.headers['content-security-policy']).toContain(carried);
     const policy = policyOf(answer);
     expect(policy.get('connect-src')).toBe("'none'");
-    expect(policy.get('sandbox')).toBe('allow-scripts allow-downloads');
+    expect(policy.get('form-action')).toBe("'none'");
+    expect(policy.get('sandbox')).toBe('allow-scripts allow-downloads allow-forms');
   });
 
   it('may be framed by the client and by nobody else', async () => {

@@ -10,15 +10,17 @@ const PreparingNote = z.object({ sha256: z.string(), contentSecurityPolicy: z.st
 
 /**
  * The preparing page sees record numbers and dates. As an answer it has the policy that it carries in itself, and is put into a
- * sandbox besides: an origin of its own, so that it reaches neither the page around it, nor its session, nor any storage; no pop-up,
- * no form, no other page in the window.
+ * sandbox besides: an origin of its own, so that it reaches neither the page around it, nor its session, nor any storage; no pop-up and
+ * no other page in the window. Its forms are heard by its script alone: the policy lets none be sent.
  */
 function servePreparing(folder: string): RequestHandler {
   const note = PreparingNote.parse(JSON.parse(readFileSync(path.join(folder, preparingPage.replace('.html', '.json')), 'utf8')));
-  const policy = `${note.contentSecurityPolicy}; frame-ancestors 'self'; sandbox allow-scripts allow-downloads`;
+  const policy = `${note.contentSecurityPolicy}; frame-ancestors 'self'; sandbox allow-scripts allow-downloads allow-forms`;
   return (_request, response) => {
     response.setHeader('Content-Security-Policy', policy);
     response.setHeader('Cache-Control', 'no-cache');
+    // An origin of its own cannot be keyed by the address.
+    response.removeHeader('Origin-Agent-Cluster');
     response.sendFile(path.join(folder, preparingPage));
   };
 }

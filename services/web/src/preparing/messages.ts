@@ -8,8 +8,8 @@
 import { tableKeys } from '@cairnstep/dictionary';
 import { z } from 'zod';
 
-/** A code, a number, a study day: nothing that needs quotation marks, and nothing long enough for a sentence. */
-const CleanText = z.string().regex(/^[A-Za-z0-9_.,+\-\r\n]*$/);
+/** A code (such as 1* in an exam), a number, a study day: nothing that needs quotation marks, and no blank for a sentence. */
+const CleanText = z.string().regex(/^[A-Za-z0-9_.,+*\-\r\n]*$/);
 
 const ParticipantCode = z.string().regex(/^S[0-9A-HJKMNP-TV-Z]{21}$/);
 

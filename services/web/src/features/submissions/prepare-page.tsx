@@ -106,7 +106,7 @@ function PrepareOpen({ submission, knowledge }: { readonly submission: Submissio
   }
 
   return (
-    <Section>
+    <>
       <PreparingFrame
         title={`Preparing the files of ${formatMonth(month)}`}
         task={{ view: 'prepare', site, month, ...knowledge }}
@@ -121,6 +121,6 @@ function PrepareOpen({ submission, knowledge }: { readonly submission: Submissio
         leave="Leave and forget it"
         stay="Stay"
       />
-    </Section>
+    </>
   );
 }

@@ -9,10 +9,11 @@ import type { Sending, Task, ToPreparing } from '../../preparing/messages.ts';
 import { Button } from '../../ui/button.tsx';
 import { Loading } from '../../ui/loading.tsx';
 import { Notice } from '../../ui/notice.tsx';
+import { Section } from '../../ui/page.tsx';
 
 const address = '/prepare.html';
 // Vite's server hands out modules one by one, to its own origin alone.
-const sandbox = import.meta.env.DEV ? 'allow-scripts allow-downloads allow-same-origin' : 'allow-scripts allow-downloads';
+const sandbox = `allow-scripts allow-downloads allow-forms${import.meta.env.DEV ? ' allow-same-origin' : ''}`;
 const originOfFrame = import.meta.env.DEV ? window.location.origin : 'null';
 const patience = 20_000;
 
@@ -80,24 +81,33 @@ export function PreparingFrame({ title, task, sending, onUnsaved, onAct }: Prepa
 
   if (state === 'not-understood') {
     return (
-      <Notice kind="error" title="The preparing page said something that this page does not understand." urgent>
-        <p>Nothing was sent. A newer version of the registry may be in service: load the page again and open the key file once more.</p>
-        <Again />
-      </Notice>
+      <Section>
+        <Notice kind="error" title="The preparing page said something that this page does not understand." urgent>
+          <p>Nothing was sent. A newer version of the registry may be in service: load the page again and open the key file once more.</p>
+          <Again />
+        </Notice>
+      </Section>
     );
   }
   return (
     <>
-      {state === 'opening' && <Loading>Opening the preparing page.</Loading>}
-      {state === 'silent' && (
-        <Notice kind="error" title="The preparing page does not open." urgent>
-          <p>
-            Nothing was read and nothing was sent. A browser extension or an old browser can keep it from running. Load the page again, or
-            use another browser.
-          </p>
-          <Again />
-        </Notice>
+      {state === 'opening' && (
+        <Section>
+          <Loading>Opening the preparing page.</Loading>
+        </Section>
       )}
+      {state === 'silent' && (
+        <Section>
+          <Notice kind="error" title="The preparing page does not open." urgent>
+            <p>
+              Nothing was read and nothing was sent. A browser extension or an old browser can keep it from running. Load the page again, or
+              use another browser.
+            </p>
+            <Again />
+          </Notice>
+        </Section>
+      )}
+      {/* Over the whole width of the sheet: it has a margin of its own, just where this page has it. */}
       <iframe
         ref={frame}
         src={address}
@@ -105,7 +115,7 @@ export function PreparingFrame({ title, task, sending, onUnsaved, onAct }: Prepa
         sandbox={sandbox}
         referrerPolicy="no-referrer"
         hidden={!isOpen}
-        className="block w-full border-0"
+        className="relative block w-full border-0"
         style={{ height }}
       />
     </>
