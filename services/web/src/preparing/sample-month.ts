@@ -1,5 +1,6 @@
 /** A month of an invented clinic as its coordinator has it, for tests. Never part of the built client. */
 
+/** Words nobody has used for a key file of their own. */
 export const passphrase = 'bafo rina tuke sobi malu pegi';
 
 export const participantsCsv = [
@@ -9,6 +10,7 @@ export const participantsCsv = [
   '',
 ].join('\r\n');
 
+/** With decimal commas, another spelling of the record numbers, and a word of the clinic's own on line 4. */
 export const sessionsCsv = [
   'MRN;Session date;Session;course;Status;device;Total distance (km);Therapist',
   '00482913;26/03/2024;1;1;cancelled_before;manual_bwstt;;J. Marsh',
