@@ -1,6 +1,6 @@
 /**
  * Rules that are about files and single cells rather than about medicine: F01-F05 stop the reading of a file, F06-F15
- * are about its columns and cells, F20-F25 about single values against the dictionary, F30-F37 about rows and records,
+ * are about its columns and cells, F20-F25 about single values against the dictionary, F30-F38 about rows and records,
  * F40-F48 about workbooks (F40 and F41 stop the reading of one), F50 and up about what identifies a person and about the
  * files of a submission together.
  * Rules across fields (C, E, T, A, R) are the dictionary's.
@@ -210,6 +210,13 @@ export const fileRules: readonly RuleText[] = [
     statement: 'A consent does not end before it was signed.',
     why: 'One of the two study days is wrong.',
     mend: 'Correct the day of signing or the last day on which the consent holds.',
+  },
+  {
+    id: 'F38',
+    severity: 'error',
+    statement: 'Every participant code is in use: none that the site has replaced by another.',
+    why: 'Under the old code the person would be in the registry twice.',
+    mend: 'Prepare the file again with the key file as it is now.',
   },
   {
     id: 'F40',

@@ -21,6 +21,8 @@ export interface RegistryContext {
   readonly otherParticipants?: TypedTable;
   /** Participants of the site whose withdrawal the registry has processed; their rows are refused whatever the files say. */
   readonly withdrawn: ReadonlySet<string>;
+  /** Codes of the site that were replaced by others. Left out: none were. */
+  readonly replaced?: ReadonlySet<string>;
   /** Calendar year of the check, from the caller's clock, for years of injury. */
   readonly year: number;
 }

@@ -54,7 +54,8 @@ async function* fillFromCsv(builder: TableBuilder, source: ByteSource): AsyncGen
   };
 
   try {
-    for await (const _ of scanCsv(table, source, limits, onRecord)) yield { ended: false };
+    const readPlain = builder.plainRow.bind(builder);
+    for await (const _ of scanCsv(table, source, limits, onRecord, readPlain)) yield { ended: false };
     if (!builder.hasHeader) throw new UnreadableFile('F05', 'The file is empty.', 'Begin with the header row of the template.', null);
   } catch (error) {
     if (!(error instanceof UnreadableFile)) throw error;

@@ -7,6 +7,8 @@
  * `record-scanner.test.ts` holds it against csv-parse.
  */
 import type { ReadLimits } from '../limits.ts';
+import { asciiText } from './ascii-text.ts';
+import type { AsciiText } from './ascii-text.ts';
 import { countLineBreaks } from './count-line-breaks.ts';
 import { UnreadableFile } from './unreadable-file.ts';
 
@@ -20,6 +22,12 @@ const QUOTE = 34;
  */
 export type OnRecord = (cells: readonly string[], count: number, line: number, strayQuote: boolean) => void;
 
+/**
+ * Reads the record that begins at `start` of a text by itself, when it is one line and arrived as a whole.
+ * @returns where the next begins, or -1 to have it scanned.
+ */
+export type ReadPlain = (text: AsciiText, start: number, line: number) => number;
+
 export class RecordScanner {
   private rest = '';
   /** Line of the file on which `rest` begins. */
@@ -31,6 +39,7 @@ export class RecordScanner {
     delimiter: string,
     private readonly limits: ReadLimits,
     private readonly onRecord: OnRecord,
+    private readonly readPlain: ReadPlain | null = null,
   ) {
     this.separator = delimiter.charCodeAt(0);
   }
@@ -46,9 +55,12 @@ export class RecordScanner {
    */
   push(text: string, last: boolean): void {
     const source = this.rest + text;
+    const plainText = this.readPlain && asciiText(source);
     let at = 0;
     while (at < source.length) {
-      const next = this.scanRecord(source, at, last);
+      const plain = this.readPlain && plainText ? this.readPlain(plainText, at, this.line) : -1;
+      if (plain > at) this.line += 1;
+      const next = plain > at ? plain : this.scanRecord(source, at, last);
       if (next < 0) break;
       at = next;
     }

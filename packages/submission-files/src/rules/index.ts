@@ -13,6 +13,7 @@ import { rowsAllAlike } from './records/f34-rows-all-alike.ts';
 import { sessionTotals } from './records/f35-session-totals.ts';
 import { yearOfInjury } from './records/f36-year-of-injury.ts';
 import { consentEndsAfterItBegins } from './records/f37-consent-ends-after-it-begins.ts';
+import { codeInUse } from './records/f38-code-in-use.ts';
 import { knownParticipant } from './records/r01-known-participant.ts';
 import { boutHasASession } from './records/r02-bout-has-a-session.ts';
 import { eventNamesASession } from './records/r03-event-names-a-session.ts';
@@ -92,6 +93,7 @@ export const submissionRules: readonly Rule[] = [
   sessionTotals,
   yearOfInjury,
   consentEndsAfterItBegins,
+  codeInUse,
   knownParticipant,
   boutHasASession,
   eventNamesASession,

@@ -1,6 +1,7 @@
 import { cellParser } from '@cairnstep/dictionary';
 import type { CellParser } from '@cairnstep/dictionary';
-import { rejectCell, trimmed } from './cell-reader.ts';
+import type { AsciiText } from '../reading/ascii-text.ts';
+import { rejectCell, saysAt, trimmed } from './cell-reader.ts';
 import type { CellPlace, CellReader } from './cell-reader.ts';
 
 /** Spellings of one column that are remembered, so that a hostile file cannot fill the memory with them. */
@@ -11,6 +12,8 @@ export class CodeReader implements CellReader {
   /** Spelling met in the file → number of the code, 0 for blanks. */
   private readonly spellings = new Map<string, number>();
   private readonly parse: CellParser;
+  /** The spelling read last: the same code often stands in many rows. */
+  private last = { bytes: new Uint8Array(0), number: 0 };
 
   constructor(private readonly place: CellPlace) {
     this.parse = cellParser(place.store.variable);
@@ -19,6 +22,16 @@ export class CodeReader implements CellReader {
   read(text: string, row: number, line: number): void {
     const number = this.spellings.get(text) ?? this.recognise(text, row, line);
     if (number > 0) this.place.store.setWord(row, number);
+  }
+
+  readPlain(text: AsciiText, from: number, to: number, row: number): boolean {
+    if (!saysAt(text, from, to, this.last.bytes)) {
+      const number = this.spellings.get(text.source.slice(from, to));
+      if (!number) return false;
+      this.last = { bytes: text.bytes.slice(from, to), number };
+    }
+    this.place.store.setWord(row, this.last.number);
+    return true;
   }
 
   /** The number of a spelling not met before; 0 when it is blank or has been rejected. */

@@ -6,6 +6,11 @@ class Vocabulary {
   readonly words: string[] = [''];
   private readonly numbers = new Map<string, number>();
 
+  /** The number of a word met before. */
+  known(word: string): number | undefined {
+    return this.numbers.get(word);
+  }
+
   /** The number of a word, given one if it is new. */
   number(word: string): number {
     const known = this.numbers.get(word);

@@ -1,8 +1,9 @@
+import type { AsciiText } from '../reading/ascii-text.ts';
 import type { CellKind } from './cell-kind.ts';
 import { rejectCell, trimmed } from './cell-reader.ts';
 import type { CellPlace, CellReader } from './cell-reader.ts';
 import type { UnitFactor } from './header-names.ts';
-import { readNumber } from './read-number.ts';
+import { readNumber, readPlainNumber } from './read-number.ts';
 import type { ReadNumber } from './read-number.ts';
 
 /** How a file writes its decimals; shared by the readers of all its columns. */
@@ -26,6 +27,17 @@ export class NumberReader implements CellReader {
     private readonly manner: DecimalManner,
   ) {
     this.whole = place.store.variable.type === 'integer';
+  }
+
+  readPlain(text: AsciiText, from: number, to: number, row: number): boolean {
+    const { into, manner, whole } = this;
+    if (!readPlainNumber(text.bytes, from, to, this.factor, into)) return false;
+    if (into.mark !== 0) {
+      if (whole || (manner.mark !== 0 && manner.mark !== into.mark)) return false;
+      manner.mark = into.mark;
+    } else if (whole && !Number.isInteger(into.value)) return false;
+    this.place.store.setNumber(row, into.value);
+    return true;
   }
 
   read(cell: string, row: number, line: number, kind: CellKind): void {

@@ -67,3 +67,27 @@ export function readNumber(text: string, factor: UnitFactor, into: ReadNumber): 
   into.mark = mark;
   return null;
 }
+
+/**
+ * The same for a number that stands in a larger text of ASCII and has at most 15 digits, of which at least one before a decimal point.
+ * @returns whether there is such a number.
+ */
+export function readPlainNumber(bytes: Uint8Array, from: number, to: number, factor: UnitFactor, into: ReadNumber): boolean {
+  const isNegative = bytes[from] === MINUS;
+  const start = isNegative ? from + 1 : from;
+  if (to === start || to - start > exactDigits) return false;
+  let digits = 0;
+  let point = -1;
+  for (let at = start; at < to; at += 1) {
+    const character = bytes[at] ?? 0;
+    if (character >= ZERO && character <= NINE) digits = digits * 10 + (character - ZERO);
+    else if (character === POINT && point < 0) point = at;
+    else return false;
+  }
+  if (point === start || point === to - 1) return false;
+  const decimals = point < 0 ? 0 : to - point - 1;
+  const size = (digits * factor.times) / ((powersOfTen[decimals] ?? 1) * factor.dividedBy);
+  into.value = isNegative && size !== 0 ? -size : size;
+  into.mark = point < 0 ? 0 : POINT;
+  return true;
+}

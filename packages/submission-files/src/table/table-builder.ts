@@ -6,6 +6,7 @@ import { tableOf } from '@cairnstep/dictionary';
 import type { TableKey, Variable } from '@cairnstep/dictionary';
 import type { FindingLog } from '../finding-log.ts';
 import type { ReadLimits } from '../limits.ts';
+import type { AsciiText } from '../reading/ascii-text.ts';
 import { UnreadableFile } from '../reading/unreadable-file.ts';
 import { faultOfKind } from './cell-kind.ts';
 import type { CellKind } from './cell-kind.ts';
@@ -19,6 +20,7 @@ import type { HeaderColumn } from './header-row.ts';
 import { MeasuredReader } from './measured-reader.ts';
 import { NumberReader } from './number-reader.ts';
 import type { DecimalManner } from './number-reader.ts';
+import { PlainRows } from './plain-rows.ts';
 import { ParticipantReader } from './participant-reader.ts';
 import type { TableOptions } from './table-options.ts';
 import { TypedTable } from './typed-table.ts';
@@ -39,6 +41,7 @@ export class TableBuilder {
   private manner: DecimalManner = { commaMayMarkThousands: true, mark: 0 };
   /** Per position in the file the reader of its column, in the order in which a row's cells must be read. */
   private readers: { readonly position: number; readonly store: ColumnStore; readonly reader: CellReader }[] = [];
+  private plainRows: PlainRows | null = null;
   private width = 0;
   private watchesEveryRow = false;
   private capacity = firstCapacity;
@@ -173,6 +176,25 @@ export class TableBuilder {
     const mends = this.options.mends?.get(line);
     if (mends) this.readCells(...this.mended(cells, kinds, count, mends), row, line);
     else this.readCells(cells, kinds, count, row, line);
+  }
+
+  /**
+   * Reads a record where it stands in the text of a file, when it is plain (see `PlainRows`).
+   * @returns where the next record begins, or -1 when `row` has to read this one.
+   */
+  plainRow(text: AsciiText, start: number, separator: number, line: number): number {
+    if (!this.hasHeader || this.rowsInAll >= this.limits.rows || this.options.mends?.has(line)) return -1;
+    const { watch } = this.options;
+    if (watch && this.watchesEveryRow) return -1;
+    if (this.rows === this.capacity) this.grow();
+    const row = this.rows;
+    this.plainRows ??= new PlainRows(this.readers, this.width, separator, this.limits.cellLength);
+    const next = this.plainRows.read(text, start, row);
+    if (next < 0 || (watch && !this.isAllowed(row))) return -1;
+    this.rows += 1;
+    this.rowsInAll += 1;
+    this.lines[row] = line;
+    return next;
   }
 
   private readCells(cells: readonly string[], kinds: readonly CellKind[] | undefined, count: number, row: number, line: number): void {

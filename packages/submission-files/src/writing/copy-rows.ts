@@ -15,6 +15,8 @@ const ZERO = 48;
 const escapes: Readonly<Record<string, string>> = { '\\': '\\\\', '\t': '\\t', '\n': '\\n', '\r': '\\r' };
 
 const encoder = new TextEncoder();
+const powersOfTen = Array.from({ length: 10 }, (_, exponent) => 10 ** exponent);
+const mostWhole = 999_999_999;
 const encoded = (text: string): Uint8Array => encoder.encode(text.replace(/[\\\t\n\r]/g, (character) => escapes[character] ?? character));
 const empty = encoder.encode('\\N');
 
@@ -50,30 +52,37 @@ class ByteText {
   /** The number as `formatNumber` writes it. */
   number(value: number): void {
     const size = Math.abs(value);
-    for (let decimals = 0, scale = 1; decimals <= 3 && size * scale < 1e9; decimals += 1, scale *= 10) {
-      const whole = Math.round(size * scale);
-      if (whole / scale !== size) continue;
-      if (value < 0) this.byte(MINUS);
-      this.digits(whole, decimals);
-      return;
+    if (size <= mostWhole && Number.isInteger(size)) this.digits(value < 0, size, 0);
+    else {
+      for (let decimals = 1, scale = 10; decimals <= 3 && size * scale < 1e9; decimals += 1, scale *= 10) {
+        const whole = Math.round(size * scale);
+        if (whole / scale === size) return this.digits(value < 0, whole, decimals);
+      }
+      this.copy(encoder.encode(formatNumber(value)));
     }
-    this.copy(encoder.encode(formatNumber(value)));
   }
 
-  /** A whole number with a decimal point before its last `decimals` digits. */
-  private digits(whole: number, decimals: number): void {
+  /** A whole number of at most nine digits with a decimal point before its last `decimals` digits. */
+  private digits(isNegative: boolean, whole: number, decimals: number): void {
     let places = decimals + 1;
-    for (let rest = Math.floor(whole / 10 ** places); rest > 0; rest = Math.floor(rest / 10)) places += 1;
-    const width = places + (decimals > 0 ? 1 : 0);
+    while (places < 10 && whole >= (powersOfTen[places] ?? 0)) places += 1;
+    const width = (isNegative ? 1 : 0) + places + (decimals > 0 ? 1 : 0);
     this.reserve(width);
-    let rest = whole;
-    for (let at = width - 1; at >= 0; at -= 1) {
-      if (decimals > 0 && at === width - 1 - decimals) this.bytes[this.length + at] = POINT;
+    const { bytes } = this;
+    let at = this.length + width;
+    const point = decimals > 0 ? at - 1 - decimals : -1;
+    let rest = whole | 0;
+    for (let left = places; left > 0;) {
+      at -= 1;
+      if (at === point) bytes[at] = POINT;
       else {
-        this.bytes[this.length + at] = ZERO + (rest % 10);
-        rest = Math.floor(rest / 10);
+        const shorter = (rest / 10) | 0;
+        bytes[at] = ZERO + rest - shorter * 10;
+        rest = shorter;
+        left -= 1;
       }
     }
+    if (isNegative) bytes[at - 1] = MINUS;
     this.length += width;
   }
 

@@ -179,6 +179,25 @@ testRules([
     ],
   },
   {
+    rule: 'F38',
+    source: registryRule,
+    breaks: [
+      {
+        when: 'a code that the site has replaced, new to the registry or not',
+        rows: month({ exams: [exam()] }),
+        registry: registry({}, { replaced: new Set([someone]) }),
+        at: ['participants 2 participant', 'consents 2 participant', 'exams 2 participant'],
+      },
+    ],
+    holds: [
+      {
+        when: 'codes in use beside a replaced one',
+        rows: month({ exams: [exam()] }),
+        registry: registry({}, { replaced: new Set([someoneElse]) }),
+      },
+    ],
+  },
+  {
     rule: 'F33',
     source: 'rule of this registry against people entered twice',
     breaks: [
