@@ -2,6 +2,7 @@
 import { randomUUID } from 'node:crypto';
 import type { Submission, SubmissionReceipt } from '@cairnstep/contract';
 import type { TableKey } from '@cairnstep/dictionary';
+import type { PoolClient } from 'pg';
 import type { Tx } from '../../database/as-actor.ts';
 import type { FileKey } from './file-key.ts';
 import { clearAllMends, clearMends } from './mends.repository.ts';
@@ -154,15 +155,29 @@ export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
 
 const contentPieceBytes = 1 << 20;
 
-/** Piece by piece: PostgreSQL sends bytes as text of twice their number, all of which would have to be held. */
+/** Bytes as they are: as text they would be twice as many, to be turned back one by one. */
+const asSent = { getTypeParser: () => (value: Buffer) => value };
+
+/** Piece by piece, so that memory does not grow with the file; the next is on its way while this one is worked on. */
 export async function* readContent(tx: Tx, id: string, file: FileKey): AsyncGenerator<Uint8Array> {
-  for (let from = 1; ; from += contentPieceBytes) {
-    const [row] = (await tx.query(
-      'select substring(content from $3 for $4) as piece from submission_files where submission_id = $1 and table_key = $2',
-      [id, file, from, contentPieceBytes],
-    )) as { piece: Buffer | null }[];
-    if (!row?.piece?.length) return;
-    yield row.piece;
+  const client = (await tx.queryRunner?.connect()) as PoolClient;
+  const fetch = async (from: number): Promise<Buffer | undefined> => {
+    const { rows } = await client.query<{ piece: Buffer | null }>({
+      text: 'select substring(content from $3 for $4) as piece from submission_files where submission_id = $1 and table_key = $2',
+      values: [id, file, from, contentPieceBytes],
+      binary: true,
+      types: asSent,
+    });
+    return rows[0]?.piece ?? undefined;
+  };
+  let next = fetch(1);
+  for (let from = 1 + contentPieceBytes; ; from += contentPieceBytes) {
+    const piece = await next;
+    if (!piece?.length) return;
+    next = fetch(from);
+    // Whoever stops reading early does not wait for it.
+    next.catch(() => undefined);
+    yield piece;
   }
 }
 
