@@ -114,12 +114,12 @@ test('reads by file, line and column what to mend, and nothing enters the regist
   await look(page, 'coordinator-findings');
 
   const download = page.waitForEvent('download');
-  await page.getByRole('button', { name: 'Download the findings as CSV' }).click();
+  await page.getByRole('link', { name: 'Download the findings as CSV' }).click();
   const found = (await readFile(await (await download).path(), 'utf8')).split('\r\n');
   for (const { what, table, line, column, rule } of planted) {
     const place = `${tableOf(table).name},${line ?? ''},${column ?? ''},`;
     expect(
-      found.some((row) => row.startsWith(place) && row.includes(`,${rule},`)),
+      found.some((row) => row.includes(`,${rule},${place}`)),
       `${what}: ${place} ${rule}`,
     ).toBe(true);
   }
@@ -136,6 +136,17 @@ test('reads by file, line and column what to mend, and nothing enters the regist
   await expect(
     page.getByRole('row', { name: new RegExp(`^${tableOf(mistake.table).name} ${mistake.line} ${mistake.column} `) }),
   ).toBeVisible();
+
+  const table = tableOf(mistake.table);
+  const variable = table.variables.find(({ key }) => key === mistake.column);
+  if (variable?.plausible === undefined) throw new Error('Nobody knows a plausible value for the mistaken cell.');
+  await page.getByRole('button', { name: `Mend ${mistake.column} in line ${mistake.line} of ${table.name.toLowerCase()}` }).click();
+  await page.getByRole('textbox', { name: `New value of ${mistake.column}, line ${mistake.line}` }).fill(String(variable.plausible.min));
+  await look(page, 'coordinator-mending');
+  await page.getByRole('button', { name: 'Apply 1 change and check again' }).click();
+  await expect(page.getByText('1 cell mended on screen')).toBeVisible();
+  await expect(page.getByText(/^\d+ errors and \d+ warnings found\./)).toBeVisible();
+  await expect(page.getByRole('link', { name: 'of rule F21' })).toBeHidden();
 
   await expect(page.getByText('The errors above keep the month out. Nothing has entered the registry.')).toBeVisible();
   await expect(page.getByRole('button', { name: `Commit ${month}` })).toBeHidden();

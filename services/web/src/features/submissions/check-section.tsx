@@ -79,7 +79,7 @@ function outcomeWords(submission: Submission): string {
   const warnings = placesOf(submission, 'warning');
   if (errors > 0) {
     const also = warnings > 0 ? ` and ${formatCount(warnings, 'warning')}` : '';
-    return `${formatCount(errors, 'error')}${also} found. Mend the rows in your files, send them again and check once more.`;
+    return `${formatCount(errors, 'error')}${also} found. Mend the cells below or the rows in your files, and check once more.`;
   }
   if (warnings > 0) return `No errors. ${formatCount(warnings, 'warning')} to look at before you can commit.`;
   return 'Nothing was found. Look at what would change, then commit.';

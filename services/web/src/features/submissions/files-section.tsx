@@ -8,6 +8,7 @@ import { Section } from '../../ui/page.tsx';
 import type { Outgoing } from './outgoing-files.ts';
 import { OutgoingList } from './outgoing-list.tsx';
 import { SentFiles } from './sent-files.tsx';
+import { TemplateLink } from './template-link.tsx';
 
 export interface FilesSectionProps {
   readonly submission: Submission;
@@ -22,12 +23,18 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
       id="files"
       note={
         <>
-          <p>One CSV file a table, with the columns of the template. Which table a file is of is read from its name; you can change it.</p>
           <p>
-            A table without a file stays as it is. In a file that you send, rows of this month that the registry has and the file has not
-            are removed, after you have seen them. People and consents are only added or changed.
+            One workbook with a sheet for each table, as in the template; or one CSV file a table. Which table a CSV file is of is read from
+            its name; you can change it.
           </p>
-          <p>Participant codes and study days only: no names, no record numbers, no dates.</p>
+          <p>
+            A table without a file, or with an empty sheet, stays as it is. In a file that you send, rows of this month that the registry
+            has and the file has not are removed, after you have seen them. People and consents are only added or changed.
+          </p>
+          <p>
+            Participant codes and study days only: no names, no record numbers, no dates. The registry looks again, and keeps no file with
+            any of them. Of a workbook only the cells are kept.
+          </p>
         </>
       }
     >
@@ -51,15 +58,20 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
         )}
         {isOpen && (
           <FileDrop
-            label={`The files are already prepared: CSV files of ${formatMonth(submission.month)}`}
+            label={`The files are already prepared: workbook or CSV files of ${formatMonth(submission.month)}`}
             hint="Drop them here, all tables of the month at once or one by one."
-            accept={['.csv']}
+            accept={['.xlsx', '.csv']}
             multiple
             isDisabled={outgoing.isSending}
             onFiles={outgoing.add}
           />
         )}
-        <OutgoingList outgoing={outgoing} held={submission.files.flatMap(({ table }) => (table === null ? [] : [table]))} />
+        {isOpen && (
+          <div>
+            <TemplateLink site={submission.site} month={submission.month} />
+          </div>
+        )}
+        <OutgoingList outgoing={outgoing} held={submission.files.map(({ table }) => table ?? 'workbook')} />
         <SentFiles submission={submission} isOpen={isOpen && !outgoing.isSending} onChoose={outgoing.add} />
       </div>
     </Section>

@@ -11,14 +11,17 @@ import type { SelectOption } from '../../ui/select.tsx';
 import { Table } from '../../ui/table.tsx';
 import type { Column } from '../../ui/table.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
+import { ApplyMends } from './apply-mends.tsx';
+import { MendCell } from './mend-cell.tsx';
+import type { MendDrafts } from './mend-drafts.ts';
 import { findingsQuery } from './submissions.queries.ts';
 import type { FindingFilter } from './submissions.queries.ts';
 import { isColumn, tableName, tables } from './table-names.ts';
 
 export type Place = ResponseOf<typeof listFindings>['items'][number];
 
-/** The cells of one place; also the columns of the download. */
-export const placeColumns: readonly Column<Place>[] = [
+/** The cells of one place. */
+const placeColumns: readonly Column<Place>[] = [
   { key: 'table', header: 'Table', value: ({ table }) => tableName(table) },
   {
     key: 'line',
@@ -54,12 +57,34 @@ function ColumnKey({ table, column }: { readonly table: Place['table']; readonly
   return isColumn(table, column) ? <TextLink to={`/dictionary/${table}/${column}`}>{key}</TextLink> : key;
 }
 
-export function FindingPlaces({ submission, caption }: { readonly submission: Submission; readonly caption: string }) {
+export interface FindingPlacesProps {
+  readonly submission: Submission;
+  readonly caption: string;
+  /** Values typed in place of cells; null for whoever only looks. */
+  readonly drafts: MendDrafts | null;
+}
+
+export function FindingPlaces({ submission, caption, drafts }: FindingPlacesProps) {
   const filter = useFilter();
   const page = usePageNumber();
   const query = useQuery(findingsQuery(submission.id, filter, page));
   return (
-    <Section id="places" title="Places in the files" note={<p>Line 1 is the header, as an editor counts.</p>} wide>
+    <Section
+      id="places"
+      title="Places in the files"
+      note={
+        <>
+          <p>Line 1 is the header, as an editor counts.</p>
+          {drafts !== null && (
+            <p>
+              A cell can be mended here: Enter goes on to the next one, Escape takes back what you typed. The file at the clinic stays as it
+              is, so mend it there too.
+            </p>
+          )}
+        </>
+      }
+      wide
+    >
       <Landing name="places" label="Places in the files" />
       <div className="grid gap-4">
         <Filters submission={submission} filter={filter} />
@@ -69,7 +94,7 @@ export function FindingPlaces({ submission, caption }: { readonly submission: Su
               <Table
                 id="places"
                 caption={caption}
-                columns={placeColumns}
+                columns={drafts === null ? placeColumns : [...placeColumns, mendColumn(drafts, items)]}
                 rows={items}
                 rowKey={({ id }) => String(id)}
                 isSortable={false}
@@ -79,9 +104,27 @@ export function FindingPlaces({ submission, caption }: { readonly submission: Su
             </div>
           )}
         </Answer>
+        {drafts !== null && <ApplyMends submission={submission} drafts={drafts} />}
       </div>
     </Section>
   );
+}
+
+/** One field for each cell, however many findings name it. */
+function mendColumn(drafts: MendDrafts, items: readonly Place[]): Column<Place> {
+  const first = new Map<string, number>();
+  for (const { id, table, line, column } of [...items].reverse()) first.set(`${table} ${line} ${column}`, id);
+  return {
+    key: 'mend-here',
+    header: 'New value',
+    value: () => null,
+    isAct: true,
+    cell: ({ id, table, line, column }) => {
+      if (table === null || line === null || line < 2 || column === null || !isColumn(table, column)) return null;
+      if (first.get(`${table} ${line} ${column}`) !== id) return <span className="text-quiet">as above</span>;
+      return <MendCell place={{ table, line, column }} drafts={drafts} />;
+    },
+  };
 }
 
 function useFilter(): FindingFilter {

@@ -7,6 +7,7 @@ import { Section } from '../../ui/page.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { DownloadFindings } from './download-findings.tsx';
 import { FindingPlaces } from './finding-places.tsx';
+import type { MendDrafts } from './mend-drafts.ts';
 import { ReasonForm } from './reason-form.tsx';
 import type { ReasonDrafts } from './reason-form.tsx';
 import { openWarnings, placesOf } from './stack-steps.ts';
@@ -17,9 +18,10 @@ export interface FindingsSectionProps {
   readonly submission: Submission;
   readonly isCoordinator: boolean;
   readonly drafts: ReasonDrafts;
+  readonly mends: MendDrafts;
 }
 
-export function FindingsSection({ submission, isCoordinator, drafts }: FindingsSectionProps) {
+export function FindingsSection({ submission, isCoordinator, drafts, mends }: FindingsSectionProps) {
   const { findings } = submission;
   if (findings.length === 0) return null;
   const errors = findings.filter(({ severity }) => severity === 'error');
@@ -54,7 +56,11 @@ export function FindingsSection({ submission, isCoordinator, drafts }: FindingsS
           <DownloadFindings submission={submission} name={`${submission.site.code}-${submission.month}-findings`} />
         </div>
       </Section>
-      <FindingPlaces submission={submission} caption={`Findings of ${formatMonth(submission.month)}`} />
+      <FindingPlaces
+        submission={submission}
+        caption={`Findings of ${formatMonth(submission.month)}`}
+        drafts={isCoordinator ? mends : null}
+      />
     </>
   );
 }

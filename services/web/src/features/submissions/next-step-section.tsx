@@ -8,6 +8,7 @@ import { TextLink } from '../../ui/text-link.tsx';
 import { CloseMonth } from './close-month.tsx';
 import { nextStep } from './months.ts';
 import type { Month, NextStep } from './months.ts';
+import { TemplateLink } from './template-link.tsx';
 
 export interface NextStepSectionProps {
   readonly site: Site;
@@ -39,6 +40,7 @@ export function NextStepSection({ site, months, isCoordinator, opening, onOpen, 
       <div className="grid justify-items-start gap-4">
         {next === null ? <NothingDue months={months} /> : <Due next={next} />}
         {next !== null && isCoordinator && <Act site={site} next={next} isOpening={opening === next.month.month} onOpen={onOpen} />}
+        {next !== null && isCoordinator && <TemplateLink site={site} month={next.month.month} />}
         {next !== null && !isCoordinator && <p className="text-quiet">The site coordinator submits. You can follow it here.</p>}
         {children}
       </div>

@@ -1,15 +1,15 @@
 /** Files chosen in this browser that the registry does not have yet. */
 import { useCallback, useRef, useState } from 'react';
 import { useStayOnPage } from '../../lib/use-stay-on-page.ts';
-import { recogniseTable } from './recognise-table.ts';
+import { recogniseFile } from './recognise-table.ts';
 import { useSendFile } from './submissions.queries.ts';
-import type { TableKey } from './submissions.queries.ts';
+import type { FileKey, TableKey } from './submissions.queries.ts';
 
 export interface OutgoingFile {
   readonly id: number;
   readonly file: File;
   /** `null`: its name does not tell; the reader has to. */
-  readonly table: TableKey | null;
+  readonly table: FileKey | null;
   /** How much has left, from 0 to 1; `null` while it waits. */
   readonly sent: number | null;
   readonly error: unknown;
@@ -19,7 +19,7 @@ export interface Outgoing {
   readonly files: readonly OutgoingFile[];
   readonly isSending: boolean;
   /** `table`: what the reader said the files are of; without it their names decide. */
-  readonly add: (files: readonly File[], table?: TableKey) => void;
+  readonly add: (files: readonly File[], table?: FileKey) => void;
   readonly move: (id: number, table: TableKey) => void;
   readonly leaveOut: (id: number) => void;
   /** One after the other; a file that fails stays here with its reason. Resolves to how many arrived. */
@@ -33,11 +33,11 @@ export function useOutgoingFiles(submissionId: string): Outgoing {
   const nextId = useRef(0);
   const { mutateAsync } = useSendFile(submissionId);
 
-  const add = useCallback((chosen: readonly File[], table?: TableKey) => {
+  const add = useCallback((chosen: readonly File[], table?: FileKey) => {
     const added = chosen.map((file) => ({
       id: nextId.current++,
       file,
-      table: table ?? recogniseTable(file.name),
+      table: table ?? recogniseFile(file.name),
       sent: null,
       error: null,
     }));
@@ -87,5 +87,8 @@ export function obstacleOf(files: readonly OutgoingFile[]): string | null {
   const without = files.find(({ table }) => table === null);
   if (without !== undefined) return `Choose the table of ${without.file.name}.`;
   const twice = files.find(({ id, table }) => files.some((other) => other.id !== id && other.table === table));
-  return twice === undefined ? null : `Two files are for the same table. Move one of them, or leave it out.`;
+  if (twice === undefined) return null;
+  return twice.table === 'workbook'
+    ? 'A month has one workbook. Leave out one of the two.'
+    : 'Two files are for the same table. Move one of them, or leave it out.';
 }

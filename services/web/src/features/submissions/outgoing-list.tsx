@@ -9,15 +9,15 @@ import { Select } from '../../ui/select.tsx';
 import { beginCheckId } from './check-section.tsx';
 import { obstacleOf } from './outgoing-files.ts';
 import type { Outgoing, OutgoingFile } from './outgoing-files.ts';
-import type { TableKey } from './submissions.queries.ts';
+import type { FileKey, TableKey } from './submissions.queries.ts';
 import { tables } from './table-names.ts';
 
 const options = tables.map(({ key, name }) => ({ value: key, label: name }));
 
 export interface OutgoingListProps {
   readonly outgoing: Outgoing;
-  /** Tables the registry has a file of. */
-  readonly held: readonly TableKey[];
+  /** Files the registry has. */
+  readonly held: readonly FileKey[];
 }
 
 export function OutgoingList({ outgoing, held }: OutgoingListProps) {
@@ -72,15 +72,24 @@ function OneFile({ file: { id, file, table, sent, error }, outgoing, replaces }:
       {sent === null ? (
         <div className="flex flex-wrap items-end gap-x-4 gap-y-2">
           <div className="w-full max-w-72">
-            <Select
-              id={`table-of-${id}`}
-              label={file.name}
-              hint={replaces && table !== null ? `${size}, replaces the file sent before` : size}
-              placeholder="Choose its table"
-              value={table}
-              options={options}
-              onChange={(key) => outgoing.move(id, key as TableKey)}
-            />
+            {table === 'workbook' ? (
+              <p className="grid">
+                <span className="font-semibold break-all">{file.name}</span>
+                <span className="text-small text-quiet">
+                  {size}, a workbook: each of its sheets is a table{replaces && '. It replaces the one sent before'}
+                </span>
+              </p>
+            ) : (
+              <Select
+                id={`table-of-${id}`}
+                label={file.name}
+                hint={replaces && table !== null ? `${size}, replaces the file sent before` : size}
+                placeholder="Choose its table"
+                value={table}
+                options={options}
+                onChange={(key) => outgoing.move(id, key as TableKey)}
+              />
+            )}
           </div>
           <Button variant="quiet" onPress={() => outgoing.leaveOut(id)} aria-label={`Leave out ${file.name}`}>
             Leave out

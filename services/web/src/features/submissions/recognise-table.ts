@@ -1,5 +1,5 @@
 /** Which table a file is of, by its name. */
-import type { TableKey } from './submissions.queries.ts';
+import type { FileKey, TableKey } from './submissions.queries.ts';
 
 const words: readonly (readonly [TableKey, RegExp])[] = [
   ['participants', /\bparticipants?\b/],
@@ -21,3 +21,8 @@ export function recogniseTable(fileName: string): TableKey | null {
   const [first, ...others] = words.filter(([, word]) => word.test(name));
   return first === undefined || others.length > 0 ? null : first[0];
 }
+
+export const isWorkbook = (fileName: string): boolean => /\.xlsx$/i.test(fileName);
+
+/** The workbook by its ending, else the table by its name. */
+export const recogniseFile = (fileName: string): FileKey | null => (isWorkbook(fileName) ? 'workbook' : recogniseTable(fileName));

@@ -1,4 +1,4 @@
-/** All tables of a month, with the file the registry has of each. */
+/** The files that the registry has of the month, and the tables it has none of. */
 import type { Submission } from '@cairnstep/contract';
 import { FileTrigger } from 'react-aria-components/FileTrigger';
 import { formatBytes, formatCount } from '../../lib/format.ts';
@@ -6,8 +6,8 @@ import { announce } from '../../ui/announcer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ErrorNotice } from '../../ui/error-notice.tsx';
 import { useRemoveFile } from './submissions.queries.ts';
-import type { TableKey } from './submissions.queries.ts';
-import { tables } from './table-names.ts';
+import type { FileKey } from './submissions.queries.ts';
+import { tableName, tables } from './table-names.ts';
 
 type SentFile = Submission['files'][number];
 
@@ -15,64 +15,86 @@ export interface SentFilesProps {
   readonly submission: Submission;
   /** Files may come and go now. */
   readonly isOpen: boolean;
-  readonly onChoose: (files: readonly File[], table: TableKey) => void;
+  readonly onChoose: (files: readonly File[], table: FileKey) => void;
 }
 
-export function SentFiles({ submission, isOpen, onChoose }: SentFilesProps) {
-  const remove = useRemoveFile(submission.id);
-  const takeOut = (table: TableKey, name: string) =>
-    remove.mutate(table, { onSuccess: () => announce(`The file of ${name.toLowerCase()} was taken out.`) });
+/** The tables in their order, the workbook before them. */
+const inOrder = (files: readonly SentFile[]): readonly SentFile[] =>
+  [null, ...tables.map(({ key }) => key)].flatMap((key) => files.filter(({ table }) => table === key));
+
+export function SentFiles({ submission: { id, files }, isOpen, onChoose }: SentFilesProps) {
+  const remove = useRemoveFile(id);
+  const takeOut = (file: FileKey, name: string) =>
+    remove.mutate(file, { onSuccess: () => announce(`${name.slice(0, 1).toUpperCase()}${name.slice(1)} was taken out.`) });
+  const held = new Set(files.flatMap(({ table, tables: of }) => of ?? (table === null ? [] : [table])));
+  const missing = tables.filter(({ key }) => !held.has(key)).map(({ name }) => name.toLowerCase());
+  // What a workbook holds is known after the check.
+  const isKnown = files.every(({ tables: of }) => of !== null);
   return (
     <div className="grid gap-3">
-      <ul aria-label="Tables of the month">
-        {tables.map(({ key, name }) => {
-          const sent = submission.files.find(({ table }) => table === key);
-          return (
-            <li
-              key={key}
-              className="grid gap-x-4 border-t border-hairline py-2 last:border-b sm:grid-cols-[140px_minmax(0,1fr)_auto] sm:items-center"
-            >
-              <span className="font-semibold">{name}</span>
-              {sent === undefined ? <span className="text-quiet">no file</span> : <FileFacts file={sent} />}
-              {isOpen && (
-                <span className="flex flex-wrap gap-x-4">
-                  <FileTrigger acceptedFileTypes={['.csv']} onSelect={(files) => onChoose([...(files ?? [])], key)}>
-                    <Button
-                      variant="quiet"
-                      aria-label={
-                        sent === undefined ? `Choose the file of ${name.toLowerCase()}` : `Replace the file of ${name.toLowerCase()}`
-                      }
+      {files.length > 0 && (
+        <ul aria-label="Files sent">
+          {inOrder(files).map((file) => {
+            const key = file.table ?? 'workbook';
+            const name = key === 'workbook' ? 'the workbook' : `the file of ${tableName(key).toLowerCase()}`;
+            return (
+              <li
+                key={key}
+                className="grid gap-x-4 border-t border-hairline py-2 last:border-b sm:grid-cols-[140px_minmax(0,1fr)_auto] sm:items-center"
+              >
+                <span className="font-semibold">{tableName(file.table)}</span>
+                <FileFacts file={file} />
+                {isOpen && (
+                  <span className="flex flex-wrap gap-x-4">
+                    <FileTrigger
+                      acceptedFileTypes={key === 'workbook' ? ['.xlsx'] : ['.csv']}
+                      onSelect={(chosen) => onChoose([...(chosen ?? [])], key)}
                     >
-                      {sent === undefined ? 'Choose' : 'Replace'}
-                    </Button>
-                  </FileTrigger>
-                  {sent !== undefined && (
+                      <Button variant="quiet" aria-label={`Replace ${name}`}>
+                        Replace
+                      </Button>
+                    </FileTrigger>
                     <Button
                       variant="quiet"
                       isPending={remove.isPending && remove.variables === key}
                       onPress={() => takeOut(key, name)}
-                      aria-label={`Take out the file of ${name.toLowerCase()}`}
+                      aria-label={`Take out ${name}`}
                     >
                       Take out
                     </Button>
-                  )}
-                </span>
-              )}
-            </li>
-          );
-        })}
-      </ul>
+                  </span>
+                )}
+              </li>
+            );
+          })}
+        </ul>
+      )}
+      {isKnown && missing.length > 0 && (
+        <p className="text-quiet">{files.length === 0 ? 'No file yet.' : `No file yet for: ${missing.join(', ')}.`}</p>
+      )}
       {remove.isError && <ErrorNotice error={remove.error} />}
     </div>
   );
 }
 
-function FileFacts({ file: { fileName, bytes, rows, sha256 } }: { readonly file: SentFile }) {
+function FileFacts({ file: { table, tables: of, fileName, bytes, rows, sha256, mended, refused } }: { readonly file: SentFile }) {
+  if (refused) {
+    return (
+      <span className="grid">
+        <span className="break-all">{fileName}</span>
+        <span className="font-semibold text-oxide">
+          Not kept: it held something that identifies a person, or could not be read to its end. Send it again or take it out.
+        </span>
+      </span>
+    );
+  }
   return (
     <span className="grid">
       <span className="break-all">{fileName}</span>
+      {table === null && of !== null && <span>{of.map(tableName).join(', ')}</span>}
       <span className="numbers text-small text-quiet">
-        {formatBytes(bytes)}, {rows === null ? 'rows not counted yet' : formatCount(rows, 'row')}, SHA-256{' '}
+        {formatBytes(bytes)}, {rows === null ? 'rows not counted yet' : formatCount(rows, 'row')}
+        {mended > 0 && `, ${formatCount(mended, 'cell')} mended on screen`}, SHA-256{' '}
         <code>
           {sha256.slice(0, 12)}
           <span aria-hidden="true">…</span>

@@ -11,9 +11,12 @@ import {
   listFindings,
   listMonths,
   listSubmissions,
+  mendCells,
   openSubmission,
   putSubmissionFile,
+  putSubmissionWorkbook,
   removeSubmissionFile,
+  removeSubmissionWorkbook,
 } from '@cairnstep/contract';
 import type { CallOf, Submission } from '@cairnstep/contract';
 import type { TableKey } from '@cairnstep/dictionary';
@@ -101,7 +104,13 @@ export function useCloseMonth(siteId: string) {
   });
 }
 
-export const useRemoveFile = (submissionId: string) => useChange((table: TableKey) => call(removeSubmissionFile, { submissionId, table }));
+/** A CSV file is of one table, the workbook of several. */
+export type FileKey = TableKey | 'workbook';
+
+export const useRemoveFile = (submissionId: string) =>
+  useChange((file: FileKey) =>
+    file === 'workbook' ? call(removeSubmissionWorkbook, { submissionId }) : call(removeSubmissionFile, { submissionId, table: file }),
+  );
 
 export const useCheck = (submissionId: string) => useChange((_: void) => call(checkSubmission, { submissionId }));
 
@@ -110,10 +119,28 @@ export const useAcknowledge = (submissionId: string) =>
     call(acknowledgeFindings, { submissionId, rule, reason }),
   );
 
+const mendsAtATime = 1_000;
+
+/** Puts values in place of cells and has the files checked again. */
+export function useMendAndCheck(submissionId: string) {
+  const cache = useQueryClient();
+  return useChange(async (mends: readonly CallOf<typeof mendCells>['mends'][number][]) => {
+    let mended: Submission | null = null;
+    for (let from = 0; from < mends.length; from += mendsAtATime)
+      mended = await call(mendCells, { submissionId, mends: mends.slice(from, from + mendsAtATime) });
+    try {
+      return await call(checkSubmission, { submissionId });
+    } catch (error) {
+      if (mended !== null) keep(cache, mended);
+      throw error;
+    }
+  });
+}
+
 export const useDiscard = (submissionId: string) => useChange((_: void) => call(discardSubmission, { submissionId }));
 
 export interface FileToSend {
-  readonly table: TableKey;
+  readonly table: FileKey;
   readonly file: File;
   readonly signal: AbortSignal;
   readonly onSent: (part: number) => void;
@@ -121,7 +148,9 @@ export interface FileToSend {
 
 export const useSendFile = (submissionId: string) =>
   useChange(({ table, file, signal, onSent }: FileToSend) =>
-    call(putSubmissionFile, { submissionId, table, fileName: file.name }, { file, signal, onSent }),
+    table === 'workbook'
+      ? call(putSubmissionWorkbook, { submissionId, fileName: file.name }, { file, signal, onSent })
+      : call(putSubmissionFile, { submissionId, table, fileName: file.name }, { file, signal, onSent }),
   );
 
 export function useCommit(submissionId: string) {

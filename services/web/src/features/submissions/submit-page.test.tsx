@@ -94,13 +94,46 @@ describe('files of a month', () => {
     expect(left[0]?.textContent).toContain('sessions.csv');
   });
 
-  it('are listed with size, rows and digest, and can be taken out', async () => {
-    const { asked } = open(checked({ files: [fileOf('sessions', 1_204)] }), { [`DELETE ${path}/files/sessions`]: sample() });
-    const tables = await screen.findByRole('list', { name: 'Tables of the month' });
-    expect(tables.textContent).toContain('2.4\u00A0kB, 1\u202F204 rows, SHA-256 abababababab');
+  it('are listed with size, rows and digest beside the tables that have none, and can be taken out', async () => {
+    const { asked } = open(checked({ files: [{ ...fileOf('sessions', 1_204), mended: 2 }] }), {
+      [`DELETE ${path}/files/sessions`]: sample(),
+    });
+    const files = await screen.findByRole('list', { name: 'Files sent' });
+    expect(files.textContent).toContain('2.4\u00A0kB, 1\u202F204 rows, 2 cells mended on screen, SHA-256 abababababab');
+    expect(within(files).getAllByRole('listitem')).toHaveLength(1);
+    expect(screen.getByText(/^No file yet for: participants, consents, /).textContent).not.toMatch(/\bsessions\b/);
     await press('Take out the file of sessions');
-    expect(await screen.findByRole('button', { name: 'Choose the file of sessions' })).toBeTruthy();
+    expect(await screen.findByText('No file yet.')).toBeTruthy();
     expect(asked.some(({ method }) => method === 'DELETE')).toBe(true);
+  });
+
+  it('may be one workbook, whose tables are known after the check', async () => {
+    const sent = { ...fileOf('sessions'), table: null, tables: null, fileName: 'month.xlsx' };
+    const { asked } = open(sample(), {
+      [`PUT ${path}/workbook`]: sample({ files: [sent] }),
+      [`DELETE ${path}/workbook`]: sample(),
+    });
+    await choose(new File(['PK'], 'month.xlsx'));
+    expect(screen.getByText(/a workbook: each of its sheets is a table/)).toBeTruthy();
+    await press('Send 1 file');
+    await waitFor(() => expect(puts(asked)).toEqual(['/workbook?fileName=month.xlsx']));
+    expect((await screen.findByRole('list', { name: 'Files sent' })).textContent).toContain('month.xlsx');
+    expect(screen.queryByText(/^No file yet/)).toBeNull();
+    await press('Take out the workbook');
+    expect(await screen.findByText('No file yet.')).toBeTruthy();
+  });
+
+  it('that were not kept say why and what to do', async () => {
+    open(checked({ files: [{ ...fileOf('sessions'), refused: true }] }));
+    expect((await screen.findByRole('list', { name: 'Files sent' })).textContent).toContain(
+      'Not kept: it held something that identifies a person',
+    );
+  });
+
+  it('can begin with the template of the month', async () => {
+    open(sample());
+    const link = await screen.findByRole('link', { name: 'Download the template of November 2026' });
+    expect(link.getAttribute('href')).toBe(`/api/sites/${sample().site.id}/template?month=2026-11`);
   });
 
   it('come with the caution that the clinic’s protocol is first', async () => {
@@ -166,6 +199,13 @@ describe('findings', () => {
     expect(screen.getByRole('link', { name: 'pain_post' }).getAttribute('href')).toBe('/dictionary/sessions/pain_post');
     const question = new URLSearchParams(asked.find(({ path: at }) => at.endsWith('/findings'))?.search);
     expect(Object.fromEntries(question)).toEqual({ table: 'sessions', severity: 'error', page: '2' });
+  });
+
+  it('can be taken along as a list and in the cells of the files', async () => {
+    open(withFindings);
+    const link = async (name: RegExp) => (await screen.findByRole('link', { name })).getAttribute('href');
+    expect(await link(/^Download the findings as CSV/)).toBe(`${path}/findings.csv`);
+    expect(await link(/findings in their cells/)).toBe(`${path}/findings.xlsx`);
   });
 
   it('ask for no reason while errors would begin them anew', async () => {

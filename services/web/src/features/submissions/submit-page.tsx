@@ -16,6 +16,7 @@ import { maySubmit } from './chosen-site.tsx';
 import { CommitSection } from './commit-section.tsx';
 import { FilesSection } from './files-section.tsx';
 import { FindingsSection } from './findings-section.tsx';
+import { useMendDrafts } from './mend-drafts.ts';
 import { useOutgoingFiles } from './outgoing-files.ts';
 import { ReviewSection } from './review-section.tsx';
 import { stackSteps } from './stack-steps.ts';
@@ -46,6 +47,7 @@ function Submit({ submission, isCutOff }: { readonly submission: Submission; rea
   const outgoing = useOutgoingFiles(submission.id);
   const [isStale, setStale] = useState(false);
   const drafts = useReasonDrafts();
+  const mends = useMendDrafts(submission);
   const unsent = outgoing.files.length;
   const month = formatMonth(submission.month);
   const isSettled = status === 'accepted' || status === 'superseded' || status === 'discarded';
@@ -90,7 +92,7 @@ function Submit({ submission, isCutOff }: { readonly submission: Submission; rea
           />
           {status === 'checked' && (
             <>
-              <FindingsSection submission={submission} isCoordinator={isCoordinator} drafts={drafts} />
+              <FindingsSection submission={submission} isCoordinator={isCoordinator} drafts={drafts} mends={mends} />
               <ReviewSection submission={submission} />
             </>
           )}
