@@ -120,6 +120,7 @@ describe('an id of somebody else', () => {
   );
   /** Valid bodies where the body is read before the row is looked for. */
   const bodies: Partial<Record<EndpointName, () => object>> = {
+    replaceCodes: () => ({ codes: [{ from: `S${'0'.repeat(21)}`, to: `S${'1'.repeat(21)}` }] }),
     openSubmission: () => ({ siteId: siteB.id, month: '2026-01' }),
     mendCells: () => ({ mends: [{ table: 'bouts', line: 2, column: 'steps', value: '40' }] }),
     acknowledgeFindings: () => ({ rule: 'C01', reason: 'it is right' }),

@@ -35,6 +35,7 @@ const siteTables = [
   'submission_mends',
   'row_history',
   'month_closures',
+  'replaced_codes',
   'course_facts',
   'outcome_facts',
   ...tableKeys,
@@ -96,6 +97,7 @@ async function fillSite(siteId: string): Promise<void> {
     before: '{}',
     submission_id: submission,
   });
+  await insert('replaced_codes', { site_id: siteId, from_code: 'P', to_code: 'Q', replaced_by: randomUUID(), replaced_at: new Date() });
   await insert('month_closures', { site_id: siteId, month: '2025-02', closed_by: randomUUID(), closed_at: new Date() });
   await insert('course_facts', {
     site_id: siteId,
@@ -183,6 +185,7 @@ async function otherRow(table: string, siteId: string): Promise<string> {
   for (const column of ['participant', 'row_key']) if (column in row) row[column] = column === 'row_key' ? {} : 'OTHER';
   if (table.startsWith('sub')) row[table === 'submissions' ? 'id' : 'submission_id'] = randomUUID();
   if (table === 'row_history') row['id'] = 900_000;
+  if (table === 'replaced_codes') row['from_code'] = 'OTHER';
   if (table === 'month_closures') row['month'] = '2025-03';
   if (table.startsWith('staged_')) row['line'] = 3;
   return JSON.stringify(row);
@@ -207,6 +210,18 @@ describe('headers marked as safe', () => {
     const unmark = (actor: Actor) =>
       asActor(database.app, actor, async (tx) => ((await tx.query('delete from safe_headers')) as [unknown, number])[1]);
     for (const actor of [coordinatorA, registry, administrator]) expect(await unmark(actor)).toBe(0);
+  });
+});
+
+describe('the history of rows', () => {
+  it('is changed by nobody but for the codes in its keys, and those only by the people of the site', async () => {
+    for (const actor of [coordinatorA, systemA, steward])
+      await expect(asActor(database.app, actor, (tx) => tx.query("update row_history set before = '{}'"))).rejects.toMatchObject(refused);
+    const replace = (actor: Actor, siteId: string) =>
+      asActor(database.app, actor, (tx) => tx.query("select replace_codes_in_history($1, array['P'], array['Q'])", [siteId]));
+    for (const actor of [therapistA, steward, administrator]) await expect(replace(actor, siteA)).rejects.toMatchObject(refused);
+    for (const actor of [coordinatorA, systemA]) await expect(replace(actor, siteB)).rejects.toMatchObject(refused);
+    await expect(replace(coordinatorA, siteA)).resolves.toEqual([{ replace_codes_in_history: '0' }]);
   });
 });
 

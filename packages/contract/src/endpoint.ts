@@ -18,6 +18,8 @@ export interface Endpoint<
   readonly params?: Params;
   readonly query?: Query;
   readonly body?: Body;
+  /** Largest JSON body in bytes, where the usual 200 kB are too few. */
+  readonly largestBody?: number;
   /** The request body is a file, sent as raw bytes of this type, and `body` is absent. */
   readonly upload?: { readonly contentType: string };
   readonly response: Response;

@@ -5,6 +5,7 @@ import * as explore from './explore.ts';
 import * as health from './health.ts';
 import * as months from './months.ts';
 import * as people from './people.ts';
+import * as replacedCodes from './replaced-codes.ts';
 import * as requests from './requests.ts';
 import * as siteSystems from './site-systems.ts';
 import * as submissions from './submissions.ts';
@@ -29,6 +30,7 @@ export const endpoints = {
   listMonths: months.listMonths,
   listCalendar: months.listCalendar,
   closeMonth: months.closeMonth,
+  replaceCodes: replacedCodes.replaceCodes,
   openSubmission: submissions.openSubmission,
   listSubmissions: submissions.listSubmissions,
   getSubmission: submissions.getSubmission,

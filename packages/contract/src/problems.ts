@@ -28,6 +28,7 @@ export const problems = {
   'month-not-open': { status: 409, title: 'This month cannot be submitted' },
   'month-not-empty': { status: 409, title: 'Something has been submitted for this month' },
   'identifies-somebody': { status: 422, title: 'What was sent could identify a person' },
+  'codes-collide': { status: 409, title: 'Rows of two codes contradict each other' },
   'file-unreadable': { status: 422, title: 'The file could not be read' },
   'request-incomplete': { status: 409, title: 'The request is not complete' },
   'request-not-in-state': { status: 409, title: 'The request has moved on' },

@@ -10,6 +10,7 @@ import { exploreRoutes } from './features/explore/explore.routes.ts';
 import { exportRoutes } from './features/exports/exports.routes.ts';
 import { healthRoutes } from './features/health/health.routes.ts';
 import { monthRoutes } from './features/months/months.routes.ts';
+import { participantCodeRoutes } from './features/participant-codes/participant-codes.routes.ts';
 import { peopleRoutes } from './features/people/people.routes.ts';
 import { requestRoutes } from './features/requests/requests.routes.ts';
 import { makeProvider } from './features/sign-in/provider.ts';
@@ -61,6 +62,7 @@ export function allRoutes(context: Context): Route[] {
     ...peopleRoutes(context),
     ...siteSystemRoutes(context),
     ...monthRoutes(context),
+    ...participantCodeRoutes(context),
     ...submissionRoutes(context),
     ...exploreRoutes(context),
     ...requestRoutes(context),
@@ -119,7 +121,7 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
   for (const { endpoint, handler } of allRoutes(context)) {
     const method = endpoint.method.toLowerCase() as 'get' | 'post' | 'put' | 'delete';
     if (endpoint.upload) app[method](endpoint.path, handler);
-    else app[method](endpoint.path, json, handler);
+    else app[method](endpoint.path, endpoint.largestBody === undefined ? json : express.json({ limit: endpoint.largestBody, strict: true }), handler);
   }
   app.use('/api', () => {
     throw new Refusal('not-found', 'There is nothing at this address, or it is not yours to see.');

@@ -74,6 +74,7 @@ export const entries = {
   listMonths: 'see-submissions',
   listCalendar: 'see-submissions',
   closeMonth: 'submit',
+  replaceCodes: 'submit',
   openSubmission: 'submit',
   listSubmissions: 'see-submissions',
   getSubmission: 'see-submissions',

@@ -3,6 +3,7 @@ import 'reflect-metadata';
 import { DataSource, DefaultNamingStrategy, type Table } from 'typeorm';
 import { CourseFactRow, OutcomeFactRow, ReleaseCourseRow, ReleaseOutcomeRow, ReleaseRow, ReleaseSessionRow } from './entities/facts.ts';
 import { AccountRow, GrantRow, InvitationRow, SiteRow, SiteSystemRow, WebSessionRow } from './entities/people.ts';
+import { ReplacedCodeRow } from './entities/codes.ts';
 import { MonthClosureRow } from './entities/months.ts';
 import { AuditEntryRow, MailMessageRow } from './entities/records.ts';
 import { registrySchemas, stagedSchemas } from './entities/registry.ts';
@@ -38,6 +39,7 @@ export const entities = [
   SafeHeaderRow,
   RowHistoryRow,
   MonthClosureRow,
+  ReplacedCodeRow,
   CourseFactRow,
   OutcomeFactRow,
   ReleaseRow,

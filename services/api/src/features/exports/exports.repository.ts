@@ -1,6 +1,7 @@
 /** The only file that knows the tables of exports, and what a build reads of the registry. */
 import { randomUUID } from 'node:crypto';
 import type { Tx } from '../../database/as-actor.ts';
+import { codeToday } from '../participant-codes/replaced-codes.repository.ts';
 
 export interface ExportRecord {
   readonly id: string;
@@ -83,7 +84,7 @@ export async function countNoLongerConsenting(tx: Tx, exportId: string): Promise
   const [{ count }] = (await tx.query(
     `select count(*)::int as count from export_pseudonyms x where x.export_id = $1 and not exists (
        select from (select distinct on (site_id, participant) site_id, participant, status from consents c
-                     where c.site_id = x.site_id and c.participant = x.participant order by site_id, participant, consent_no desc) newest where newest.status = 'active')`,
+                     where c.site_id = x.site_id and c.participant = ${codeToday('x.site_id', 'x.participant')} order by site_id, participant, consent_no desc) newest where newest.status = 'active')`,
     [exportId],
   )) as [{ count: number }];
   return count;
@@ -111,17 +112,19 @@ export async function readCohort(
   )) as CohortPerson[];
 }
 
-/** The newest consent row of each person, as stored. */
+/** The newest consent row of each person, as stored. People are named as a release names them, whatever code they have had since. */
 export async function readNewestConsents(
   tx: Tx,
   people: readonly { siteId: string; participant: string }[],
 ): Promise<Map<string, Record<string, string | number | null>>> {
   const rows = (await tx.query(
-    `select distinct on (c.site_id, c.participant) to_jsonb(c) as row from consents c
-       join unnest($1::uuid[], $2::text[]) as p(site_id, participant) using (site_id, participant) order by c.site_id, c.participant, c.consent_no desc`,
+    `select distinct on (p.site_id, p.participant) p.site_id, p.participant, to_jsonb(c) as row
+       from unnest($1::uuid[], $2::text[]) as p(site_id, participant)
+       join consents c on c.site_id = p.site_id and c.participant = ${codeToday('p.site_id', 'p.participant')}
+      order by p.site_id, p.participant, c.consent_no desc`,
     [people.map((one) => one.siteId), people.map((one) => one.participant)],
-  )) as { row: Record<string, string | number | null> }[];
-  return new Map(rows.map(({ row }) => [`${row['site_id']} ${row['participant']}`, row]));
+  )) as { site_id: string; participant: string; row: Record<string, string | number | null> }[];
+  return new Map(rows.map(({ site_id: siteId, participant, row }) => [`${siteId} ${participant}`, row]));
 }
 
 type Row = Record<string, string | number | null>;

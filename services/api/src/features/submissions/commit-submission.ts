@@ -8,16 +8,11 @@ import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
+import { lockSite } from '../people/sites.repository.ts';
 import { applyChanges, checkAgain } from './apply-changes.ts';
 import { tableOfFile, tablesOf } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
 import { lockSubmission, readFiles, settle, supersedeEarlier, type SubmissionRecord } from './submissions.repository.ts';
-
-/** Waits for a commit of the same site that is under way, then says what the site's state has become. */
-async function lockSite(tx: Tx, siteId: string): Promise<number> {
-  const [site] = (await tx.query('select revision from sites where id = $1 for update', [siteId])) as [{ revision: number }];
-  return site.revision;
-}
 
 export async function accept(
   tx: Tx,

@@ -2,6 +2,7 @@
 import { tableOf, type Row, type TableKey } from '@cairnstep/dictionary';
 import { tableFromRows, type RegistryContext, type TypedTable, type TypedTables } from '@cairnstep/submission-files';
 import type { Tx } from '../../database/as-actor.ts';
+import { readReplacedCodes } from '../participant-codes/replaced-codes.repository.ts';
 import { monthTables } from './table-sql.ts';
 
 type StoredRow = Readonly<Record<string, string | number | null>>;
@@ -75,7 +76,13 @@ export async function loadRegistryContext(
       where status = 'withdrawn'`,
     [siteId],
   )) as { participant: string }[];
-  return { held, ...(others ? { otherParticipants: others } : {}), withdrawn: new Set(withdrawn.map((row) => row.participant)), year };
+  return {
+    held,
+    ...(others ? { otherParticipants: others } : {}),
+    withdrawn: new Set(withdrawn.map((row) => row.participant)),
+    replaced: await readReplacedCodes(tx, siteId),
+    year,
+  };
 }
 
 async function readOthers(tx: Tx, siteId: string, codes: readonly string[]): Promise<TypedTable | null> {

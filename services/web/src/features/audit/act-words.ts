@@ -4,6 +4,7 @@ const words: Readonly<Record<string, string>> = {
   'account.disable': 'account disabled',
   'account.enable': 'account enabled again',
   'audit.verify': 'audit log verified',
+  'codes.replace': 'participant codes replaced',
   'export.ask': 'export asked for',
   'export.build': 'export built',
   'export.download': 'export downloaded',

@@ -148,6 +148,12 @@ export const explanations: Readonly<Record<ProblemCode, Explanation>> = {
     kept: 'Nothing of it was kept.',
     next: 'Type study days, plain numbers and codes. Names, dates and numbers of people stay at the clinic.',
   },
+  'codes-collide': {
+    meaning:
+      'Two participant codes were to become one, but both hold a row of the same day and number, and the two rows do not say the same. Which is right, only the clinic knows.',
+    kept: 'Nothing was changed, for none of the codes of the batch.',
+    next: 'Correct the months of one of the two codes, so that the rows agree or only one holds them. Then send the codes again.',
+  },
   'file-unreadable': {
     meaning: 'The file is not a CSV file in UTF-8 with the columns of the template, or it is damaged.',
     kept: 'The file was not added. Files added before are still there.',
