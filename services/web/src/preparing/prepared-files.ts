@@ -12,14 +12,14 @@ export interface Prepared {
   readonly site: string;
   readonly calendarMonth: string;
   readonly prepared: PreparedPicture;
-  readonly files: readonly PreparedTable[];
+  readonly tables: readonly PreparedTable[];
   readonly replacedCodes: ReplacedCodes;
 }
 
 const csvType = 'text/csv;charset=utf-8';
 
-export function preparedFiles({ site, calendarMonth, prepared, files, replacedCodes }: Prepared): PreparedFile[] {
-  const saved: PreparedFile[] = files.map(({ table, csv }) => ({ name: `${table}.csv`, content: csv, type: csvType }));
+export function preparedFiles({ site, calendarMonth, prepared, tables, replacedCodes }: Prepared): PreparedFile[] {
+  const saved: PreparedFile[] = tables.map(({ table, csv }) => ({ name: `${table}.csv`, content: csv, type: csvType }));
   if (replacedCodes.length > 0) {
     const lines = replacedCodes.map(({ from, to }) => `${from},${to}\r\n`);
     saved.push({ name: 'replaced-codes.csv', content: `from,to\r\n${lines.join('')}`, type: csvType });
@@ -28,7 +28,7 @@ export function preparedFiles({ site, calendarMonth, prepared, files, replacedCo
   return [...saved, { name: 'what-was-prepared.txt', content, type: 'text/plain;charset=utf-8' }];
 }
 
-function whatWasPrepared({ site, calendarMonth, prepared, replacedCodes }: Omit<Prepared, 'files'>): string {
+function whatWasPrepared({ site, calendarMonth, prepared, replacedCodes }: Omit<Prepared, 'tables'>): string {
   const { tables, people, rowsLeftBehind, agesTopCoded } = prepared;
   return [
     `Prepared for the registry: site ${site}, month ${calendarMonth}`,

@@ -48,8 +48,16 @@ function embed(given: Partial<Task> = {}) {
   return { told, say, ofKind: <K extends FromPreparing['kind']>(kind: K) => told.filter((message) => message.kind === kind) };
 }
 
+interface KeyFiles {
+  readonly fresh: File;
+  readonly used: File;
+}
+let made: Promise<KeyFiles> | undefined;
+
 /** The file of a key made elsewhere, and the same after a month was prepared with it. */
-async function keyFiles(): Promise<{ readonly fresh: File; readonly used: File }> {
+const keyFiles = (): Promise<KeyFiles> => (made ??= makeKeyFiles());
+
+async function makeKeyFiles(): Promise<KeyFiles> {
   const room = inProcessWorkroom();
   await room.ask('begin', { site: 'S01', knownParticipants: [], safeHeaders: [], today });
   const { file } = await room.ask('make-key', { mode: 'random', idType: 'mrn', stripLeadingZeros: false, passphrase });
@@ -67,6 +75,13 @@ function drop(within: string, ...files: readonly File[]): void {
 
 const press = async (name: string | RegExp) => fireEvent.click(await screen.findByRole('button', { name }));
 const fill = (label: string | RegExp, value: string) => fireEvent.change(screen.getByLabelText(label), { target: { value } });
+
+async function unfold(title: string): Promise<HTMLDetailsElement> {
+  const details = (await screen.findByText(title)).closest('details') as HTMLDetailsElement;
+  details.open = true;
+  fireEvent(details, new Event('toggle'));
+  return details;
+}
 
 async function openKey(file: File, words = passphrase): Promise<void> {
   await screen.findByText(/Key file of S01/);
@@ -204,6 +219,7 @@ describe('the site key', () => {
     await openKey(used);
     await screen.findByText('First training days');
     expect(screen.queryByRole('heading', { name: 'Files' })).toBeNull();
+    await unfold('One person with two record numbers');
     fill(/whose code stays/, '0048-2913');
     fill(/other record number/, '00482914');
     await press('Join the two');
@@ -222,8 +238,7 @@ describe('the site key', () => {
     const { fresh, used } = await keyFiles();
     embed({ view: 'key', month: null });
     await openKey(fresh);
-    await screen.findByText('First training days');
-    const form = screen.getByText(/When two coordinators went on/).closest('details') as HTMLElement;
+    const form = await unfold('Two copies of the key');
     fireEvent.change(form.querySelector('input[type=file]') as HTMLInputElement, { target: { files: [used] } });
     fireEvent.change(within(form).getByLabelText(/^Passphrase/), { target: { value: passphrase } });
     await press('Make one key of both');
@@ -232,10 +247,32 @@ describe('the site key', () => {
     expect(screen.getByText(/No code had to be replaced/)).toBeTruthy();
   });
 
+  it('gets a new passphrase with the file that is saved next', async () => {
+    const { fresh } = await keyFiles();
+    embed({ view: 'key', month: null });
+    await openKey(fresh);
+    const form = await unfold('A new passphrase');
+    await waitFor(() => expect(form.querySelectorAll('ol li')).toHaveLength(6));
+    const words = [...form.querySelectorAll('ol li')].map(({ textContent }) => textContent);
+    fireEvent.click(within(form).getByText('I have written these six words down'));
+    fill(/^Word 2/, words[1] ?? '');
+    fill(/^Word 5/, words[4] ?? '');
+    await press('Use these words');
+    await screen.findByText(/The key has a new passphrase/);
+    await press('Save the key file');
+    await waitFor(() => expect(saveFile).toHaveBeenCalled());
+    const [name = '', content = ''] = vi.mocked(saveFile).mock.calls[0] ?? [];
+    cleanup();
+    embed();
+    await openKey(new File([content], name), words.join(' '));
+    await screen.findByText(/is open:/);
+  });
+
   it('gets a new secret only after a second word', async () => {
     const { used } = await keyFiles();
     embed({ view: 'key', month: null });
     await openKey(used);
+    await unfold('A new secret for the key');
     await press('Draw a new secret');
     fill(/to carry over now/, '00482913\n00482914');
     await press('Draw a new secret');
@@ -262,7 +299,7 @@ describe('the edition opened from disk', () => {
     drop('#files', ...sampleFiles());
     fireEvent.click(await screen.findByText(/I have looked at/));
     await press('Save 2 cleaned files');
-    await screen.findByText(/The cleaned files are saved/, { selector: 'p' });
+    await screen.findByText(/The cleaned files are saved/);
     const saved = new Map(vi.mocked(saveFile).mock.calls.map(([name, content]) => [name, content]));
     expect([...saved.keys()]).toEqual(['participants.csv', 'sessions.csv', 'what-was-prepared.txt']);
     const csv = saved.get('sessions.csv') as ArrayBuffer;

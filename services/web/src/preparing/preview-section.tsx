@@ -1,7 +1,7 @@
 /** Exactly what will be sent: the first rows as they leave, every different word, and what was left behind. */
 import { memo } from 'react';
 import { columnName, tableName } from '../features/submissions/table-names.ts';
-import { formatBytes, formatCount, formatNumber } from '../lib/format.ts';
+import { formatBytes, formatCount, formatNumber, formatShare } from '../lib/format.ts';
 import { Facts } from '../ui/facts.tsx';
 import { Notice } from '../ui/notice.tsx';
 import { Section } from '../ui/page.tsx';
@@ -65,14 +65,18 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
 /** More columns of words than this are folded: an examination has over a hundred. */
 const columnsOpen = 20;
 
-function TablePreview({ table: { table, rows, people, bytes, headers, firstRows, words } }: { readonly table: PreparedTablePicture }) {
+function TablePreview({
+  table: { table, rows, rowsInFile, people, bytes, headers, firstRows, words },
+}: {
+  readonly table: PreparedTablePicture;
+}) {
   const name = tableName(table);
   const telling = words.filter(({ values }) => values.length > 0);
   return (
     <section aria-label={name} className="grid gap-3">
       <h3 className="font-semibold">{name}</h3>
       <p className="text-quiet">
-        {formatCount(rows, 'row')} of {formatCount(people, 'person', 'people')}, {formatBytes(bytes)}.{' '}
+        {formatShare(rows, rowsInFile)} rows of the file, {formatCount(people, 'person', 'people')}, {formatBytes(bytes)}.{' '}
         {rows > firstRows.length ? `The first ${firstRows.length} rows, as they leave:` : 'All rows, as they leave:'}
       </p>
       <div

@@ -46,11 +46,15 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
       workroom.ask(name, input, { onProgress: (progress) => dispatch({ kind: 'progress', progress }), ...options }),
     [workroom],
   );
+  const refuse = useCallback((error: unknown) => {
+    if (!(error instanceof WorkRefused)) throw error;
+    dispatch({ kind: 'refused', message: error.message });
+  }, []);
   const look = useCallback(() => ask('begin', circumstances), [ask, circumstances]);
 
   useEffect(() => {
-    void look().then((picture) => dispatch({ kind: 'picture', picture }));
-  }, [look]);
+    look().then((picture) => dispatch({ kind: 'picture', picture }), refuse);
+  }, [look, refuse]);
 
   /** Does something that changes what would be sent, and works that out again. */
   const change = useCallback(
@@ -73,13 +77,13 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
         startTransition(() => dispatch({ kind: 'prepared', ...worked }));
         announce('The preview is ready.');
       } catch (error) {
-        if (!(error instanceof WorkRefused)) throw error;
         if (underWay.current !== control) return;
-        dispatch({ kind: 'refused', message: error.message });
-        dispatch({ kind: 'picture', picture: await look() });
+        refuse(error);
+        // Some of the files may have been taken in.
+        await look().then((picture) => dispatch({ kind: 'picture', picture }), refuse);
       }
     },
-    [ask, look],
+    [ask, look, refuse],
   );
 
   return useMemo((): Month => {

@@ -8,12 +8,18 @@ import { Notice } from '../../ui/notice.tsx';
 import { TextArea, TextField } from '../../ui/text-field.tsx';
 import { useAct } from '../use-act.ts';
 import type { Month } from '../use-month.ts';
+import { DrawnWordsFields } from './drawn-words-fields.tsx';
 import { KeyRefusal } from './key-refusal.tsx';
 import { OpenKeyForm } from './open-key-form.tsx';
+import { useDrawnWords } from './use-drawn-words.ts';
 
-export function ChangeKey({ month }: { readonly month: Month }) {
+export function ChangeKey({ month, site }: { readonly month: Month; readonly site: string }) {
   return (
     <div className="grid gap-3">
+      <Folded title="Open another key file">
+        <p>The key that is open now is closed. What it holds beyond its file is lost, unless you save it first.</p>
+        <OpenKeyForm id="open-other-key" label={`Key file of ${site}`} act="Open this key instead" onOpen={month.openKey} />
+      </Folded>
       <Folded title="Two copies of the key">
         <MergeKeys month={month} />
       </Folded>
@@ -23,15 +29,19 @@ export function ChangeKey({ month }: { readonly month: Month }) {
       <Folded title="A new secret for the key">
         <RotateKey month={month} />
       </Folded>
+      <Folded title="A new passphrase">
+        <ChangePassphrase month={month} />
+      </Folded>
     </div>
   );
 }
 
 function Folded({ title, children }: { readonly title: string; readonly children: ReactNode }) {
+  const [wasOpened, setOpened] = useState(false);
   return (
-    <details>
+    <details onToggle={() => setOpened(true)}>
       <summary className="link">{title}</summary>
-      <div className="mt-3 grid max-w-2xl gap-4 border-l-2 border-hairline pl-4">{children}</div>
+      {wasOpened && <div className="mt-3 grid max-w-2xl gap-4 border-l-2 border-hairline pl-4">{children}</div>}
     </details>
   );
 }
@@ -164,7 +174,8 @@ function RotateKey({ month }: { readonly month: Month }) {
     <>
       <p>
         Draw a new secret when somebody may have seen the key file together with its passphrase, or when somebody who knew it has left. The
-        codes made with the old secret are replaced in the registry by new ones; nothing else of the registry changes.
+        codes made with the old secret are replaced in the registry by new ones; nothing else of the registry changes. Take a new passphrase
+        as well, under the next heading.
       </p>
       <p>
         The people whose record numbers you list are carried over now. Everybody else is carried over when their record number is met in a
@@ -201,5 +212,48 @@ function RotateKey({ month }: { readonly month: Month }) {
         </div>
       )}
     </>
+  );
+}
+
+function ChangePassphrase({ month }: { readonly month: Month }) {
+  const [attempt, setAttempt] = useState(0);
+  const [isChanged, setChanged] = useState(false);
+  const changing = useAct();
+  const drawn = useDrawnWords(month.ask, 'new-passphrase');
+  const problems = attempt === 0 ? [] : drawn.missing;
+
+  function change(): void {
+    if (drawn.missing.length > 0) {
+      setAttempt(attempt + 1);
+      return;
+    }
+    setAttempt(0);
+    void changing.run(async () => {
+      const picture = await month.ask('change-passphrase', { passphrase: drawn.passphrase });
+      setChanged(true);
+      await month.keyChanged(picture);
+    });
+  }
+
+  return (
+    <Form onSubmit={change} problems={problems} attempt={attempt}>
+      <p>
+        The file that you save next is locked with the new words. Copies saved before stay locked with the old ones: delete them, once the
+        new file is where it belongs.
+      </p>
+      {isChanged ? (
+        <Notice kind="success" title="The key has a new passphrase. Save the key file." urgent />
+      ) : (
+        <>
+          <DrawnWordsFields drawn={drawn} problems={problems} />
+          <KeyRefusal refusal={changing.refusal} />
+          <div>
+            <Button type="submit" isPending={changing.isPending}>
+              Use these words
+            </Button>
+          </div>
+        </>
+      )}
+    </Form>
   );
 }

@@ -128,7 +128,7 @@ function OpenedKey({
           <div className="mt-3">{facts}</div>
         </details>
       )}
-      <ChangeKey month={month} />
+      <ChangeKey month={month} site={site} />
       <SavedNote month={month} />
     </div>
   );

@@ -109,6 +109,11 @@ export class KeyDesk {
     return { replaced: replaced.length, firstDayMoved: moved ? (replaced[0]?.to ?? null) : null };
   }
 
+  /** The present file stays locked with the old passphrase; the key counts as unsaved until a file is locked with the new one. */
+  changePassphrase(passphrase: string): void {
+    this.opened = { ...this.require(), passphrase, saved: '' };
+  }
+
   /** Codes of which the registry does not know yet that others took their place. */
   get codesToReplace(): readonly ReplacedCode[] {
     return chainCodes(this.replaced, this.addition?.replaced ?? []);

@@ -199,6 +199,8 @@ export interface Asks {
     input: { readonly kept: string; readonly joined: string };
     answer: { readonly picture: Picture; readonly replaced: number; readonly firstDayMoved: string | null };
   };
+  /** The file saved next is locked with it. */
+  'change-passphrase': { input: { readonly passphrase: string }; answer: Picture };
   'save-key': { input: null; answer: { readonly picture: Picture; readonly file: SavedFile } };
   'codes-to-replace': { input: null; answer: ReplacedCodes };
   /** The registry knows of the codes that were replaced. */

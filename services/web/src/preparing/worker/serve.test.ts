@@ -14,6 +14,7 @@ const unasked: Answers = {
   'merge-key': silent,
   'rotate-key': silent,
   'join-numbers': silent,
+  'change-passphrase': silent,
   'save-key': silent,
   'codes-to-replace': silent,
   'codes-replaced': silent,

@@ -60,6 +60,10 @@ export function workshop(): Answers {
       changed();
       return { picture: picture(), ...done };
     },
+    'change-passphrase': async ({ passphrase }) => {
+      at().keys.changePassphrase(passphrase);
+      return picture();
+    },
     'save-key': async () => {
       const file = await at().keys.save();
       return { picture: picture(), file };
