@@ -18,8 +18,6 @@ export type { ByteSource } from './reading/byte-source.ts';
 export { readWorkbook } from './reading/workbook/read-workbook.ts';
 export { plainWorkbook } from './reading/workbook/plain-workbook.ts';
 export type { PlainWorkbook } from './reading/workbook/plain-workbook.ts';
-export { readWorkbookText } from './reading/workbook/read-workbook-text.ts';
-export type { TextTable } from './reading/workbook/read-workbook-text.ts';
 export { readWorkbookSheets } from './reading/workbook/read-workbook-sheets.ts';
 export type { SheetsOfWorkbook, TextSheet } from './reading/workbook/read-workbook-sheets.ts';
 export { exampleMark } from './table/example-cells.ts';

@@ -28,6 +28,16 @@ describe('the CSV file of a clinic, as text', () => {
     expect(found.lines).toEqual([3, 6]);
   });
 
+  it('fills rows that end early with empty cells, and keeps what stands beyond the header', async () => {
+    const found = await read(encode('a,b,c\n1,2,3\n4\n5,6,7,8\n9,10,11,,\n'));
+    expect(found.rows).toEqual([
+      ['1', '2', '3'],
+      ['4', '', ''],
+      ['5', '6', '7', '8'],
+      ['9', '10', '11'],
+    ]);
+  });
+
   it.each([
     ['semicolons with decimal commas', 'id;speed;day\n1;0,5;3\n2;0,75;4\n', ';', ['0,5', '0,75']],
     ['tabs', 'id\tspeed, mean\tday\n1\t0.5\t3\n', '\t', ['0.5']],

@@ -5,6 +5,7 @@
 import { defaultLimits } from '../limits.ts';
 import type { ReadLimits } from '../limits.ts';
 import { lastFilled } from '../table/header-row.ts';
+import { rowOf } from '../table/row-of.ts';
 import { ByteDecoder } from './byte-decoder.ts';
 import type { Encoding } from './byte-decoder.ts';
 import type { ByteSource } from './byte-source.ts';
@@ -54,7 +55,7 @@ export async function readCsvText(
       const most = limits.rows.toLocaleString('en');
       throw new UnreadableFile('F03', `The file has more than ${most} rows.`, 'Prepare the month in smaller parts.', line);
     }
-    found.rows.push(cells.slice(0, Math.max(last + 1, found.headers.length)));
+    found.rows.push(rowOf(cells, count, last, found.headers.length));
     found.lines.push(line);
   }
 

@@ -29,6 +29,24 @@ describe('the workbook of a clinic, as text', () => {
     expect(others).toEqual([]);
   });
 
+  it('fills rows that end early with empty cells, and keeps what stands beyond the header', async () => {
+    const rows = [['a', 'b', 'c'], [1, 2, 3], [4], [5, 6, 7, 8], [null, ' ', 9, ' ']];
+    const [sheet] = await sheetsOf(makeWorkbook({ sheets: [{ name: 'x', rows }] }));
+    expect(sheet?.rows).toEqual([
+      ['1', '2', '3'],
+      ['4', '', ''],
+      ['5', '6', '7', '8'],
+      ['', ' ', '9'],
+    ]);
+  });
+
+  it('reads dates that are counted from 1904', async () => {
+    const rows = [['Date'], [{ xml: '<c r="@" s="1"><v>45000</v></c>' }]];
+    const workbookProperties = '<workbookPr date1904="1"/>';
+    const [sheet] = await sheetsOf(makeWorkbook({ styles, workbookProperties, sheets: [{ name: 'x', rows }] }));
+    expect(sheet?.rows).toEqual([['2027-03-16']]);
+  });
+
   it('tells what is hidden or merged, and which cells have no value', async () => {
     const [sheet] = await sheetsOf(
       makeWorkbook({

@@ -4,6 +4,7 @@ import { defaultWorkbookLimits } from '../../limits.ts';
 import type { WorkbookLimits } from '../../limits.ts';
 import type { CellKind } from '../../table/cell-kind.ts';
 import { lastFilled } from '../../table/header-row.ts';
+import { rowOf } from '../../table/row-of.ts';
 import type { ByteSource } from '../byte-source.ts';
 import { unreadable } from '../unreadable.ts';
 import type { Unreadable } from '../unreadable.ts';
@@ -83,13 +84,12 @@ class SheetRows implements SheetEvents {
       const most = this.limits.rows.toLocaleString('en');
       throw new UnreadableFile('F03', `A sheet has more than ${most} rows.`, 'Prepare the month in smaller parts.', line);
     }
-    const row = cells.slice(0, last + 1);
+    const row = rowOf(cells, count, last, this.headers.length);
     row.forEach((_, position) => {
       if (kinds[position] !== 'error' && kinds[position] !== 'uncalculated') return;
       row[position] = '';
       this.cellsWithoutValue += 1;
     });
-    while (row.length < this.headers.length) row.push('');
     if (isHidden) this.hiddenRows += 1;
     this.rows.push(row);
     this.lines.push(line);

@@ -6,8 +6,6 @@ import type { DraftCell, SheetDraft } from '../../test-support/make-workbook.ts'
 import { makeZip } from '../../test-support/make-zip.ts';
 import { readPlaces } from '../../test-support/read-places.ts';
 import type { WorkbookRead } from '../../test-support/read-places.ts';
-import { FindingLog } from '../../finding-log.ts';
-import { readWorkbookText } from './read-workbook-text.ts';
 
 const code = 'S00000000000000000000Z';
 
@@ -324,32 +322,5 @@ describe('F48 (the example row of the template)', () => {
   it('passes over the example as it was', async () => {
     const found = await read(bouts(keys, exampleCells(), exampleCells({ participant: code, bout_no: 2 })));
     expect([found.places, column(found, 'bout_no')]).toEqual([[], [2]]);
-  });
-});
-
-describe('readWorkbookText', () => {
-  const styles = '<cellXfs><xf numFmtId="0"/><xf numFmtId="14"/></cellXfs>';
-
-  it('gives cells as text, dates of both systems as ISO dates, and rows with their place', async () => {
-    const sheets = [bouts(['MRN', 'Session date', 'distance'], null, ['0042', { xml: '<c r="@" s="1"><v>45000</v></c>' }, 1.5])];
-    const since1900 = await readWorkbookText(makeWorkbook({ sheets, styles }), new FindingLog());
-    expect(since1900).toEqual([
-      { table: 'bouts', headers: ['MRN', 'Session date', 'distance'], rows: [['0042', '2023-03-15', '1.5']], lines: [3] },
-    ]);
-    const since1904 = await readWorkbookText(
-      makeWorkbook({ sheets, styles, workbookProperties: '<workbookPr date1904="1"/>' }),
-      new FindingLog(),
-    );
-    expect(since1904[0]?.rows).toEqual([['0042', '2027-03-16', '1.5']]);
-  });
-
-  it('tells of cells without a value and leaves them empty', async () => {
-    const log = new FindingLog();
-    const [table] = await readWorkbookText(
-      makeWorkbook({ sheets: [bouts(['MRN', 'x'], ['1', { xml: '<c r="@" t="e"><v>#N/A</v></c>' }, 2])] }),
-      log,
-    );
-    expect(table?.rows).toEqual([['1', '', '2']]);
-    expect(log.byRule().map(({ id, kept }) => [id, kept[0]?.line])).toEqual([['F46', 2]]);
   });
 });

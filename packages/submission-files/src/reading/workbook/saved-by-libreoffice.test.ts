@@ -4,9 +4,8 @@ import { exampleRow, tableKeys, tableOf } from '@cairnstep/dictionary';
 import { describe, expect, it } from 'vitest';
 import { participants } from '../../../reference/filled-template.ts';
 import { workbookContents } from '../../../reference/workbook-contents.ts';
-import { FindingLog } from '../../finding-log.ts';
 import { readPlaces } from '../../test-support/read-places.ts';
-import { readWorkbookText } from './read-workbook-text.ts';
+import { readWorkbookSheets } from './read-workbook-sheets.ts';
 
 const saved = (name: string): Uint8Array =>
   new Uint8Array(readFileSync(new URL(`../../../reference/saved-by-libreoffice/${name}`, import.meta.url)));
@@ -37,7 +36,8 @@ describe('sheets filled in by hand', () => {
   });
 
   it('give dates and times as text where they are wanted', async () => {
-    const [bouts] = await readWorkbookText(byHand, new FindingLog());
+    const read = await readWorkbookSheets(byHand);
+    const bouts = read.ok ? read.sheets.find(({ table }) => table === 'bouts') : undefined;
     expect(bouts?.rows[1]).toEqual(['S00000000000000000000Z', '4', '2', '', '00:01:30', 'FALSE', '2026-03-05', '']);
   });
 });
