@@ -49,6 +49,35 @@ describe('an invitation', () => {
     }
   });
 
+  it('says whose account has the address already, and is sent all the same: an address recognises nobody', async () => {
+    const known = await makePerson(server, { name: 'Known person' });
+    const sent = await administrator
+      .post('/api/invitations', { email: known.email.toUpperCase(), role: 'researcher', siteId: null, grantEndsOn: null })
+      .expect(201);
+    expect(sent.body.accountsWithAddress).toEqual([{ id: known.id, name: 'Known person' }]);
+    const stranger = await administrator
+      .post('/api/invitations', { email: 'stranger@clinic.example', role: 'researcher', siteId: null, grantEndsOn: null })
+      .expect(201);
+    expect(stranger.body.accountsWithAddress).toEqual([]);
+  });
+
+  it('gives no second grant to whoever has the role, but a longer one', async () => {
+    const person = await makePerson(server, { grants: [{ role: 'coordinator', site }] });
+    const accept = async (changes: object): Promise<number> => {
+      await administrator
+        .post('/api/invitations', { email: 'again@clinic.example', role: 'coordinator', siteId: site.id, grantEndsOn: null, ...changes })
+        .expect(201);
+      const { rows } = await server.database.owner.query(
+        "select body from mail_messages where recipient = 'again@clinic.example' order by created_at desc limit 1",
+      );
+      const token = /\/invitation\/([A-Za-z0-9_-]{43})/.exec(rows[0].body as string)?.[1] ?? '';
+      return (await person.post(`/api/invitations/${token}/accept`).expect(200)).body.grants.length;
+    };
+    expect(await accept({})).toBe(1);
+    await server.database.owner.query('update grants set ends_on = current_date + 10 where account_id = $1', [person.id]);
+    expect(await accept({})).toBe(2);
+  });
+
   it('can be taken back', async () => {
     const sent = await administrator
       .post('/api/invitations', { email: 'y@clinic.example', role: 'researcher', siteId: null, grantEndsOn: null })
@@ -81,6 +110,35 @@ describe('a grant', () => {
     ]) {
       expect(codeOf((await attempt).body)).toBe('grant-to-oneself');
     }
+  });
+
+  it('is given once for the same days, whoever asks at the same time', async () => {
+    const person = await makePerson(server);
+    const give = (startsOn: string, endsOn: string | null, siteId = site.id) =>
+      administrator.post(`/api/people/${person.id}/grants`, { role: 'coordinator', siteId, startsOn, endsOn });
+    const answers = await Promise.all([give('2026-05-01', '2026-05-31'), give('2026-05-01', '2026-05-31')]);
+    expect(answers.map((answer) => answer.status).sort()).toEqual([201, 409]);
+    for (const [startsOn, endsOn] of [
+      ['2026-05-31', null],
+      ['2026-04-01', '2026-05-01'],
+      ['2026-05-10', '2026-05-11'],
+      ['2026-01-01', null],
+    ] as const) {
+      expect(codeOf((await give(startsOn, endsOn)).body), `${startsOn} to ${endsOn}`).toBe('already-held');
+    }
+    await give('2026-06-01', null).expect(201);
+    await give('2026-01-01', '2026-04-30').expect(201);
+    await give('2026-05-01', null, (await makeSite(server)).id).expect(201);
+  });
+
+  it('may be given again after it was ended on its first day', async () => {
+    const person = await makePerson(server);
+    const today = new Date().toISOString().slice(0, 10);
+    const give = () =>
+      administrator.post(`/api/people/${person.id}/grants`, { role: 'steward', siteId: null, startsOn: today, endsOn: null });
+    const given = await give().expect(201);
+    await administrator.post(`/api/people/${person.id}/grants/${given.body.grants[0].id}/end`).expect(200);
+    await give().expect(201);
   });
 
   it('does not end before it begins', async () => {

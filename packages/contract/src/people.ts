@@ -23,6 +23,12 @@ export const Invitation = z.strictObject({
   expiresAt: Instant,
 });
 
+/** The answer to sending one. E-mail recognises nobody, so the invitation is sent all the same. */
+export const SentInvitation = Invitation.extend({
+  /** Accounts that have this address already: their people can be given the role without an invitation. */
+  accountsWithAddress: z.array(z.strictObject({ id: Id, name: z.string() })),
+});
+
 export const listPeople = endpoint({
   method: 'GET',
   path: '/api/people',
@@ -42,7 +48,7 @@ export const invitePerson = endpoint({
     siteId: Id.nullable(),
     grantEndsOn: CalendarDate.nullable(),
   }),
-  response: Invitation,
+  response: SentInvitation,
   status: 201,
   problems: [],
 });
@@ -64,7 +70,7 @@ export const giveGrant = endpoint({
   body: z.strictObject({ role: Role, siteId: Id.nullable(), startsOn: CalendarDate, endsOn: CalendarDate.nullable() }),
   response: Person,
   status: 201,
-  problems: ['not-found', 'grant-to-oneself'],
+  problems: ['not-found', 'grant-to-oneself', 'already-held'],
 });
 
 export const endGrant = endpoint({

@@ -19,6 +19,7 @@ export const problems = {
   'two-identities': { status: 400, title: 'A request comes from a person or from a system, not from both' },
   'system-registered': { status: 409, title: 'This system is registered already' },
   'grant-to-oneself': { status: 409, title: 'Nobody can change their own roles' },
+  'already-held': { status: 409, title: 'The person has this role already' },
   'submission-stale': { status: 409, title: 'The registry changed since this preview was made' },
   'submission-has-errors': { status: 409, title: 'The files still hold errors' },
   'submission-has-open-warnings': { status: 409, title: 'Some warnings have no reason yet' },

@@ -1,7 +1,23 @@
-import { html, standInPage } from '@cairnstep/fake-oidc/stand-in-page';
+import { html, standInPage, type Html } from '@cairnstep/fake-oidc/stand-in-page';
 import type { CaughtMail } from './mailbox.ts';
+import { withLinks } from './with-links.ts';
 
 const notice = 'Mails that the registry sends on this machine are caught here and go nowhere else.';
+
+/** "1 December 2026, 08:20 UTC": the stand-in knows nothing of its reader's clock. */
+const whenReceived = (instant: string): Html => {
+  const words = new Intl.DateTimeFormat('en-GB', {
+    day: 'numeric',
+    month: 'long',
+    year: 'numeric',
+    hour: '2-digit',
+    minute: '2-digit',
+    timeZone: 'UTC',
+  })
+    .format(new Date(instant))
+    .replace(' at ', ', ');
+  return html`<time datetime="${instant}">${words} UTC</time>`;
+};
 
 export function listPage(mails: readonly CaughtMail[]): string {
   const rows = mails.map(
@@ -9,7 +25,7 @@ export function listPage(mails: readonly CaughtMail[]): string {
       html`<li>
         <a href="/messages/${mail.id}"
           >${mail.subject === '' ? 'Without a subject' : mail.subject}<br /><span class="quiet"
-            >to ${mail.to.join(', ')}, <time>${mail.receivedAt}</time></span
+            >to ${mail.to.join(', ')}, ${whenReceived(mail.receivedAt)}</span
           ></a
         >
       </li>`,
@@ -35,7 +51,7 @@ export function messagePage(mail: CaughtMail): string {
         <dt>To</dt>
         ${mail.to.map((address) => html`<dd>${address}</dd>`)}
         <dt>Received</dt>
-        <dd><time>${mail.receivedAt}</time></dd>
+        <dd>${whenReceived(mail.receivedAt)}</dd>
         ${
           attachments.length === 0
             ? html``
@@ -47,7 +63,7 @@ export function messagePage(mail: CaughtMail): string {
         mail.text === ''
           ? html``
           : html`<h2>Text</h2>
-              <pre>${mail.text}</pre>`
+              <pre>${withLinks(mail.text)}</pre>`
       }
       ${
         mail.html === ''

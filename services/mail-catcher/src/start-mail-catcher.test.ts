@@ -58,6 +58,17 @@ describe('the mail catcher', () => {
     for (const shown of [list, message, await page('/messages/99'), await page('/elsewhere')]) expect(shown).toContain('Stand-in.');
   });
 
+  it('makes links of the addresses in a mail, and says in words when it came', async () => {
+    await send({ subject: 'An invitation', text: 'Open http://127.0.0.1:3000/invitation/abc.' });
+    const [mail] = catcher.messages();
+    const message = await page(`/messages/${mail?.id}`);
+    expect(message).toContain(
+      'Open <a href="http://127.0.0.1:3000/invitation/abc" rel="noreferrer">http://127.0.0.1:3000/invitation/abc</a>.',
+    );
+    for (const shown of [message, await page('/')])
+      expect(shown).toMatch(new RegExp(`<time datetime="${mail?.receivedAt}">\\d{1,2} [A-Z][a-z]+ \\d{4}, \\d\\d:\\d\\d UTC</time>`));
+  });
+
   it('lets the oldest give way, newest first, and can be emptied', async () => {
     for (const subject of ['1', '2', '3', '4']) await send({ subject, text: 'x' });
     expect(catcher.messages().map(({ subject }) => subject)).toEqual(['4', '3', '2']);

@@ -115,6 +115,22 @@ export async function insertGrant(tx: Tx, grant: NewGrant): Promise<void> {
   ]);
 }
 
+/** Two administrators who give one person roles at once do it one after the other. */
+export const lockGrantsOf = (tx: Tx, personId: string): Promise<unknown> => tx.query('select pg_advisory_xact_lock(hashtext($1))', [`grants ${personId}`]);
+
+/** Whether the person holds the same role, for the same site, on any day of this time. */
+export async function holdsAlready(tx: Tx, grant: Pick<NewGrant, 'personId' | 'role' | 'siteId' | 'startsOn' | 'endsOn'>): Promise<boolean> {
+  const [{ held }] = (await tx.query(
+    `select exists (select from grants where account_id = $1 and role = $2 and site_id is not distinct from $3::uuid
+       and starts_on <= coalesce($5::date, 'infinity') and coalesce(ends_on, 'infinity') >= greatest(starts_on, $4::date)) as held`,
+    [grant.personId, grant.role, grant.siteId, grant.startsOn, grant.endsOn],
+  )) as [{ held: boolean }];
+  return held;
+}
+
+export const accountsWithAddress = async (tx: Tx, email: string): Promise<{ id: string; name: string }[]> =>
+  (await tx.query('select id, name from accounts where lower(email) = lower($1) order by name, id', [email])) as { id: string; name: string }[];
+
 /** A grant's last day becomes yesterday: it gives nothing from the next request on. False when there is no such grant in force or to come. */
 export async function stopGrant(tx: Tx, personId: string, grantId: string): Promise<boolean> {
   const [, count] = (await tx.query(

@@ -11,7 +11,7 @@ import { Refusal } from '../../http/refusal.ts';
 import { route, type Route } from '../../http/route.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
 import { hashToken } from '../account/invitations.repository.ts';
-import { insertGrant, insertInvitation, listInvitations, listPeople, markRevoked, readInvitation, readPerson, siteName, stopGrant, updateStatus } from './people.repository.ts';
+import { accountsWithAddress, holdsAlready, insertGrant, insertInvitation, listInvitations, listPeople, lockGrantsOf, markRevoked, readInvitation, readPerson, siteName, stopGrant, updateStatus } from './people.repository.ts';
 import { listVisibleSites } from './sites.repository.ts';
 
 const invitationDays = 7;
@@ -56,7 +56,7 @@ export function peopleRoutes({ config, database, clock }: Context): Route[] {
         ].join('\n'),
       });
       await recordAudit(tx, actor, { act: 'invitation.send', object: id, requestId, detail: { role: input.role }, ...(input.siteId ? { site: input.siteId } : {}) });
-      return requireFound(await readInvitation(tx, id));
+      return { ...requireFound(await readInvitation(tx, id)), accountsWithAddress: await accountsWithAddress(tx, input.email) };
     });
 
   const revoke = (actor: Actor, { invitationId }: InputOf<typeof revokeInvitation>, requestId: string) =>
@@ -75,6 +75,10 @@ export function peopleRoutes({ config, database, clock }: Context): Route[] {
       await requireFittingSite(tx, input.role, input.siteId);
       if (input.endsOn !== null && input.endsOn < input.startsOn) {
         throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer: '/body/endsOn', detail: 'The last day lies before the first.' }]);
+      }
+      await lockGrantsOf(tx, input.personId);
+      if (await holdsAlready(tx, input)) {
+        throw new Refusal('already-held', 'The person has this role on at least one of these days. Nothing was changed. For another last day, end the role and give it again.');
       }
       await insertGrant(tx, { id: randomUUID(), ...input, givenBy: requirePerson(actor).accountId });
       await recordAudit(tx, actor, { act: 'grant.give', object: input.personId, requestId, detail: { role: input.role }, ...(input.siteId ? { site: input.siteId } : {}) });

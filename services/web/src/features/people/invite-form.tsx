@@ -1,5 +1,6 @@
 /** Asks someone by e-mail to take a role. */
 import { invitePerson } from '@cairnstep/contract';
+import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
 import { problemsOf } from '../../lib/field-problems.ts';
 import { formatInstant } from '../../lib/format.ts';
@@ -10,7 +11,9 @@ import { ErrorNotice } from '../../ui/error-notice.tsx';
 import { Form } from '../../ui/form.tsx';
 import { Notice } from '../../ui/notice.tsx';
 import { TextField } from '../../ui/text-field.tsx';
-import { useInvite } from './people.queries.ts';
+import { TextLink } from '../../ui/text-link.tsx';
+import { peopleQuery, useInvite } from './people.queries.ts';
+import type { Person } from './people.queries.ts';
 import { emptyRole, fieldIdsOf, problemsOfRole, roleOf } from './role-draft.ts';
 import { RoleFields } from './role-fields.tsx';
 
@@ -20,7 +23,10 @@ const refusable = { '/body/email': emailId, '/body/role': ids.role, '/body/siteI
 
 export function InviteForm() {
   const invite = useInvite();
+  const people = useQuery(peopleQuery()).data?.people ?? [];
   const [email, setEmail] = useState('');
+  const address = email.trim().toLowerCase();
+  const known = address === '' ? [] : people.filter((person) => person.email?.toLowerCase() === address);
   const [draft, setDraft] = useState(emptyRole);
   const [attempt, setAttempt] = useState(0);
   const found = attempt === 0 ? [] : problemsIn();
@@ -57,6 +63,7 @@ export function InviteForm() {
           <p>
             As {roleWithin(invite.data.role, invite.data.site)}. It can be used once, until {formatInstant(invite.data.expiresAt)}.
           </p>
+          <KnownAccounts accounts={invite.data.accountsWithAddress} />
         </Notice>
       )}
       <Form onSubmit={send} attempt={attempt} problems={problems}>
@@ -73,6 +80,11 @@ export function InviteForm() {
           onChange={setEmail}
           error={emailError}
         />
+        {known.length > 0 && (
+          <Notice kind="information" title="No invitation is needed.">
+            <KnownAccounts accounts={known} />
+          </Notice>
+        )}
         <RoleFields ids={ids} draft={draft} problems={problems} onChange={setDraft} />
         {invite.isError && problems.length === 0 && <ErrorNotice error={invite.error} />}
         <div>
@@ -83,6 +95,16 @@ export function InviteForm() {
       </Form>
     </div>
   );
+}
+
+/** Somebody with an account needs no invitation. */
+function KnownAccounts({ accounts }: { readonly accounts: readonly Pick<Person, 'id' | 'name'>[] }) {
+  return accounts.map(({ id, name }) => (
+    <p key={id} className="mt-1">
+      <TextLink to={`/people/${id}`}>{name}</TextLink> has an account with this address. On that page the role can be given at once, without
+      an invitation.
+    </p>
+  ));
 }
 
 const emailProblem = (email: string): string | undefined =>

@@ -68,7 +68,7 @@ describe('inviting someone', () => {
   });
 
   it('sends address, role and last day, says so and lists the invitation', async () => {
-    const added = { ...invitation, id: id('05'), email: 'new@low-fell.example' };
+    const added = { ...invitation, id: id('05'), email: 'new@low-fell.example', accountsWithAddress: [] };
     const sent = open('/people', { 'POST /api/invitations': added });
     fireEvent.click(await screen.findByRole('radio', { name: /^researcher/ }));
     write(/^E-mail/, ' new@low-fell.example ');
@@ -79,6 +79,23 @@ describe('inviting someone', () => {
     expect(sent()).toEqual([{ method: 'POST', path: '/api/invitations', body }]);
     expect(screen.getByRole('row', { name: /^new@low-fell\.example researcher sent, not used yet/ })).toBeTruthy();
     expect(screen.getByRole('textbox', { name: /^E-mail/ }).getAttribute('value')).toBe('');
+  });
+
+  it('says whose account has the address already, before and after', async () => {
+    const added = { ...invitation, id: id('06'), email: 'nils@low-fell.example', accountsWithAddress: [{ id: nils.id, name: nils.name }] };
+    open('/people', { 'POST /api/invitations': added });
+    fireEvent.click(await screen.findByRole('radio', { name: /^researcher/ }));
+    write(/^E-mail/, 'NILS@low-fell.example');
+    expect(await screen.findByText(/No invitation is needed/)).toBeTruthy();
+    expect(screen.getByText(/has an account with this address/)).toBeTruthy();
+    await press('Send the invitation');
+    expect(await screen.findByText(/An invitation is on its way to nils@low-fell\.example/)).toBeTruthy();
+    expect(
+      screen
+        .getByText(/has an account with this address/)
+        .querySelector('a')
+        ?.getAttribute('href'),
+    ).toBe(`/people/${nils.id}`);
   });
 
   it('places what the registry refuses beside its field, and keeps what was typed', async () => {

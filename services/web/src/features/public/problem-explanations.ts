@@ -102,6 +102,11 @@ export const explanations: Readonly<Record<ProblemCode, Explanation>> = {
     kept: nothingChanged,
     next: 'Ask another administrator to do it.',
   },
+  'already-held': {
+    meaning: 'The person has the same role, for the same site, on at least one of the days named.',
+    kept: nothingChanged,
+    next: 'Nothing needs to be done for the days it counts. For another last day, end the role and give it again.',
+  },
   'submission-stale': {
     meaning:
       'The registry’s rows of this month changed after the preview was made, so a commit would do something other than what you saw.',
