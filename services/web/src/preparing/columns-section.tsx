@@ -1,5 +1,5 @@
 /** What becomes of each column of the clinic's files. Folded where everything is as last month and nothing needs mending. */
-import { useMemo, useState } from 'react';
+import { memo, useState } from 'react';
 import { tableName } from '../features/submissions/table-names.ts';
 import { formatCount } from '../lib/format.ts';
 import { Button } from '../ui/button.tsx';
@@ -65,21 +65,6 @@ function TableOfColumns({ columns: { source, table, columns }, month, open, setO
   const isNew = columns.some((column) => column.isNew && column.isMatchable);
   const [isFolded, setFolded] = useState(!isNew && !needsALook);
   const isOpen = !isFolded || open?.startsWith(`${source}:`) === true;
-  const list = useMemo(
-    () =>
-      columns.map((column) => (
-        <ColumnItem
-          key={column.number}
-          column={column}
-          source={source}
-          table={table}
-          month={month}
-          isEdited={open === `${source}:${column.number}`}
-          setOpen={setOpen}
-        />
-      )),
-    [columns, source, table, month, open, setOpen],
-  );
   return (
     <div className="grid gap-2">
       <div className="flex flex-wrap items-baseline justify-between gap-x-6">
@@ -92,7 +77,21 @@ function TableOfColumns({ columns: { source, table, columns }, month, open, setO
         {formatCount(sent, 'column')} used, {columns.length - sent} {columns.length - sent === 1 ? 'stays' : 'stay'} behind
         {newsOf(columns)}.
       </p>
-      {isOpen && <ul className="border-t border-hairline">{list}</ul>}
+      {isOpen && (
+        <ul className="border-t border-hairline">
+          {columns.map((column) => (
+            <ColumnItem
+              key={column.number}
+              column={column}
+              source={source}
+              table={table}
+              matchColumn={month.matchColumn}
+              isEdited={open === `${source}:${column.number}`}
+              setOpen={setOpen}
+            />
+          ))}
+        </ul>
+      )}
     </div>
   );
 }
@@ -107,12 +106,13 @@ interface ColumnItemProps {
   readonly column: ColumnPicture;
   readonly source: number;
   readonly table: TableColumns['table'];
-  readonly month: Month;
+  readonly matchColumn: Month['matchColumn'];
   readonly isEdited: boolean;
   readonly setOpen: (open: OpenEditor) => void;
 }
 
-function ColumnItem({ column, source, table, month, isEdited, setOpen }: ColumnItemProps) {
+/** A table may have a hundred and more: only the one that changes is drawn again. */
+const ColumnItem = memo(function ColumnItem({ column, source, table, matchColumn, isEdited, setOpen }: ColumnItemProps) {
   const { number, header, examples, match, isMatchable, unknownWords } = column;
   const name = header.trim() === '' ? `Column ${number}` : header;
   return (
@@ -141,7 +141,7 @@ function ColumnItem({ column, source, table, month, isEdited, setOpen }: ColumnI
           </div>
         )}
       </div>
-      {isEdited && <ColumnEditor column={column} table={table} onMatch={(chosen) => void month.matchColumn(source, chosen)} />}
+      {isEdited && <ColumnEditor column={column} table={table} onMatch={(chosen) => void matchColumn(source, chosen)} />}
     </li>
   );
-}
+});

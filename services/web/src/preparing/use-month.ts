@@ -11,6 +11,7 @@ import { WorkRefused } from './worker-client.ts';
 import type { Workroom } from './worker-client.ts';
 import type { Asks, Circumstances, Picture, SavedFile, SourceChange } from './worker/protocol.ts';
 
+/** Everything but the state is the same as long as the page lives. */
 export interface Month {
   readonly state: MonthState;
   readonly ask: Workroom['ask'];
@@ -86,14 +87,13 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
     [ask, look, refuse],
   );
 
-  return useMemo((): Month => {
+  const acts = useMemo((): Omit<Month, 'state'> => {
     const keep = ({ file, picture }: { readonly file: SavedFile; readonly picture: Picture }) => {
       saveFile(file.name, file.text, 'application/json');
       dispatch({ kind: 'key-saved', picture, fileName: file.name });
       announce(`The key file is saved as ${file.name}.`);
     };
     return {
-      state,
       ask,
       openKey: async (file, passphrase) => {
         const picture = await ask('open-key', { file, passphrase });
@@ -117,5 +117,6 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
       stop: () => underWay.current?.abort(),
       sendingIs: (sending) => dispatch({ kind: 'sending', sending }),
     };
-  }, [state, ask, look, change]);
+  }, [ask, look, change]);
+  return useMemo(() => ({ state, ...acts }), [state, acts]);
 }
