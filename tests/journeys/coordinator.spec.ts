@@ -139,9 +139,10 @@ test('reads by file, line and column what to mend, and nothing enters the regist
 
   const table = tableOf(mistake.table);
   const variable = table.variables.find(({ key }) => key === mistake.column);
-  if (variable?.plausible === undefined) throw new Error('Nobody knows a plausible value for the mistaken cell.');
+  const limits = variable?.plausible ?? variable?.hard;
+  if (limits === undefined) throw new Error('Nobody knows a plausible value for the mistaken cell.');
   await page.getByRole('button', { name: `Mend ${mistake.column} in line ${mistake.line} of ${table.name.toLowerCase()}` }).click();
-  await page.getByRole('textbox', { name: `New value of ${mistake.column}, line ${mistake.line}` }).fill(String(variable.plausible.min));
+  await page.getByRole('textbox', { name: `New value of ${mistake.column}, line ${mistake.line}` }).fill(String(limits.min));
   await look(page, 'coordinator-mending');
   await page.getByRole('button', { name: 'Apply 1 change and check again' }).click();
   await expect(page.getByText('1 cell mended on screen')).toBeVisible();

@@ -2,7 +2,6 @@
 import { randomUUID } from 'node:crypto';
 import type { Submission, SubmissionReceipt } from '@cairnstep/contract';
 import type { TableKey } from '@cairnstep/dictionary';
-import type { PoolClient } from 'pg';
 import type { Tx } from '../../database/as-actor.ts';
 import type { FileKey } from './file-key.ts';
 import { clearAllMends, clearMends } from './mends.repository.ts';
@@ -155,20 +154,17 @@ export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
 
 const contentPieceBytes = 1 << 20;
 
-/** Bytes as they are: as text they would be twice as many, to be turned back one by one. */
-const asSent = { getTypeParser: () => (value: Buffer) => value };
-
-/** Piece by piece, so that memory does not grow with the file; the next is on its way while this one is worked on. */
+/**
+ * Piece by piece, so that memory does not grow with the file; the next is on its way while this one is worked on. As base64, because the driver
+ * makes text of whatever arrives, which is no loss only where it is text.
+ */
 export async function* readContent(tx: Tx, id: string, file: FileKey): AsyncGenerator<Uint8Array> {
-  const client = (await tx.queryRunner?.connect()) as PoolClient;
   const fetch = async (from: number): Promise<Buffer | undefined> => {
-    const { rows } = await client.query<{ piece: Buffer | null }>({
-      text: 'select substring(content from $3 for $4) as piece from submission_files where submission_id = $1 and table_key = $2',
-      values: [id, file, from, contentPieceBytes],
-      binary: true,
-      types: asSent,
-    });
-    return rows[0]?.piece ?? undefined;
+    const [row] = (await tx.query(
+      "select encode(substring(content from $3 for $4), 'base64') as piece from submission_files where submission_id = $1 and table_key = $2",
+      [id, file, from, contentPieceBytes],
+    )) as { piece: string | null }[];
+    return row?.piece ? Buffer.from(row.piece, 'base64') : undefined;
   };
   let next = fetch(1);
   for (let from = 1 + contentPieceBytes; ; from += contentPieceBytes) {

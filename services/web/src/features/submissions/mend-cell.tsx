@@ -32,7 +32,7 @@ export function MendCell({ place, drafts }: MendCellProps) {
   };
   return (
     // Keys go up from the field: Enter goes on to the next place, Escape takes the typed value back.
-    <div data-mend-cell className="grid w-72 gap-1 py-2" onKeyDown={(event) => goOn(event, leave)}>
+    <div data-mend-cell className="grid w-72 gap-1 px-1 py-2" onKeyDown={(event) => goOn(event, leave)}>
       <Field place={place} drafts={drafts} value={draft} takesFocus={isOpen} />
       <div>
         <Button variant="quiet" onPress={leave} aria-label={`Leave ${words} as it is`}>
