@@ -1,6 +1,6 @@
 /** The files of a submission to typed tables: screened while they are read, with mended cells in their place. */
 import { type TableKey } from '@cairnstep/dictionary';
-import type { FindingLog} from '@cairnstep/submission-files';
+import type { FindingLog } from '@cairnstep/submission-files';
 import { readTable, readWorkbook, type TypedTable } from '@cairnstep/submission-files';
 import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
