@@ -64,6 +64,7 @@ async function put(
       fileName: showableFileName(fileName, key, submission),
       sha256,
       content,
+      bytes: sent.length,
     });
     await recordAudit(tx, actor, {
       act: 'submission.file',

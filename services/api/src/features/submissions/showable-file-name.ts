@@ -8,7 +8,7 @@ import type { FileKey } from './file-key.ts';
 const wordsIn = (text: string): string[] => text.toLowerCase().match(/\p{L}+|\d+/gu) ?? [];
 
 const usual =
-  'csv xlsx txt cairnstep registry month monthly template table tables data file files export upload submission training workbook exam isncsci ' +
+  'csv xlsx txt cairnstep registry month monthly template table tables data file files export upload submission training workbook finding findings exam isncsci ' +
   'assessment session bout event consent participant final draft new old copy clean cleaned prepared checked corrected correction mended ' +
   'version v of the and for from';
 const known: ReadonlySet<string> = new Set([...wordsIn(usual), ...dictionary.tables.flatMap(({ key, name }) => wordsIn(`${key} ${name}`))]);

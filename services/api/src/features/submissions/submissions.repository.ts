@@ -181,7 +181,7 @@ export async function putFile(
   tx: Tx,
   id: string,
   siteId: string,
-  file: { table: FileKey; fileName: string; sha256: string; content: Buffer },
+  file: { table: FileKey; fileName: string; sha256: string; content: Buffer; bytes?: number },
 ): Promise<void> {
   const tables = file.table === 'workbook' ? null : [file.table];
   await tx.query(
@@ -189,7 +189,7 @@ export async function putFile(
      on conflict (submission_id, table_key) do update
        set file_name = excluded.file_name, bytes = excluded.bytes, sha256 = excluded.sha256, content = excluded.content, tables = excluded.tables,
            added_at = now(), rows = null, refused = false`,
-    [id, file.table, siteId, file.fileName, file.content.length, file.sha256, file.content, tables],
+    [id, file.table, siteId, file.fileName, file.bytes ?? file.content.length, file.sha256, file.content, tables],
   );
   await clearMends(tx, id, file.table);
 }
