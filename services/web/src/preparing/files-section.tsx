@@ -1,6 +1,6 @@
 /** The clinic's files as they are: dropped, each given its table, with what was found out about how they are written. */
 import { tables } from '../features/submissions/table-names.ts';
-import { formatCount } from '../lib/format.ts';
+import { formatBytes, formatCount } from '../lib/format.ts';
 import { Button } from '../ui/button.tsx';
 import { EmptyState } from '../ui/empty-state.tsx';
 import { FileDrop } from '../ui/file-drop.tsx';
@@ -72,8 +72,8 @@ export function FilesSection({ month, monthName }: { readonly month: Month; read
               <div className="grid max-w-xl gap-2">
                 <Progress
                   label={progress.what}
-                  part={progress.part}
-                  words={progress.part === null ? `${progress.what}.` : `${progress.what}: ${Math.round(progress.part * 100)} of 100 parts`}
+                  part={progress.bytes === null ? null : progress.bytes.done / progress.bytes.of}
+                  words={`${progress.what}${progress.bytes === null ? '' : `: ${formatBytes(progress.bytes.done)} of ${formatBytes(progress.bytes.of)}`}`}
                 />
                 <div>
                   <Button onPress={month.stop}>Stop</Button>

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { isUnsaved, obstacleOf, obstacleToSending, reduceMonth, startState } from './month-state.ts';
+import { isUnsaved, obstacleOf, obstacleToSending, reduceMonth, startState, worthALook } from './month-state.ts';
 import type { MonthState } from './month-state.ts';
 import type { KeyPicture, PreparedPicture, SourcePicture } from './worker/protocol.ts';
 
@@ -83,6 +83,16 @@ describe('sending', () => {
     const withProblem = { ...ready, prepared: { ...prepared, problems: [problem] } };
     expect(obstacleToSending(withProblem, false)).toContain('looked at');
     expect(obstacleToSending(withProblem, true)).toBeNull();
+  });
+
+  it('waits until somebody has looked at record numbers of a new length, and at a key that may be an older copy', () => {
+    const lengthChange = { ids: 240, newLengths: 18 };
+    expect(obstacleToSending({ ...ready, prepared: { ...prepared, lengthChange } }, false)).toContain('looked at');
+    expect(worthALook({ ...prepared, lengthChange: { ids: 240, newLengths: 0 } }, key)).toEqual([]);
+    const lacking = { missing: 1, of: 2 };
+    const older = { ...ready, picture: { ...picture, key: { ...key, lacking } } };
+    expect(obstacleToSending(older, false)).toContain('looked at');
+    expect(obstacleToSending(older, true)).toBeNull();
   });
 
   it('is not possible where a file would be sent without its rows', () => {

@@ -1,4 +1,5 @@
 /** What the page knows of the month, and how it changes. */
+import { formatCount } from '../lib/format.ts';
 import type { Sending } from './messages.ts';
 import type { KeyPicture, Picture, PreparedPicture, Progress, SourcePicture } from './worker/protocol.ts';
 
@@ -71,6 +72,16 @@ export const nameOf = ({ fileName, sheet }: Pick<SourcePicture, 'fileName' | 'sh
 /** Problems that keep a whole table from being prepared. */
 const stopping: ReadonlySet<string> = new Set(['no-participant-column', 'ambiguous-date-format']);
 
+/** What somebody should have looked at before anything is sent, in a few words each. */
+export function worthALook({ problems, lengthChange }: PreparedPicture, key: KeyPicture | null): string[] {
+  const things: string[] = [];
+  if (key?.lacking != null) things.push('a key that lacks participants of the registry, who would get a second code');
+  if (lengthChange !== null && lengthChange.newLengths > 0) things.push('record numbers of a length that nobody had last month');
+  if (problems.length > 0)
+    things.push(`${formatCount(problems.length, 'thing')} to mend or to know; what cannot be read stays at the clinic`);
+  return things;
+}
+
 /** What has to be done before anything can be sent, the first thing first; null when all is done. */
 export function obstacleToSending({ picture, prepared, isStale }: MonthState, isLookedAt: boolean): string | null {
   const sources = picture?.sources ?? [];
@@ -80,7 +91,7 @@ export function obstacleToSending({ picture, prepared, isStale }: MonthState, is
   if (prepared.tables.length === 0) return 'No row can be sent. Mend what stands above, under Columns.';
   if (prepared.problems.some(({ kind }) => stopping.has(kind)) || prepared.emptyTables.length > 0)
     return 'One of the files cannot be prepared yet. Mend what stands above, under Columns, or leave the file out.';
-  if (prepared.problems.length > 0 && !isLookedAt) return 'Say that you have looked at what stays behind.';
+  if (worthALook(prepared, picture?.key ?? null).length > 0 && !isLookedAt) return 'Say that you have looked at what stands above.';
   return picture?.key?.isUnsaved === true ? 'Save the key file first.' : null;
 }
 

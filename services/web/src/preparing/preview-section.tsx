@@ -17,7 +17,7 @@ export interface PreviewSectionProps {
 
 /** Large, and the same until it is worked out anew. */
 export const PreviewSection = memo(function PreviewSection({ prepared, isStale, knowsTheRegistry }: PreviewSectionProps) {
-  const { tables, people, newPeople, rowsLeftBehind, agesTopCoded, lengthChange, columns, findings } = prepared;
+  const { tables, people, newPeople, rowsLeftBehind, agesTopCoded, lengthChange, columns, findings, problems } = prepared;
   const rows = tables.reduce((sum, each) => sum + each.rows, 0);
   return (
     <Section
@@ -56,7 +56,7 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
           <TablePreview key={table.table} table={table} />
         ))}
         <LeftBehind columns={columns} />
-        <Findings findings={findings} columns={columns} />
+        <Findings findings={findings} columns={columns} problems={problems} />
       </div>
     </Section>
   );
@@ -157,10 +157,15 @@ function LeftBehind({ columns }: Pick<PreparedPicture, 'columns'>) {
   );
 }
 
-function Findings({ findings, columns }: Pick<PreparedPicture, 'findings' | 'columns'>) {
+function Findings({ findings, columns, problems }: Pick<PreparedPicture, 'findings' | 'columns' | 'problems'>) {
   if (findings.length === 0) return null;
-  const isSent = ({ table, header }: FindingPicture) =>
-    columns.some((each) => each.table === table && each.columns.some((column) => column.header === header && column.match.as === 'value'));
+  const isWithheld = ({ table, header }: FindingPicture) =>
+    problems.some((problem) => problem.kind === 'identifiers-in-column' && problem.table === table && problem.header === header);
+  const isUsed = (finding: FindingPicture) =>
+    !isWithheld(finding) &&
+    columns.some(({ table, columns: all }) =>
+      all.some(({ header, match }) => table === finding.table && header === finding.header && match.as !== 'left-out'),
+    );
   return (
     <section aria-labelledby="findings" className="grid gap-2">
       <h3 id="findings" className="font-semibold">
@@ -174,7 +179,9 @@ function Findings({ findings, columns }: Pick<PreparedPicture, 'findings' | 'col
               {tableName(table)}, {header.trim() === '' ? 'a column without a header' : header}: {findingWords[name]}
               {count > 0 && `, ${formatCount(count, 'cell')}`}
               {line !== null && `, first on line ${line}`}.{' '}
-              <span className="text-quiet">{isSent(finding) ? 'These cells are not sent.' : 'The column stays behind.'}</span>
+              <span className="text-quiet">
+                {isUsed(finding) ? 'The column is used: look whether these cells may be sent.' : 'The column stays behind.'}
+              </span>
             </li>
           );
         })}

@@ -1,11 +1,10 @@
 /** The last step: the key file saved, then what was prepared sent, or saved as files where there is no page around this one. */
 import { useState } from 'react';
-import { formatCount } from '../lib/format.ts';
 import { Button } from '../ui/button.tsx';
 import { Checkbox } from '../ui/checkbox.tsx';
 import { Section } from '../ui/page.tsx';
 import { KeyRefusal } from './key/key-refusal.tsx';
-import { obstacleToSending } from './month-state.ts';
+import { obstacleToSending, worthALook } from './month-state.ts';
 import { SaveFiles } from './save-files.tsx';
 import { SendTables } from './send-tables.tsx';
 import type { Surroundings } from './surroundings.ts';
@@ -24,10 +23,11 @@ export interface SendSectionProps {
 }
 
 export function SendSection({ month, prepared, site, calendarMonth, surroundings }: SendSectionProps) {
-  const { problems } = prepared;
-  /** The problems that were looked at: new ones have to be looked at anew. */
-  const [lookedAt, setLookedAt] = useState<PreparedPicture['problems'] | null>(null);
-  const obstacle = obstacleToSending(month.state, lookedAt === problems);
+  /** What was looked at: when it is worked out anew, it has to be looked at anew. */
+  const [lookedAt, setLookedAt] = useState<PreparedPicture | null>(null);
+  const isLookedAt = lookedAt === prepared;
+  const things = worthALook(prepared, month.state.picture?.key ?? null);
+  const obstacle = obstacleToSending(month.state, isLookedAt);
   return (
     <Section
       title={surroundings === null ? 'Save' : 'Save and send'}
@@ -40,9 +40,9 @@ export function SendSection({ month, prepared, site, calendarMonth, surroundings
       }
     >
       <div className="grid max-w-2xl gap-6">
-        {problems.length > 0 && (
-          <Checkbox id="looked-at" value={lookedAt === problems} onChange={(isTicked) => setLookedAt(isTicked ? problems : null)}>
-            I have looked at the {formatCount(problems.length, 'thing')} to mend or to know. What cannot be read stays at the clinic.
+        {things.length > 0 && (
+          <Checkbox id="looked-at" value={isLookedAt} onChange={(isTicked) => setLookedAt(isTicked ? prepared : null)}>
+            I have looked at {things.join(', at ')}.
           </Checkbox>
         )}
         <SaveKey month={month} />

@@ -10,6 +10,7 @@ import { tableName } from '../../features/submissions/table-names.ts';
 import type { Month } from '../use-month.ts';
 import type { KeyPicture } from '../worker/protocol.ts';
 import { ChangeKey } from './change-key.tsx';
+import { nameOfIdType } from './id-types.ts';
 import { NewKeyForm } from './new-key-form.tsx';
 import { OpenKeyForm } from './open-key-form.tsx';
 
@@ -121,14 +122,19 @@ function OpenedKey({
         </Notice>
       )}
       {isWhole ? (
-        facts
+        <>
+          {facts}
+          <ChangeKey month={month} site={site} />
+        </>
       ) : (
         <details>
-          <summary className="link">What the key holds</summary>
-          <div className="mt-3">{facts}</div>
+          <summary className="link">What the key holds, and ways to change it</summary>
+          <div className="mt-3 grid gap-6 border-l-2 border-hairline pl-4">
+            {facts}
+            <ChangeKey month={month} site={site} />
+          </div>
         </details>
       )}
-      <ChangeKey month={month} site={site} />
       <SavedNote month={month} />
     </div>
   );
@@ -142,7 +148,7 @@ function KeyFacts({ keyPicture }: { readonly keyPicture: KeyPicture }) {
         { term: 'People', value: formatCount(people, 'person', 'people') },
         { term: 'First training days', value: `${peopleWithFirstDay} of ${people}` },
         { term: 'Codes', value: mode === 'random' ? 'drawn at random and remembered' : 'computed with the site’s secret' },
-        { term: 'Record number', value: idType },
+        { term: 'Record number', value: nameOfIdType(idType) },
         { term: 'Zeros at the beginning', value: stripLeadingZeros ? 'do not count' : 'count' },
         { term: 'Name of the secret', value: keyId },
         { term: 'Earlier secrets', value: secrets > 1 ? `${secrets - 1}, kept until everybody has been carried over` : 'none' },

@@ -9,18 +9,13 @@ import { formatCount } from '../../lib/format.ts';
 import type { Month } from '../use-month.ts';
 import { useAct } from '../use-act.ts';
 import { DrawnWordsFields } from './drawn-words-fields.tsx';
+import { idTypes } from './id-types.ts';
 import { KeyRefusal } from './key-refusal.tsx';
 import { useDrawnWords } from './use-drawn-words.ts';
 
-const idTypes = [
-  { value: 'mrn', label: 'Hospital record number' },
-  { value: 'department-number', label: 'Number of the therapy department' },
-  { value: 'registry-number', label: 'Number given for the registry alone' },
-];
-
 export function NewKeyForm({ month, site, held }: { readonly month: Month; readonly site: string; readonly held: number }) {
   const [mode, setMode] = useState<'random' | 'hmac'>('random');
-  const [idType, setIdType] = useState('mrn');
+  const [idType, setIdType] = useState<string>(idTypes[0].value);
   const [zeros, setZeros] = useState<'count' | 'do-not-count'>('count');
   const [attempt, setAttempt] = useState(0);
   const making = useAct();

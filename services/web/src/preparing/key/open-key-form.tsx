@@ -34,7 +34,11 @@ export function OpenKeyForm({ id, label, hint, act, onOpen }: OpenKeyFormProps) 
       return;
     }
     setAttempt(0);
-    void opening.run(() => onOpen(file, passphrase.trim().replace(/\s+/g, ' ')));
+    void opening.run(async () => {
+      await onOpen(file, passphrase.trim().replace(/\s+/g, ' '));
+      setFile(null);
+      setPassphrase('');
+    });
   }
 
   return (

@@ -227,9 +227,10 @@ export interface SourceChange {
 export type AskName = keyof Asks;
 
 export interface Progress {
+  /** What is being done: "Reading sessions.csv". */
   readonly what: string;
-  /** From 0 to 1; null while nobody can tell. */
-  readonly part: number | null;
+  /** How many bytes are done; null where it cannot be told. */
+  readonly bytes: { readonly done: number; readonly of: number } | null;
 }
 
 export type RefusalCode =

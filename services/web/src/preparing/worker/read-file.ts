@@ -38,10 +38,13 @@ async function* bytesOf(file: File, watch: Watch): AsyncGenerator<Uint8Array> {
   let read = 0;
   for (;;) {
     const { done, value } = await reader.read();
-    if (done) return;
+    if (done) {
+      watch.tell({ what: `Reading ${file.name}`, bytes: null });
+      return;
+    }
     yield value;
     read += value.length;
-    watch.tell({ what: `Reading ${file.name}`, part: file.size === 0 ? 1 : read / file.size });
+    watch.tell({ what: `Reading ${file.name}`, bytes: { done: read, of: file.size } });
     await watch.pause();
   }
 }

@@ -59,15 +59,15 @@ describe('the worker', () => {
   });
 
   it('tells how far it is, and gives bytes away instead of copying them', async () => {
-    const parts: (number | null)[] = [];
+    const told: unknown[] = [];
     const { room, transferred } = roomOf({
       'tables-to-send': async (_, { tell }) => {
-        tell({ what: 'x', part: 0.5 });
+        tell({ what: 'x', bytes: { done: 1, of: 2 } });
         return { tables: [{ table: 'bouts', rows: 1, csv: new ArrayBuffer(8) }], replacedCodes: [] };
       },
     });
-    await room.ask('tables-to-send', null, { onProgress: ({ part }) => parts.push(part) });
-    expect(parts).toEqual([0.5]);
+    await room.ask('tables-to-send', null, { onProgress: ({ bytes }) => told.push(bytes) });
+    expect(told).toEqual([{ done: 1, of: 2 }]);
     expect(transferred).toEqual([0, 1]);
   });
 
