@@ -162,7 +162,15 @@ export class KeyDesk {
   private take(key: SiteKey, passphrase: string): void {
     this.opened = { key, passphrase, saved: contentOf(key) };
     this.addition = null;
-    this.replaced = [];
+    this.replaced = this.leftToReplace(key);
+  }
+
+  /** After a rotation of which the registry was never told: codes it still holds, though the key has led them on. */
+  private leftToReplace({ generations }: SiteKey): ReplacedCode[] {
+    return (this.circumstances().knownParticipants ?? []).flatMap((from) => {
+      const to = generations.reduceRight((code, { replacedBy }) => replacedBy.get(code) ?? code, from);
+      return to === from ? [] : [{ from, to }];
+    });
   }
 
   private change(key: SiteKey, replaced: readonly ReplacedCode[]): void {

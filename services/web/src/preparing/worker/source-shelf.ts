@@ -59,6 +59,11 @@ export class SourceShelf {
     if (table !== undefined) this.replace(withTable(this.get(id), table, remembered));
   }
 
+  /** Matches the columns anew, as another key remembers them. */
+  matchAgain(remembered: StoredMatches): void {
+    this.sources = this.sources.map((source) => withTable(source, source.table, remembered));
+  }
+
   leaveOut(id: number): void {
     this.sources = this.sources.filter((source) => source.id !== id);
   }

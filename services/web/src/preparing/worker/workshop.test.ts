@@ -245,6 +245,19 @@ describe('files', () => {
 });
 
 describe('the key in the worker', () => {
+  it('that is opened in the place of another brings its own memory of the columns', async () => {
+    const { room: first } = await roomWithKey();
+    const { sources } = await first.ask('add-files', { files: [csvFile('sessions.csv', sessionsCsv)] });
+    await first.ask('match-column', { source: sources[0]?.id ?? 0, match: { header: 'device', as: 'left-out' } });
+    await first.ask('prepare', null);
+    const { file } = await first.ask('save-key', null);
+    const { room } = await roomWithKey();
+    await room.ask('add-files', { files: [csvFile('sessions.csv', sessionsCsv)] });
+    await room.ask('open-key', { file: new Blob([file.text]), passphrase });
+    const { prepared } = await room.ask('prepare', null);
+    expect(column(prepared, 'device')).toMatchObject({ match: { as: 'left-out' }, isNew: false });
+  });
+
   it('is not opened where something is wrong with the file, and says what', async () => {
     const { room, file } = await roomWithKey();
     const written = await file.text();
@@ -313,9 +326,16 @@ describe('the key in the worker', () => {
     expect(rotated.picture.key).toMatchObject({ keyId: '2026-12-2', secrets: 2, codesToReplace: 1 });
     const { picture } = await room.ask('prepare', null);
     expect(picture.key?.codesToReplace).toBe(2);
-    await room.ask('save-key', null);
+    const { file } = await room.ask('save-key', null);
     const { replacedCodes } = await room.ask('tables-to-send', null);
     expect(new Set(replacedCodes.map(({ from }) => from)).size).toBe(2);
+
+    // The page was closed before the registry was told.
+    const later = inProcessWorkroom();
+    await later.ask('begin', { ...site, knownParticipants: replacedCodes.map(({ from }) => from) });
+    const reopened = await later.ask('open-key', { file: new Blob([file.text]), passphrase });
+    expect(reopened.key).toMatchObject({ codesToReplace: 2, lacking: null, isUnsaved: false });
+    expect(await later.ask('codes-to-replace', null)).toEqual(replacedCodes);
   });
 
   it('is asked for before anything that needs it', async () => {

@@ -43,6 +43,8 @@ export function workshop(): Answers {
     },
     'open-key': async ({ file, passphrase }) => {
       await at().keys.open(file, passphrase);
+      at().shelf.matchAgain(remembered());
+      changed();
       return picture();
     },
     'merge-key': async ({ file, passphrase }) => {
