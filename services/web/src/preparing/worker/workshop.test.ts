@@ -237,6 +237,17 @@ describe('files', () => {
     for (const { found, mend } of refused) expect(`${found}${mend}`).not.toContain('open"');
   });
 
+  it('that changed on the disk since they were chosen are to be chosen again', async () => {
+    const { room } = await roomWithKey();
+    class ChangedFile extends File {
+      override stream(): never {
+        throw new DOMException('changed', 'NotReadableError');
+      }
+    }
+    const { refused } = await room.ask('add-files', { files: [new ChangedFile(['a'], 'sessions.csv')] });
+    expect(refused).toMatchObject([{ fileName: 'sessions.csv', mend: 'Choose the file again.' }]);
+  });
+
   it('of one table cannot be two', async () => {
     const { room } = await roomWithKey();
     await room.ask('add-files', { files: [csvFile('sessions.csv', sessionsCsv), csvFile('sessions 2.csv', sessionsCsv)] });
