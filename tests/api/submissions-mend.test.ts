@@ -170,6 +170,18 @@ describe('cells mended on screen', () => {
     expect(found.body.items).toMatchObject([{ table: 'bouts', line: 40, column: 'hr_end' }]);
   });
 
+  it('are not a way to type a whole file', async () => {
+    const checked = await upload(month());
+    await server.database.owner.query(
+      `insert into submission_mends (submission_id, site_id, table_key, line, column_key, value)
+       select $1, $2, 'bouts', line, 'hr_end', '117' from generate_series(2, 20001) line`,
+      [checked.id, site.id],
+    );
+    const refused = await mend(checked.id, { ...hr(2, '118'), column: 'steps' });
+    expect([refused.status, codeOf(refused.body)]).toEqual([413, 'too-large']);
+    expect((await coordinator.get(`/api/submissions/${checked.id}`).expect(200)).body.status).toBe('checked');
+  });
+
   it('are the coordinators’ alone, and only until the month is settled', async () => {
     const checked = await upload(month());
     const therapist = await makePerson(server, { grants: [{ role: 'therapist', site }] });

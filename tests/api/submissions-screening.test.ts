@@ -208,6 +208,19 @@ describe('a file that identifies somebody', () => {
     expect(await wholeDatabase()).not.toContain('SMITH');
   });
 
+  it('is named by headers that are cut to a readable length and hold no control marks', async () => {
+    const full = rowOf('sessions', { participant: anna });
+    const bytes = stringify([
+      [...Object.keys(full), `Surname\u202e${'x'.repeat(300)}`],
+      [...Object.values(full), '1'],
+    ]);
+    const checked = await uploadMonth(server, coordinator, site, '2026-01', { sessions: bytes });
+    const names = (await findingsOf(coordinator, checked))
+      .filter(({ Rule }) => Rule === 'F06' || Rule === 'F50')
+      .map(({ Column }) => Column);
+    expect(names).toEqual([`Surname ${'x'.repeat(52)}…`, `Surname ${'x'.repeat(52)}…`]);
+  });
+
   it.each([
     ['an image called a table', Buffer.concat([Buffer.from([0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a]), Buffer.from('Jane Roe 1961')])],
     ['a file without a header', Buffer.from('Jane Roe,1961-05-12\r\nJane Roe,1961-05-12\r\n')],

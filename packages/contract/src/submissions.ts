@@ -185,7 +185,7 @@ export const mendCells = endpoint({
       .max(1_000),
   }),
   response: Submission,
-  problems: ['not-found', 'submission-closed', 'submission-busy', 'identifies-somebody'],
+  problems: ['not-found', 'submission-closed', 'submission-busy', 'too-large', 'identifies-somebody'],
 });
 
 export const checkSubmission = endpoint({

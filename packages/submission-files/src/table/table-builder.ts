@@ -92,7 +92,10 @@ export class TableBuilder {
     this.watchesEveryRow =
       this.readers.length < columns.length ||
       this.readers.some(({ store: { variable } }) => variable.hard === undefined && isNumber(variable));
-    watch?.header(columns.map(({ meaning }, position) => (meaning.kind === 'undeclared' ? (cells[position] ?? '') : meaning.variable.key)));
+    watch?.header(
+      columns.map(({ meaning }, position) => (meaning.kind === 'undeclared' ? (cells[position] ?? '') : meaning.variable.key)),
+      columns.map(columnName),
+    );
     this.addMendedColumns();
     this.readers.sort((a, b) => Number(a.reader instanceof MeasuredReader) - Number(b.reader instanceof MeasuredReader));
     this.reportMissing(line);

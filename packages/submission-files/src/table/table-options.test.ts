@@ -8,9 +8,11 @@ import { makeWorkbook } from '../test-support/make-workbook.ts';
 /** Notes down what it sees. */
 class Notes implements CellWatch {
   headers: readonly string[] = [];
+  shown: readonly string[] = [];
   readonly rows: [line: number, cells: readonly string[]][] = [];
-  header(names: readonly string[]): void {
+  header(names: readonly string[], shown: readonly string[]): void {
     this.headers = names;
+    this.shown = shown;
   }
   row(cells: readonly string[], line: number): void {
     this.rows.push([line, cells]);
@@ -58,6 +60,7 @@ describe('a watch', () => {
     const log = new FindingLog();
     await readTable('bouts', encode('Bout No,Steps,Jane Doe,colour\r\n1,2,3,4\r\n'), log, undefined, { watch });
     expect(watch.headers).toEqual(['bout_no', 'steps', 'Jane Doe', 'colour']);
+    expect(watch.shown).toEqual(['bout_no', 'steps', 'C', 'colour']);
     const undeclared = log
       .byRule()
       .find(({ id }) => id === 'F06')

@@ -6,8 +6,11 @@
  * has weighed. The others come whole.
  */
 export interface CellWatch {
-  /** Keys of the columns that the dictionary has, under whatever header; the header itself of all others. */
-  header(names: readonly string[]): void;
+  /**
+   * @param names Keys of the columns that the dictionary has, under whatever header; the header itself of all others.
+   * @param shown The names by which findings call the columns.
+   */
+  header(names: readonly string[], shown: readonly string[]): void;
   row(cells: readonly string[], line: number): void;
   /** Whether findings may repeat the header of a column that the dictionary does not have. */
   mayShowHeader(header: string): boolean;

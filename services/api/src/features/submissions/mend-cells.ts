@@ -10,7 +10,7 @@ import { asActor } from '../../database/as-actor.ts';
 import { Refusal, type LocatedIssue } from '../../http/refusal.ts';
 import type { FileKey } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
-import { putMends, setMendsDigest, type Mend } from './mends.repository.ts';
+import { countMends, putMends, setMendsDigest, type Mend } from './mends.repository.ts';
 import { present } from './read-submissions.ts';
 import { readFiles, reopen, type FileRecord } from './submissions.repository.ts';
 
@@ -26,6 +26,9 @@ function issueWith({ table, column }: Mend, files: readonly FileRecord[]): strin
   if (fileOf(table, files) === null) return 'No file of this table is there. Send one first.';
   return tableOf(table).variables.some(({ key }) => key === column) ? null : 'The table has no such column.';
 }
+
+/** More than anybody types: who has as many mistakes mends them in the file. */
+const mostMends = 20_000;
 
 /** What identifies somebody is refused at once: unlike a file, it is not kept until the check. */
 const identifies = ({ table, column, value }: Mend): boolean =>
@@ -62,6 +65,11 @@ export const mendCells = (
     const last = new Map(mends.map((mend) => [`${mend.table} ${mend.line} ${mend.column}`, mend]));
     await reopen(tx, submissionId);
     await putMends(tx, submissionId, submission.siteId, [...last.values()]);
+    if ((await countMends(tx, submissionId)) > mostMends)
+      throw new Refusal(
+        'too-large',
+        `At most ${mostMends.toLocaleString('en')} cells can be mended on screen. Nothing of these was kept; send a corrected file.`,
+      );
     const changed = new Set([...last.values()].map(({ table }) => fileOf(table, files) ?? table));
     for (const file of changed) await setMendsDigest(tx, submissionId, file);
     await recordAudit(tx, actor, {

@@ -29,6 +29,9 @@ export async function putMends(tx: Tx, submissionId: string, siteId: string, men
   );
 }
 
+export const countMends = async (tx: Tx, submissionId: string): Promise<number> =>
+  ((await tx.query('select count(*)::int as n from submission_mends where submission_id = $1', [submissionId])) as [{ n: number }])[0].n;
+
 const readAll = async (tx: Tx, submissionId: string): Promise<Mend[]> =>
   (await tx.query(
     `select table_key as "table", line, column_key as "column", value from submission_mends where submission_id = $1

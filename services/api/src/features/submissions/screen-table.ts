@@ -9,6 +9,7 @@ import { columnLetters, type CellWatch, type FindingLog } from '@cairnstep/submi
  */
 export class TableScreen implements CellWatch {
   private screen: IdentifierScreen | null = null;
+  private shown: readonly string[] = [];
 
   constructor(
     private readonly table: TableKey,
@@ -16,7 +17,8 @@ export class TableScreen implements CellWatch {
     private readonly safeHeaders: ReadonlySet<string>,
   ) {}
 
-  header(names: readonly string[]): void {
+  header(names: readonly string[], shown: readonly string[]): void {
+    this.shown = shown;
     this.screen = new IdentifierScreen(
       names.map((name) => name.trim()),
       { table: this.table, dictionaryTable: this.table, safeHeaders: this.safeHeaders },
@@ -39,7 +41,7 @@ export class TableScreen implements CellWatch {
         rule: finding.strength === 'block' ? 'F50' : 'F51',
         table: this.table,
         line: finding.line,
-        column: finding.column ?? columnLetters(finding.columnNumber - 1),
+        column: this.shown[finding.columnNumber - 1] ?? columnLetters(finding.columnNumber - 1),
         found: wordsOf(finding),
       });
     }
