@@ -88,6 +88,9 @@ export async function checkSubmission(context: Context, submissionId: string): P
     loadRegistryContext(tx, submission.siteId, submission.month, read.tables, clock().getUTCFullYear()),
   );
   await asActor(database, registry, async (tx) => {
+    // Whoever else checks the same submission, as after a lost connection, waits here and finds it done.
+    await tx.query("select pg_advisory_xact_lock(hashtext('check'), hashtext($1))", [submissionId]);
+    if (!isSameCheck(await readSubmission(tx, submissionId), submission)) return;
     await tx.query('savepoint before');
     // Where reading has found errors, nothing will be staged.
     const staging = await beginStaging(tx, log.counts.errors > 0 ? [] : Object.values(read.tables), submissionId, submission.siteId);
@@ -104,10 +107,13 @@ export async function checkSubmission(context: Context, submissionId: string): P
   });
 }
 
+const isSameCheck = (now: SubmissionRecord | null, before: SubmissionRecord): now is SubmissionRecord =>
+  now?.status === 'checking' && now.progress?.startedAt === before.progress?.startedAt;
+
 /** False when the submission is no longer being checked, or is by a later run; then nothing was written. */
 async function writeOutcome(tx: Tx, before: SubmissionRecord, checked: Checked): Promise<boolean> {
   const submission = await lockSubmission(tx, before.id);
-  if (submission?.status !== 'checking' || submission.progress?.startedAt !== before.progress?.startedAt) return false;
+  if (!isSameCheck(submission, before)) return false;
   await clearCheck(tx, submission.id);
   await insertFindings(
     tx,
