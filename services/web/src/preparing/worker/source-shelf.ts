@@ -29,6 +29,8 @@ export interface Source {
   readonly matches: readonly ColumnMatch[];
 }
 
+export type AssignedSource = Source & { readonly table: TableKey };
+
 export class SourceShelf {
   sources: readonly Source[] = [];
   private refused: readonly RefusedFile[] = [];
@@ -78,7 +80,7 @@ export class SourceShelf {
   }
 
   /** Files to be prepared. @throws Refusal when two are for the same table */
-  get assigned(): readonly (Source & { readonly table: TableKey })[] {
+  get assigned(): readonly AssignedSource[] {
     const assigned = this.sources.flatMap((source) => (source.table === null ? [] : [{ ...source, table: source.table }]));
     if (new Set(assigned.map(({ table }) => table)).size < assigned.length)
       throw new Refusal('failed', 'Two files are for the same table. Give one of them another table, or leave it out.');
