@@ -7,6 +7,8 @@ export type { ColumnRole, DetectionContext } from './detection/detection-context
 export type { TextTable } from './detection/text-table.ts';
 export { detectIdentifiers, screenCsvText } from './detection/detect-identifiers.ts';
 export { IdentifierScreen } from './detection/identifier-screen.ts';
+export { showableFileName } from './detection/showable-file-name.ts';
+export type { FileOf } from './detection/showable-file-name.ts';
 export { showableHeader } from './detection/showable-header.ts';
 
 export { dateFormats } from './dates/date-format.ts';

@@ -7,6 +7,7 @@ import type {
   removeSubmissionFile as RemoveFile,
   removeSubmissionWorkbook as RemoveWorkbook,
 } from '@cairnstep/contract';
+import { showableFileName } from '@cairnstep/deidentification';
 import { defaultWorkbookLimits, plainWorkbook } from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
@@ -17,7 +18,6 @@ import type { RequestFacts } from '../../http/route.ts';
 import type { FileKey } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
 import { present } from './read-submissions.ts';
-import { showableFileName } from './showable-file-name.ts';
 import { putFile, removeFile, reopen } from './submissions.repository.ts';
 
 /** Counts the bytes that arrive, whatever the header announced. */
@@ -61,7 +61,7 @@ async function put(
     await reopen(tx, submissionId);
     await putFile(tx, submissionId, submission.siteId, {
       table: key,
-      fileName: showableFileName(fileName, key, submission),
+      fileName: showableFileName(fileName, { table: key, siteCode: submission.siteCode, month: submission.month }),
       sha256,
       content,
       bytes: sent.length,

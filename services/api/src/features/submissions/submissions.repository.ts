@@ -167,13 +167,16 @@ export async function* readContent(tx: Tx, id: string, file: FileKey): AsyncGene
     return row?.piece ? Buffer.from(row.piece, 'base64') : undefined;
   };
   let next = fetch(1);
-  for (let from = 1 + contentPieceBytes; ; from += contentPieceBytes) {
-    const piece = await next;
-    if (!piece?.length) return;
-    next = fetch(from);
-    // Whoever stops reading early does not wait for it.
-    next.catch(() => undefined);
-    yield piece;
+  try {
+    for (let from = 1 + contentPieceBytes; ; from += contentPieceBytes) {
+      const piece = await next;
+      if (!piece?.length) return;
+      next = fetch(from);
+      yield piece;
+    }
+  } finally {
+    // Whoever stops reading early goes on with the same connection.
+    await next.catch(() => undefined);
   }
 }
 

@@ -15,7 +15,7 @@ import { ApplyMends } from './apply-mends.tsx';
 import { MendCell } from './mend-cell.tsx';
 import type { MendDrafts } from './mend-drafts.ts';
 import { findingsQuery } from './submissions.queries.ts';
-import type { FindingFilter } from './submissions.queries.ts';
+import type { FindingFilter, TableKey } from './submissions.queries.ts';
 import { isColumn, tableName, tables } from './table-names.ts';
 
 export type Place = ResponseOf<typeof listFindings>['items'][number];
@@ -94,7 +94,7 @@ export function FindingPlaces({ submission, caption, drafts }: FindingPlacesProp
               <Table
                 id="places"
                 caption={caption}
-                columns={drafts === null ? placeColumns : [...placeColumns, mendColumn(drafts, items)]}
+                columns={drafts === null ? placeColumns : [...placeColumns, mendColumn(submission, drafts, items)]}
                 rows={items}
                 rowKey={({ id }) => String(id)}
                 isSortable={false}
@@ -111,7 +111,9 @@ export function FindingPlaces({ submission, caption, drafts }: FindingPlacesProp
 }
 
 /** One field for each cell, however many findings name it. */
-function mendColumn(drafts: MendDrafts, items: readonly Place[]): Column<Place> {
+function mendColumn({ files }: Submission, drafts: MendDrafts, items: readonly Place[]): Column<Place> {
+  const isKept = (key: TableKey) =>
+    files.some(({ table, tables: of, refused }) => !refused && (table === key || (table === null && of?.includes(key) === true)));
   const first = new Map<string, number>();
   for (const { id, table, line, column } of [...items].reverse()) first.set(`${table} ${line} ${column}`, id);
   return {
@@ -120,7 +122,7 @@ function mendColumn(drafts: MendDrafts, items: readonly Place[]): Column<Place> 
     value: () => null,
     isAct: true,
     cell: ({ id, table, line, column }) => {
-      if (table === null || line === null || line < 2 || column === null || !isColumn(table, column)) return null;
+      if (table === null || line === null || line < 2 || column === null || !isColumn(table, column) || !isKept(table)) return null;
       if (first.get(`${table} ${line} ${column}`) !== id) return <span className="text-quiet">as above</span>;
       return <MendCell place={{ table, line, column }} drafts={drafts} />;
     },

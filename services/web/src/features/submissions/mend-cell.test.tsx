@@ -99,6 +99,13 @@ describe('a cell with a finding', () => {
     expect(screen.queryByRole('group', { name: 'Changes not applied yet' })).toBeNull();
   });
 
+  it('is not offered where the file was not kept', async () => {
+    const files = withErrors.files.map((file) => ({ ...file, refused: true }));
+    open({}, { ...withErrors, files });
+    await screen.findByRole('row', { name: /^Sessions 5 hr_rest/ });
+    expect(screen.queryByRole('button', { name: /^Mend / })).toBeNull();
+  });
+
   it('is not offered to whoever only looks', async () => {
     open({ 'GET /api/account': therapist });
     await screen.findByRole('row', { name: /^Sessions 5 hr_rest/ });

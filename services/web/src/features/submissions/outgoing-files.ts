@@ -1,4 +1,6 @@
 /** Files chosen in this browser that the registry does not have yet. */
+import type { Submission } from '@cairnstep/contract';
+import { showableFileName } from '@cairnstep/deidentification';
 import { useCallback, useRef, useState } from 'react';
 import { useStayOnPage } from '../../lib/use-stay-on-page.ts';
 import { recogniseFile } from './recognise-table.ts';
@@ -27,7 +29,7 @@ export interface Outgoing {
   readonly stop: () => void;
 }
 
-export function useOutgoingFiles(submissionId: string): Outgoing {
+export function useOutgoingFiles({ id: submissionId, site, month }: Pick<Submission, 'id' | 'site' | 'month'>): Outgoing {
   const [files, setFiles] = useState<readonly OutgoingFile[]>([]);
   const [control, setControl] = useState<AbortController | null>(null);
   const nextId = useRef(0);
@@ -60,7 +62,9 @@ export function useOutgoingFiles(submissionId: string): Outgoing {
       if (table === null || sending.signal.aborted) continue;
       change(id, { sent: 0, error: null });
       try {
-        await mutateAsync({ table, file, signal: sending.signal, onSent: (sent) => change(id, { sent }) });
+        // The name stands in the address of the request, and may be somebody's.
+        const named = new File([file], showableFileName(file.name, { table, siteCode: site.code, month }));
+        await mutateAsync({ table, file: named, signal: sending.signal, onSent: (sent) => change(id, { sent }) });
         leaveOut(id);
         arrived += 1;
       } catch (error) {

@@ -123,6 +123,14 @@ describe('files of a month', () => {
     expect(await screen.findByText('No file yet.')).toBeTruthy();
   });
 
+  it('are sent under their own names only where these are made of words of the registry', async () => {
+    const { asked } = open(sample(), { [`PUT ${path}/files/bouts`]: sample({ files: [fileOf('bouts')] }) });
+    await choose(csv('bouts of Jane Roe 12-05-1961.csv'));
+    expect(screen.getByText('bouts of Jane Roe 12-05-1961.csv')).toBeTruthy();
+    await press('Send 1 file');
+    await waitFor(() => expect(puts(asked)).toEqual(['/files/bouts?fileName=bouts.csv']));
+  });
+
   it('that were not kept say why and what to do', async () => {
     open(checked({ files: [{ ...fileOf('sessions'), refused: true }] }));
     expect((await screen.findByRole('list', { name: 'Files sent' })).textContent).toContain(

@@ -44,7 +44,7 @@ function Submit({ submission, isCutOff }: { readonly submission: Submission; rea
   const { status, site } = submission;
   const account = useAccount();
   const isCoordinator = maySubmit(account, site);
-  const outgoing = useOutgoingFiles(submission.id);
+  const outgoing = useOutgoingFiles(submission);
   const [isStale, setStale] = useState(false);
   const drafts = useReasonDrafts();
   const mends = useMendDrafts(submission);
