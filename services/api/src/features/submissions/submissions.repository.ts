@@ -172,6 +172,8 @@ export async function* readContent(tx: Tx, id: string, file: FileKey): AsyncGene
       const piece = await next;
       if (!piece?.length) return;
       next = fetch(from);
+      // Should it fail before it is asked for: that is told then.
+      next.catch(() => undefined);
       yield piece;
     }
   } finally {
