@@ -3,15 +3,21 @@ import { Validator } from '@seriousme/openapi-schema-validator';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import supertest from 'supertest';
 import { endpoints, problems } from '../../packages/contract/src/index.ts';
+import { authority, entries } from '../../services/api/src/authority/table.ts';
 import { startTestServer, type TestServer } from '../support/server.ts';
 
 interface Operation {
   readonly operationId: string;
   readonly parameters: readonly { readonly name: string; readonly in: string }[];
   readonly responses: Readonly<Record<string, unknown>>;
+  readonly security: readonly Readonly<Record<string, readonly string[]>>[];
 }
 let server: TestServer;
-let document: { openapi: string; paths: Record<string, Record<string, Operation>> };
+let document: {
+  openapi: string;
+  paths: Record<string, Record<string, Operation>>;
+  components: { securitySchemes: Record<string, { type: string; openIdConnectUrl?: string }> };
+};
 beforeAll(async () => {
   server = await startTestServer();
   document = (await supertest(server.url).get('/api/openapi.json').expect(200)).body;
@@ -49,6 +55,20 @@ describe('the OpenAPI document', () => {
           .sort(),
       ).toEqual(inPath.sort());
     }
+  });
+
+  it("says what lets a caller in: nothing, a session, or also the token of a site's system", () => {
+    for (const { operation } of operations()) {
+      const entry = entries[operation.operationId as keyof typeof endpoints];
+      const ways = operation.security.map((way) => Object.keys(way)[0]);
+      if (entry === 'anyone') expect(ways, operation.operationId).toEqual([]);
+      else if (entry === 'signed-in' || authority[entry]['site-system'] === 'no') expect(ways, operation.operationId).toEqual(['session']);
+      else expect(operation.security, operation.operationId).toEqual([{ session: [] }, { siteSystem: ['submissions'] }]);
+    }
+    expect(document.components.securitySchemes['siteSystem']).toMatchObject({
+      type: 'openIdConnect',
+      openIdConnectUrl: `${server.config.OIDC_ISSUER}/.well-known/openid-configuration`,
+    });
   });
 
   it('names the status of every refusal an endpoint can answer with', () => {

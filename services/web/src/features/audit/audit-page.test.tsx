@@ -9,6 +9,7 @@ const entries = [
   { ...entry, seq: 1_204, act: 'submission.commit' },
   { ...entry, seq: 1_203, act: 'unheard.of', role: 'administrator steward', result: 'refused' },
   { ...entry, seq: 1_202, act: 'sign-in', actor: 'system', role: 'system', object: null },
+  { ...entry, seq: 1_201, act: 'submission.open', actor: 'Training records', role: 'site-system' },
 ];
 const steward = signedInAs({ role: 'steward', site: null });
 
@@ -27,6 +28,7 @@ it('tells who did what, newest first, in words where they are known', async () =
   expect(await screen.findByRole('row', { name: /^1\u202F204 .* Mara Lind site coordinator submission committed S01 done$/ })).toBeTruthy();
   expect(screen.getByRole('row', { name: /administrator, data steward|data steward, administrator/ }).textContent).toContain('unheard.of');
   expect(screen.getByRole('row', { name: /the registry itself none signed in nothing named done$/ })).toBeTruthy();
+  expect(screen.getByRole('row', { name: /Training records system of a site submission opened S01 done$/ })).toBeTruthy();
   expect(screen.getByRole('link', { name: 'Next page' }).getAttribute('href')).toBe('/audit?page=2#entries');
 });
 

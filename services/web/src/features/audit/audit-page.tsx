@@ -60,11 +60,12 @@ export default function AuditPage() {
 
 function leadOf(isSteward: boolean, isAdministrator: boolean): string {
   if (isSteward) return 'Who saw, changed, decided and downloaded what, in the whole registry.';
-  return isAdministrator ? 'What was done to accounts and roles, and your own acts.' : 'Your own acts in the registry.';
+  return isAdministrator ? 'What was done to accounts, roles and site systems, and your own acts.' : 'Your own acts in the registry.';
 }
 
-/** Someone with several roles acts with all of them; the registry itself has none. */
+/** Someone with several roles acts with all of them; a site's system acts as one, the registry itself has none. */
 function rolesInWords(names: string | null): string | null {
+  if (names === 'site-system') return 'system of a site';
   const known = (names ?? '').split(' ').flatMap((name) => roles.filter((role) => role === name));
   return known.length === 0 ? null : known.map((role) => roleNames[role]).join(', ');
 }
