@@ -24,19 +24,25 @@ class Vocabulary {
   }
 }
 
+/** The last row in which a cell is not just what the dictionary allows in its column; -1 when there was none. */
+export interface DoubtfulRow {
+  row: number;
+}
+
 /** A column being filled. Arrays exist only once the column needs them. */
 export class ColumnStore {
   readonly vocabulary = new Vocabulary();
   private numbers: Float64Array | null = null;
   private words: Uint32Array | null = null;
   private unreadable: Uint8Array | null = null;
-  /** The hard limits; none is allowed by a column that has no limits. */
+  /** The hard limits; a column without them allows no number by itself. */
   private readonly least: number;
   private readonly most: number;
 
   constructor(
     readonly variable: Variable,
     private capacity: number,
+    private readonly doubtful: DoubtfulRow = { row: -1 },
   ) {
     this.least = variable.hard?.min ?? Infinity;
     this.most = variable.hard?.max ?? -Infinity;
@@ -56,6 +62,7 @@ export class ColumnStore {
   setNumber(row: number, value: number): void {
     this.numbers ??= new Float64Array(this.capacity).fill(Number.NaN);
     this.numbers[row] = value;
+    if (value < this.least || value > this.most) this.doubtful.row = row;
   }
 
   setWord(row: number, number: number): void {
@@ -66,15 +73,7 @@ export class ColumnStore {
   setUnreadable(row: number): void {
     this.unreadable ??= new Uint8Array(this.capacity);
     this.unreadable[row] = 1;
-  }
-
-  /** Whether the row holds nothing, or just what the dictionary allows here. */
-  isAllowed(row: number): boolean {
-    const { numbers, unreadable } = this;
-    if (unreadable !== null && unreadable[row] === 1) return false;
-    if (numbers === null) return true;
-    const number = numbers[row] ?? Number.NaN;
-    return number !== number || (number >= this.least && number <= this.most);
+    this.doubtful.row = row;
   }
 
   /** The word already stored in a row, '' when there is none. */

@@ -13,6 +13,7 @@ import type { CellKind } from './cell-kind.ts';
 import type { CellReader } from './cell-reader.ts';
 import { CodeReader } from './code-reader.ts';
 import { ColumnStore } from './column-store.ts';
+import type { DoubtfulRow } from './column-store.ts';
 import { isFormulaLike } from './formula-like.ts';
 import type { UnitFactor } from './header-names.ts';
 import { columnLetters, columnName, lastFilled, readHeaderRow } from './header-row.ts';
@@ -37,6 +38,7 @@ const isBlank = (cells: readonly string[], count: number): boolean => {
 export class TableBuilder {
   private readonly variables: readonly Variable[];
   private readonly stores: ColumnStore[];
+  private readonly doubtful: DoubtfulRow = { row: -1 };
   private readonly present = new Set<string>();
   private manner: DecimalManner = { commaMayMarkThousands: true, mark: 0 };
   /** Per position in the file the reader of its column, in the order in which a row's cells must be read. */
@@ -56,7 +58,7 @@ export class TableBuilder {
     private readonly options: TableOptions = {},
   ) {
     this.variables = tableOf(table).variables;
-    this.stores = this.variables.map((variable) => new ColumnStore(variable, firstCapacity));
+    this.stores = this.variables.map((variable) => new ColumnStore(variable, firstCapacity, this.doubtful));
   }
 
   /** Rows not handed over yet. */
@@ -193,7 +195,7 @@ export class TableBuilder {
     const row = this.rows;
     this.plainRows ??= new PlainRows(this.readers, this.width, separator, this.limits.cellLength);
     const next = this.plainRows.read(text, start, row);
-    if (next < 0 || (watch && !this.isAllowed(row))) return -1;
+    if (next < 0 || (watch && this.doubtful.row === row)) return -1;
     this.rows += 1;
     this.rowsInAll += 1;
     this.lines[row] = line;
@@ -213,13 +215,7 @@ export class TableBuilder {
       }
     }
     const { watch } = this.options;
-    if (watch && (this.watchesEveryRow || count > this.width || !this.isAllowed(row))) watch.row(cells.slice(0, count), line);
-  }
-
-  /** Whether every cell of the row is just what the dictionary allows. */
-  private isAllowed(row: number): boolean {
-    for (const { store } of this.readers) if (!store.isAllowed(row)) return false;
-    return true;
+    if (watch && (this.watchesEveryRow || count > this.width || this.doubtful.row === row)) watch.row(cells.slice(0, count), line);
   }
 
   /** The row with what was typed in place of its cells. */
@@ -262,6 +258,7 @@ export class TableBuilder {
     const taken = new TypedTable(this.table, this.rows, this.lines.subarray(0, this.rows), columns, new Set(this.present));
     this.lines = new Uint32Array(this.capacity);
     this.rows = 0;
+    this.doubtful.row = -1;
     return taken;
   }
 }
