@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { isUnsaved, obstacleOf, obstacleToSending, reduceMonth, startState, worthALook } from './month-state.ts';
+import { isOfAnotherMonth, isUnsaved, obstacleOf, obstacleToSending, reduceMonth, startState, worthALook } from './month-state.ts';
 import type { MonthState } from './month-state.ts';
 import type { KeyPicture, PreparedPicture, SourcePicture } from './worker/protocol.ts';
 
@@ -43,6 +43,7 @@ const prepared: PreparedPicture = {
   newPeople: 1,
   agesTopCoded: 0,
   lengthChange: null,
+  rowsInMonth: { table: 'sessions', inside: 1, dated: 1 },
 };
 const problem = {
   kind: 'unreadable-cell',
@@ -100,6 +101,11 @@ describe('sending', () => {
     const unknown = { ...problem, kind: 'no-participant-column' as const };
     expect(obstacleToSending({ ...ready, prepared: { ...prepared, problems: [unknown] } }, true)).toContain('cannot be prepared');
   });
+});
+
+it('is of another month where less than half of the training is of the one prepared', () => {
+  expect(isOfAnotherMonth({ table: 'sessions', inside: 4, dated: 9 })).toBe(true);
+  expect(isOfAnotherMonth({ table: 'sessions', inside: 4, dated: 8 })).toBe(false);
 });
 
 describe('leaving the page', () => {

@@ -72,6 +72,9 @@ export const nameOf = ({ fileName, sheet }: Pick<SourcePicture, 'fileName' | 'sh
 /** Problems that keep a whole table from being prepared. */
 const stopping: ReadonlySet<string> = new Set(['no-participant-column', 'ambiguous-date-format']);
 
+/** A correction may bring rows of months before; where they are the most, the wrong file may have been dropped: told, and not in the way. */
+export const isOfAnotherMonth = ({ inside, dated }: NonNullable<PreparedPicture['rowsInMonth']>): boolean => inside * 2 < dated;
+
 /** What somebody should have looked at before anything is sent, in a few words each. */
 export function worthALook({ problems, lengthChange }: PreparedPicture, key: KeyPicture | null): string[] {
   const things: string[] = [];

@@ -15,6 +15,7 @@ const prepared: PreparedPicture = {
   newPeople: 0,
   agesTopCoded: 0,
   lengthChange: null,
+  rowsInMonth: null,
 };
 const month = {
   site: 'S01',

@@ -59,7 +59,7 @@ const keyFiles = (): Promise<KeyFiles> => (made ??= makeKeyFiles());
 
 async function makeKeyFiles(): Promise<KeyFiles> {
   const room = inProcessWorkroom();
-  await room.ask('begin', { site: 'S01', knownParticipants: [], safeHeaders: [], today });
+  await room.ask('begin', { site: 'S01', month: null, knownParticipants: [], safeHeaders: [], today });
   const { file } = await room.ask('make-key', { mode: 'random', idType: 'mrn', stripLeadingZeros: false, passphrase });
   await room.ask('add-files', { files: sampleFiles() });
   await room.ask('prepare', null);

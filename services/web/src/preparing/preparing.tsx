@@ -28,8 +28,14 @@ export function Preparing({
   today,
 }: PreparingProps) {
   const circumstances = useMemo(
-    () => ({ site: site.code, knownParticipants: surroundings === null ? null : knownParticipants, safeHeaders, today }),
-    [site.code, surroundings, knownParticipants, safeHeaders, today],
+    () => ({
+      site: site.code,
+      month: calendarMonth,
+      knownParticipants: surroundings === null ? null : knownParticipants,
+      safeHeaders,
+      today,
+    }),
+    [site.code, calendarMonth, surroundings, knownParticipants, safeHeaders, today],
   );
   const month = useMonth(workroom, circumstances);
   const { picture, prepared, isStale } = month.state;
@@ -46,7 +52,12 @@ export function Preparing({
           {prepared !== null && (
             <>
               <ColumnsSection month={month} prepared={prepared} />
-              <PreviewSection prepared={prepared} isStale={isStale} knowsTheRegistry={surroundings !== null} />
+              <PreviewSection
+                prepared={prepared}
+                isStale={isStale}
+                monthName={formatMonth(calendarMonth)}
+                knowsTheRegistry={surroundings !== null}
+              />
               <SendSection month={month} prepared={prepared} site={site.code} calendarMonth={calendarMonth} surroundings={surroundings} />
             </>
           )}

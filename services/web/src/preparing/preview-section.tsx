@@ -6,18 +6,21 @@ import { Facts } from '../ui/facts.tsx';
 import { Notice } from '../ui/notice.tsx';
 import { Section } from '../ui/page.tsx';
 import { findingWords } from './finding-words.ts';
+import { isOfAnotherMonth } from './month-state.ts';
 import type { ColumnPicture, FindingPicture, PreparedPicture, PreparedTablePicture } from './worker/protocol.ts';
 
 export interface PreviewSectionProps {
   readonly prepared: PreparedPicture;
   readonly isStale: boolean;
+  /** "November 2026" */
+  readonly monthName: string;
   /** Whether the registry has said whom it holds. */
   readonly knowsTheRegistry: boolean;
 }
 
 /** Large, and the same until it is worked out anew. */
-export const PreviewSection = memo(function PreviewSection({ prepared, isStale, knowsTheRegistry }: PreviewSectionProps) {
-  const { tables, people, newPeople, rowsLeftBehind, agesTopCoded, lengthChange, columns, findings, problems } = prepared;
+export const PreviewSection = memo(function PreviewSection({ prepared, isStale, monthName, knowsTheRegistry }: PreviewSectionProps) {
+  const { tables, people, newPeople, rowsLeftBehind, agesTopCoded, lengthChange, rowsInMonth, columns, findings, problems } = prepared;
   const rows = tables.reduce((sum, each) => sum + each.rows, 0);
   return (
     <Section
@@ -43,9 +46,22 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
             </p>
           </Notice>
         )}
+        {rowsInMonth !== null && isOfAnotherMonth(rowsInMonth) && (
+          <Notice
+            kind="warning"
+            title={`Only ${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)} are of ${monthName}.`}
+          >
+            <p>Are these the right files? Nobody can tell later, because dates do not leave this page.</p>
+          </Notice>
+        )}
         <Facts
           facts={[
             { term: 'Rows', value: `${formatNumber(rows)} in ${formatCount(tables.length, 'table')}` },
+            {
+              term: `Training in ${monthName}`,
+              value:
+                rowsInMonth !== null && `${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)}`,
+            },
             { term: 'Rows that stay behind', value: rowsLeftBehind === 0 ? 'none' : formatNumber(rowsLeftBehind) },
             { term: 'People', value: formatNumber(people) },
             { term: knowsTheRegistry ? 'New to the registry' : 'New to the key file', value: formatNumber(newPeople) },

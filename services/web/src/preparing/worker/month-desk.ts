@@ -8,6 +8,7 @@ import type { PreparedTable } from '../messages.ts';
 import { columnsOf } from './column-pictures.ts';
 import type { Circumstances, FindingPicture, FirstDayPlace, PreparedPicture, PreparedTablePicture, ProblemPicture } from './protocol.ts';
 import { Refusal } from './refusal.ts';
+import { rowsInMonth } from './rows-in-month.ts';
 import type { AssignedSource, Source } from './source-shelf.ts';
 
 interface StatedDay {
@@ -73,7 +74,7 @@ export class MonthDesk {
     const { clean, problems, findings, agesTopCoded, lengthChange, newParticipants } = month;
     const sourceOf = (table: string | null) => sources.find((source) => source.table === table);
     const people = new Set(clean.flatMap(({ rows }) => rows.map(([code = '']) => code)));
-    const held = this.circumstances().knownParticipants;
+    const { knownParticipants: held, month: calendarMonth } = this.circumstances();
     const heldCodes = new Set(held);
     const rowsInFiles = raw.reduce((sum, { rows }) => sum + rows.length, 0);
     const rowsOf = (table: TableKey) => raw.find((each) => each.table === table)?.rows.length ?? 0;
@@ -97,6 +98,7 @@ export class MonthDesk {
       newPeople: held === null ? newParticipants.length : [...people].filter((code) => !heldCodes.has(code)).length,
       agesTopCoded,
       lengthChange,
+      rowsInMonth: calendarMonth === null ? null : rowsInMonth(sources, calendarMonth),
     };
   }
 

@@ -16,10 +16,13 @@ import type {
 import type { TableKey } from '@cairnstep/dictionary';
 import type { Delimiter } from '@cairnstep/submission-files';
 import type { PreparedTable, ReplacedCodes } from '../messages.ts';
+import type { RowsInMonth } from './rows-in-month.ts';
 
 /** What the worker has to know of the site before anything else. */
 export interface Circumstances {
   readonly site: string;
+  /** `2026-11`; null where there is only a key. */
+  readonly month: string | null;
   /** Null where nobody can tell: offline. */
   readonly knownParticipants: readonly string[] | null;
   readonly safeHeaders: readonly string[];
@@ -167,6 +170,8 @@ export interface PreparedPicture {
   readonly newPeople: number;
   readonly agesTopCoded: number;
   readonly lengthChange: LengthChange | null;
+  /** Null where no file says when training took place. */
+  readonly rowsInMonth: RowsInMonth | null;
 }
 
 /** What the worker holds, as far as it may be told. */

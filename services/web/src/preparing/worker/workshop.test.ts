@@ -7,7 +7,7 @@ import { isCleanCsv } from '../messages.ts';
 import { csvFile, passphrase, sampleFiles, sessionsCsv } from '../sample-month.ts';
 import type { Circumstances, ColumnPicture, PreparedPicture } from './protocol.ts';
 
-const site: Circumstances = { site: 'S01', knownParticipants: [], safeHeaders: [], today: '2026-12-01' };
+const site: Circumstances = { site: 'S01', month: '2024-04', knownParticipants: [], safeHeaders: [], today: '2026-12-01' };
 const newKey = { mode: 'random', idType: 'mrn', stripLeadingZeros: false, passphrase } as const;
 
 async function roomWithKey(circumstances: Circumstances = site) {
@@ -34,6 +34,7 @@ describe('a month in the worker', () => {
     ]);
     const { prepared } = await room.ask('prepare', null);
     expect(prepared).toMatchObject({ people: 2, newPeople: 2, rowsLeftBehind: 0, agesTopCoded: 1, emptyTables: [], lengthChange: null });
+    expect(prepared.rowsInMonth).toEqual({ table: 'sessions', inside: 2, dated: 4 });
     expect(prepared.tables.map(({ table, rows, people }) => [table, rows, people])).toEqual([
       ['participants', 2, 2],
       ['sessions', 4, 2],

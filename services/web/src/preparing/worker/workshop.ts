@@ -15,7 +15,7 @@ interface Desks {
 
 export function workshop(): Answers {
   let desks: Desks | null = null;
-  let known: Circumstances = { site: '', knownParticipants: null, safeHeaders: [], today: '' };
+  let known: Circumstances = { site: '', month: null, knownParticipants: null, safeHeaders: [], today: '' };
 
   function at(): Desks {
     if (desks === null) throw new Refusal('failed', 'The page has not said yet which site it is for.');
