@@ -1,15 +1,19 @@
 import { useQuery } from '@tanstack/react-query';
+import { useAccount } from '../../lib/account.ts';
 import { saveFile } from '../../lib/save-file.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Button } from '../../ui/button.tsx';
+import { Notice } from '../../ui/notice.tsx';
 import { Page, Section } from '../../ui/page.tsx';
 import { Table } from '../../ui/table.tsx';
+import { TextLink } from '../../ui/text-link.tsx';
 import { openApiQuery } from './open-api.queries.ts';
 import type { Operation } from './open-api.queries.ts';
 import { submitMonthScript } from './submit-month.ts';
 
 export default function DevelopersPage() {
   const description = useQuery(openApiQuery());
+  const isDemonstration = useAccount()?.demonstration === true;
   return (
     <Page
       title="Interface for programs"
@@ -73,6 +77,15 @@ export default function DevelopersPage() {
               .
             </li>
           </ul>
+          {isDemonstration && (
+            <Notice title="In this demonstration">
+              <p>
+                One such system is registered, for the first site; administrators and stewards find its client id under{' '}
+                <TextLink to="/site-systems">site systems</TextLink>. Its secret was drawn at the first start: <code>siteSystemSecret</code>{' '}
+                in <code>secrets.json</code> of the data folder.
+              </p>
+            </Notice>
+          )}
           <h3 className="font-semibold">A whole month with curl</h3>
           <pre
             tabIndex={0}
