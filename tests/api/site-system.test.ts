@@ -261,6 +261,11 @@ describe('what a system may do', () => {
     expect(receipt.acceptedBy).toBe(label);
     expect((await coordinator.get(`/api/submissions/${id}/receipt`).expect(200)).body).toEqual(receipt);
     expect((await coordinator.get(`/api/submissions?siteId=${site.id}`).expect(200)).body.items[0].createdBy).toBe(label);
+    // Its coordinators are told, by mail.
+    const mails = await server.database.owner.query('select recipient, body from mail_messages where event like $1', [
+      `submission-accepted:${id}%`,
+    ]);
+    expect(mails.rows).toEqual([{ recipient: coordinator.email, body: expect.stringContaining(`committed by ${label}`) }]);
     const { items } = (await steward.get('/api/audit').expect(200)).body;
     const commit = items.find((entry: { act: string }) => entry.act === 'submission.commit');
     expect(commit).toMatchObject({ actor: label, role: 'site-system', object: id });

@@ -274,6 +274,24 @@ describe('rows of people and of the registry', () => {
     expect(await count(systemA, 'sites')).toBe(1);
   });
 
+  it('tell the people and the system of a site whom to write to about it, and nobody else', async () => {
+    const account = randomUUID();
+    await database.owner.query(
+      "insert into accounts (id, issuer, subject, name, email) values ($1, 'i', 'c', 'A coordinator', 'c@test.example')",
+      [account],
+    );
+    await database.owner.query(
+      "insert into grants (id, account_id, role, site_id, starts_on) values ($1, $2, 'coordinator', $3, '2026-01-01')",
+      [randomUUID(), account, siteA],
+    );
+    const addresses = (actor: Actor, siteId: string) =>
+      asActor(database.app, actor, (tx) => tx.query("select coordinator_addresses($1, '2026-06-01') as email", [siteId]));
+    for (const actor of [coordinatorA, systemA, registry]) expect(await addresses(actor, siteA)).toEqual([{ email: 'c@test.example' }]);
+    for (const actor of [therapistA, researcher, steward, administrator])
+      await expect(addresses(actor, siteA)).rejects.toMatchObject(refused);
+    for (const actor of [coordinatorA, systemA]) await expect(addresses(actor, siteB)).rejects.toMatchObject(refused);
+  });
+
   it('of sessions in the browser are out of reach of every request', async () => {
     for (const actor of [registry, steward, administrator]) await expect(count(actor, 'web_sessions')).rejects.toMatchObject(refused);
   });

@@ -9,8 +9,8 @@ import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { queueMail, type Mail } from '../../mail/queue-mail.ts';
 import { dueOn, monthOf, monthsBefore, monthsBetween } from './months.ts';
-import { listSitesWithFirstMonth, type SiteWithFirstMonth } from '../people/sites.repository.ts';
-import { coordinatorsOf, settledMonthsSince } from './reminders.repository.ts';
+import { coordinatorAddresses, listSitesWithFirstMonth, type SiteWithFirstMonth } from '../people/sites.repository.ts';
+import { settledMonthsSince } from './reminders.repository.ts';
 import { reminderKind, weeklyReminders, type ReminderKind } from './reminder-kind.ts';
 
 /** A month is due half a month after it ended and recalled for five weeks: older ones are past reminding. */
@@ -45,7 +45,7 @@ interface Reminder {
 async function remind(tx: Tx, config: Config, reminder: Reminder): Promise<void> {
   const { site, month, kind, today } = reminder;
   let sent = 0;
-  for (const email of await coordinatorsOf(tx, site.id, today)) {
+  for (const email of await coordinatorAddresses(tx, site.id, today)) {
     if (await queueMail(tx, mailOf(config, reminder, email))) sent += 1;
   }
   if (sent > 0)

@@ -28,3 +28,9 @@ export async function lockSite(tx: Tx, siteId: string): Promise<number> {
   const [site] = (await tx.query('select revision from sites where id = $1 for update', [siteId])) as { revision: number }[];
   return requireFound(site).revision;
 }
+
+/** Addresses of the site's coordinators: with a grant in force on this day (`2026-12-01`), and an account that is not disabled. */
+export async function coordinatorAddresses(tx: Tx, siteId: string, today: string): Promise<string[]> {
+  const rows = (await tx.query('select coordinator_addresses($1, $2::date) as email', [siteId, today])) as { email: string }[];
+  return rows.map((row) => row.email);
+}

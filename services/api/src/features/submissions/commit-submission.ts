@@ -8,7 +8,7 @@ import type { Context } from '../../context.ts';
 import { asActor, type Tx } from '../../database/as-actor.ts';
 import { Refusal } from '../../http/refusal.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
-import { lockSite } from '../people/sites.repository.ts';
+import { coordinatorAddresses, lockSite } from '../people/sites.repository.ts';
 import { applyChanges, checkAgain } from './apply-changes.ts';
 import { tableOfFile, tablesOf } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
@@ -65,9 +65,18 @@ async function receiptGivenBefore(tx: Tx, actor: Actor, by: string, id: string, 
   return status === 'accepted' && settledBy === by && receipt?.digest === digest ? receipt : null;
 }
 
+/** Whoever committed. What a site's system has done, its coordinators are told: nobody sat before a screen. */
+async function recipientsOf(tx: Tx, actor: Actor, siteId: string, now: Date): Promise<string[]> {
+  if (actor.kind === 'site-system') return coordinatorAddresses(tx, siteId, now.toISOString().slice(0, 10));
+  const [account] = (await tx.query('select email from accounts where id = $1', [requireSubmitter(actor).id])) as {
+    email: string | null;
+  }[];
+  return account?.email ? [account.email] : [];
+}
+
 const receiptText = (receipt: SubmissionReceipt, address: string): string =>
   [
-    `${receipt.site.name} (${receipt.site.code}), ${receipt.month}: accepted on ${receipt.acceptedAt}.`,
+    `${receipt.site.name} (${receipt.site.code}), ${receipt.month}: accepted on ${receipt.acceptedAt}, committed by ${receipt.acceptedBy}.`,
     '',
     ...receipt.tables.map(
       (one) => `${one.table}: ${one.added} new, ${one.changed} changed, ${one.unchanged} unchanged, ${one.removed} removed`,
@@ -89,12 +98,10 @@ export const commitSubmission = (
     if (before) return before;
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
     const receipt = await accept(tx, submitter, submission, previewDigest, clock());
-    // A site's system has no address: it fetches the receipt.
-    const [account] = (await tx.query('select email from accounts where id = $1', [submitter.id])) as { email: string | null }[];
-    if (account?.email) {
+    for (const recipient of await recipientsOf(tx, actor, submission.siteId, clock())) {
       await queueMail(tx, {
         event: `submission-accepted:${submissionId}`,
-        recipient: account.email,
+        recipient,
         subject: `Cairnstep: ${receipt.month} accepted`,
         body: receiptText(receipt, `${config.PUBLIC_URL}/submissions/${submissionId}/receipt`),
       });
