@@ -79,7 +79,14 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
   app.set('query parser', 'simple');
 
   app.use(requestLog(log));
-  app.use(helmet({ contentSecurityPolicy: contentSecurityPolicy(config.secure), strictTransportSecurity: config.secure, crossOriginOpenerPolicy: { policy: 'same-origin' }, referrerPolicy: { policy: 'no-referrer' } }));
+  app.use(
+    helmet({
+      contentSecurityPolicy: contentSecurityPolicy(config.secure),
+      strictTransportSecurity: config.secure,
+      crossOriginOpenerPolicy: { policy: 'same-origin' },
+      referrerPolicy: { policy: 'no-referrer' },
+    }),
+  );
   app.use('/api', (_request, response, next) => {
     response.setHeader('Cache-Control', 'no-store');
     next();
@@ -88,9 +95,38 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
   const refuseFlood = () => {
     throw new Refusal('too-many-requests', 'Wait a minute, then go on. Nothing was changed.');
   };
-  app.use('/api/sign-in', rateLimit({ windowMs: 60_000, limit: config.SIGN_IN_LIMIT_PER_MINUTE, standardHeaders: true, legacyHeaders: false, handler: refuseFlood }));
-  app.use('/api', rateLimit({ windowMs: 60_000, limit: config.WRITE_LIMIT_PER_MINUTE, standardHeaders: true, legacyHeaders: false, handler: refuseFlood, skip: (request) => request.method === 'GET' || request.method === 'HEAD' }));
-  app.use('/api', rateLimit({ windowMs: 60_000, limit: config.SYSTEM_LIMIT_PER_MINUTE, standardHeaders: true, legacyHeaders: false, handler: refuseFlood, skip: (request) => bearerToken(request) === null }));
+  app.use(
+    '/api/sign-in',
+    rateLimit({
+      windowMs: 60_000,
+      limit: config.SIGN_IN_LIMIT_PER_MINUTE,
+      standardHeaders: true,
+      legacyHeaders: false,
+      handler: refuseFlood,
+    }),
+  );
+  app.use(
+    '/api',
+    rateLimit({
+      windowMs: 60_000,
+      limit: config.WRITE_LIMIT_PER_MINUTE,
+      standardHeaders: true,
+      legacyHeaders: false,
+      handler: refuseFlood,
+      skip: (request) => request.method === 'GET' || request.method === 'HEAD',
+    }),
+  );
+  app.use(
+    '/api',
+    rateLimit({
+      windowMs: 60_000,
+      limit: config.SYSTEM_LIMIT_PER_MINUTE,
+      standardHeaders: true,
+      legacyHeaders: false,
+      handler: refuseFlood,
+      skip: (request) => bearerToken(request) === null,
+    }),
+  );
   app.use('/api', refuseTwoIdentities(config.secure));
   app.use('/api', sameOrigin(config.PUBLIC_URL, ['/sign-in/back-channel-logout']));
 
@@ -121,7 +157,12 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
   for (const { endpoint, handler } of allRoutes(context)) {
     const method = endpoint.method.toLowerCase() as 'get' | 'post' | 'put' | 'delete';
     if (endpoint.upload) app[method](endpoint.path, handler);
-    else app[method](endpoint.path, endpoint.largestBody === undefined ? json : express.json({ limit: endpoint.largestBody, strict: true }), handler);
+    else
+      app[method](
+        endpoint.path,
+        endpoint.largestBody === undefined ? json : express.json({ limit: endpoint.largestBody, strict: true }),
+        handler,
+      );
   }
   app.use('/api', () => {
     throw new Refusal('not-found', 'There is nothing at this address, or it is not yours to see.');

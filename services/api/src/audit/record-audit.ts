@@ -30,12 +30,19 @@ function nameOf(actor: Actor): string {
  * Call it late in the transaction: everyone else's act waits behind it.
  */
 export async function recordAudit(tx: Tx, actor: Actor, event: AuditEvent): Promise<void> {
-  const [head] = (await tx.query('select seq, hash, to_char(at at time zone \'UTC\', \'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"\') as at from audit_head()')) as [
-    { seq: string; hash: string; at: string },
-  ];
+  const [head] = (await tx.query(
+    'select seq, hash, to_char(at at time zone \'UTC\', \'YYYY-MM-DD"T"HH24:MI:SS.MS"Z"\') as at from audit_head()',
+  )) as [{ seq: string; hash: string; at: string }];
   const seq = Number(head.seq) + 1;
   const who = nameOf(actor);
-  const full: { [key: string]: Canonical } = { seq, at: head.at, actor: who, role: rolesOf(actor), act: event.act, result: event.result ?? 'ok' };
+  const full: { [key: string]: Canonical } = {
+    seq,
+    at: head.at,
+    actor: who,
+    role: rolesOf(actor),
+    act: event.act,
+    result: event.result ?? 'ok',
+  };
   if (event.object !== undefined) full['object'] = event.object;
   if (event.site !== undefined) full['site'] = event.site;
   if (event.reason !== undefined) full['reason'] = event.reason;

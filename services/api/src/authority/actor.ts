@@ -9,7 +9,13 @@ export interface ActiveGrant {
 
 export type Actor =
   | { readonly kind: 'nobody' }
-  | { readonly kind: 'person'; readonly accountId: string; readonly name: string; readonly institution: string | null; readonly grants: readonly ActiveGrant[] }
+  | {
+      readonly kind: 'person';
+      readonly accountId: string;
+      readonly name: string;
+      readonly institution: string | null;
+      readonly grants: readonly ActiveGrant[];
+    }
   /** A site's own system, known by its access token. It may do what the authority table says in its column, at this one site. */
   | { readonly kind: 'site-system'; readonly systemId: string; readonly label: string; readonly siteId: string }
   /** The registry's own processes: sign-in, jobs, statistics. `part` names the reach the database gives it. */
@@ -25,6 +31,8 @@ export const statistics: Actor = { kind: 'system', part: 'statistics' };
 export const nobody: Actor = { kind: 'nobody' };
 
 export const sitesOf = (actor: Actor, ...roles: readonly Role[]): readonly string[] =>
-  actor.kind === 'person' ? actor.grants.flatMap((grant) => (roles.includes(grant.role) && grant.siteId !== null ? [grant.siteId] : [])) : [];
+  actor.kind === 'person'
+    ? actor.grants.flatMap((grant) => (roles.includes(grant.role) && grant.siteId !== null ? [grant.siteId] : []))
+    : [];
 
 export const hasRole = (actor: Actor, role: Role): boolean => actor.kind === 'person' && actor.grants.some((grant) => grant.role === role);

@@ -30,9 +30,11 @@ export function requireEntry(actor: Actor, name: EndpointName): void {
   const entry = entries[name];
   if (actor.kind === 'site-system') return requireSystemEntry(actor, entry);
   if (entry === 'anyone') return;
-  if (actor.kind === 'nobody') throw new Refusal('not-signed-in', 'Your session has ended or you have not signed in. What you typed is still on this page.');
+  if (actor.kind === 'nobody')
+    throw new Refusal('not-signed-in', 'Your session has ended or you have not signed in. What you typed is still on this page.');
   if (entry === 'signed-in') return;
-  if (actor.kind === 'person' && actor.grants.length === 0) throw new Refusal('no-grant', 'Your identity is known, but no role has been given to it.');
+  if (actor.kind === 'person' && actor.grants.length === 0)
+    throw new Refusal('no-grant', 'Your identity is known, but no role has been given to it.');
   if (!mayAtAll(actor, entry)) throw new Refusal('not-permitted', 'None of your roles includes this.');
 }
 

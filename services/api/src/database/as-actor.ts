@@ -9,7 +9,8 @@ export type Tx = EntityManager;
 
 const scopeOf = (actor: Actor) => ({
   account: actor.kind === 'person' ? actor.accountId : '',
-  roles: actor.kind === 'person' ? [...new Set(actor.grants.map((grant) => grant.role))].join(',') : actor.kind === 'system' ? actor.part : '',
+  roles:
+    actor.kind === 'person' ? [...new Set(actor.grants.map((grant) => grant.role))].join(',') : actor.kind === 'system' ? actor.part : '',
   reads: actor.kind === 'site-system' ? actor.siteId : sitesOf(actor, 'therapist', 'coordinator').join(','),
   writes: actor.kind === 'site-system' ? actor.siteId : sitesOf(actor, 'coordinator').join(','),
 });
@@ -20,7 +21,12 @@ const scopeQuery = `select set_config('role', 'cairnstep_app', true), set_config
 /** `one-moment`: every statement sees the registry as it was at the first (repeatable read). */
 export type View = 'each-statement' | 'one-moment';
 
-export async function asActor<T>(database: DataSource, actor: Actor, work: (tx: Tx) => Promise<T>, view: View = 'each-statement'): Promise<T> {
+export async function asActor<T>(
+  database: DataSource,
+  actor: Actor,
+  work: (tx: Tx) => Promise<T>,
+  view: View = 'each-statement',
+): Promise<T> {
   return database.transaction(view === 'one-moment' ? 'REPEATABLE READ' : 'READ COMMITTED', async (tx) => {
     const scope = scopeOf(actor);
     await tx.query(scopeQuery, [scope.account, scope.roles, scope.reads, scope.writes]);

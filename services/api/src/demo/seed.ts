@@ -31,9 +31,19 @@ interface SeededSite extends DemoSite {
 }
 
 /** A clinic without a demonstration account still needs someone whose months these were. */
-const absentCoordinator = (site: DemoSite) => ({ subject: `demo-absent-${site.code}`, name: `Coordinator of ${site.name}`, email: null, institution: site.name });
+const absentCoordinator = (site: DemoSite) => ({
+  subject: `demo-absent-${site.code}`,
+  name: `Coordinator of ${site.name}`,
+  email: null,
+  institution: site.name,
+});
 
-async function addAccount(context: Context, person: { subject: string; name: string; email: string | null; institution: string }, role: string | null, siteId: string | null): Promise<string> {
+async function addAccount(
+  context: Context,
+  person: { subject: string; name: string; email: string | null; institution: string },
+  role: string | null,
+  siteId: string | null,
+): Promise<string> {
   const id = randomUUID();
   await asActor(context.database, registry, async (tx) => {
     await tx.query('insert into accounts (id, issuer, subject, name, email, institution) values ($1, $2, $3, $4, $5, $6)', [
@@ -45,7 +55,12 @@ async function addAccount(context: Context, person: { subject: string; name: str
       person.institution,
     ]);
     if (role !== null) {
-      await tx.query("insert into grants (id, account_id, role, site_id, starts_on) values ($1, $2, $3, $4, date '2024-01-01')", [randomUUID(), id, role, siteId]);
+      await tx.query("insert into grants (id, account_id, role, site_id, starts_on) values ($1, $2, $3, $4, date '2024-01-01')", [
+        randomUUID(),
+        id,
+        role,
+        siteId,
+      ]);
     }
     await recordAudit(tx, registry, { act: 'account.demonstration', object: id });
   });
@@ -56,11 +71,19 @@ async function addSites(context: Context, sites: readonly DemoSite[]): Promise<M
   const seeded = new Map<string, SeededSite>();
   for (const site of sites) {
     const id = randomUUID();
-    await asActor(context.database, registry, (tx) => tx.query('insert into sites (id, code, name, first_month) values ($1, $2, $3, $4)', [id, site.code, site.name, site.firstMonth]));
+    await asActor(context.database, registry, (tx) =>
+      tx.query('insert into sites (id, code, name, first_month) values ($1, $2, $3, $4)', [id, site.code, site.name, site.firstMonth]),
+    );
     const known = demonstrationPeople.find((person) => person.role === 'coordinator' && person.site === site.code);
     const person = known ?? absentCoordinator(site);
     const accountId = await addAccount(context, person, 'coordinator', id);
-    const coordinator: Person = { kind: 'person', accountId, name: person.name, institution: person.institution, grants: [{ id: randomUUID(), role: 'coordinator', siteId: id }] };
+    const coordinator: Person = {
+      kind: 'person',
+      accountId,
+      name: person.name,
+      institution: person.institution,
+      grants: [{ id: randomUUID(), role: 'coordinator', siteId: id }],
+    };
     seeded.set(site.code, { ...site, id, coordinator });
   }
   for (const person of demonstrationPeople) {
@@ -95,7 +118,12 @@ async function submit(context: Context, site: SeededSite, month: DemoMonth): Pro
   const id = await asActor(database, site.coordinator, async (tx) => {
     const submission = await insertSubmission(tx, site.id, month.month, site.coordinator.accountId);
     for (const { table, content } of filesOf(month)) {
-      await putFile(tx, submission, site.id, { table, fileName: `${table}.csv`, sha256: createHash('sha256').update(content).digest('hex'), content });
+      await putFile(tx, submission, site.id, {
+        table,
+        fileName: `${table}.csv`,
+        sha256: createHash('sha256').update(content).digest('hex'),
+        content,
+      });
     }
     await beginCheck(tx, submission, clock());
     return submission;
@@ -103,8 +131,14 @@ async function submit(context: Context, site: SeededSite, month: DemoMonth): Pro
   await checkSubmission(context, id);
   await asActor(database, site.coordinator, async (tx) => {
     const submission = await lockSubmission(tx, id);
-    if (!submission?.previewDigest) throw new Error(`The demonstration month ${month.month} of ${site.code} has errors: ${submission?.findings.map((group) => group.rule).join(', ')}`);
-    const findings = submission.findings.map((group) => ({ ...group, acknowledgedReason: 'Compared with the record at the clinic; correct.' }));
+    if (!submission?.previewDigest)
+      throw new Error(
+        `The demonstration month ${month.month} of ${site.code} has errors: ${submission?.findings.map((group) => group.rule).join(', ')}`,
+      );
+    const findings = submission.findings.map((group) => ({
+      ...group,
+      acknowledgedReason: 'Compared with the record at the clinic; correct.',
+    }));
     await setFindingGroups(tx, id, findings);
     await accept(tx, requireSubmitter(site.coordinator), { ...submission, findings }, submission.previewDigest, clock());
     await recordAudit(tx, site.coordinator, { act: 'submission.commit', object: id, site: site.id, detail: { month: month.month } });
@@ -113,7 +147,10 @@ async function submit(context: Context, site: SeededSite, month: DemoMonth): Pro
 
 /** The next month of two clinics, to try an upload with: one without a mistake, one with many. */
 async function writeExamples(folder: string, next: { clean: DemoFiles; mistakes: DemoFiles }, month: string): Promise<void> {
-  for (const [name, files] of [[`S01-${month}-clean`, next.clean], [`S02-${month}-with-mistakes`, next.mistakes]] as const) {
+  for (const [name, files] of [
+    [`S01-${month}-clean`, next.clean],
+    [`S02-${month}-with-mistakes`, next.mistakes],
+  ] as const) {
     await mkdir(path.join(folder, name), { recursive: true });
     for (const [table, bytes] of Object.entries(files)) await writeFile(path.join(folder, name, `${table}.csv`), bytes);
   }
@@ -123,10 +160,16 @@ const config = readConfig(process.env);
 const database = await makeDataSource({ url: config.DATABASE_APP_URL, poolSize: 3 }).initialize();
 const context: Context = { config, database, log: pino({ level: 'silent' }), clock: () => new Date() };
 try {
-  const [{ sites }] = await asActor(database, registry, async (tx) => (await tx.query('select count(*)::int as sites from sites')) as [{ sites: number }]);
+  const [{ sites }] = await asActor(
+    database,
+    registry,
+    async (tx) => (await tx.query('select count(*)::int as sites from sites')) as [{ sites: number }],
+  );
   if (sites > 0) {
     for (const table of ['accounts', 'site_systems']) {
-      await asActor(database, registry, (tx) => tx.query(`update ${table} set issuer = $1 where subject like 'demo-%' and issuer <> $1`, [config.OIDC_ISSUER]));
+      await asActor(database, registry, (tx) =>
+        tx.query(`update ${table} set issuer = $1 where subject like 'demo-%' and issuer <> $1`, [config.OIDC_ISSUER]),
+      );
     }
   } else {
     const nextMonth = monthBefore(monthOf(context.clock()));

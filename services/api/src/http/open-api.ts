@@ -15,7 +15,12 @@ const jsonSchema = (schema: z.ZodType, io: 'input' | 'output'): Json => {
 function parametersOf(place: 'path' | 'query', schema: z.ZodType | undefined): Json[] {
   if (!schema) return [];
   const { properties = {}, required = [] } = jsonSchema(schema, 'input') as { properties?: Record<string, Json>; required?: string[] };
-  return Object.entries(properties).map(([name, property]) => ({ name, in: place, required: place === 'path' || required.includes(name), schema: property }));
+  return Object.entries(properties).map(([name, property]) => ({
+    name,
+    in: place,
+    required: place === 'path' || required.includes(name),
+    schema: property,
+  }));
 }
 
 const withStatus = (codes: readonly ProblemCode[]): Map<number, ProblemCode[]> => {
@@ -97,7 +102,11 @@ export function openApiDocument(config: Pick<Config, 'PUBLIC_URL' | 'OIDC_ISSUER
             instance: { type: 'string' },
             errors: {
               type: 'array',
-              items: { type: 'object', required: ['pointer', 'detail'], properties: { pointer: { type: 'string' }, detail: { type: 'string' } } },
+              items: {
+                type: 'object',
+                required: ['pointer', 'detail'],
+                properties: { pointer: { type: 'string' }, detail: { type: 'string' } },
+              },
             },
           },
         },

@@ -15,7 +15,10 @@ export function sameOrigin(publicUrl: string, exempt: readonly string[]): Reques
     if (safe.has(request.method) || exempt.includes(request.path) || bearerToken(request) !== null) return next();
     const from = request.get('origin');
     const site = request.get('sec-fetch-site');
-    const ours = request.get('x-cairnstep-request') === '1' && (from === undefined || from === origin) && (site === undefined || site === 'same-origin');
+    const ours =
+      request.get('x-cairnstep-request') === '1' &&
+      (from === undefined || from === origin) &&
+      (site === undefined || site === 'same-origin');
     if (!ours) return next(new Refusal('request-not-from-here', 'Open the application itself and try again. Nothing was changed.'));
     next();
   };

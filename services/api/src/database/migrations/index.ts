@@ -8,5 +8,13 @@ import { ReplacedCodes1796083200022 } from './1796083200022-replaced-codes.ts';
 import { CoordinatorAddresses1796083200023 } from './1796083200023-coordinator-addresses.ts';
 import { QuickerMonths1796083200030 } from './1796083200030-quicker-months.ts';
 
-export const migrations = [FirstTables1796083200000, Reach1796083200001, ScreenedFiles1796083200010, MonthClosures1796083200020,
-  SiteSystems1796083200021, ReplacedCodes1796083200022, CoordinatorAddresses1796083200023, QuickerMonths1796083200030];
+export const migrations = [
+  FirstTables1796083200000,
+  Reach1796083200001,
+  ScreenedFiles1796083200010,
+  MonthClosures1796083200020,
+  SiteSystems1796083200021,
+  ReplacedCodes1796083200022,
+  CoordinatorAddresses1796083200023,
+  QuickerMonths1796083200030,
+];

@@ -42,7 +42,12 @@ export const auditRoutes = ({ database }: Context): Route[] => [
   route('verifyAudit', (actor, _input, { requestId }) =>
     asActor(database, actor, async (tx) => {
       const verdict = await readVerdict(tx);
-      await recordAudit(tx, actor, { act: 'audit.verify', requestId, result: verdict.holds ? 'ok' : 'failed', detail: { entries: verdict.entries } });
+      await recordAudit(tx, actor, {
+        act: 'audit.verify',
+        requestId,
+        result: verdict.holds ? 'ok' : 'failed',
+        detail: { entries: verdict.entries },
+      });
       return verdict;
     }),
   ),

@@ -63,7 +63,8 @@ async function selectInvitations(tx: Tx, id: string | null): Promise<InvitationO
     [id],
   )) as InvitationRecord[];
   return rows.map((row) => {
-    const site: Site | null = row.site_id !== null && row.code !== null && row.site_name !== null ? { id: row.site_id, code: row.code, name: row.site_name } : null;
+    const site: Site | null =
+      row.site_id !== null && row.code !== null && row.site_name !== null ? { id: row.site_id, code: row.code, name: row.site_name } : null;
     return { id: row.id, email: row.email, role: row.role, site, status: row.status, expiresAt: row.expires_at.toISOString() };
   });
 }
@@ -87,11 +88,21 @@ export interface NewInvitation {
 export async function insertInvitation(tx: Tx, invitation: NewInvitation): Promise<void> {
   await tx.query(
     'insert into invitations (id, email, role, site_id, grant_ends_on, token_hash, invited_by, expires_at) values ($1, $2, $3, $4, $5, $6, $7, $8)',
-    [invitation.id, invitation.email, invitation.role, invitation.siteId, invitation.grantEndsOn, invitation.tokenHash, invitation.invitedBy, invitation.expiresAt],
+    [
+      invitation.id,
+      invitation.email,
+      invitation.role,
+      invitation.siteId,
+      invitation.grantEndsOn,
+      invitation.tokenHash,
+      invitation.invitedBy,
+      invitation.expiresAt,
+    ],
   );
 }
 
-export const markRevoked = (tx: Tx, id: string): Promise<unknown> => tx.query('update invitations set revoked_at = now() where id = $1', [id]);
+export const markRevoked = (tx: Tx, id: string): Promise<unknown> =>
+  tx.query('update invitations set revoked_at = now() where id = $1', [id]);
 
 export interface NewGrant {
   readonly id: string;
@@ -116,10 +127,14 @@ export async function insertGrant(tx: Tx, grant: NewGrant): Promise<void> {
 }
 
 /** Two administrators who give one person roles at once do it one after the other. */
-export const lockGrantsOf = (tx: Tx, personId: string): Promise<unknown> => tx.query('select pg_advisory_xact_lock(hashtext($1))', [`grants ${personId}`]);
+export const lockGrantsOf = (tx: Tx, personId: string): Promise<unknown> =>
+  tx.query('select pg_advisory_xact_lock(hashtext($1))', [`grants ${personId}`]);
 
 /** Whether the person holds the same role, for the same site, on any day of this time. */
-export async function holdsAlready(tx: Tx, grant: Pick<NewGrant, 'personId' | 'role' | 'siteId' | 'startsOn' | 'endsOn'>): Promise<boolean> {
+export async function holdsAlready(
+  tx: Tx,
+  grant: Pick<NewGrant, 'personId' | 'role' | 'siteId' | 'startsOn' | 'endsOn'>,
+): Promise<boolean> {
   const [{ held }] = (await tx.query(
     `select exists (select from grants where account_id = $1 and role = $2 and site_id is not distinct from $3::uuid
        and starts_on <= coalesce($5::date, 'infinity') and coalesce(ends_on, 'infinity') >= greatest(starts_on, $4::date)) as held`,
@@ -129,7 +144,10 @@ export async function holdsAlready(tx: Tx, grant: Pick<NewGrant, 'personId' | 'r
 }
 
 export const accountsWithAddress = async (tx: Tx, email: string): Promise<{ id: string; name: string }[]> =>
-  (await tx.query('select id, name from accounts where lower(email) = lower($1) order by name, id', [email])) as { id: string; name: string }[];
+  (await tx.query('select id, name from accounts where lower(email) = lower($1) order by name, id', [email])) as {
+    id: string;
+    name: string;
+  }[];
 
 /** A grant's last day becomes yesterday: it gives nothing from the next request on. False when there is no such grant in force or to come. */
 export async function stopGrant(tx: Tx, personId: string, grantId: string): Promise<boolean> {

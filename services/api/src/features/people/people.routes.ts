@@ -11,7 +11,21 @@ import { Refusal } from '../../http/refusal.ts';
 import { route, type Route } from '../../http/route.ts';
 import { queueMail } from '../../mail/queue-mail.ts';
 import { hashToken } from '../account/invitations.repository.ts';
-import { accountsWithAddress, holdsAlready, insertGrant, insertInvitation, listInvitations, listPeople, lockGrantsOf, markRevoked, readInvitation, readPerson, siteName, stopGrant, updateStatus } from './people.repository.ts';
+import {
+  accountsWithAddress,
+  holdsAlready,
+  insertGrant,
+  insertInvitation,
+  listInvitations,
+  listPeople,
+  lockGrantsOf,
+  markRevoked,
+  readInvitation,
+  readPerson,
+  siteName,
+  stopGrant,
+  updateStatus,
+} from './people.repository.ts';
 import { listVisibleSites } from './sites.repository.ts';
 
 const invitationDays = 7;
@@ -21,8 +35,10 @@ const siteRoles: readonly Role[] = ['therapist', 'coordinator'];
 async function requireFittingSite(tx: Tx, role: Role, siteId: string | null): Promise<string | null> {
   const needed = siteRoles.includes(role);
   const pointer = '/body/siteId';
-  if (needed && siteId === null) throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer, detail: 'Choose the site this person works at.' }]);
-  if (!needed && siteId !== null) throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer, detail: 'This role belongs to no site.' }]);
+  if (needed && siteId === null)
+    throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer, detail: 'Choose the site this person works at.' }]);
+  if (!needed && siteId !== null)
+    throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer, detail: 'This role belongs to no site.' }]);
   if (siteId === null) return null;
   const name = await siteName(tx, siteId);
   if (name === null) throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer, detail: 'Choose a site of the registry.' }]);
@@ -30,7 +46,8 @@ async function requireFittingSite(tx: Tx, role: Role, siteId: string | null): Pr
 }
 
 function refuseOneself(actor: Actor, personId: string): void {
-  if (requirePerson(actor).accountId === personId) throw new Refusal('grant-to-oneself', 'Ask another administrator to change your roles or your account.');
+  if (requirePerson(actor).accountId === personId)
+    throw new Refusal('grant-to-oneself', 'Ask another administrator to change your roles or your account.');
 }
 
 export function peopleRoutes({ config, database, clock }: Context): Route[] {
@@ -55,7 +72,13 @@ export function peopleRoutes({ config, database, clock }: Context): Route[] {
           `If you did not expect this, do nothing, or tell ${config.CONTACT}.`,
         ].join('\n'),
       });
-      await recordAudit(tx, actor, { act: 'invitation.send', object: id, requestId, detail: { role: input.role }, ...(input.siteId ? { site: input.siteId } : {}) });
+      await recordAudit(tx, actor, {
+        act: 'invitation.send',
+        object: id,
+        requestId,
+        detail: { role: input.role },
+        ...(input.siteId ? { site: input.siteId } : {}),
+      });
       return { ...requireFound(await readInvitation(tx, id)), accountsWithAddress: await accountsWithAddress(tx, input.email) };
     });
 
@@ -74,14 +97,25 @@ export function peopleRoutes({ config, database, clock }: Context): Route[] {
       requireFound(await readPerson(tx, input.personId));
       await requireFittingSite(tx, input.role, input.siteId);
       if (input.endsOn !== null && input.endsOn < input.startsOn) {
-        throw new Refusal('invalid-input', 'Nothing was kept.', [{ pointer: '/body/endsOn', detail: 'The last day lies before the first.' }]);
+        throw new Refusal('invalid-input', 'Nothing was kept.', [
+          { pointer: '/body/endsOn', detail: 'The last day lies before the first.' },
+        ]);
       }
       await lockGrantsOf(tx, input.personId);
       if (await holdsAlready(tx, input)) {
-        throw new Refusal('already-held', 'The person has this role on at least one of these days. Nothing was changed. For another last day, end the role and give it again.');
+        throw new Refusal(
+          'already-held',
+          'The person has this role on at least one of these days. Nothing was changed. For another last day, end the role and give it again.',
+        );
       }
       await insertGrant(tx, { id: randomUUID(), ...input, givenBy: requirePerson(actor).accountId });
-      await recordAudit(tx, actor, { act: 'grant.give', object: input.personId, requestId, detail: { role: input.role }, ...(input.siteId ? { site: input.siteId } : {}) });
+      await recordAudit(tx, actor, {
+        act: 'grant.give',
+        object: input.personId,
+        requestId,
+        detail: { role: input.role },
+        ...(input.siteId ? { site: input.siteId } : {}),
+      });
       return requireFound(await readPerson(tx, input.personId));
     });
 
@@ -104,7 +138,9 @@ export function peopleRoutes({ config, database, clock }: Context): Route[] {
     });
 
   return [
-    route('listPeople', (actor) => asActor(database, actor, async (tx) => ({ people: await listPeople(tx), invitations: await listInvitations(tx) }))),
+    route('listPeople', (actor) =>
+      asActor(database, actor, async (tx) => ({ people: await listPeople(tx), invitations: await listInvitations(tx) })),
+    ),
     route('listSites', (actor) => asActor(database, actor, async (tx) => ({ sites: await listVisibleSites(tx) }))),
     route('invitePerson', (actor, input, { requestId }) => invite(actor, input, requestId)),
     route('revokeInvitation', (actor, input, { requestId }) => revoke(actor, input, requestId)),
