@@ -1,6 +1,7 @@
 import { defaultLimits } from '../limits.ts';
 import { delimiters } from './detect-delimiter.ts';
 import type { Delimiter } from './detect-delimiter.ts';
+import { mostRowsAbove } from '../table/text-rows.ts';
 import { RecordScanner } from './record-scanner.ts';
 import { UnreadableFile } from './unreadable-file.ts';
 
@@ -13,8 +14,19 @@ const recordsCompared = 100;
  * @param beginning The beginning of the file; its last row may be cut off.
  */
 export function fittingDelimiters(beginning: string): Delimiter[] {
-  return delimiters
-    .map((delimiter) => ({ delimiter, widths: widthsOf(beginning, delimiter) }))
+  const cut = delimiters.map((delimiter) => ({ delimiter, widths: widthsOf(beginning, delimiter) }));
+  const fitting = ofEqualRows(cut);
+  return fitting.length > 0 ? fitting : ofEqualRows(cut.map(({ delimiter, widths }) => ({ delimiter, widths: withoutTitles(widths) })));
+}
+
+interface Cut {
+  readonly delimiter: Delimiter;
+  /** Cells of each row. */
+  readonly widths: readonly number[];
+}
+
+function ofEqualRows(cuts: readonly Cut[]): Delimiter[] {
+  return cuts
     .flatMap(({ delimiter, widths }) => {
       const [columns = 0] = widths;
       const equal = widths.filter((width) => width === columns).length;
@@ -22,6 +34,12 @@ export function fittingDelimiters(beginning: string): Delimiter[] {
     })
     .sort((one, other) => other.columns - one.columns)
     .map(({ delimiter }) => delimiter);
+}
+
+/** Above the names of the columns there may be a title, which is as wide as it happens to be. */
+function withoutTitles(widths: readonly number[]): readonly number[] {
+  const start = widths.indexOf(widths.at(-1) ?? 0);
+  return start <= mostRowsAbove ? widths.slice(start) : widths;
 }
 
 /** Cells of each record that is not blank; the last of several is left out, because it may be cut off. */

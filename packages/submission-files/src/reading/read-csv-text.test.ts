@@ -54,6 +54,13 @@ describe('the CSV file of a clinic, as text', () => {
     expect((await read(file, ';')).headers).toEqual(['id', 'speed,x']);
   });
 
+  it('finds the names of the columns under a title', async () => {
+    const found = await read(encode('Training log;;\n;;November\n\nMRN;Date;km\n0042;x;1\n'));
+    expect(found).toMatchObject({ headers: ['MRN', 'Date', 'km'], rowsAbove: 2, rows: [['0042', 'x', '1']], lines: [5] });
+    const bare = await read(encode('Training, November\n\nMRN;Date;km\n0042;x;0,5\n'));
+    expect(bare).toMatchObject({ delimiter: ';', fittingDelimiters: [';'], rowsAbove: 1, lines: [4] });
+  });
+
   it('reads a file of one column', async () => {
     expect(await read(encode('MRN\n0042\n'))).toMatchObject({ headers: ['MRN'], rows: [['0042']], fittingDelimiters: [] });
   });
@@ -66,6 +73,15 @@ describe('the CSV file of a clinic, as text', () => {
       for (const byte of narrow) yield Uint8Array.of(byte);
     }
     expect(await read(bytes())).toMatchObject({ headers: ['Größe', 'x'], encoding: 'windows-1252', rows: [['1', '2']] });
+  });
+
+  it('takes the first row of one column for its name, however many rows follow', async () => {
+    const many = Array.from({ length: 15 }, (_, at) => String(at));
+    for (const rows of [many.slice(0, 3), many]) {
+      const found = await read(encode(['MRN', ...rows, ''].join('\n')));
+      expect(found).toMatchObject({ headers: ['MRN'], rowsAbove: 0, rows: rows.map((row) => [row]) });
+      expect(found.lines).toEqual(rows.map((_, at) => at + 2));
+    }
   });
 
   it('refuses what it cannot read, with the line and never with a cell', async () => {

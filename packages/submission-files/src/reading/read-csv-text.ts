@@ -4,8 +4,7 @@
  */
 import { defaultLimits } from '../limits.ts';
 import type { ReadLimits } from '../limits.ts';
-import { lastFilled } from '../table/header-row.ts';
-import { rowOf } from '../table/row-of.ts';
+import { TextRows } from '../table/text-rows.ts';
 import { ByteDecoder } from './byte-decoder.ts';
 import type { Encoding } from './byte-decoder.ts';
 import type { ByteSource } from './byte-source.ts';
@@ -24,6 +23,8 @@ export interface CsvText {
   readonly rows: readonly (readonly string[])[];
   /** Line of the file on which each row begins. */
   readonly lines: readonly number[];
+  /** Rows above the column names, which were passed over. */
+  readonly rowsAbove: number;
   readonly encoding: Encoding;
   readonly delimiter: Delimiter;
   /** Separators under which the file is a table too, the likeliest first; with more than one somebody should look. */
@@ -37,7 +38,7 @@ export async function readCsvText(
   limits: ReadLimits = defaultLimits,
 ): Promise<CsvText | Unreadable> {
   const decoder = new ByteDecoder();
-  const found = { headers: [] as readonly string[], rows: [] as string[][], lines: [] as number[] };
+  const table = new TextRows(limits.rows, 'file');
   let fitting: readonly Delimiter[] = [];
   let chosen: Delimiter = ',';
   let scanner: RecordScanner | null = null;
@@ -45,18 +46,7 @@ export async function readCsvText(
   function take(cells: readonly string[], count: number, line: number, strayQuote: boolean): void {
     if (strayQuote)
       throw new UnreadableFile('F04', 'Text follows a closing quotation mark.', 'Write two marks where a cell itself contains one.', line);
-    const last = lastFilled(cells, count);
-    if (last < 0) return;
-    if (found.headers.length === 0) {
-      found.headers = cells.slice(0, last + 1);
-      return;
-    }
-    if (found.rows.length >= limits.rows) {
-      const most = limits.rows.toLocaleString('en');
-      throw new UnreadableFile('F03', `The file has more than ${most} rows.`, 'Prepare the month in smaller parts.', line);
-    }
-    found.rows.push(rowOf(cells, count, last, found.headers.length));
-    found.lines.push(line);
+    table.add(cells, count, line);
   }
 
   try {
@@ -69,9 +59,11 @@ export async function readCsvText(
       }
       scanner.push(text, last);
     }
-    if (found.headers.length === 0) throw new UnreadableFile('F05', 'The file is empty.', 'Begin with a row of column names.', null);
+    table.end();
+    if (table.headers.length === 0) throw new UnreadableFile('F05', 'The file is empty.', 'Begin with a row of column names.', null);
   } catch (error) {
     return unreadable(error);
   }
-  return { ok: true, ...found, encoding: decoder.encoding, delimiter: chosen, fittingDelimiters: fitting };
+  const { headers, rows, lines, rowsAbove } = table;
+  return { ok: true, headers, rows, lines, rowsAbove, encoding: decoder.encoding, delimiter: chosen, fittingDelimiters: fitting };
 }

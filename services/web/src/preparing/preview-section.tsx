@@ -49,7 +49,7 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
         {rowsInMonth !== null && isOfAnotherMonth(rowsInMonth) && (
           <Notice
             kind="warning"
-            title={`Only ${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)} are of ${monthName}.`}
+            title={`${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)} are of ${monthName}.`}
           >
             <p>Are these the right files? Nobody can tell later, because dates do not leave this page.</p>
           </Notice>

@@ -40,6 +40,11 @@ describe('the workbook of a clinic, as text', () => {
     ]);
   });
 
+  it('finds the names of the columns under a title', async () => {
+    const [sheet] = await sheetsOf(makeWorkbook({ sheets: [{ name: 'x', rows: [['Training log'], ['MRN', 'km'], ['0042', 1]] }] }));
+    expect(sheet).toMatchObject({ headers: ['MRN', 'km'], rowsAbove: 1, rows: [['0042', '1']], lines: [3] });
+  });
+
   it('reads dates that are counted from 1904', async () => {
     const rows = [['Date'], [{ xml: '<c r="@" s="1"><v>45000</v></c>' }]];
     const workbookProperties = '<workbookPr date1904="1"/>';

@@ -3,8 +3,7 @@ import type { TableKey } from '@cairnstep/dictionary';
 import { defaultWorkbookLimits } from '../../limits.ts';
 import type { WorkbookLimits } from '../../limits.ts';
 import type { CellKind } from '../../table/cell-kind.ts';
-import { lastFilled } from '../../table/header-row.ts';
-import { rowOf } from '../../table/row-of.ts';
+import { TextRows } from '../../table/text-rows.ts';
 import type { ByteSource } from '../byte-source.ts';
 import { unreadable } from '../unreadable.ts';
 import type { Unreadable } from '../unreadable.ts';
@@ -25,6 +24,8 @@ export interface TextSheet {
   readonly rows: readonly (readonly string[])[];
   /** Row of the sheet that each row came from. */
   readonly lines: readonly number[];
+  /** Rows above the column names, which were passed over. */
+  readonly rowsAbove: number;
   readonly isHidden: boolean;
   /** Positions of hidden columns that have a header, 1 for the first. */
   readonly hiddenColumns: readonly number[];
@@ -51,7 +52,8 @@ export async function readWorkbookSheets(
       if (table === 'other') return [];
       const rows = new SheetRows(limits);
       scanPart(entry, new SheetReader(surroundings, limits, rows));
-      return rows.headers.length === 0 ? [] : [{ name, table, isHidden, ...rows.result() }];
+      const sheet = rows.result();
+      return sheet.headers.length === 0 ? [] : [{ name, table, isHidden, ...sheet }];
     });
     if (read.length === 0)
       throw new UnreadableFile('F05', 'No sheet of the workbook holds a table.', 'Begin each sheet with a row of column names.', null);
@@ -61,38 +63,25 @@ export async function readWorkbookSheets(
   }
 }
 
-/** Gathers the rows of one sheet; its first row that is not empty names the columns. */
+/** Gathers the rows of one sheet, and what a spreadsheet program does not show of it. */
 class SheetRows implements SheetEvents {
-  headers: readonly string[] = [];
-  private readonly rows: string[][] = [];
-  private readonly lines: number[] = [];
+  private readonly table: TextRows;
   private readonly hidden = new Set<number>();
   private hiddenRows = 0;
   private hasMergedCells = false;
   private cellsWithoutValue = 0;
 
-  constructor(private readonly limits: WorkbookLimits) {}
+  constructor(limits: WorkbookLimits) {
+    this.table = new TextRows(limits.rows, 'sheet');
+  }
 
   row(cells: string[], kinds: CellKind[], count: number, line: number, isHidden: boolean): void {
-    const last = lastFilled(cells, count);
-    if (last < 0) return;
-    if (this.headers.length === 0) {
-      this.headers = cells.slice(0, last + 1);
-      return;
-    }
-    if (this.rows.length >= this.limits.rows) {
-      const most = this.limits.rows.toLocaleString('en');
-      throw new UnreadableFile('F03', `A sheet has more than ${most} rows.`, 'Prepare the month in smaller parts.', line);
-    }
-    const row = rowOf(cells, count, last, this.headers.length);
-    row.forEach((_, position) => {
-      if (kinds[position] !== 'error' && kinds[position] !== 'uncalculated') return;
-      row[position] = '';
+    for (let position = 0; position < count; position += 1) {
+      if (kinds[position] !== 'error' && kinds[position] !== 'uncalculated') continue;
+      cells[position] = '';
       this.cellsWithoutValue += 1;
-    });
-    if (isHidden) this.hiddenRows += 1;
-    this.rows.push(row);
-    this.lines.push(line);
+    }
+    if (this.table.add(cells, count, line) !== null && isHidden) this.hiddenRows += 1;
   }
 
   hiddenColumns(first: number, last: number): void {
@@ -107,8 +96,10 @@ class SheetRows implements SheetEvents {
   image(): void {}
 
   result(): Omit<TextSheet, 'name' | 'table' | 'isHidden'> {
-    const { headers, rows, lines, hidden, hiddenRows, hasMergedCells, cellsWithoutValue } = this;
+    this.table.end();
+    const { hidden, hiddenRows, hasMergedCells, cellsWithoutValue } = this;
+    const { headers, rows, lines, rowsAbove } = this.table;
     const hiddenColumns = headers.flatMap((header, position) => (header.trim() !== '' && hidden.has(position) ? [position + 1] : []));
-    return { headers, rows, lines, hiddenColumns, hiddenRows, hasMergedCells, cellsWithoutValue };
+    return { headers, rows, lines, rowsAbove, hiddenColumns, hiddenRows, hasMergedCells, cellsWithoutValue };
   }
 }

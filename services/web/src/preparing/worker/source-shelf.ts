@@ -130,7 +130,7 @@ export class SourceShelf {
     const { headers, rows, lines, encoding, delimiter, fittingDelimiters } = csv;
     const { mark, hasBoth } = decimalMarkOf(rows);
     const table = named ?? recogniseColumns(csv, remembered);
-    const known = { id, file, sheet: null, headers, rows, lines, encoding, delimiter, fittingDelimiters, notes: [] };
+    const known = { id, file, sheet: null, headers, rows, lines, encoding, delimiter, fittingDelimiters, notes: notesOf(csv) };
     return withTable({ ...known, table, decimalMark: mark, hasBothMarks: hasBoth, matches: [] }, table, remembered);
   }
 
@@ -156,8 +156,11 @@ function withTable(source: Source, table: TableKey | null, remembered: StoredMat
   return { ...source, table, matches };
 }
 
-function notesOf({ isHidden, hiddenColumns, hiddenRows, hasMergedCells, cellsWithoutValue }: TextSheet): string[] {
+/** What is not seen of a file, or not read, in sentences. */
+function notesOf(read: Pick<CsvText, 'rowsAbove'> & Partial<TextSheet>): string[] {
+  const { rowsAbove, isHidden = false, hiddenColumns = [], hiddenRows = 0, hasMergedCells = false, cellsWithoutValue = 0 } = read;
   const notes: string[] = [];
+  if (rowsAbove > 0) notes.push(`Rows above the names of the columns, which were passed over: ${rowsAbove}.`);
   if (isHidden) notes.push('The sheet is hidden in the workbook.');
   if (hiddenColumns.length > 0) notes.push(`Hidden columns, read like the others: column ${hiddenColumns.join(', ')}.`);
   if (hiddenRows > 0) notes.push(`Hidden rows, read like the others: ${hiddenRows}.`);

@@ -175,10 +175,7 @@ describe('files', () => {
       sheets: [
         {
           name: 'Training log',
-          rows: [
-            ['MRN', 'Session date', 'Session', 'course', 'Status'],
-            ['0042', '2026-03-01', 1, 1, 'completed'],
-          ],
+          rows: [['November'], ['MRN', 'Session date', 'Session', 'course', 'Status'], ['0042', '2026-03-01', 1, 1, 'completed']],
         },
         {
           name: 'Adverse events',
@@ -203,6 +200,7 @@ describe('files', () => {
       ['Adverse events', 'adverse_events'],
       ['Rota', null],
     ]);
+    expect(sources[0]?.notes).toEqual(['Rows above the names of the columns, which were passed over: 1.']);
     const { prepared } = await room.ask('prepare', null);
     expect(prepared.columns.map(({ table }) => table)).toEqual(['sessions', 'adverse_events']);
   });
