@@ -59,14 +59,14 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
 
   /** Does something that changes what would be sent, and works that out again. */
   const change = useCallback(
-    async (act: (signal: AbortSignal) => Promise<Picture | null>) => {
+    async (act: (signal: AbortSignal) => Promise<Picture>) => {
       underWay.current?.abort();
       const control = new AbortController();
       const { signal } = control;
       underWay.current = control;
       dispatch({ kind: 'changed' });
       try {
-        const picture = (await act(signal)) ?? (await look());
+        const picture = await act(signal);
         dispatch({ kind: 'picture', picture });
         if (signal.aborted) return;
         if (picture.key === null || picture.sources.every(({ table }) => table === null) || obstacleOf(picture.sources) !== null) {

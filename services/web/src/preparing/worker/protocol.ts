@@ -213,10 +213,10 @@ export interface Asks {
   'add-files': { input: { readonly files: readonly File[] }; answer: Picture };
   'change-source': { input: SourceChange; answer: Picture };
   'leave-out': { input: { readonly id: number }; answer: Picture };
-  'match-column': { input: { readonly source: number; readonly match: ColumnMatch }; answer: null };
+  'match-column': { input: { readonly source: number; readonly match: ColumnMatch }; answer: Picture };
   'state-first-day': {
     input: { readonly table: TableKey; readonly line: number; readonly date: IsoDate | null };
-    answer: null;
+    answer: Picture;
   };
   prepare: { input: null; answer: { readonly picture: Picture; readonly prepared: PreparedPicture } };
   'tables-to-send': { input: null; answer: { readonly tables: PreparedTable[]; readonly replacedCodes: ReplacedCodes } };

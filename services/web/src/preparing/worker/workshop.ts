@@ -93,13 +93,13 @@ export function workshop(): Answers {
     'match-column': async ({ source, match }) => {
       changed();
       at().shelf.match(source, match);
-      return null;
+      return picture();
     },
     'state-first-day': async ({ date, ...place }) => {
       const { month, shelf, keys } = at();
       month.state(shelf.assigned, keys.key, place, date);
       changed();
-      return null;
+      return picture();
     },
     prepare: async (_, watch) => {
       const { month, shelf, keys } = at();
