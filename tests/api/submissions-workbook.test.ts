@@ -127,6 +127,7 @@ describe('a workbook', () => {
     const id = await open();
     const bytes = workbookOf(month, {
       workbookProperties: '<fileSharing userName="Jane Roe"/>',
+      sharedStrings: '<si><t>Jane Roe</t></si>',
       more: [
         { name: 'docProps/core.xml', content: '<creator>Jane Roe</creator>' },
         { name: 'xl/comments1.xml', content: '<comment>Jane Roe</comment>' },
@@ -163,6 +164,9 @@ describe('a hostile workbook', () => {
   const good = () => workbookOf(month);
   const compound = Uint8Array.from([0xd0, 0xcf, 0x11, 0xe0, 0xa1, 0xb1, 0x1a, 0xe1, ...Buffer.from('EncryptedPackage', 'utf16le')]);
 
+  const growing =
+    '<!DOCTYPE lolz [<!ENTITY a "lol"><!ENTITY b "&a;&a;&a;">]><worksheet><sheetData><row r="1"><c r="A1" t="str"><v>&b;</v></c></row></sheetData></worksheet>';
+
   it.each([
     ['with a password', () => compound, 'The workbook is protected by a password.'],
     [
@@ -186,6 +190,12 @@ describe('a hostile workbook', () => {
       () => workbookOf(month, { more: [{ name: 'xl/link', content: '/etc/passwd', claims: { mode: 0o120777 } }] }),
       'The workbook is damaged. It has a part whose name leads out of the workbook.',
     ],
+    ['with entities that grow', () => makeWorkbook({ sheets: [{ name: 'bouts', xml: growing }] }), 'The workbook is damaged.'],
+    [
+      'with more columns than there are',
+      () => makeWorkbook({ sheets: [{ name: 'bouts', rows: [[{ xml: '<c r="XFD1"><v>1</v></c>' }]] }] }),
+      'A row has a cell behind column 500.',
+    ],
     ['that is an image', () => Uint8Array.of(0x89, 0x50, 0x4e, 0x47, 0x0d, 0x0a), 'The file is an image, not a workbook in XLSX form.'],
     ['that is CSV', () => Buffer.from('participant\r\n'), 'The file is text or of an unknown kind, not a workbook in XLSX form.'],
     [
@@ -202,14 +212,13 @@ describe('a hostile workbook', () => {
     expect(await contentOf(id)).toBeNull();
   });
 
-  it('with a document type in a sheet is refused when it is read, and not kept', async () => {
+  it('is refused with the row of the sheet that it cannot be read in', async () => {
     const id = await open();
     const xml =
-      '<!DOCTYPE lolz [<!ENTITY a "lol"><!ENTITY b "&a;&a;&a;">]><worksheet><sheetData><row r="1"><c r="A1" t="str"><v>&b;</v></c></row></sheetData></worksheet>';
-    await put(id, makeWorkbook({ sheets: [{ name: 'bouts', xml }] })).expect(200);
-    const checked = await check(id);
-    expect(checked.findings.map(({ rule }) => rule)).toEqual(['F41']);
-    expect(checked.files).toMatchObject([{ refused: true }]);
+      '<worksheet><sheetData><row r="1"><c r="A1" t="str"><v>bout_no</v></c></row><row r="7"><c r="A7" t="x"/></row></sheetData></worksheet>';
+    const refused = await put(id, makeWorkbook({ sheets: [{ name: 'bouts', xml }] }));
+    expect([refused.status, codeOf(refused.body)]).toEqual([422, 'file-unreadable']);
+    expect(refused.body.detail).toContain('That is in row 7 of a sheet.');
   });
 
   it('beyond the limit of bytes is refused by what arrives', async () => {

@@ -12,7 +12,6 @@ import { scanPart } from './scan-part.ts';
 import { readSharedTexts } from './shared-texts.ts';
 import type { SheetSurroundings } from './sheet-reader.ts';
 import { readWorkbookPart } from './workbook-part.ts';
-import type { WorkbookPart } from './workbook-part.ts';
 
 export interface SheetPart {
   readonly name: string;
@@ -71,45 +70,9 @@ function refuseMacros(directory: ZipDirectory): void {
 }
 
 /** The part of this kind among the relationships; undefined when the workbook has none. */
-export function partOfKind(directory: ZipDirectory, relationships: readonly Relationship[], kind: string): ZipEntry | undefined {
+function partOfKind(directory: ZipDirectory, relationships: readonly Relationship[], kind: string): ZipEntry | undefined {
   const found = relationships.find((relationship) => relationship.kind === kind);
   return found && partAt(directory, found.path);
-}
-
-/** The parts of a workbook that may be read, and how they find each other. */
-export interface WorkbookPackage {
-  readonly directory: ZipDirectory;
-  /** Path of the part that lists the sheets. */
-  readonly main: string;
-  readonly list: WorkbookPart;
-  readonly relationships: readonly Relationship[];
-}
-
-/**
- * Checks the archive and reads the list of its sheets.
- * @throws UnreadableFile
- */
-export function openPackage(bytes: Uint8Array, limits: WorkbookLimits): WorkbookPackage {
-  refuseOtherContent(bytes);
-  const directory = readZipDirectory(bytes, limits);
-  refuseMacros(directory);
-  const main = relationshipsOf(directory, '').find(({ kind }) => kind === 'officeDocument')?.path;
-  if (main === undefined) throw notAWorkbook('The file is a zip archive that holds no workbook.');
-  if (main.toLowerCase().endsWith('.bin')) throw notAWorkbook('The workbook is in a binary form.');
-  const list = readWorkbookPart(partAt(directory, main), limits.sheets);
-  if (list.sheets.length === 0) throw notAWorkbook('The file is a document or presentation, not a workbook.');
-  return { directory, main, list, relationships: relationshipsOf(directory, main) };
-}
-
-/** The sheets of a workbook that hold cells, each with its part. */
-export function sheetParts({ directory, list, relationships }: WorkbookPackage): readonly SheetPart[] {
-  const parts = list.sheets.flatMap(({ name, isHidden, relationship: id }) => {
-    const target = relationships.find((relationship) => relationship.id === id);
-    if (!target) throw damaged('A sheet of its list is missing.');
-    return target.kind === 'worksheet' ? [{ name, isHidden, entry: partAt(directory, target.path) }] : [];
-  });
-  if (new Set(parts.map(({ entry }) => entry)).size !== parts.length) throw damaged('Two of its sheets are the same part.');
-  return parts;
 }
 
 /**
@@ -117,16 +80,30 @@ export function sheetParts({ directory, list, relationships }: WorkbookPackage):
  * @throws UnreadableFile
  */
 export function openWorkbook(bytes: Uint8Array, limits: WorkbookLimits): OpenWorkbook {
-  const opened = openPackage(bytes, limits);
-  const { directory, relationships, list } = opened;
+  refuseOtherContent(bytes);
+  const directory = readZipDirectory(bytes, limits);
+  refuseMacros(directory);
+  const main = relationshipsOf(directory, '').find(({ kind }) => kind === 'officeDocument');
+  if (!main) throw notAWorkbook('The file is a zip archive that holds no workbook.');
+  if (main.path.toLowerCase().endsWith('.bin')) throw notAWorkbook('The workbook is in a binary form.');
+  const { sheets, countsFrom1904 } = readWorkbookPart(partAt(directory, main.path), limits.sheets);
+  if (sheets.length === 0) throw notAWorkbook('The file is a document or presentation, not a workbook.');
+
+  const relationships = relationshipsOf(directory, main.path);
   const texts = partOfKind(directory, relationships, 'sharedStrings');
   const styles = partOfKind(directory, relationships, 'styles');
+  const parts = sheets.flatMap(({ name, isHidden, relationship: id }) => {
+    const target = relationships.find((relationship) => relationship.id === id);
+    if (!target) throw damaged('A sheet of its list is missing.');
+    return target.kind === 'worksheet' ? [{ name, isHidden, entry: partAt(directory, target.path) }] : [];
+  });
+  if (new Set(parts.map(({ entry }) => entry)).size !== parts.length) throw damaged('Two of its sheets are the same part.');
   return {
-    sheets: sheetParts(opened),
+    sheets: parts,
     surroundings: {
       sharedTexts: texts ? readSharedTexts(texts, limits) : [],
       dateStyles: styles ? readDateStyles(styles) : [],
-      countsFrom1904: list.countsFrom1904,
+      countsFrom1904,
     },
   };
 }

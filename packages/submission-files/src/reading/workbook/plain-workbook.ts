@@ -1,17 +1,23 @@
 /**
- * A workbook without what nobody reads: the author's name and folder, comments, images, printer settings, other sheets of
- * the template and whatever else a program puts beside the cells. Parts that stay are not unpacked.
+ * A workbook written again from what is read of it. What nobody reads is gone: the author's name and folder, comments,
+ * images, formulas, headers of pages, texts on the template's own sheets and on sheets that are no tables, and whatever else a
+ * program puts beside the cells.
  */
 import { defaultWorkbookLimits } from '../../limits.ts';
 import type { WorkbookLimits } from '../../limits.ts';
 import { escapeXml } from '../../writing/workbook/escape-xml.ts';
-import { packEntries, storedEntry } from '../../zip/pack-entries.ts';
-import type { ZipEntry } from '../../zip/zip-directory.ts';
+import { joined } from '../../zip/joined.ts';
+import { writeZip } from '../../zip/write-zip.ts';
+import type { ZipPart } from '../../zip/write-zip.ts';
 import { unreadable } from '../unreadable.ts';
 import type { Unreadable } from '../unreadable.ts';
-import { openPackage, partOfKind } from './open-workbook.ts';
-import { partAt } from './package-parts.ts';
+import { CellDetector } from './cell-detector.ts';
+import { openWorkbook } from './open-workbook.ts';
+import type { OpenWorkbook, SheetPart } from './open-workbook.ts';
+import { scanPart, scanPieces } from './scan-part.ts';
+import { SheetCopy } from './sheet-copy.ts';
 import { meaningOfSheet } from './sheet-names.ts';
+import { SheetReader } from './sheet-reader.ts';
 
 export interface PlainWorkbook {
   readonly ok: true;
@@ -19,71 +25,88 @@ export interface PlainWorkbook {
 }
 
 const head = '<?xml version="1.0" encoding="UTF-8" standalone="yes"?>\n';
-const sheetSpace = 'http://schemas.openxmlformats.org/spreadsheetml/2006/main';
-const relationshipSpace = 'http://schemas.openxmlformats.org/officeDocument/2006/relationships';
-const packageSpace = 'http://schemas.openxmlformats.org/package/2006/relationships';
-const typeSpace = 'http://schemas.openxmlformats.org/package/2006/content-types';
-const typeOf = (kind: string) => `application/vnd.openxmlformats-officedocument.spreadsheetml.${kind}+xml`;
+const spreadsheet = 'http://schemas.openxmlformats.org/spreadsheetml/2006/main';
+const officeDocument = 'http://schemas.openxmlformats.org/officeDocument/2006/relationships';
+const packaging = 'http://schemas.openxmlformats.org/package/2006';
+const typeOf = (kind: string): string => `application/vnd.openxmlformats-officedocument.spreadsheetml.${kind}+xml`;
 
-const emptySheet = `${head}<worksheet xmlns="${sheetSpace}"><sheetData/></worksheet>`;
-
-interface KeptPart {
-  readonly kind: 'worksheet' | 'sharedStrings' | 'styles';
-  readonly entry: ZipEntry;
-}
-
-const relationships = (targets: readonly (readonly [kind: string, target: string])[]): string =>
-  `${head}<Relationships xmlns="${packageSpace}">${targets
-    .map(([kind, target], index) => `<Relationship Id="rId${index + 1}" Type="${relationshipSpace}/${kind}" Target="${target}"/>`)
-    .join('')}</Relationships>`;
-
-const contentTypes = (parts: readonly KeptPart[]): string =>
-  `${head}<Types xmlns="${typeSpace}"><Default Extension="rels" ContentType="application/vnd.openxmlformats-package.relationships+xml"/>${[
-    ['xl/workbook.xml', 'sheet.main'],
-    ...parts.map(({ kind, entry }) => [entry.name, kind]),
-  ]
-    .map(([name, kind]) => `<Override PartName="/${name}" ContentType="${typeOf(kind ?? '')}"/>`)
-    .join('')}</Types>`;
+/** Stands in for the cells of a sheet that is no table, so that it is still found to be one. */
+const something = '<sheetData><row r="1"><c r="A1" t="inlineStr"><is><t>-</t></is></c></row></sheetData>';
+const nothing = '<sheetData/>';
 
 /**
- * What of a workbook is read, as a workbook of its own, in which findings have the same places. Refuses what is no
- * workbook in XLSX form, is protected, holds macros, or claims more than the limits; what the cells hold is not looked at.
+ * Reading it gives the same tables and findings, in the same places, as reading the workbook itself. Refuses whatever
+ * cannot be read to its end: what is no workbook in XLSX form, is protected, holds macros, is damaged or beyond the limits.
+ *
+ * @param pause Called every so often, so that others get their turn.
  */
-export function plainWorkbook(bytes: Uint8Array, limits: WorkbookLimits = defaultWorkbookLimits): PlainWorkbook | Unreadable {
+export async function plainWorkbook(
+  bytes: Uint8Array,
+  limits: WorkbookLimits = defaultWorkbookLimits,
+  pause: () => Promise<unknown> = () => Promise.resolve(),
+): Promise<PlainWorkbook | Unreadable> {
   try {
-    return { ok: true, bytes: withoutTheRest(bytes, limits) };
+    const pieces: Uint8Array[] = [];
+    for await (const piece of writeZip(parts(openWorkbook(bytes, limits), limits, pause))) pieces.push(piece);
+    return { ok: true, bytes: joined(pieces) };
   } catch (error) {
     return unreadable(error);
   }
 }
 
-function withoutTheRest(bytes: Uint8Array, limits: WorkbookLimits): Uint8Array {
-  const { directory, list, relationships: found } = openPackage(bytes, limits);
-  const parts: KeptPart[] = [];
-  const listed = list.sheets.map(({ name, isHidden, relationship: id }, index) => {
-    const target = found.find((relationship) => relationship.id === id);
-    const meaning = meaningOfSheet(name);
-    const isRead = target?.kind === 'worksheet' && meaning !== 'other';
-    const part = `xl/worksheets/sheet${index + 1}.xml`;
-    parts.push({
-      kind: 'worksheet',
-      entry: isRead ? { ...partAt(directory, target.path), name: part } : storedEntry(part, emptySheet),
-    });
-    // The name of a sheet nobody declared may be somebody's.
-    const shown = meaning === null ? `Sheet ${index + 1}` : name;
+function* parts({ sheets, surroundings }: OpenWorkbook, limits: WorkbookLimits, pause: () => Promise<unknown>): Generator<ZipPart> {
+  const listed = sheets.map(({ name, isHidden }, index) => {
+    // The name of a sheet that is no table may be somebody's.
+    const shown = meaningOfSheet(name) === null ? `Sheet ${index + 1}` : name;
     return `<sheet name="${escapeXml(shown)}" sheetId="${index + 1}"${isHidden ? ' state="hidden"' : ''} r:id="rId${index + 1}"/>`;
   });
-  for (const kind of ['sharedStrings', 'styles'] as const) {
-    const entry = partOfKind(directory, found, kind);
-    if (entry) parts.push({ kind, entry: { ...entry, name: `xl/${kind}.xml` } });
+  const numbers = sheets.map((_, index) => index + 1);
+  yield { name: '[Content_Types].xml', content: [head, contentTypes(numbers)] };
+  yield { name: '_rels/.rels', content: [head, relationships([['officeDocument', 'xl/workbook.xml']])] };
+  yield {
+    name: 'xl/workbook.xml',
+    content: [head, `<workbook xmlns="${spreadsheet}" xmlns:r="${officeDocument}"><sheets>${listed.join('')}</sheets></workbook>`],
+  };
+  yield {
+    name: 'xl/_rels/workbook.xml.rels',
+    content: [head, relationships(numbers.map((number) => ['worksheet', `worksheets/sheet${number}.xml`]))],
+  };
+  for (const [index, sheet] of sheets.entries())
+    yield { name: `xl/worksheets/sheet${index + 1}.xml`, content: sheetXml(sheet, surroundings, limits, pause) };
+}
+
+async function* sheetXml(
+  { name, entry }: SheetPart,
+  surroundings: OpenWorkbook['surroundings'],
+  limits: WorkbookLimits,
+  pause: () => Promise<unknown>,
+): AsyncGenerator<string> {
+  yield `${head}<worksheet xmlns="${spreadsheet}">`;
+  const meaning = meaningOfSheet(name);
+  if (meaning === 'other') yield nothing;
+  else if (meaning === null) {
+    const detector = new CellDetector();
+    scanPart(entry, detector);
+    yield detector.isDone ? something : nothing;
+  } else {
+    const copy = new SheetCopy();
+    for (const _ of scanPieces(entry, new SheetReader(surroundings, limits, copy))) {
+      yield copy.take();
+      await pause();
+    }
+    yield copy.end();
   }
-  const properties = list.countsFrom1904 ? '<workbookPr date1904="1"/>' : '';
-  const workbook = `${head}<workbook xmlns="${sheetSpace}" xmlns:r="${relationshipSpace}">${properties}<sheets>${listed.join('')}</sheets></workbook>`;
-  return packEntries([
-    storedEntry('[Content_Types].xml', contentTypes(parts)),
-    storedEntry('_rels/.rels', relationships([['officeDocument', 'xl/workbook.xml']])),
-    storedEntry('xl/workbook.xml', workbook),
-    storedEntry('xl/_rels/workbook.xml.rels', relationships(parts.map(({ kind, entry }) => [kind, entry.name.replace('xl/', '')]))),
-    ...parts.map(({ entry }) => entry),
-  ]);
+  yield '</worksheet>';
+}
+
+function relationships(targets: readonly (readonly [kind: string, target: string])[]): string {
+  const listed = targets.map(
+    ([kind, target], index) => `<Relationship Id="rId${index + 1}" Type="${officeDocument}/${kind}" Target="${target}"/>`,
+  );
+  return `<Relationships xmlns="${packaging}/relationships">${listed.join('')}</Relationships>`;
+}
+
+function contentTypes(sheets: readonly number[]): string {
+  const listed = sheets.map((number) => `<Override PartName="/xl/worksheets/sheet${number}.xml" ContentType="${typeOf('worksheet')}"/>`);
+  return `<Types xmlns="${packaging}/content-types"><Default Extension="rels" ContentType="application/vnd.openxmlformats-package.relationships+xml"/><Override PartName="/xl/workbook.xml" ContentType="${typeOf('sheet.main')}"/>${listed.join('')}</Types>`;
 }

@@ -1,5 +1,6 @@
-/** Files of a submission come and go until it is settled. Their bytes are kept until then, those of a workbook without what nobody reads. */
+/** Files of a submission come and go until it is settled. Their bytes are kept until then; a workbook is written again from its cells first. */
 import { createHash } from 'node:crypto';
+import { setImmediate as nextTurn } from 'node:timers/promises';
 import type { InputOf, Submission } from '@cairnstep/contract';
 import type {
   putSubmissionFile as PutFile,
@@ -8,7 +9,7 @@ import type {
   removeSubmissionWorkbook as RemoveWorkbook,
 } from '@cairnstep/contract';
 import { showableFileName } from '@cairnstep/deidentification';
-import { defaultWorkbookLimits, plainWorkbook } from '@cairnstep/submission-files';
+import { plainWorkbook, type Unreadable } from '@cairnstep/submission-files';
 import { recordAudit } from '../../audit/record-audit.ts';
 import type { Actor } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
@@ -41,7 +42,7 @@ interface Arriving {
   readonly key: FileKey;
   readonly fileName: string;
   /** What is kept of the bytes. */
-  readonly keep: (bytes: Buffer) => Buffer;
+  readonly keep: (bytes: Buffer) => Buffer | Promise<Buffer>;
 }
 
 async function put(
@@ -54,7 +55,7 @@ async function put(
   // Refuse before reading what would be refused after it.
   await asActor(database, actor, (tx) => lockOwnSubmission(tx, actor, submissionId, clock()));
   const sent = await readLimited(facts.upload, config.UPLOAD_LIMIT_BYTES);
-  const content = keep(sent);
+  const content = await keep(sent);
   const sha256 = createHash('sha256').update(sent).digest('hex');
   return asActor(database, actor, async (tx) => {
     const submission = await lockOwnSubmission(tx, actor, submissionId, clock());
@@ -84,16 +85,17 @@ export const putSubmissionFile = (
   facts: RequestFacts,
 ): Promise<Submission> => put(context, actor, { submissionId, key: table, fileName, keep: (bytes) => bytes }, facts);
 
+const lineOf = ({ line }: Unreadable): string => (line === null ? '' : ` That is in row ${line} of a sheet.`);
+
 export const putSubmissionWorkbook = (
   context: Context,
   actor: Actor,
   { submissionId, fileName }: InputOf<typeof PutWorkbook>,
   facts: RequestFacts,
 ): Promise<Submission> => {
-  const limits = { ...defaultWorkbookLimits, bytes: context.config.UPLOAD_LIMIT_BYTES };
-  const keep = (bytes: Buffer): Buffer => {
-    const plain = plainWorkbook(bytes, limits);
-    if (!plain.ok) throw new Refusal('file-unreadable', `${plain.found} Nothing was kept. ${plain.mend}`);
+  const keep = async (bytes: Buffer): Promise<Buffer> => {
+    const plain = await plainWorkbook(bytes, undefined, nextTurn);
+    if (!plain.ok) throw new Refusal('file-unreadable', `${plain.found}${lineOf(plain)} Nothing was kept. ${plain.mend}`);
     return Buffer.from(plain.bytes.buffer, plain.bytes.byteOffset, plain.bytes.byteLength);
   };
   return put(context, actor, { submissionId, key: 'workbook', fileName, keep }, facts);

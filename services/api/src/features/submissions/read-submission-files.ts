@@ -1,7 +1,6 @@
 /** The files of a submission to typed tables: screened while they are read, with mended cells in their place. */
 import { type TableKey } from '@cairnstep/dictionary';
-import type { FindingLog } from '@cairnstep/submission-files';
-import { readTable, readWorkbook, type TypedTable } from '@cairnstep/submission-files';
+import { defaultWorkbookLimits, readTable, readWorkbook, type FindingLog, type TypedTable } from '@cairnstep/submission-files';
 import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
@@ -20,6 +19,13 @@ export interface FilesRead {
   /** Files that must not be kept: they identify somebody, or were not read to their end, so that nobody knows whether they do. */
   readonly refused: readonly FileKey[];
 }
+
+/** What is kept of a workbook has passed the limits in its own form; written again it may be somewhat larger. */
+const keptLimits = {
+  ...defaultWorkbookLimits,
+  bytes: 2 * defaultWorkbookLimits.bytes,
+  unpackedBytes: 2 * defaultWorkbookLimits.unpackedBytes,
+};
 
 /** After these nobody has looked at all of the cells of a workbook. */
 const unscreened = ['F03', 'F05', 'F40', 'F41', 'F42', 'F43', 'F48'];
@@ -58,7 +64,7 @@ class SubmissionReader {
 
   /** A sheet without a row says nothing about its table: the template is sent as it is where a month has nothing for it. */
   private async readSheets(content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<Tables> {
-    const read = await readWorkbook(content, this.log, undefined, (table) => this.optionsOf(table, screens));
+    const read = await readWorkbook(content, this.log, keptLimits, (table) => this.optionsOf(table, screens));
     const filled = Object.values(read).filter(({ length }) => length > 0);
     for (const { key } of filled.filter((table) => this.tables[table.key]))
       this.log.add({
