@@ -1,5 +1,5 @@
 import type { MonthState, SiteMonth } from '@cairnstep/contract';
-import { fireEvent, screen, within } from '@testing-library/react';
+import { cleanup, fireEvent, screen, within } from '@testing-library/react';
 import { describe, expect, it } from 'vitest';
 import { fakeApi, signedInAs, site } from '../../testing/fake-api.ts';
 import { renderRoutes } from '../../testing/render.tsx';
@@ -32,8 +32,10 @@ const calendar = {
   ],
 };
 
-function open(answer: unknown = calendar, address = '/calendar') {
-  fakeApi({ 'GET /api/account': signedInAs({ role: 'steward', site: null }), 'GET /api/calendar': answer });
+const steward = signedInAs({ role: 'steward', site: null });
+
+function open(answer: unknown = calendar, address = '/calendar', account = steward) {
+  fakeApi({ 'GET /api/account': account, 'GET /api/calendar': answer });
   return renderRoutes([{ path: '/calendar', element: <CalendarPage /> }], address);
 }
 
@@ -62,6 +64,17 @@ describe('the calendar', () => {
       `/submissions/${submissionId}/receipt`,
     );
     expect(screen.getByRole('link', { name: /^checking\b.*Low Fell/ }).getAttribute('href')).toBe(`/submit/${submissionId}`);
+  });
+
+  it('leads stewards to what a site sent, and the people of a site to its months', async () => {
+    open();
+    const leads = async () => (await screen.findByRole('link', { name: 'Low Fell Clinic (S02)' })).getAttribute('href');
+    await screen.findByText(/every site/);
+    expect(await leads()).toBe('/submissions?site=S02');
+    cleanup();
+    open(calendar, '/calendar', signedInAs({ role: 'coordinator', site: second }));
+    await screen.findByText(/your sites/);
+    expect(await leads()).toBe('/month?site=S02');
   });
 
   it('keeps in the address that only sites with an overdue month are shown', async () => {

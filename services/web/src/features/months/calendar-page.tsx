@@ -38,14 +38,19 @@ export default function CalendarPage() {
     >
       <Section title="Months by site" id="sites" wide>
         <Answer query={query} waiting="Reading the months of the sites.">
-          {(calendar) => <SitesByMonth calendar={calendar} />}
+          {(calendar) => <SitesByMonth calendar={calendar} isSteward={isSteward} />}
         </Answer>
       </Section>
     </Page>
   );
 }
 
-function SitesByMonth({ calendar: { months, sites } }: { readonly calendar: Calendar }) {
+interface SitesByMonthProps {
+  readonly calendar: Calendar;
+  readonly isSteward: boolean;
+}
+
+function SitesByMonth({ calendar: { months, sites }, isSteward }: SitesByMonthProps) {
   const [only, setOnly] = useAddressParam('only');
   const isOnlyOverdue = only === 'overdue';
   const shown = isOnlyOverdue ? sites.filter(isOverdue) : sites;
@@ -60,7 +65,7 @@ function SitesByMonth({ calendar: { months, sites } }: { readonly calendar: Cale
       <Table
         id="calendar"
         caption={isOnlyOverdue ? 'Sites with an overdue month, newest month first' : 'Sites and their last twelve months, newest first'}
-        columns={[siteColumn, ...[...months].reverse().map(columnOf)]}
+        columns={[siteColumn(isSteward), ...[...months].reverse().map(columnOf)]}
         rows={shown}
         rowKey={({ site }) => site.id}
         pinsRowHeaders
@@ -71,13 +76,14 @@ function SitesByMonth({ calendar: { months, sites } }: { readonly calendar: Cale
   );
 }
 
-const siteColumn: Column<SiteLine> = {
+/** The people of a site go on to what they can do about its months, stewards to what came. */
+const siteColumn = (isSteward: boolean): Column<SiteLine> => ({
   key: 'site',
   header: 'Site',
   value: ({ site }) => `${site.code} ${site.name}`,
-  cell: ({ site }) => <TextLink to={`/submissions?site=${site.code}`}>{`${site.name} (${site.code})`}</TextLink>,
+  cell: ({ site }) => <TextLink to={`/${isSteward ? 'submissions' : 'month'}?site=${site.code}`}>{`${site.name} (${site.code})`}</TextLink>,
   isRowHeader: true,
-};
+});
 
 const monthIn = (line: SiteLine, month: string): SiteMonth | undefined => line.months.find((one) => one.month === month);
 
