@@ -8,7 +8,7 @@ import { signIn } from './support/sign-in.ts';
 // Every page is looked at in four ways, which takes its time on a busy machine.
 test.describe.configure({ timeout: 900_000 });
 
-const site = { code: 'S03', option: /\(S03\)$/ };
+const site = { code: 'S04', option: /\(S04\)$/ };
 const newcomer = 'Felix Brandt';
 
 /** The cell of a site under a month's header. */
