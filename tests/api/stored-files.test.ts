@@ -4,7 +4,7 @@ import { setTimeout as wait } from 'node:timers/promises';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { registry } from '../../services/api/src/authority/actor.ts';
 import { asActor } from '../../services/api/src/database/as-actor.ts';
-import { readContent } from '../../services/api/src/features/submissions/submissions.repository.ts';
+import { readContent } from '../../services/api/src/features/submissions/read-content.ts';
 import { makePerson, makeSite, type TestPerson, type TestSite } from '../support/people.ts';
 import { startTestServer, type TestServer } from '../support/server.ts';
 
@@ -34,5 +34,28 @@ describe('a file that is no text', () => {
       }
     });
     expect(Buffer.concat(back).equals(sent)).toBe(true);
+  });
+
+  it('may be read in part; its connection goes on', async () => {
+    const { body } = await coordinator.post('/api/submissions', { siteId: site.id, month: '2026-01' }).expect(201);
+    await coordinator.upload(`/api/submissions/${body.id}/files/bouts?fileName=bouts.csv`, randomBytes(3 * piece)).expect(200);
+    const after = await asActor(server.context.database, registry, async (tx) => {
+      for await (const bytes of readContent(tx, body.id, 'bouts')) {
+        expect(bytes.length).toBeGreaterThan(0);
+        break;
+      }
+      return (await tx.query('select 1 as one')) as unknown;
+    });
+    expect(after).toEqual([{ one: 1 }]);
+  });
+
+  it('is empty when nobody sent it', async () => {
+    const { body } = await coordinator.post('/api/submissions', { siteId: site.id, month: '2026-01' }).expect(201);
+    const pieces = await asActor(server.context.database, registry, async (tx) => {
+      const all = [];
+      for await (const bytes of readContent(tx, body.id, 'consents')) all.push(bytes);
+      return all;
+    });
+    expect(pieces).toEqual([]);
   });
 });

@@ -12,7 +12,8 @@ import type { FileAnswer } from '../../http/route.ts';
 import { allOf } from './all-of.ts';
 import { readMends } from './mends.repository.ts';
 import { visibleSubmission } from './read-submissions.ts';
-import { listFindings, readContent, readFiles, type FindingRecord, type SubmissionRecord } from './submissions.repository.ts';
+import { readContent } from './read-content.ts';
+import { listFindings, readFiles, type FindingRecord, type SubmissionRecord } from './submissions.repository.ts';
 
 const findingsAtATime = 5_000;
 

@@ -8,7 +8,8 @@ import { tableOfFile, type FileKey } from './file-key.ts';
 import { readMends, type MendsByTable } from './mends.repository.ts';
 import { readSafeHeaders } from './safe-headers.repository.ts';
 import { TableScreen } from './screen-table.ts';
-import { readContent, type FileRecord, type SubmissionRecord } from './submissions.repository.ts';
+import { readContent } from './read-content.ts';
+import type { FileRecord, SubmissionRecord } from './submissions.repository.ts';
 
 type Tables = Partial<Record<TableKey, TypedTable>>;
 

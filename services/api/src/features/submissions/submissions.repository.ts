@@ -152,36 +152,6 @@ export async function readFiles(tx: Tx, id: string): Promise<FileRecord[]> {
   )) as FileRecord[];
 }
 
-const contentPieceBytes = 1 << 20;
-
-/**
- * Piece by piece, so that memory does not grow with the file; the next is on its way while this one is worked on. As base64, because the driver
- * makes text of whatever arrives, which is no loss only where it is text.
- */
-export async function* readContent(tx: Tx, id: string, file: FileKey): AsyncGenerator<Uint8Array> {
-  const fetch = async (from: number): Promise<Buffer | undefined> => {
-    const [row] = (await tx.query(
-      "select encode(substring(content from $3 for $4), 'base64') as piece from submission_files where submission_id = $1 and table_key = $2",
-      [id, file, from, contentPieceBytes],
-    )) as { piece: string | null }[];
-    return row?.piece ? Buffer.from(row.piece, 'base64') : undefined;
-  };
-  let next = fetch(1);
-  try {
-    for (let from = 1 + contentPieceBytes; ; from += contentPieceBytes) {
-      const piece = await next;
-      if (!piece?.length) return;
-      next = fetch(from);
-      // Should it fail before it is asked for: that is told then.
-      next.catch(() => undefined);
-      yield piece;
-    }
-  } finally {
-    // Whoever stops reading early goes on with the same connection.
-    await next.catch(() => undefined);
-  }
-}
-
 export async function putFile(
   tx: Tx,
   id: string,
