@@ -44,3 +44,4 @@ export type * from './preparation/month.ts';
 export { cleanCsv } from './preparation/clean-csv.ts';
 export { matchColumns } from './preparation/match-columns.ts';
 export { prepareMonth } from './preparation/prepare-month.ts';
+export { unknownWords } from './preparation/unknown-words.ts';

@@ -9,6 +9,7 @@ import { FirstDays } from './first-days.tsx';
 import { describeMatch } from './meanings.ts';
 import { ProblemList } from './problem-list.tsx';
 import type { Month } from './use-month.ts';
+import { WordsToExplain } from './words-to-explain.tsx';
 import type { ColumnPicture, PreparedPicture, TableColumns } from './worker/protocol.ts';
 
 /** The column whose editor is open, if any: `3:17` is column 17 of source 3. */
@@ -29,6 +30,7 @@ export function ColumnsSection({ month, prepared }: { readonly month: Month; rea
       }
     >
       <div className="grid gap-6">
+        <WordsToExplain columns={columns} onChange={(source, columnNumber) => setOpen(`${source}:${columnNumber}`)} />
         <ProblemList
           problems={problems}
           onChange={(table, columnNumber) => {
@@ -44,7 +46,10 @@ export function ColumnsSection({ month, prepared }: { readonly month: Month; rea
             month={month}
             open={open}
             setOpen={setOpen}
-            needsALook={problems.some(({ table, columnNumber }) => table === each.table && columnNumber !== null)}
+            needsALook={
+              each.columns.some(({ unknownWords }) => unknownWords.length > 0) ||
+              problems.some(({ table, columnNumber }) => table === each.table && columnNumber !== null)
+            }
           />
         ))}
       </div>

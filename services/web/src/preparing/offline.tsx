@@ -4,6 +4,7 @@ import { formatMonth } from '../lib/format.ts';
 import { Announcer } from '../ui/announcer.tsx';
 import { Mark } from '../ui/mark.tsx';
 import { Page, Section } from '../ui/page.tsx';
+import { Arrival } from './arrival.tsx';
 import { Preparing } from './preparing.tsx';
 import { StartForm } from './start-form.tsx';
 import type { Workroom } from './worker-client.ts';
@@ -39,19 +40,22 @@ export function Offline({ workroom, today }: OfflineProps) {
             <StartForm onStart={(site, month) => setChosen({ site, month })} />
           </Section>
         ) : (
-          <Preparing
-            workroom={workroom}
-            task={{
-              view: 'prepare',
-              site: { code: chosen.site, name: chosen.site },
-              month: chosen.month,
-              knownParticipants: nothing,
-              safeHeaders: nothing,
-              theme: 'system',
-            }}
-            surroundings={null}
-            today={today}
-          />
+          <>
+            <Arrival label="Next: the key of the site." />
+            <Preparing
+              workroom={workroom}
+              task={{
+                view: 'prepare',
+                site: { code: chosen.site, name: chosen.site },
+                month: chosen.month,
+                knownParticipants: nothing,
+                safeHeaders: nothing,
+                theme: 'system',
+              }}
+              surroundings={null}
+              today={today}
+            />
+          </>
         )}
       </main>
       <Announcer />

@@ -47,7 +47,7 @@ export function ComboBox({ label, hint, error, value, onChange, options, ...rest
         if (option !== undefined && option.value !== value) onChange(option.value);
       }}
       allowsEmptyCollection
-      menuTrigger="focus"
+      menuTrigger="input"
       isInvalid={error !== undefined}
       validationBehavior="aria"
       className="grid max-w-xl grid-cols-1 gap-1"

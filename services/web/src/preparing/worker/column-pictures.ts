@@ -1,7 +1,6 @@
 /** The columns of a clinic's file as the page shows them: recognisable by their header and a few cells, with what becomes of each. */
-import { dateFormats, fittingFormats } from '@cairnstep/deidentification';
-import type { ColumnMatch, DateFormat, PreparationProblem, SiteKey } from '@cairnstep/deidentification';
-import { variableOf } from '@cairnstep/dictionary';
+import { dateFormats, fittingFormats, unknownWords } from '@cairnstep/deidentification';
+import type { ColumnMatch, DateFormat, SiteKey } from '@cairnstep/deidentification';
 import type { ColumnPicture, TableColumns } from './protocol.ts';
 import type { AssignedSource, Source } from './source-shelf.ts';
 
@@ -11,7 +10,7 @@ const examplesShown = 3;
 const exampleLength = 40;
 const wordsShown = 30;
 
-export function columnsOf(source: AssignedSource, key: SiteKey, problems: readonly PreparationProblem[]): TableColumns {
+export function columnsOf(source: AssignedSource, key: SiteKey): TableColumns {
   const { id, table, headers, matches } = source;
   const remembered = key.matches.get(table) ?? [];
   const columns = headers.map((header, position): ColumnPicture => {
@@ -25,17 +24,21 @@ export function columnsOf(source: AssignedSource, key: SiteKey, problems: readon
       match,
       isNew: JSON.stringify(before) !== JSON.stringify(own),
       dateFormats: datesIn(source, position, match),
-      unknownWords: unknownWordsIn(source, position, match, problems),
+      unknownWords: unknownWords(table, match, cellsOf(source, position), wordsShown),
       isMatchable: own.length > 0,
     };
   });
   return { source: id, table, columns };
 }
 
-function examplesIn({ rows }: Source, position: number): string[] {
+function* cellsOf({ rows }: Source, position: number): Generator<string> {
+  for (const row of rows) yield row[position] ?? '';
+}
+
+function examplesIn(source: Source, position: number): string[] {
   const examples = new Set<string>();
-  for (const row of rows) {
-    const cell = row[position]?.trim() ?? '';
+  for (const each of cellsOf(source, position)) {
+    const cell = each.trim();
     if (cell !== '') examples.add(cell.length > exampleLength ? `${cell.slice(0, exampleLength)}…` : cell);
     if (examples.size === examplesShown) break;
   }
@@ -47,20 +50,4 @@ function datesIn({ rows }: Source, position: number, match: ColumnMatch): readon
   const fitting = fittingFormats(rows.slice(0, datesSampled).map((row) => row[position] ?? ''));
   const isMeantAsDate = match.as === 'study-day' || match.as.endsWith('-date');
   return fitting.length === 0 && isMeantAsDate ? dateFormats : fitting;
-}
-
-function unknownWordsIn(
-  { table, rows, lines }: AssignedSource,
-  position: number,
-  match: ColumnMatch,
-  problems: readonly PreparationProblem[],
-): string[] {
-  if (match.as !== 'value' || variableOf(table, match.variable).codes === undefined) return [];
-  const words = new Set<string>();
-  for (const problem of problems) {
-    if (problem.kind !== 'unreadable-cell' || problem.table !== table || problem.columnNumber !== position + 1) continue;
-    for (const line of problem.lines) words.add(rows[lines.indexOf(line)]?.[position]?.trim() ?? '');
-  }
-  words.delete('');
-  return [...words].slice(0, wordsShown);
 }

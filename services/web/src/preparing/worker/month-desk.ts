@@ -80,7 +80,7 @@ export class MonthDesk {
     const rowsOf = (table: TableKey) => raw.find((each) => each.table === table)?.rows.length ?? 0;
     return {
       tables: await Promise.all(files.map((file) => tablePicture(file, month, rowsOf(file.table)))),
-      columns: sources.map((source) => columnsOf(source, key, problems)),
+      columns: sources.map((source) => columnsOf(source, key)),
       problems: problems.map((problem): ProblemPicture => ({
         ...problem,
         header: headerAt(sourceOf(problem.table), problem.columnNumber),

@@ -112,6 +112,15 @@ describe('a month in the worker', () => {
     expect(changed.prepared.tables[0]?.headers).not.toContain('device_class');
   });
 
+  it('tells words that nobody understands also where their rows stay behind', async () => {
+    const { room } = await roomWithKey();
+    const file = csvFile('sessions.csv', 'MRN,Session date,Status\r\n0042,2026-03-01,done\r\n0042,2026-03-03,done\r\n');
+    await room.ask('add-files', { files: [file] });
+    const { prepared } = await room.ask('prepare', null);
+    expect(prepared).toMatchObject({ rowsLeftBehind: 2, problems: [{ kind: 'index-date-unknown' }] });
+    expect(column(prepared, 'Status').unknownWords).toEqual(['done']);
+  });
+
   it('counts from a first training day that is stated for a place in the file', async () => {
     const { room } = await roomWithKey();
     const assessments = csvFile(
