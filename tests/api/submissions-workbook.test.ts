@@ -108,6 +108,7 @@ describe('a workbook', () => {
     await put(id, workbookOf({ sessions: [], bouts: [] })).expect(200);
     const checked = await check(id);
     expect(checked.findings.map(({ rule }) => rule)).toEqual(['F05']);
+    expect(checked.files).toMatchObject([{ refused: false, tables: [] }]);
     expect(checked.preview).toBeNull();
   });
 
@@ -289,13 +290,14 @@ describe('findings to take along', () => {
   it('stand in the cells of the files for those who sent them, and on a list for others', async () => {
     const id = await open();
     await put(id, workbookOf({ sessions: month.sessions ?? [], participants: month.participants ?? [] })).expect(200);
-    await coordinator.upload(`/api/submissions/${id}/files/bouts?fileName=bouts.csv`, csvOf('bouts', wrong.bouts ?? [])).expect(200);
+    for (const table of ['bouts', 'consents'] as const)
+      await coordinator.upload(`/api/submissions/${id}/files/${table}?fileName=${table}.csv`, csvOf(table, wrong[table] ?? [])).expect(200);
     await check(id);
     const path = `/api/submissions/${id}/findings.xlsx`;
     const mine = await download(coordinator, path).expect(200);
     const tables = await readWorkbook(mine.body, new FindingLog());
     expect(tables.bouts?.column('hr_end').number(1)).toBe(900);
-    expect(tables.sessions?.length).toBe(1);
+    expect([tables.sessions?.length, tables.consents?.length]).toEqual([1, 1]);
     const parts = Object.entries(unzipSync(mine.body));
     expect(
       parts

@@ -12,7 +12,7 @@ import type { FileAnswer } from '../../http/route.ts';
 import { allOf } from './all-of.ts';
 import { readMends } from './mends.repository.ts';
 import { visibleSubmission } from './read-submissions.ts';
-import { readContent } from './read-content.ts';
+import { readPieces } from './read-pieces.ts';
 import { listFindings, readFiles, type FindingRecord, type SubmissionRecord } from './submissions.repository.ts';
 
 const findingsAtATime = 5_000;
@@ -71,7 +71,7 @@ async function filesFor(tx: Tx, actor: Actor, submission: SubmissionRecord): Pro
   return (await readFiles(tx, submission.id))
     .filter(({ refused }) => !refused)
     .map(({ key }): SubmittedFile => {
-      const content = readContent(tx, submission.id, key);
+      const content = readPieces(tx, submission.id, key);
       if (key !== 'workbook') return { table: key, csv: content, ...mendsIn(mends[key]) };
       return { workbook: content, mendsOf: (table: TableKey) => mends[table] };
     });

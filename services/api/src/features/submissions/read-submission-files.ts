@@ -1,6 +1,14 @@
 /** The files of a submission to typed tables: screened while they are read, with mended cells in their place. */
-import { type TableKey } from '@cairnstep/dictionary';
-import { defaultWorkbookLimits, readTable, readWorkbook, type FindingLog, type TypedTable } from '@cairnstep/submission-files';
+import type { TableKey } from '@cairnstep/dictionary';
+import {
+  defaultWorkbookLimits,
+  readTable,
+  readWorkbook,
+  type FindingLog,
+  type Mends,
+  type TypedTable,
+  type TypedTables,
+} from '@cairnstep/submission-files';
 import { registry } from '../../authority/actor.ts';
 import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
@@ -11,10 +19,8 @@ import { TableScreen } from './screen-table.ts';
 import { readContent } from './read-content.ts';
 import type { FileRecord, SubmissionRecord } from './submissions.repository.ts';
 
-type Tables = Partial<Record<TableKey, TypedTable>>;
-
 export interface FilesRead {
-  readonly tables: Readonly<Tables>;
+  readonly tables: TypedTables;
   /** What each file that was read has rows of. */
   readonly rows: ReadonlyMap<FileKey, ReadonlyMap<TableKey, number>>;
   /** Files that must not be kept: they identify somebody, or were not read to their end, so that nobody knows whether they do. */
@@ -33,7 +39,7 @@ const unscreened = ['F03', 'F05', 'F40', 'F41', 'F42', 'F43', 'F48'];
 const unscreenedIn = (log: FindingLog): number => log.incomplete.size + unscreened.reduce((sum, rule) => sum + log.count(rule), 0);
 
 class SubmissionReader {
-  readonly tables: Tables = {};
+  readonly tables: Partial<Record<TableKey, TypedTable>> = {};
   readonly rows = new Map<FileKey, ReadonlyMap<TableKey, number>>();
   readonly refused: FileKey[] = [];
 
@@ -48,34 +54,34 @@ class SubmissionReader {
   async read(key: FileKey): Promise<void> {
     const before = unscreenedIn(this.log);
     const screens: TableScreen[] = [];
-    const found = await asActor(this.context.database, registry, (tx) => {
+    const read = await asActor(this.context.database, registry, (tx) => {
       const content = readContent(tx, this.submissionId, key);
       return key === 'workbook' ? this.readSheets(content, screens) : this.readFile(key, content, screens);
     });
     const identifies = screens.map((screen) => screen.report(this.log)).includes(true);
     if (identifies || unscreenedIn(this.log) > before) this.refused.push(key);
-    this.rows.set(key, new Map(Object.values(found).map((table) => [table.key, table.length])));
-    for (const table of Object.values(found)) this.reportLostMends(table);
-    Object.assign(this.tables, found);
+    const counting = key === 'workbook' ? this.filledSheets(read) : Object.values(read);
+    this.rows.set(key, new Map(counting.map((table) => [table.key, table.length])));
+    for (const table of counting) this.tables[table.key] = table;
   }
 
-  private async readFile(key: TableKey, content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<Tables> {
+  private async readFile(key: TableKey, content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<TypedTables> {
     return { [key]: await readTable(key, content, this.log, undefined, this.optionsOf(key, screens)) };
   }
 
+  private readSheets(content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<TypedTables> {
+    return readWorkbook(content, this.log, keptLimits, (table) => this.optionsOf(table, screens));
+  }
+
   /** A sheet without a row says nothing about its table: the template is sent as it is where a month has nothing for it. */
-  private async readSheets(content: AsyncIterable<Uint8Array>, screens: TableScreen[]): Promise<Tables> {
-    const read = await readWorkbook(content, this.log, keptLimits, (table) => this.optionsOf(table, screens));
-    const filled = Object.values(read).filter(({ length }) => length > 0);
-    for (const { key } of filled.filter((table) => this.tables[table.key]))
-      this.log.add({
-        rule: 'F53',
-        table: key,
-        line: null,
-        column: null,
-        found: 'The workbook has rows of a table that came with a file of its own.',
-      });
-    if (Object.values(read).length > 0 && filled.length === 0)
+  private filledSheets(sheets: TypedTables): readonly TypedTable[] {
+    const filled = Object.values(sheets).filter(({ length }) => length > 0);
+    const isTwice = ({ key }: TypedTable): boolean => this.tables[key] !== undefined;
+    for (const { key } of filled.filter(isTwice)) {
+      const found = 'The workbook has rows of a table that came with a file of its own.';
+      this.log.add({ rule: 'F53', table: key, line: null, column: null, found });
+    }
+    if (Object.values(sheets).length > 0 && filled.length === 0)
       this.log.add({
         rule: 'F05',
         table: null,
@@ -84,7 +90,7 @@ class SubmissionReader {
         found: 'No sheet of the workbook has a row below its header and its example.',
         mend: 'Fill in at least one table. A month in which there was nothing is closed as such.',
       });
-    return Object.fromEntries(filled.filter((table) => !this.tables[table.key]).map((table) => [table.key, table]));
+    return filled.filter((table) => !isTwice(table));
   }
 
   private optionsOf(table: TableKey, screens: TableScreen[]) {
@@ -94,14 +100,16 @@ class SubmissionReader {
     return { watch: screen, ...(mends ? { mends } : {}) };
   }
 
-  private reportLostMends({ key, lines }: TypedTable): void {
-    const mends = this.mends[key];
-    if (!mends) return;
-    const present = new Set(lines);
-    for (const [line, cells] of mends) {
-      if (present.has(line)) continue;
-      for (const column of cells.keys())
-        this.log.add({ rule: 'F54', table: key, line, column, found: 'A value was typed for this line, and the file has no row there.' });
+  /** To be called when all files have been read. Where reading broke off, nobody knows which rows there are. */
+  reportLostMends(): void {
+    for (const [table, mends] of Object.entries(this.mends) as [TableKey, Mends][]) {
+      if (this.log.incomplete.has(table)) continue;
+      const present = new Set(this.tables[table]?.lines ?? []);
+      for (const [line, cells] of mends) {
+        if (present.has(line)) continue;
+        for (const column of cells.keys())
+          this.log.add({ rule: 'F54', table, line, column, found: 'A value was typed for this line, and the file has no row there.' });
+      }
     }
   }
 }
@@ -125,6 +133,7 @@ export async function readSubmissionFiles(
     await onFile(index);
     await reader.read(key);
   }
+  reader.reportLostMends();
   for (const { key } of files.filter(({ refused }) => refused))
     log.addStopping({
       rule: 'F52',
