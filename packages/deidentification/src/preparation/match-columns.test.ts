@@ -78,6 +78,16 @@ describe('columns of a clinic', () => {
     expect(matched('sessions', { Surname: ['x'], Mobile: ['1'], steps_tel: ['1'] })).toEqual([]);
   });
 
+  it('keep their meaning when dates are written in another way than last month, and the way is clear', () => {
+    const lastMonth = [{ header: 'Session date', as: 'study-day', variable: 'session_day', dateFormat: 'day/month/year' }] as const;
+    const now = (...cells: string[]) =>
+      matchColumns('sessions', { headers: ['Session date'], rows: cells.map((cell) => [cell]) }, lastMonth);
+    expect(now('2026-11-04', '2026-11-23')).toEqual([{ ...lastMonth[0], dateFormat: 'iso' }]);
+    // Either way of reading is possible, so that of last month counts.
+    expect(now('04/11/2026', '05/11/2026')).toEqual(lastMonth);
+    expect(now('soon')).toEqual(lastMonth);
+  });
+
   it('use what was chosen last month first, and each thing once', () => {
     const file = { headers: ['Steps', 'All steps', 'Steps', 'What'], rows: [] };
     const lastMonth = [

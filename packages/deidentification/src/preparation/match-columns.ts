@@ -40,7 +40,8 @@ export function matchColumns(table: TableKey, file: TextTable, lastMonth: readon
   const columns = file.headers.flatMap((header, position): FileColumn[] =>
     header.trim() === '' || file.headers.indexOf(header) !== file.headers.lastIndexOf(header) ? [] : [fileColumn(file, header, position)],
   );
-  for (const { header } of columns) for (const match of lastMonth) if (match.header === header) proposal.add(match);
+  for (const column of columns)
+    for (const match of lastMonth) if (match.header === column.header) proposal.add(asWrittenNow(match, column));
   for (const propose of [byName, asParticipant, byDate, byLikeness]) for (const column of columns) propose(table, column, proposal);
   return file.headers.flatMap((header) => proposal.matches.find((match) => match.header === header) ?? []);
 }
@@ -94,6 +95,14 @@ function namesOf(table: TableKey): VariableNames {
 
 const withFormat = ({ formats }: FileColumn): { dateFormat?: DateFormat } =>
   formats.length === 1 && formats[0] !== undefined ? { dateFormat: formats[0] } : {};
+
+/** Dates may be written in another way than last month, as when a workbook follows a CSV file. */
+function asWrittenNow(match: ColumnMatch, { formats }: FileColumn): ColumnMatch {
+  const [only, ...others] = formats;
+  const isRemembered = 'dateFormat' in match && match.dateFormat !== undefined;
+  if (!isRemembered || only === undefined || others.length > 0) return match;
+  return { ...match, dateFormat: only };
+}
 
 const byName: Propose = (table, column, proposal) => {
   const { header, formats } = column;
