@@ -15,11 +15,15 @@ const line = {
 };
 const page = (...items: object[]) => ({ items, page: 1, pageSize: 50, total: items.length });
 
+const lowFell = { ...site, id: '6f1de0c4-52f6-4f3a-9d0e-2b7f3f1c8a22', code: 'S02', name: 'Low Fell Clinic' };
+
 function open(account: unknown, items: object) {
   const asked = fakeApi({
     'GET /api/account': account,
-    'GET /api/sites': { sites: [site, { ...site, id: '6f1de0c4-52f6-4f3a-9d0e-2b7f3f1c8a22', code: 'S02', name: 'Low Fell Clinic' }] },
+    'GET /api/sites': { sites: [site, lowFell] },
     'GET /api/submissions': items,
+    [`GET /api/sites/${site.id}/safe-headers`]: { headers: [] },
+    [`GET /api/sites/${lowFell.id}/safe-headers`]: { headers: [] },
   });
   renderRoutes([{ path: '/submissions', element: <SubmissionsPage /> }], '/submissions?site=S02');
   return asked;
@@ -42,5 +46,5 @@ it('says where to begin while there is none', async () => {
 it('shows a steward the site the address names, of all', async () => {
   const asked = open(signedInAs({ role: 'steward', site: null }), page({ ...line, status: 'open' }));
   expect(await screen.findByRole('table', { name: 'Submissions of Low Fell Clinic, newest first' })).toBeTruthy();
-  expect(asked.at(-1)?.search).toContain('siteId=6f1de0c4-52f6-4f3a-9d0e-2b7f3f1c8a22');
+  expect(asked.find(({ path }) => path === '/api/submissions')?.search).toContain(`siteId=${lowFell.id}`);
 });

@@ -1,4 +1,4 @@
-/** Every submission of a site, newest first, with the way to its receipt. */
+/** Every submission of a site, newest first, with the way to its receipt; and which headers of its files pass. */
 import type { listSubmissions, ResponseOf, Site } from '@cairnstep/contract';
 import { useQuery } from '@tanstack/react-query';
 import { usePageNumber } from '../../lib/address-state.ts';
@@ -10,6 +10,7 @@ import { Table } from '../../ui/table.tsx';
 import type { Column } from '../../ui/table.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { ForChosenSite } from './chosen-site.tsx';
+import { SafeHeaders } from './safe-headers.tsx';
 import { submissionsQuery } from './submissions.queries.ts';
 
 type Line = ResponseOf<typeof listSubmissions>['items'][number];
@@ -21,7 +22,14 @@ export default function SubmissionsPage() {
       lead={<p>What the site sent, what became of it, and the receipts.</p>}
       note={<p>A later submission of the same month takes the place of an accepted one; both receipts stay.</p>}
     >
-      <ForChosenSite>{(site) => <SubmissionsOf site={site} />}</ForChosenSite>
+      <ForChosenSite>
+        {(site, account) => (
+          <>
+            <SubmissionsOf site={site} />
+            <SafeHeaders site={site} account={account} />
+          </>
+        )}
+      </ForChosenSite>
     </Page>
   );
 }
