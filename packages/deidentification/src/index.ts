@@ -30,6 +30,8 @@ export type { Expectation, KeySettings, SavedKey } from './key-file/key-file.ts'
 export { iterationLimits } from './key-file/key-file-header.ts';
 export { KeyFileRefusal } from './key-file/key-file-refusal.ts';
 export type { KeyFileRefusalCode } from './key-file/key-file-refusal.ts';
+export { adoptCodes } from './key-file/adopt-codes.ts';
+export type { PersonWithCode } from './key-file/adopt-codes.ts';
 export { joinLocalIds } from './key-file/join-local-ids.ts';
 export { mergeKeys } from './key-file/merge-keys.ts';
 export type { MergedKey } from './key-file/merge-keys.ts';

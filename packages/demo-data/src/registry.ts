@@ -1,6 +1,7 @@
 import { tableKeys } from '@cairnstep/dictionary';
 import type { TableKey } from '@cairnstep/dictionary';
 import { addMonths } from './calendar.ts';
+import { clinicFiles } from './clinic-files.ts';
 import { drawCohort, firstMonthOf, monthsHeld, sitesWithNextMonth } from './cohort.ts';
 import { demoCsv } from './csv.ts';
 import { plantMistakes } from './mistakes.ts';
@@ -49,7 +50,8 @@ function inOrder<T>(tables: Tables, make: (table: TableKey, rows: readonly DemoR
 export function demoRegistry({ seed, lastMonth }: DemoOptions): DemoRegistry {
   if (!Number.isInteger(seed) || seed < 0 || seed > 0xffffffff) throw new RangeError('a seed is a whole number from 0 to 4,294,967,295');
   const nextMonth = addMonths(lastMonth, 1);
-  const sorted = sortRows(drawCohort({ seed, lastMonth }));
+  const cohort = drawCohort({ seed, lastMonth });
+  const sorted = sortRows(cohort);
   const tablesOf = (site: string, month: string): Tables => sorted.get(`${site} ${month}`) ?? new Map<TableKey, DemoRow[]>();
   const filesOf = (site: string): DemoFiles => inOrder(tablesOf(site, nextMonth), demoCsv);
 
@@ -66,6 +68,13 @@ export function demoRegistry({ seed, lastMonth }: DemoOptions): DemoRegistry {
   return {
     sites: siteProfiles.map((site) => ({ code: site.code, name: site.name, firstMonth: firstMonthOf(site, lastMonth) })),
     months,
-    next: { clean: filesOf(sitesWithNextMonth.clean), ...plantMistakes(filesOf(sitesWithNextMonth.mistakes)) },
+    next: {
+      clean: filesOf(sitesWithNextMonth.clean),
+      fromTheClinic: clinicFiles(
+        cohort.filter(({ person }) => person.site.code === sitesWithNextMonth.clean),
+        nextMonth,
+      ),
+      ...plantMistakes(filesOf(sitesWithNextMonth.mistakes)),
+    },
   };
 }

@@ -42,6 +42,23 @@ export interface PlantedMistake {
   readonly also: readonly string[];
 }
 
+/** An invented person as only the clinic knows them. */
+export interface ClinicPerson {
+  readonly recordNumber: string;
+  readonly code: string;
+  /** First training day, `2026-03-26`. */
+  readonly indexDate: string;
+  readonly age: number;
+}
+
+/** What a clinic has of a month before anything is taken out of it. */
+export interface ClinicMonth {
+  /** CSV files with record numbers, names, dates and remarks beside what the registry asks for. */
+  readonly files: DemoFiles;
+  /** People whom the registry knows from earlier months. */
+  readonly people: readonly ClinicPerson[];
+}
+
 export interface DemoOptions {
   /** Whole number from 0 to 4,294,967,295. The same seed and last month give the same bytes. */
   readonly seed: number;
@@ -57,6 +74,8 @@ export interface DemoRegistry {
   readonly next: {
     /** Files of site S01 without a mistake. */
     readonly clean: DemoFiles;
+    /** The same month as the clinic itself has it. */
+    readonly fromTheClinic: ClinicMonth;
     /** Files of site S02 with the planted mistakes. */
     readonly mistakes: DemoFiles;
     readonly planted: readonly PlantedMistake[];

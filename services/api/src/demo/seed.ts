@@ -5,7 +5,8 @@
 import { createHash, randomUUID } from 'node:crypto';
 import { mkdir, writeFile } from 'node:fs/promises';
 import path from 'node:path';
-import { demoCsv, demoRegistry, demoSeed, type DemoFiles, type DemoMonth, type DemoSite } from '@cairnstep/demo-data';
+import { adoptCodes, createKeyFile, generatePassphrase, saveKeyFile } from '@cairnstep/deidentification';
+import { demoCsv, demoRegistry, demoSeed, type ClinicMonth, type DemoFiles, type DemoMonth, type DemoRegistry, type DemoSite } from '@cairnstep/demo-data';
 import { tableKeys, type TableKey } from '@cairnstep/dictionary';
 import { demonstrationPeople, demonstrationSystems } from '@cairnstep/fake-oidc/demonstration-people';
 import { pino } from 'pino';
@@ -146,14 +147,30 @@ async function submit(context: Context, site: SeededSite, month: DemoMonth): Pro
 }
 
 /** The next month of two clinics, to try an upload with: one without a mistake, one with many. */
-async function writeExamples(folder: string, next: { clean: DemoFiles; mistakes: DemoFiles }, month: string): Promise<void> {
-  for (const [name, files] of [
-    [`S01-${month}-clean`, next.clean],
-    [`S02-${month}-with-mistakes`, next.mistakes],
-  ] as const) {
-    await mkdir(path.join(folder, name), { recursive: true });
-    for (const [table, bytes] of Object.entries(files)) await writeFile(path.join(folder, name, `${table}.csv`), bytes);
-  }
+async function writeFiles(folder: string, files: DemoFiles): Promise<void> {
+  await mkdir(folder, { recursive: true });
+  for (const [table, bytes] of Object.entries(files)) await writeFile(path.join(folder, `${table}.csv`), bytes);
+}
+
+/** The site key that the demonstration's first clinic would have by now, with its passphrase beside it, as nobody should keep it. */
+async function writeSiteKey(folder: string, people: ClinicMonth['people']): Promise<void> {
+  const passphrase = generatePassphrase();
+  const { key } = await createKeyFile({ site: 'S01', keyId: 'demonstration' }, passphrase);
+  const known = await adoptCodes(
+    key,
+    people.map(({ recordNumber, ...person }) => ({ localId: recordNumber, ...person })),
+  );
+  const { file } = await saveKeyFile(known, passphrase);
+  await writeFile(path.join(folder, 'S01-site-key.json'), file);
+  await writeFile(path.join(folder, 'passphrase.txt'), `${passphrase}\n`);
+}
+
+async function writeExamples(folder: string, next: DemoRegistry['next'], month: string): Promise<void> {
+  await writeFiles(path.join(folder, `S01-${month}-clean`), next.clean);
+  await writeFiles(path.join(folder, `S02-${month}-with-mistakes`), next.mistakes);
+  const fromTheClinic = path.join(folder, `S01-${month}-from-the-clinic`);
+  await writeFiles(fromTheClinic, next.fromTheClinic.files);
+  await writeSiteKey(fromTheClinic, next.fromTheClinic.people);
 }
 
 const config = readConfig(process.env);
