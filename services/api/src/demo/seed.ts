@@ -6,7 +6,16 @@ import { createHash, randomUUID } from 'node:crypto';
 import { mkdir, writeFile } from 'node:fs/promises';
 import path from 'node:path';
 import { adoptCodes, createKeyFile, generatePassphrase, saveKeyFile } from '@cairnstep/deidentification';
-import { demoCsv, demoRegistry, demoSeed, type ClinicMonth, type DemoFiles, type DemoMonth, type DemoRegistry, type DemoSite } from '@cairnstep/demo-data';
+import {
+  demoCsv,
+  demoRegistry,
+  demoSeed,
+  type ClinicMonth,
+  type DemoFiles,
+  type DemoMonth,
+  type DemoRegistry,
+  type DemoSite,
+} from '@cairnstep/demo-data';
 import { tableKeys, type TableKey } from '@cairnstep/dictionary';
 import { demonstrationPeople, demonstrationSystems } from '@cairnstep/fake-oidc/demonstration-people';
 import { pino } from 'pino';
