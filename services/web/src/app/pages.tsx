@@ -71,6 +71,7 @@ export const pages: readonly PageEntry[] = [
     nav: 'Calendar',
     load: () => import('../features/months/calendar-page.tsx'),
   },
+  { path: '/site-key', audience: ['coordinator'], nav: 'Site key', load: () => import('../features/submissions/site-key-page.tsx') },
   {
     path: '/submissions/:submissionId/receipt',
     audience: ['coordinator', 'therapist', 'steward'],

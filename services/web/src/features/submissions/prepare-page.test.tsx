@@ -97,6 +97,32 @@ describe('the page that prepares a month', () => {
     expect(asked.some(({ path: at }) => at === `${path}/check`)).toBe(true);
   });
 
+  it('tells the registry which codes were replaced before the first file', async () => {
+    const replacedCodes = [{ from: 'S000000000000000000012', to: 'S00000000000000000002Z' }];
+    const path_ = `POST /api/sites/${site.id}/replaced-codes`;
+    const answers = {
+      [path_]: { replaced: 1, unknown: 0, joined: 0, rows: 3, earlierValues: 0 },
+      [`PUT ${path}/files/sessions`]: sample({ files: [fileOf('sessions')] }),
+    };
+    const { asked } = open(answers);
+    await frame();
+    await say({ kind: 'ready' });
+    await say({ ...send(), replacedCodes });
+    await waitFor(() => expect(lastSending()).toMatchObject({ state: 'done' }));
+    const changes = asked.filter(({ method }) => method !== 'GET');
+    expect(changes.map(({ method }) => method)).toEqual(['POST', 'PUT']);
+    expect(changes[0]?.body).toEqual({ codes: replacedCodes });
+  });
+
+  it('sends no file when the registry cannot replace codes', async () => {
+    const { asked } = open({ [`POST /api/sites/${site.id}/replaced-codes`]: refusal('codes-collide', 409) });
+    await frame();
+    await say({ kind: 'ready' });
+    await say({ ...send(), replacedCodes: [{ from: 'S000000000000000000012', to: 'S00000000000000000002Z' }] });
+    await waitFor(() => expect(lastSending()).toMatchObject({ state: 'failed' }));
+    expect(puts(asked)).toEqual([]);
+  });
+
   it.each([
     ['a name in a cell', 'participant,session_day\r\nMara Lind,4\r\n'],
     ['a column that is not of the dictionary', 'participant,record_no\r\nS000000000000000000012,4\r\n'],

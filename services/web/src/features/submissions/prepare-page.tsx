@@ -97,7 +97,7 @@ function PrepareOpen({ submission, knowledge }: { readonly submission: Submissio
   const [isFinished, setFinished] = useState(false);
 
   async function act(said: PreparingAct): Promise<void> {
-    if (said.kind === 'send') return send(said.tables);
+    if (said.kind === 'send') return send(said.tables, said.replacedCodes);
     if (said.kind !== 'finished') return;
     setFinished(true);
     // A check that does not begin is offered again, with its reason, where it belongs.

@@ -1,7 +1,8 @@
 /** What the preparing page has to know of a site beforehand: the codes the registry holds, and headers a steward calls safe. */
-import { listParticipantCodes, listSafeHeaders } from '@cairnstep/contract';
-import { queryOptions } from '@tanstack/react-query';
+import { listParticipantCodes, listSafeHeaders, replaceCodes } from '@cairnstep/contract';
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { call } from '../../lib/call.ts';
+import type { ReplacedCodes } from '../../preparing/messages.ts';
 
 export interface SiteKnowledge {
   readonly knownParticipants: readonly string[];
@@ -23,3 +24,12 @@ export const siteKnowledgeQuery = (siteId: string) =>
     gcTime: 0,
     refetchOnWindowFocus: false,
   });
+
+/** The registry puts new codes in the place of old ones; checks and previews of the site's months are then out of date. */
+export function useReplaceCodes(siteId: string) {
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: (codes: ReplacedCodes) => call(replaceCodes, { siteId, codes }),
+    onSuccess: () => cache.invalidateQueries({ queryKey: ['submissions'] }),
+  });
+}

@@ -1,26 +1,29 @@
 /** Sends what the preparing page hands over, table by table, and tells it how far that has come. */
 import type { Submission } from '@cairnstep/contract';
 import { useState } from 'react';
-import { ProblemError, UnreachableError } from '../../lib/problem-error.ts';
 import { useStayOnPage } from '../../lib/use-stay-on-page.ts';
-import type { PreparedTable, Sending } from '../../preparing/messages.ts';
+import type { PreparedTable, ReplacedCodes, Sending } from '../../preparing/messages.ts';
 import { announce } from '../../ui/announcer.tsx';
 import { faultOf } from './prepared-tables.ts';
+import { useReplaceCodes } from './preparing.queries.ts';
 import { useSendFile } from './submissions.queries.ts';
+import { wordsOfFailure } from './words-of-failure.ts';
 
 export interface PreparedSending {
   readonly sending: Sending | null;
   readonly isUnderWay: boolean;
-  readonly send: (tables: readonly PreparedTable[]) => Promise<void>;
+  /** Codes that were replaced go first: files with the new ones would find nobody under them, and a change of codes ends a check. */
+  readonly send: (tables: readonly PreparedTable[], replacedCodes: ReplacedCodes) => Promise<void>;
 }
 
 export function usePreparedSending(submission: Submission): PreparedSending {
   const [sending, setSending] = useState<Sending | null>(null);
   const { mutateAsync } = useSendFile(submission.id);
+  const { mutateAsync: replace } = useReplaceCodes(submission.site.id);
   const isUnderWay = sending?.state === 'under-way';
   useStayOnPage(isUnderWay);
 
-  async function send(tables: readonly PreparedTable[]): Promise<void> {
+  async function send(tables: readonly PreparedTable[], replacedCodes: ReplacedCodes): Promise<void> {
     const tell = (state: Sending['state'], done: number, message: string | null = null) =>
       setSending({ kind: 'sending', state, done, of: tables.length, message });
     const fault = tables.map(faultOf).find((found) => found !== null);
@@ -29,6 +32,7 @@ export function usePreparedSending(submission: Submission): PreparedSending {
     tell('under-way', 0);
     let arrived = 0;
     try {
+      if (replacedCodes.length > 0) await replace(replacedCodes);
       for (const { table, csv } of tables) {
         const file = new File([csv], `${table}.csv`, { type: 'text/csv' });
         const before = arrived;
@@ -38,7 +42,7 @@ export function usePreparedSending(submission: Submission): PreparedSending {
       tell('done', arrived);
       announce('Everything prepared has arrived.');
     } catch (error) {
-      tell('failed', 0, `${wordsOf(error)} ${arrived} of ${tables.length} tables arrived; sending again replaces them.`);
+      tell('failed', 0, `${wordsOfFailure(error)} ${arrived} of ${tables.length} tables arrived; sending again replaces them.`);
     }
   }
 
@@ -47,9 +51,3 @@ export function usePreparedSending(submission: Submission): PreparedSending {
 
 /** Half a month is no use: once begun it is sent whole, or fails. */
 const neverStopped = new AbortController().signal;
-
-function wordsOf(error: unknown): string {
-  if (error instanceof ProblemError) return `${error.title}. ${error.detail}`;
-  if (error instanceof UnreachableError) return 'The registry cannot be reached. Look at your connection, then send again.';
-  return 'The registry answered in a way that is not understood here. Load the page again.';
-}
