@@ -40,13 +40,7 @@ export default defineConfig({
       {
         ...shared,
         plugins: [react()],
-        test: {
-          name: 'web',
-          include: ['services/web/src/**/*.test.{ts,tsx}'],
-          environment: 'happy-dom',
-          environmentOptions: { happyDOM: { settings: { handleDisabledFileLoadingAsSuccess: true } } },
-          testTimeout: 30_000,
-        },
+        test: { name: 'web', include: ['services/web/src/**/*.test.{ts,tsx}'], environment: 'happy-dom', testTimeout: 30_000 },
       },
       { ...shared, test: { name: 'api', include: ['tests/api/**/*.test.ts'], ...integration } },
       { ...shared, test: { name: 'database', include: ['tests/database/**/*.test.ts'], ...integration } },
