@@ -177,13 +177,49 @@ describe('a request', () => {
     expect((await steward.get(`/api/access-requests/${request.id}/reach`).expect(200)).body).toEqual({
       inCohort: 59,
       consenting: 53,
+      openQuestions: [],
       reasons: [expect.objectContaining({ verdict: 'not_permitted', participants: 6 })],
     });
     expect((await researcher.get(`/api/access-requests/${request.id}/reach`).expect(200)).body).toEqual({
       inCohort: 60,
       consenting: 55,
+      openQuestions: [],
       reasons: [],
     });
+  });
+});
+
+describe('a draft', () => {
+  it('tells whom it reaches, and which answers are missing before it can tell who consents', async () => {
+    const draft = await begin({ ...completeForm, country: null, months: null });
+    expect((await researcher.get(`/api/access-requests/${draft.id}/reach`).expect(200)).body).toEqual({
+      inCohort: 60,
+      consenting: null,
+      openQuestions: ['country', 'months'],
+      reasons: [],
+    });
+  });
+
+  it('is deleted by its lead alone, and nothing of it stays but the entry in the log', async () => {
+    const draft = await begin(completeForm);
+    const path = `/api/access-requests/${draft.id}`;
+    expect(draft.actions).toEqual(['edit', 'submit', 'delete']);
+    for (const other of [stranger, member]) expect((await other.delete(path)).status).toBe(404);
+    await researcher.delete(path).expect(200);
+    expect((await researcher.get(path)).status).toBe(404);
+    expect((await server.database.owner.query('select from access_requests where id = $1', [draft.id])).rowCount).toBe(0);
+    const { rows } = await server.database.owner.query('select act from audit_entries where object = $1 order by seq', [draft.id]);
+    expect(rows.map(({ act }) => act)).toEqual(['request.begin', 'request.delete']);
+  });
+
+  it('is deleted only until it is handed in, from when on it can be taken back', async () => {
+    const request = await submit();
+    const path = `/api/access-requests/${request.id}`;
+    expect(request.actions).toEqual(['withdraw']);
+    expect(codeOf((await researcher.delete(path)).body)).toBe('request-not-in-state');
+    expect((await researcher.post(`${path}/withdraw`).expect(200)).body.status).toBe('withdrawn');
+    const draft = await begin(completeForm);
+    expect(codeOf((await researcher.post(`/api/access-requests/${draft.id}/withdraw`)).body)).toBe('request-not-in-state');
   });
 });
 

@@ -232,6 +232,29 @@ describe('rows of people and of the registry', () => {
       expect(await count(actor, 'access_requests')).toBe(0);
   });
 
+  it('of a draft request are deleted by its lead alone, and of a request that was handed in by nobody', async () => {
+    const remove = (actor: Actor, id: string) =>
+      asActor(
+        database.app,
+        actor,
+        async (tx) => ((await tx.query('delete from access_requests where id = $1', [id])) as [unknown, number])[1],
+      );
+    const [draft, submitted] = [randomUUID(), randomUUID()];
+    for (const [id, status] of [
+      [draft, 'draft'],
+      [submitted, 'submitted'],
+    ])
+      await database.owner.query(
+        `insert into access_requests (id, number, status, lead_id, form, version_hash, votes_needed_because) values ($1, $2, $2, $3, '{}', 'x', '[]')`,
+        [id, status, researcherId],
+      );
+    for (const actor of [steward, registry, person('researcher', null, otherResearcherId), administrator])
+      expect(await remove(actor, draft)).toBe(0);
+    expect(await remove(researcher, submitted)).toBe(0);
+    expect(await remove(researcher, draft)).toBe(1);
+    await database.owner.query('delete from access_requests where id = $1', [submitted]);
+  });
+
   it('of releases are read by the statistics of the registry, never by a person', async () => {
     expect(await count(statistics, 'release_courses')).toBe(1);
     for (const actor of [researcher, steward, coordinatorA, administrator]) expect(await count(actor, 'release_courses')).toBe(0);

@@ -62,6 +62,7 @@ export const endpoints = {
   saveRequest: requests.saveRequest,
   submitRequest: requests.submitRequest,
   withdrawRequest: requests.withdrawRequest,
+  deleteDraft: requests.deleteDraft,
   listRequests: requests.listRequests,
   getRequest: requests.getRequest,
   getReach: requests.getReach,

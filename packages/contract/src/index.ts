@@ -9,6 +9,7 @@ export * from './months.ts';
 export * from './people.ts';
 export * from './problems.ts';
 export * from './replaced-codes.ts';
+export * from './request-completeness.ts';
 export * from './requests.ts';
 export * from './site-systems.ts';
 export * from './submissions.ts';

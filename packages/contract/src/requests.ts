@@ -31,7 +31,10 @@ export const RequestForm = z.strictObject({
   ethicsExpiresOn: CalendarDate.nullable(),
   organisationType: z.enum(['not_for_profit', 'for_profit']).nullable(),
   /** Where the team and the files are: ISO 3166-1 two-letter code. */
-  country: z.string().regex(/^[A-Z]{2}$/, 'Choose a country').nullable(),
+  country: z
+    .string()
+    .regex(/^[A-Z]{2}$/, 'Choose a country')
+    .nullable(),
   commercialInterest: z.enum(['yes', 'no']).nullable(),
   funding: z.string().trim().max(500),
   storage: z.string().trim().max(1000),
@@ -47,6 +50,20 @@ export const RequestForm = z.strictObject({
   cohort: Cohort,
 });
 export type RequestForm = z.output<typeof RequestForm>;
+
+/** Answers of the form that a person's consent may turn on. */
+export const consentQuestions = [
+  'purpose',
+  'commercialInterest',
+  'ethicsExpiresOn',
+  'organisationType',
+  'country',
+  'months',
+  'agreesToPublish',
+  'agreesToCollaborate',
+  'agreesToReturn',
+] as const satisfies readonly (keyof RequestForm)[];
+export type ConsentQuestion = (typeof consentQuestions)[number];
 
 export const Vote = z.strictObject({
   steward: z.string(),
@@ -75,7 +92,7 @@ export const AccessRequest = z.strictObject({
   /** For the requester only once decided; for a steward the others' only after their own. */
   votes: z.array(Vote),
   /** What this signed-in person may do with it now. */
-  actions: z.array(z.enum(['edit', 'submit', 'withdraw', 'vote', 'build-export'])),
+  actions: z.array(z.enum(['edit', 'submit', 'delete', 'withdraw', 'vote', 'build-export'])),
   mayNotVoteBecause: z.string().nullable(),
 });
 export type AccessRequest = z.output<typeof AccessRequest>;
@@ -115,10 +132,19 @@ export const submitRequest = endpoint({
 export const withdrawRequest = endpoint({
   method: 'POST',
   path: '/api/access-requests/:requestId/withdraw',
-  summary: 'Take a request back',
+  summary: 'Take a request back that waits for a decision',
   params: RequestParams,
   body: z.strictObject({}),
   response: AccessRequest,
+  problems: ['not-found', 'request-not-in-state'],
+});
+
+export const deleteDraft = endpoint({
+  method: 'DELETE',
+  path: '/api/access-requests/:requestId',
+  summary: 'Delete a draft; a request that was handed in stays',
+  params: RequestParams,
+  response: z.strictObject({}),
   problems: ['not-found', 'request-not-in-state'],
 });
 
@@ -159,7 +185,10 @@ export const getReach = endpoint({
   params: RequestParams,
   response: z.strictObject({
     inCohort: z.number().int().nullable(),
+    /** Null also while questions are open. */
     consenting: z.number().int().nullable(),
+    /** What has to be answered before it can be told who consents. */
+    openQuestions: z.array(z.enum(consentQuestions)),
     /** For stewards: refused and open counts by reason. */
     reasons: z.array(
       z.strictObject({ reason: z.string(), verdict: z.enum(['not_permitted', 'manual_review']), participants: z.number().int() }),

@@ -105,6 +105,7 @@ export const entries = {
   saveRequest: 'write-request',
   submitRequest: 'write-request',
   withdrawRequest: 'write-request',
+  deleteDraft: 'write-request',
   listRequests: 'see-request',
   getRequest: 'see-request',
   getReach: 'see-request',

@@ -7,6 +7,7 @@ import { SiteSystems1796083200021 } from './1796083200021-site-systems.ts';
 import { ReplacedCodes1796083200022 } from './1796083200022-replaced-codes.ts';
 import { CoordinatorAddresses1796083200023 } from './1796083200023-coordinator-addresses.ts';
 import { QuickerMonths1796083200030 } from './1796083200030-quicker-months.ts';
+import { DeletedDrafts1796083200031 } from './1796083200031-deleted-drafts.ts';
 
 export const migrations = [
   FirstTables1796083200000,
@@ -17,4 +18,5 @@ export const migrations = [
   ReplacedCodes1796083200022,
   CoordinatorAddresses1796083200023,
   QuickerMonths1796083200030,
+  DeletedDrafts1796083200031,
 ];

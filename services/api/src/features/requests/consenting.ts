@@ -5,7 +5,8 @@ import type { Form } from './requests.repository.ts';
 type StoredConsent = Readonly<Record<string, string | number | null>>;
 
 const answer = (field: 'yes' | 'no' | null): boolean | undefined => (field === null ? undefined : field === 'yes');
-const given = <K extends string, T>(key: K, value: T | undefined): Partial<Record<K, T>> => (value === undefined ? {} : ({ [key]: value } as Record<K, T>));
+const given = <K extends string, T>(key: K, value: T | undefined): Partial<Record<K, T>> =>
+  value === undefined ? {} : ({ [key]: value } as Record<K, T>);
 
 /** The registry holds people with one condition, so that is what a request for research on a condition studies. */
 function intendedUse(form: Form, today: string): IntendedUse {

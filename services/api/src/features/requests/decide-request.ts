@@ -11,7 +11,17 @@ import { queueMail } from '../../mail/queue-mail.ts';
 import { readRelease } from '../explore/explore.repository.ts';
 import { presentById, standingOf } from './read-request.ts';
 import { sharesInstitution, whyNotVote } from './request.present.ts';
-import { addressesOf, insertVote, lockRequest, markDecided, readVotes, requireVotes, setStatus, type RequestRecord, type VoteRecord } from './requests.repository.ts';
+import {
+  addressesOf,
+  insertVote,
+  lockRequest,
+  markDecided,
+  readVotes,
+  requireVotes,
+  setStatus,
+  type RequestRecord,
+  type VoteRecord,
+} from './requests.repository.ts';
 
 /** As many votes of one kind as are needed decide; until then the request stays under review, a split vote included. */
 function outcomeOf(votes: readonly VoteRecord[], needed: number): 'approved' | 'declined' | null {
@@ -44,10 +54,16 @@ export async function decideRequest(
     const request = requireFound(await lockRequest(tx, id));
     const standing = await standingOf(tx, actor, request);
     if (standing.isMember) throw new Refusal('conflict-of-interest', 'You belong to the team of this request.');
-    if (standing.votes.some((one) => one.stewardId === steward.accountId)) throw new Refusal('already-voted', 'Your first decision stands.');
-    if (request.versionHash !== versionHash) throw new Refusal('request-not-in-state', 'The request has changed since you read it. Read it again; nothing was decided.');
+    if (standing.votes.some((one) => one.stewardId === steward.accountId))
+      throw new Refusal('already-voted', 'Your first decision stands.');
+    if (request.versionHash !== versionHash)
+      throw new Refusal('request-not-in-state', 'The request has changed since you read it. Read it again; nothing was decided.');
     const why = whyNotVote(actor, request, standing);
-    if (why !== null) throw new Refusal(request.status === 'submitted' || request.status === 'in_review' ? 'conflict-of-interest' : 'request-not-in-state', why);
+    if (why !== null)
+      throw new Refusal(
+        request.status === 'submitted' || request.status === 'in_review' ? 'conflict-of-interest' : 'request-not-in-state',
+        why,
+      );
     let needed = request.votesNeeded;
     if (sharesInstitution(actor, request) && needed < 2) {
       needed = 2;
@@ -59,7 +75,9 @@ export async function decideRequest(
     if (decision === null) await setStatus(tx, id, 'in_review');
     else {
       await markDecided(tx, id, decision, request.form.months ?? 1, release?.number ?? null);
-      const recipients = await asActor(database, registry, (other) => addressesOf(other, [request.leadId, ...votes.map((one) => one.stewardId)]));
+      const recipients = await asActor(database, registry, (other) =>
+        addressesOf(other, [request.leadId, ...votes.map((one) => one.stewardId)]),
+      );
       for (const recipient of recipients) {
         await queueMail(tx, {
           event: `request-decided:${id}:${request.version}`,
@@ -69,7 +87,12 @@ export async function decideRequest(
         });
       }
     }
-    await recordAudit(tx, actor, { act: `request.${vote}`, object: id, requestId, detail: { version: request.version, hash: versionHash, decided: decision ?? 'open' } });
+    await recordAudit(tx, actor, {
+      act: `request.${vote}`,
+      object: id,
+      requestId,
+      detail: { version: request.version, hash: versionHash, decided: decision ?? 'open' },
+    });
     return presentById(tx, actor, id);
   });
 }

@@ -38,8 +38,8 @@ function visibleVotes(actor: Actor, request: RequestRecord, { votes }: Standing)
 export function presentRequest(actor: Actor, request: RequestRecord, standing: Standing): RequestOut {
   const { isLead, isMember } = standing;
   const actions: RequestOut['actions'] = [];
-  if (isLead && request.status === 'draft') actions.push('edit', 'submit');
-  if (isLead && (request.status === 'draft' || underReview(request.status))) actions.push('withdraw');
+  if (isLead && request.status === 'draft') actions.push('edit', 'submit', 'delete');
+  if (isLead && underReview(request.status)) actions.push('withdraw');
   const mayNotVoteBecause = hasRole(actor, 'steward') ? whyNotVote(actor, request, standing) : null;
   if (hasRole(actor, 'steward') && mayNotVoteBecause === null) actions.push('vote');
   if (isMember && request.status === 'approved') actions.push('build-export');
@@ -58,7 +58,12 @@ export function presentRequest(actor: Actor, request: RequestRecord, standing: S
     accessEndsOn: request.accessEndsOn,
     votesNeeded: request.votesNeeded,
     votesNeededBecause: [...request.votesNeededBecause],
-    votes: visibleVotes(actor, request, standing).map(({ steward, vote, reason, votedAt }) => ({ steward, vote, reason, at: votedAt.toISOString() })),
+    votes: visibleVotes(actor, request, standing).map(({ steward, vote, reason, votedAt }) => ({
+      steward,
+      vote,
+      reason,
+      at: votedAt.toISOString(),
+    })),
     actions,
     mayNotVoteBecause,
   };

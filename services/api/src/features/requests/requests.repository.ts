@@ -37,7 +37,9 @@ export interface VoteRecord {
 }
 
 export const hashVersion = (number: string, version: number, form: Form): string =>
-  createHash('sha256').update(canonicalJson({ number, version, form: form as unknown as Canonical })).digest('hex');
+  createHash('sha256')
+    .update(canonicalJson({ number, version, form: form as unknown as Canonical }))
+    .digest('hex');
 
 // An approved request whose last day has passed has ended, whether or not anything noted it (days in UTC by the database's clock).
 const columns = `r.id, r.number, r.version, r.version_hash as "versionHash", r.lead_id as "leadId", coalesce(account_name(r.lead_id), 'a former colleague') as lead,
@@ -56,27 +58,33 @@ export async function lockRequest(tx: Tx, id: string): Promise<RequestRecord | n
   return row ?? null;
 }
 
-export const listRequests = async (tx: Tx): Promise<RequestRecord[]> => (await tx.query(`select ${columns} from access_requests r order by r.updated_at desc limit 500`)) as RequestRecord[];
+export const listRequests = async (tx: Tx): Promise<RequestRecord[]> =>
+  (await tx.query(`select ${columns} from access_requests r order by r.updated_at desc limit 500`)) as RequestRecord[];
 
-/** Numbers run per year without gaps: AR-2026-0007. */
+/** Numbers run per year: AR-2026-0007. The last one is free again when its draft is deleted. */
 export async function insertRequest(tx: Tx, leadId: string, form: Form, year: number): Promise<string> {
   await tx.query("select pg_advisory_xact_lock(hashtext('access-request-number'))");
   const [{ next }] = (await tx.query('select next_request_number($1) as next', [`AR-${year}-`])) as [{ next: string }];
   const id = randomUUID();
-  await tx.query("insert into access_requests (id, number, status, lead_id, form, version_hash, votes_needed_because) values ($1, $2, 'draft', $3, $4, $5, '[]')", [
-    id,
-    next,
-    leadId,
-    JSON.stringify(form),
-    hashVersion(next, 1, form),
-  ]);
+  await tx.query(
+    "insert into access_requests (id, number, status, lead_id, form, version_hash, votes_needed_because) values ($1, $2, 'draft', $3, $4, $5, '[]')",
+    [id, next, leadId, JSON.stringify(form), hashVersion(next, 1, form)],
+  );
   return id;
 }
 
 export const updateForm = (tx: Tx, request: RequestRecord, form: Form): Promise<unknown> =>
-  tx.query('update access_requests set form = $2, version_hash = $3, updated_at = now() where id = $1', [request.id, JSON.stringify(form), hashVersion(request.number, request.version, form)]);
+  tx.query('update access_requests set form = $2, version_hash = $3, updated_at = now() where id = $1', [
+    request.id,
+    JSON.stringify(form),
+    hashVersion(request.number, request.version, form),
+  ]);
 
-export const setStatus = (tx: Tx, id: string, status: Status): Promise<unknown> => tx.query('update access_requests set status = $2, updated_at = now() where id = $1', [id, status]);
+/** Only drafts can be deleted; the policy of the table sees to it as well. */
+export const deleteRequest = (tx: Tx, id: string): Promise<unknown> => tx.query('delete from access_requests where id = $1', [id]);
+
+export const setStatus = (tx: Tx, id: string, status: Status): Promise<unknown> =>
+  tx.query('update access_requests set status = $2, updated_at = now() where id = $1', [id, status]);
 
 export async function markSubmitted(tx: Tx, id: string, votesNeeded: number, because: readonly string[]): Promise<void> {
   await tx.query(
@@ -86,10 +94,20 @@ export async function markSubmitted(tx: Tx, id: string, votesNeeded: number, bec
 }
 
 export const requireVotes = (tx: Tx, id: string, votesNeeded: number, because: readonly string[]): Promise<unknown> =>
-  tx.query('update access_requests set votes_needed = $2, votes_needed_because = $3, updated_at = now() where id = $1', [id, votesNeeded, JSON.stringify(because)]);
+  tx.query('update access_requests set votes_needed = $2, votes_needed_because = $3, updated_at = now() where id = $1', [
+    id,
+    votesNeeded,
+    JSON.stringify(because),
+  ]);
 
 /** Access runs from today for whole months, counted by the database's clock. */
-export async function markDecided(tx: Tx, id: string, decision: 'approved' | 'declined', months: number, release: number | null): Promise<void> {
+export async function markDecided(
+  tx: Tx,
+  id: string,
+  decision: 'approved' | 'declined',
+  months: number,
+  release: number | null,
+): Promise<void> {
   await tx.query(
     `update access_requests set status = $2, decided_at = now(), updated_at = now(),
        access_ends_on = case when $2 = 'approved' then ((now() at time zone 'UTC')::date + make_interval(months => $3))::date end,
@@ -116,15 +134,17 @@ export async function readVotes(tx: Tx, request: Pick<RequestRecord, 'id' | 'ver
   )) as VoteRecord[];
 }
 
-export async function insertVote(tx: Tx, request: RequestRecord, stewardId: string, vote: 'approve' | 'decline', reason: string): Promise<void> {
-  await tx.query('insert into access_request_votes (request_id, version, steward_id, vote, reason, version_hash) values ($1, $2, $3, $4, $5, $6)', [
-    request.id,
-    request.version,
-    stewardId,
-    vote,
-    reason,
-    request.versionHash,
-  ]);
+export async function insertVote(
+  tx: Tx,
+  request: RequestRecord,
+  stewardId: string,
+  vote: 'approve' | 'decline',
+  reason: string,
+): Promise<void> {
+  await tx.query(
+    'insert into access_request_votes (request_id, version, steward_id, vote, reason, version_hash) values ($1, $2, $3, $4, $5, $6)',
+    [request.id, request.version, stewardId, vote, reason, request.versionHash],
+  );
 }
 
 /** Addresses of active accounts that have this role today. Run as the registry. */
@@ -140,7 +160,9 @@ export async function addressesOfRole(tx: Tx, role: string): Promise<string[]> {
 
 /** Contact addresses of accounts, for mail. Run as the registry. */
 export async function addressesOf(tx: Tx, accounts: readonly string[]): Promise<string[]> {
-  const rows = (await tx.query("select email from accounts where id = any($1::uuid[]) and email is not null and status = 'active'", [accounts])) as { email: string }[];
+  const rows = (await tx.query("select email from accounts where id = any($1::uuid[]) and email is not null and status = 'active'", [
+    accounts,
+  ])) as { email: string }[];
   return rows.map((row) => row.email);
 }
 

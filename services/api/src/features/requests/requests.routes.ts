@@ -5,7 +5,7 @@ import type { Context } from '../../context.ts';
 import { asActor } from '../../database/as-actor.ts';
 import { route, type Route } from '../../http/route.ts';
 import { decideRequest } from './decide-request.ts';
-import { createRequest, saveRequest, submitRequest, withdrawRequest } from './edit-request.ts';
+import { createRequest, deleteDraft, saveRequest, submitRequest, withdrawRequest } from './edit-request.ts';
 import { getReach } from './reach.ts';
 import { presentById, standingOf } from './read-request.ts';
 import { whyNotVote } from './request.present.ts';
@@ -37,6 +37,7 @@ export const requestRoutes = (context: Context): Route[] => [
   route('saveRequest', (actor, input) => saveRequest(context, actor, input)),
   route('submitRequest', (actor, input, { requestId }) => submitRequest(context, actor, input, requestId)),
   route('withdrawRequest', (actor, input, { requestId }) => withdrawRequest(context, actor, input, requestId)),
+  route('deleteDraft', (actor, input, { requestId }) => deleteDraft(context, actor, input, requestId)),
   route('getReach', (actor, input) => getReach(context, actor, input)),
   route('decideRequest', (actor, input, { requestId }) => decideRequest(context, actor, input, requestId)),
 ];

@@ -19,6 +19,7 @@ const words: Readonly<Record<string, string>> = {
   'month.remind': 'reminder of a month sent',
   'release.make': 'release made',
   'request.begin': 'access request begun',
+  'request.delete': 'draft of an access request deleted',
   'request.reach': 'reach of a request asked for',
   'request.submit': 'access request submitted',
   'request.withdraw': 'access request withdrawn',

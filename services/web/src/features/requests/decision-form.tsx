@@ -131,7 +131,9 @@ function Consequence({ request, vote, consenting }: DecisionFormProps & { readon
       {vote === 'approve' ? (
         <p>
           The team may export the rows of{' '}
-          {consenting === null ? 'all people whose consent permits it' : formatCount(consenting, 'consenting person', 'consenting people')}{' '}
+          {consenting === null
+            ? 'all people whose consent permits it'
+            : `up to ${formatCount(consenting, 'consenting person', 'consenting people')}`}{' '}
           for {formatCount(form.months ?? 1, 'month')}.{several}
         </p>
       ) : (

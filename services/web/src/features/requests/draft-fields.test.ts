@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { problemsOf } from '../../lib/field-problems.ts';
 import { ProblemError } from '../../lib/problem-error.ts';
-import { fieldIdsOf, readDate, readTeam, typedProblems } from './draft-fields.ts';
+import { exampleRequest } from '../../testing/example-request.ts';
+import { draftProblems, fieldIdsOf, readDate, readTeam } from './draft-fields.ts';
 
 describe('what is typed freely', () => {
   it('is a date only when the calendar has the day', () => {
@@ -14,11 +15,13 @@ describe('what is typed freely', () => {
       team: ['a@one.example', 'b@two.example', 'c@three.example'],
       unreadable: ['somebody'],
     });
-    expect(typedProblems({ ethicsExpiresOn: 'soon', team: 'somebody' })).toEqual([
+    expect(
+      draftProblems({ ...exampleRequest.form, ethicsExpiresOn: null }, { ethicsExpiresOn: 'soon', team: 'somebody' }, '2026-12-01'),
+    ).toEqual([
       { fieldId: 'ethics-expires-on', message: 'Write the day as year, month and day, for example 2027-06-30.' },
       { fieldId: 'team', message: 'Write whole e-mail addresses, one a line. Not one: somebody.' },
     ]);
-    expect(typedProblems({ ethicsExpiresOn: '', team: '' })).toEqual([]);
+    expect(draftProblems(exampleRequest.form, { ethicsExpiresOn: '2099-12-31', team: '' }, '2026-12-01')).toEqual([]);
   });
 });
 

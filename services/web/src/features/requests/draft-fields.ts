@@ -1,5 +1,7 @@
 /** Fields of the draft that are typed freely before they are values: dates and lists of addresses. And where a refusal is shown. */
+import { missingParts } from '@cairnstep/contract';
 import type { RequestForm } from '@cairnstep/contract';
+import { placed } from '../../lib/field-problems.ts';
 import type { PlacedProblem } from '../../lib/field-problems.ts';
 
 const isoDate = /^\d{4}-\d{2}-\d{2}$/;
@@ -48,8 +50,19 @@ export function fieldIdsOf({ tables }: Pick<RequestForm, 'tables'>): Record<stri
   };
 }
 
-/** What the page itself can tell is wrong before anything is sent. */
-export function typedProblems(typed: { readonly ethicsExpiresOn: string; readonly team: string }): PlacedProblem[] {
+interface Typed {
+  readonly ethicsExpiresOn: string;
+  readonly team: string;
+}
+
+/** All that the page itself can tell is wrong or missing before anything is sent; each field once. `today` as 2026-12-31. */
+export function draftProblems(form: RequestForm, typed: Typed, today: string): PlacedProblem[] {
+  const unreadable = typedProblems(typed);
+  const missing = placed(missingParts(form, today), fieldIdsOf(form));
+  return [...unreadable, ...missing.filter(({ fieldId }) => !unreadable.some((one) => one.fieldId === fieldId))];
+}
+
+function typedProblems(typed: Typed): PlacedProblem[] {
   const problems: PlacedProblem[] = [];
   if (typed.ethicsExpiresOn.trim() !== '' && readDate(typed.ethicsExpiresOn) === null)
     problems.push({ fieldId: 'ethics-expires-on', message: 'Write the day as year, month and day, for example 2027-06-30.' });

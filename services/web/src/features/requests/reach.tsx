@@ -1,5 +1,5 @@
 /** How many people a request reaches, and why the others are not reached. */
-import type { AccessRequest, getReach, ResponseOf } from '@cairnstep/contract';
+import type { AccessRequest, ConsentQuestion, getReach, ResponseOf } from '@cairnstep/contract';
 import { reasons } from '@cairnstep/consent';
 import { useQuery } from '@tanstack/react-query';
 import { formatNumber } from '../../lib/format.ts';
@@ -19,14 +19,34 @@ export function Reach({ request }: { readonly request: Pick<AccessRequest, 'id' 
   );
 }
 
-export function ReachFigures({ reached: { inCohort, consenting } }: { readonly reached: Reached }) {
+export function ReachFigures({ reached: { inCohort, consenting, openQuestions } }: { readonly reached: Reached }) {
   return (
-    <dl className="border-y border-hairline">
-      <Line label="people in the cohort" count={inCohort} />
-      <Line label="of them consent to this use" count={consenting} />
-    </dl>
+    <div className="grid gap-2">
+      <dl className="border-y border-hairline">
+        <Line label="people in the cohort" count={inCohort} />
+        {openQuestions.length === 0 && <Line label="of them consent to this use" count={consenting} />}
+      </dl>
+      {openQuestions.length > 0 && (
+        <p>
+          How many of them consent is worked out once these are answered:{' '}
+          {[...new Set(openQuestions.map((field) => questionWords[field]))].join(', ')}.
+        </p>
+      )}
+    </div>
   );
 }
+
+const questionWords: Readonly<Record<ConsentQuestion, string>> = {
+  purpose: 'purpose',
+  commercialInterest: 'commercial interest',
+  ethicsExpiresOn: 'last day of the ethics approval',
+  organisationType: 'how the organisation works',
+  country: 'country',
+  months: 'how long access is needed',
+  agreesToPublish: 'what you owe in return',
+  agreesToCollaborate: 'what you owe in return',
+  agreesToReturn: 'what you owe in return',
+};
 
 function Line({ label, count }: { readonly label: string; readonly count: number | null }) {
   return (

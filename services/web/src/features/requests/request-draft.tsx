@@ -19,14 +19,14 @@ import { TextLink } from '../../ui/text-link.tsx';
 import { gridAddress } from './cohort-address.ts';
 import { CohortInWords } from './cohort-in-words.tsx';
 import { countries } from './countries.ts';
-import { fieldIdsOf, readDate, readTeam, typedProblems } from './draft-fields.ts';
+import { DeleteDraft } from './delete-draft.tsx';
+import { draftProblems, fieldIdsOf, readDate, readTeam } from './draft-fields.ts';
 import { KeptLine } from './kept-line.tsx';
 import { Reach } from './reach.tsx';
 import { duties, purposes, terms, titleOf } from './request-words.ts';
 import { useSubmitRequest } from './requests.queries.ts';
 import { TableChoice } from './table-choice.tsx';
 import { useDraft } from './use-draft.ts';
-import { WithdrawRequest } from './withdraw-request.tsx';
 
 const yesOrNo = [
   { value: 'yes', label: 'Yes' },
@@ -39,6 +39,7 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
   const [problems, setProblems] = useState<readonly PlacedProblem[]>([]);
   const [attempt, setAttempt] = useState(0);
   const submit = useSubmitRequest(request.id);
+  const wanting = draftProblems(form, typed, new Date().toISOString().slice(0, 10));
 
   /** What every field has: its id, its problem until it is changed, and its place in the form. */
   const field = <K extends keyof RequestForm>(id: string, key: K) => ({
@@ -68,8 +69,6 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
   }
 
   async function handIn(): Promise<void> {
-    const unreadable = typedProblems(typed);
-    if (unreadable.length > 0) return show(unreadable);
     await keepNow();
     try {
       await submit.mutateAsync();
@@ -95,8 +94,8 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
             <h2 className="font-semibold text-ink">Whom it reaches</h2>
             <Reach request={request} />
             <p>
-              To the nearest 5, counts of 1 to 10 hidden. Each answer that consent depends on changes the second number: purpose, country,
-              organisation, commercial interest, duration, duties.
+              To the nearest 5, counts of 1 to 10 hidden. Each answer that consent depends on changes the second number: purpose, commercial
+              interest, ethics approval, organisation, country, duration, duties.
             </p>
             <KeptLine keeping={keeping} />
           </div>
@@ -242,20 +241,26 @@ export function RequestDraft({ request }: { readonly request: AccessRequest }) {
             </Checkbox>
           </Part>
           <div className="flex flex-wrap items-center gap-3 border-t border-hairline pt-6">
-            <ConfirmDialog
-              trigger={<Button variant="primary">Hand in to the stewards</Button>}
-              title={`Hand in request ${request.number}?`}
-              consequence={
-                <p>
-                  The stewards are told by e-mail and decide on just this wording. You cannot change it any more; you can take it back until
-                  it is decided.
-                </p>
-              }
-              confirm="Hand it in"
-              cancel="Go on writing"
-              onConfirm={handIn}
-            />
-            <WithdrawRequest request={request} />
+            {wanting.length > 0 ? (
+              <Button variant="primary" onPress={() => show(wanting)}>
+                Hand in to the stewards
+              </Button>
+            ) : (
+              <ConfirmDialog
+                trigger={<Button variant="primary">Hand in to the stewards</Button>}
+                title={`Hand in request ${request.number}?`}
+                consequence={
+                  <p>
+                    The stewards are told by e-mail and decide on just this wording. You cannot change it any more; you can take it back
+                    until it is decided.
+                  </p>
+                }
+                confirm="Hand it in"
+                cancel="Go on writing"
+                onConfirm={handIn}
+              />
+            )}
+            <DeleteDraft request={request} keepNow={keepNow} />
           </div>
         </Form>
       </Section>

@@ -10,8 +10,8 @@ import NewRequestPage from './new-request-page.tsx';
 import RequestPage from './request-page.tsx';
 
 const path = `/api/access-requests/${exampleRequest.id}`;
-const draft: AccessRequest = { ...exampleRequest, status: 'draft', submittedAt: null, actions: ['edit', 'submit', 'withdraw'] };
-const reach = { inCohort: 85, consenting: null, reasons: [] };
+const draft: AccessRequest = { ...exampleRequest, status: 'draft', submittedAt: null, actions: ['edit', 'submit', 'delete'] };
+const reach = { inCohort: 85, consenting: null, openQuestions: [], reasons: [] };
 
 function open(request: AccessRequest, answers: Record<string, unknown> = {}, address = `/requests/${request.id}`) {
   const asked = fakeApi({
@@ -26,6 +26,7 @@ function open(request: AccessRequest, answers: Record<string, unknown> = {}, add
       { path: '/requests/new', element: <NewRequestPage /> },
       { path: '/requests/:requestId', element: <RequestPage /> },
       { path: '/exports', element: <h1>Exports</h1> },
+      { path: '/requests', element: <h1>Requests</h1> },
     ],
     address,
   );
@@ -77,6 +78,24 @@ describe('writing a request', () => {
     expect(screen.getByText('of them consent to this use').closest('div')?.textContent).toContain('not shown');
   });
 
+  it('says which answers are missing before it can be told who consents', async () => {
+    const openQuestions = ['country', 'agreesToPublish', 'agreesToReturn'];
+    open(draft, { [`GET ${path}/reach`]: { ...reach, openQuestions } });
+    expect(await screen.findByText(/worked out once these are answered: country, what you owe in return\.$/)).toBeTruthy();
+    expect(screen.queryByText('of them consent to this use')).toBeNull();
+  });
+
+  it('can be deleted after asking once, and nothing is sent after it', async () => {
+    const { asked, router } = open(draft, { [`DELETE ${path}`]: {} });
+    fireEvent.change(await title(), { target: { value: 'Speed by grade' } });
+    fireEvent.click(screen.getByRole('button', { name: 'Delete the draft' }));
+    const dialog = within(await screen.findByRole('alertdialog', { name: 'Delete the draft of request AR-2026-0007?' }));
+    expect(asked.some(({ method }) => method === 'DELETE')).toBe(false);
+    fireEvent.click(dialog.getByRole('button', { name: 'Delete it' }));
+    await waitFor(() => expect(router.state.location.pathname).toBe('/requests'));
+    expect(asked.filter(({ method, path: asking }) => method !== 'GET' && asking === path).at(-1)?.method).toBe('DELETE');
+  });
+
   it('takes over a cohort brought from the grid and clears the address', async () => {
     const { asked, router } = open(draft, {}, `/requests/${draft.id}?outcome=tmwt_ss&cells=l1_l5.C.D`);
     expect(await screen.findByText('L1–L5: AIS C and D')).toBeTruthy();
@@ -126,10 +145,24 @@ describe('handing a request in', () => {
     expect(screen.queryByText('State the research question.')).toBeNull();
   });
 
+  it('names what is missing before it asks to confirm, with links to the fields', async () => {
+    const form = { ...exampleRequest.form, question: '  ', country: null, tables: [{ table: 'sessions' as const, justification: '' }] };
+    const { asked } = open({ ...draft, form });
+    await title();
+    fireEvent.click(screen.getByRole('button', { name: 'Hand in to the stewards' }));
+    const summary = within(await screen.findByRole('alert', { name: '3 things need mending' }));
+    fireEvent.click(summary.getByRole('link', { name: 'State the research question in a sentence or two.' }));
+    expect(document.activeElement).toBe(screen.getByRole('textbox', { name: /^Research question/ }));
+    expect(summary.getByRole('link', { name: /^Choose the country/ })).toBeTruthy();
+    expect(summary.getByRole('link', { name: 'Say why this table is needed.' })).toBeTruthy();
+    expect(screen.queryByRole('alertdialog')).toBeNull();
+    expect(asked.some(({ method }) => method === 'POST')).toBe(false);
+  });
+
   it('does not ask the registry with a day that is none', async () => {
     const { asked } = open(draft);
     fireEvent.change(await screen.findByRole('textbox', { name: /^Last day of the approval/ }), { target: { value: '30 June' } });
-    await handIn();
+    fireEvent.click(screen.getByRole('button', { name: 'Hand in to the stewards' }));
     expect(await screen.findByRole('alert', { name: '1 thing needs mending' })).toBeTruthy();
     expect(asked.some(({ path: asking }) => asking.endsWith('/submit'))).toBe(false);
     expect(saved(asked).every(({ ethicsExpiresOn }) => ethicsExpiresOn === null)).toBe(true);

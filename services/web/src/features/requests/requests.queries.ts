@@ -2,6 +2,7 @@ import type { AccessRequest, RequestForm } from '@cairnstep/contract';
 import {
   createRequest,
   decideRequest,
+  deleteDraft,
   getReach,
   getRequest,
   listRequests,
@@ -72,6 +73,17 @@ export function useWithdrawRequest(requestId: string) {
   return useMutation({
     mutationFn: () => call(withdrawRequest, { requestId }),
     onSuccess: (request) => keep(cache, request),
+  });
+}
+
+export function useDeleteDraft(requestId: string) {
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: () => call(deleteDraft, { requestId }),
+    onSuccess: () => {
+      cache.removeQueries({ queryKey: requestQuery(requestId).queryKey });
+      void cache.invalidateQueries({ queryKey: requestsQuery().queryKey });
+    },
   });
 }
 

@@ -13,6 +13,7 @@ const open: AccessRequest = { ...exampleRequest, actions: ['vote'] };
 const reach = {
   inCohort: 42,
   consenting: 31,
+  openQuestions: [],
   reasons: [
     { reason: 'commercial_purpose', verdict: 'not_permitted', participants: 9 },
     { reason: 'a_reason_of_tomorrow', verdict: 'manual_review', participants: 2 },
@@ -114,7 +115,7 @@ describe('a review', () => {
     await fillIn('Approve', 'A clear question.');
     fireEvent.click(await decide());
     const dialog = await screen.findByRole('alertdialog', { name: 'Approve request AR-2026-0007?' });
-    expect(dialog.textContent).toContain('rows of 31 consenting people for 12 months');
+    expect(dialog.textContent).toContain('rows of up to 31 consenting people for 12 months');
     fireEvent.click(within(dialog).getByRole('button', { name: 'Approve it' }));
     expect(await screen.findByText('Approved on 5 November 2026.')).toBeTruthy();
     expect(asked.find(({ method }) => method === 'POST')?.body).toEqual({

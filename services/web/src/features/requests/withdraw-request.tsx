@@ -5,7 +5,7 @@ import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
 import { useWithdrawRequest } from './requests.queries.ts';
 
 /** Taking a request back, as long as it is not decided. */
-export function WithdrawRequest({ request }: { readonly request: Pick<AccessRequest, 'id' | 'number' | 'status' | 'actions'> }) {
+export function WithdrawRequest({ request }: { readonly request: Pick<AccessRequest, 'id' | 'number' | 'actions'> }) {
   const withdraw = useWithdrawRequest(request.id);
   if (!request.actions.includes('withdraw')) return null;
   return (
@@ -14,9 +14,7 @@ export function WithdrawRequest({ request }: { readonly request: Pick<AccessRequ
       title={`Take request ${request.number} back?`}
       consequence={
         <p>
-          {request.status === 'draft'
-            ? 'Nobody can hand it in or change it any more. What you wrote stays readable.'
-            : 'The stewards no longer decide it, and it cannot be handed in again. What you wrote stays readable; a new request can be begun.'}
+          The stewards no longer decide it, and it cannot be handed in again. What you wrote stays readable; a new request can be begun.
         </p>
       }
       confirm="Take it back"
