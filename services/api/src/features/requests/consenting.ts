@@ -27,7 +27,13 @@ function intendedUse(form: Form, today: string): IntendedUse {
   };
 }
 
-/** A stored row that cannot be read as a consent permits nothing: the matching is then told that there is none. */
+/**
+ * A stored row that cannot be read as a consent permits nothing: the matching is then told that there is none.
+ *
+ * Two things the matching could use are not given, because the registry does not hold them: the country of a site, and the
+ * calendar day of anybody's first training day (days of people are counted from it, so that it need not be known). Consent to use in
+ * the clinic's own country and consent that ends on a day are therefore left to a person, and rows leave only on a consent that permits.
+ */
 function readConsent(row: StoredConsent): ReturnType<typeof consentFromRow> | undefined {
   const cells = Object.fromEntries(Object.entries(row).filter((entry): entry is [string, string | number] => entry[1] !== null));
   try {
