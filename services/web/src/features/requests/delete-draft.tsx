@@ -12,8 +12,8 @@ export interface DeleteDraftProps {
 }
 
 export function DeleteDraft({ request, keepNow }: DeleteDraftProps) {
-  const remove = useDeleteDraft(request.id);
   const navigate = useNavigate();
+  const remove = useDeleteDraft(request.id);
   if (!request.actions.includes('delete')) return null;
   return (
     <ConfirmDialog

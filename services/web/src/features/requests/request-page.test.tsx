@@ -92,8 +92,9 @@ describe('writing a request', () => {
     const dialog = within(await screen.findByRole('alertdialog', { name: 'Delete the draft of request AR-2026-0007?' }));
     expect(asked.some(({ method }) => method === 'DELETE')).toBe(false);
     fireEvent.click(dialog.getByRole('button', { name: 'Delete it' }));
-    await waitFor(() => expect(router.state.location.pathname).toBe('/requests'));
-    expect(asked.filter(({ method, path: asking }) => method !== 'GET' && asking === path).at(-1)?.method).toBe('DELETE');
+    expect(await screen.findByRole('heading', { name: 'Requests' })).toBeTruthy();
+    expect(router.state.location.pathname).toBe('/requests');
+    expect(asked.filter(({ path: asking }) => asking === path).at(-1)?.method).toBe('DELETE');
   });
 
   it('takes over a cohort brought from the grid and clears the address', async () => {

@@ -12,6 +12,7 @@ import {
 } from '@cairnstep/contract';
 import { keepPreviousData, queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { QueryClient } from '@tanstack/react-query';
+import { useEffect, useRef } from 'react';
 import { call } from '../../lib/call.ts';
 
 const listKey = ['requests'] as const;
@@ -76,12 +77,20 @@ export function useWithdrawRequest(requestId: string) {
   });
 }
 
+/** The draft is forgotten when the page that shows it is left: sooner, that page would ask for it again. */
 export function useDeleteDraft(requestId: string) {
   const cache = useQueryClient();
+  const isGone = useRef(false);
+  useEffect(
+    () => () => {
+      if (isGone.current) cache.removeQueries({ queryKey: requestQuery(requestId).queryKey });
+    },
+    [cache, requestId],
+  );
   return useMutation({
     mutationFn: () => call(deleteDraft, { requestId }),
     onSuccess: () => {
-      cache.removeQueries({ queryKey: requestQuery(requestId).queryKey });
+      isGone.current = true;
       void cache.invalidateQueries({ queryKey: requestsQuery().queryKey });
     },
   });
