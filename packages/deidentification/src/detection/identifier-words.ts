@@ -1,6 +1,6 @@
 import type { IdentifierClass } from './identifier-class.ts';
 
-/** What a class is, as the subject of a sentence. */
+/** What a class is, in a sentence: what was found is, or a column holds, the name of a person. */
 export const identifierWords: Readonly<Record<IdentifierClass, string>> = {
   person_name: 'the name of a person',
   geography: 'an address or a place smaller than a state',

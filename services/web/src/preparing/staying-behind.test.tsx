@@ -55,7 +55,7 @@ it('names the columns that stay behind, each with its reason', () => {
 it('says of what the detectors saw whether it stays behind, and never shows a cell', () => {
   render(<StayingBehind columns={columns} problems={[withheld]} findings={[finding('Steps'), finding('Distance')]} />);
   expect(items().slice(3)).toEqual([
-    'Sessions, Steps: telephone numbers, 2 cells, first on line 3. The column stays behind.',
-    'Sessions, Distance: telephone numbers, 2 cells, first on line 3. The column is used: look whether these cells may be sent.',
+    'Sessions, Steps: a telephone number, 2 cells, first on line 3. The column stays behind.',
+    'Sessions, Distance: a telephone number, 2 cells, first on line 3. The column is used: look whether these cells may be sent.',
   ]);
 });

@@ -1,7 +1,7 @@
 /** What stays at the clinic, and why; and what the detectors saw in the files. */
+import { identifierWords } from '@cairnstep/deidentification';
 import { tableName } from '../features/submissions/table-names.ts';
 import { formatCount } from '../lib/format.ts';
-import { findingWords } from './finding-words.ts';
 import type { ColumnPicture, FindingPicture, PreparedPicture } from './worker/protocol.ts';
 
 export function StayingBehind({ columns, problems, findings }: Pick<PreparedPicture, 'columns' | 'problems' | 'findings'>) {
@@ -75,7 +75,7 @@ function Findings({ findings, columns, problems }: WithProblems & Pick<PreparedP
           const { table, header, class: name, count, line } = finding;
           return (
             <li key={at} className="wrap-anywhere">
-              {tableName(table)}, {header.trim() === '' ? 'a column without a header' : header}: {findingWords[name]}
+              {tableName(table)}, {header.trim() === '' ? 'a column without a header' : header}: {identifierWords[name]}
               {count > 0 && `, ${formatCount(count, 'cell')}`}
               {line !== null && `, first on line ${line}`}.{' '}
               <span className="text-quiet">
