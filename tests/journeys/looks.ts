@@ -32,19 +32,18 @@ export async function look(page: Page, name: string): Promise<void> {
   if (before !== null) await page.setViewportSize(before);
 }
 
-/** On a busy machine a new scheme can take longer than the frames waited for, so what is found has to be found twice. */
 async function violationsOn(page: Page): Promise<string[]> {
-  const find = async () => {
-    const { violations } = await new AxeBuilder({ page }).analyze();
-    return violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`);
-  };
-  const found = await find();
-  if (found.length === 0) return found;
-  await page.waitForTimeout(500);
-  return find();
+  const { violations } = await new AxeBuilder({ page }).analyze();
+  return violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`);
 }
 
-/** The scheme changes while the page lives, and what inherits a colour may be a frame behind. */
-function drawn(page: Page): Promise<void> {
-  return page.evaluate(() => new Promise((done) => requestAnimationFrame(() => requestAnimationFrame(() => done()))));
+/** A new scheme or size is drawn, and whatever it set in motion has come to rest. */
+async function drawn(page: Page): Promise<void> {
+  do {
+    await page.evaluate(() => new Promise((done) => requestAnimationFrame(() => requestAnimationFrame(done))));
+  } while ((await settled(page)) > 0);
 }
+
+/** Waits for what is moving, and says how much it was. One that is cancelled has come to rest as well. */
+const settled = (page: Page): Promise<number> =>
+  page.evaluate(async () => (await Promise.allSettled(document.getAnimations().map(({ finished }) => finished))).length);
