@@ -25,7 +25,7 @@ export const Cell = z.discriminatedUnion('state', [
     n: z.number().int(),
     /** Mean of the chosen statistic in the outcome's unit. */
     mean: z.number(),
-    /** Sample SD and two-sided 95 % t interval; null where n = 1 or all values are equal. */
+    /** Sample SD and two-sided 95% t interval; null where n = 1 or all values are equal. */
     sd: z.number().nullable(),
     interval: z.strictObject({ lower: z.number(), upper: z.number() }).nullable(),
   }),

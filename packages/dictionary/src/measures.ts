@@ -296,7 +296,7 @@ export const measures: readonly Measure[] = [
     licence: noLicence,
     cautions: [
       'Guard the person. Not for people who need much help to stand.',
-      'Good walkers reach the top of the scale: 28 % of 46 chronic walkers did (Joergensen V et al. Phys Ther 2017, doi 10.1093/ptj/pzx030).',
+      'Good walkers reach the top of the scale: 28% of 46 chronic walkers did (Joergensen V et al. Phys Ther 2017, doi 10.1093/ptj/pzx030).',
     ],
     source: 'Lemay JF, Nadeau S. Spinal Cord 2010;48:245-50',
   }),
@@ -390,7 +390,7 @@ export const measures: readonly Measure[] = [
           '82 people with spinal cord injury and 34 with amputation',
           'Hanley MA et al. Clin J Pain 2006;22:25-31',
           'looked-up',
-          'or about 36 %; the authors back about 33 % as a general standard',
+          'or about 36%; the authors back about 33% as a general standard',
         ),
       ],
     },

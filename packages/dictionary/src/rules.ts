@@ -323,7 +323,7 @@ const trainingRules: readonly RuleDraft[] = [
     severity: 'warning',
     scope: 'row',
     tables: ['bouts'],
-    statement: 'On a treadmill, mean speed and treadmill speed differ by no more than 0.05 m/s or 10 %, whichever is larger.',
+    statement: 'On a treadmill, mean speed and treadmill speed differ by no more than 0.05 m/s or 10%, whichever is larger.',
     why: 'On a belt the person goes as fast as the belt.',
     mend: 'Check distance, duration and the unit of the treadmill speed.',
     limits: { toleranceMps: 0.05, tolerancePercent: 10 },

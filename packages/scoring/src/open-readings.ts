@@ -10,7 +10,7 @@ export const openReadings: readonly OpenReading[] = [
   {
     question: 'Where is the motor level when all key muscles of the arms are normal but sensation is altered between C5 and T1?',
     choice: 'At T1: the motor level follows the sensory level only in segments without a key muscle.',
-    why: 'Two readings are published and differ in about 2 % of motor levels, never in the grade (Schuld et al., Top Spinal Cord Inj Rehabil 2025;31(3):37-47).',
+    why: 'Two readings are published and differ in about 2% of motor levels, never in the grade (Schuld et al., Top Spinal Cord Inj Rehabil 2025;31(3):37-47).',
   },
   {
     question: 'What is the level of injury when every score is normal but voluntary anal contraction is absent?',

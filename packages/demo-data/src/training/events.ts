@@ -19,7 +19,7 @@ export interface EventDraft {
 type SessionKind =
   'none' | 'fall' | 'pain_increase' | 'spasticity_increase' | 'musculoskeletal' | 'equipment_fault' | 'syncope' | 'chest_symptom' | 'other';
 
-/** Chances in one trained session beside what vital signs and skin checks show. Falls in about 4 of 100 people (Miller et al., Med Devices 2016;9:455-66: 4.4 %). */
+/** Chances in one trained session beside what vital signs and skin checks show. Falls in about 4 of 100 people (Miller et al., Med Devices 2016;9:455-66: 4.4%). */
 const chances: Readonly<Record<SessionKind, number>> = {
   none: 0.9867,
   fall: 0.0016,
@@ -194,7 +194,7 @@ export function skinEvent(random: Random, day: number, session: number, broken: 
   return { day, session, kind: 'skin_breakdown', cells, daysToEnd: broken ? random.whole(7, 35) : random.whole(1, 4) };
 }
 
-/** A fracture, after which the course ends. Few: the 3.4 % of Miller et al. rest on one event. */
+/** A fracture, after which the course ends. Few: the 3.4% of Miller et al. rest on one event. */
 export function fractureEvent(random: Random, day: number, session: number): EventDraft {
   const cells: Cells = {
     ...record(random, 3, true, 'course_ended', false),

@@ -225,7 +225,7 @@ export const bouts = defineTable({
       better: 'lower',
       exposure: 'measurement',
       aliases: ['bws_percent', 'unweighting_pct'],
-      source: 'Support of 30, 40 and 60 % was used in trials; limits set by this registry to catch entry errors',
+      source: 'Support of 30, 40 and 60% was used in trials; limits set by this registry to catch entry errors',
     },
     {
       key: 'guidance_pct',

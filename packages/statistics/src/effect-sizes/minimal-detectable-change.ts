@@ -1,5 +1,5 @@
 /**
- * What change in one person is beyond measurement error: SEM = SD sqrt(1 - ICC), MDC = z sqrt 2 SEM, z = 1.96 for 95 %.
+ * What change in one person is beyond measurement error: SEM = SD sqrt(1 - ICC), MDC = z sqrt 2 SEM, z = 1.96 for 95%.
  * Source: Weir (2005) Journal of Strength and Conditioning Research 19:231-240.
  */
 

@@ -70,7 +70,7 @@ describe('drawing counts', () => {
       const expected = 20_000 * hypergeometricMass(x, marked, unmarked, draws);
       return sum + (count - expected) ** 2 / expected;
     }, 0);
-    // 99.9 % point of chi-square with 6 degrees of freedom.
+    // 99.9% point of chi-square with 6 degrees of freedom.
     expect(chiSquare).toBeLessThan(22.458);
   });
 

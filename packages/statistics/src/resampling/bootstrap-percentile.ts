@@ -1,6 +1,6 @@
 /**
  * Percentile interval of any statistic by drawing participants with return. The limits are order statistics, the (B + 1) p-th of the B
- * resampled values, so B is chosen to make that a whole number (1999 or 9999 for 95 %). The generator is seeded, and seed and B are part
+ * resampled values, so B is chosen to make that a whole number (1999 or 9999 for 95%). The generator is seeded, and seed and B are part
  * of the answer.
  *
  * Source: Davison & Hinkley (1997) Bootstrap Methods and their Application, section 5.3.1.

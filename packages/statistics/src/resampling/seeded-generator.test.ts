@@ -27,7 +27,7 @@ describe('seeded generator', () => {
       counts[index] = (counts[index] as number) + 1;
     }
     const chiSquare = counts.reduce((sum, count) => sum + (count - 10_000) ** 2 / 10_000, 0);
-    // 99.9 % point of chi-square with 6 degrees of freedom.
+    // 99.9% point of chi-square with 6 degrees of freedom.
     expect(chiSquare).toBeLessThan(22.458);
   });
 

@@ -6,7 +6,7 @@ export interface ZipPart {
   readonly content: Iterable<string> | AsyncIterable<string>;
 }
 
-/** Between fflate's fastest and its usual: on sheets a third faster than the usual level 6, and 2 % larger. */
+/** Between fflate's fastest and its usual: on sheets a third faster than the usual level 6, and 2% larger. */
 const level = 4;
 /** The same content gives the same bytes whenever it is written: every file is of the first day that zip can tell. */
 const firstDay = new Date(1980, 0, 1);

@@ -267,7 +267,7 @@ testRules([
     source: registryRule,
     breaks: [
       {
-        when: 'a total of steps 6 % above the bouts',
+        when: 'a total of steps 6% above the bouts',
         rows: month({ sessions: [session({ steps_total: 640 })], bouts: [bout()] }),
         at: ['sessions 2 steps_total'],
       },
@@ -279,7 +279,7 @@ testRules([
     ],
     holds: [
       { when: 'totals that are the sums', rows: month({ sessions: [session()], bouts: [bout()] }) },
-      { when: 'a total of steps 5 % above the bouts', rows: month({ sessions: [session({ steps_total: 631 })], bouts: [bout()] }) },
+      { when: 'a total of steps 5% above the bouts', rows: month({ sessions: [session({ steps_total: 631 })], bouts: [bout()] }) },
       {
         when: 'bouts that were not all counted',
         rows: month({

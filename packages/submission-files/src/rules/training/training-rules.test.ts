@@ -49,14 +49,14 @@ testRules([
         at: ['bouts 2 treadmill_speed_mps'],
       },
       {
-        when: 'a belt slower by more than 10 %',
+        when: 'a belt slower by more than 10%',
         rows: walked({ treadmill_speed_mps: 1, distance_m: 661 }),
         at: ['bouts 2 treadmill_speed_mps'],
       },
     ],
     holds: [
       { when: 'a belt 0.05 faster at a low speed', rows: walked({ treadmill_speed_mps: 0.25, distance_m: 120 }) },
-      { when: 'a belt slower by 10 %', rows: walked({ treadmill_speed_mps: 1, distance_m: 660 }) },
+      { when: 'a belt slower by 10%', rows: walked({ treadmill_speed_mps: 1, distance_m: 660 }) },
     ],
   },
   {
@@ -101,7 +101,7 @@ testRules([
     rule: 'T06',
     source: registryRule,
     breaks: [
-      { when: '28 kg of 70 as 41.1 %', rows: walked({ bws_pct: 41.1 }), at: ['bouts 2 bws_pct'] },
+      { when: '28 kg of 70 as 41.1%', rows: walked({ bws_pct: 41.1 }), at: ['bouts 2 bws_pct'] },
       { when: '71 kg of 70', rows: walked({ bws_kg: 71, bws_pct: undefined }), at: ['bouts 2 bws_kg'] },
       {
         when: 'a percentage that does not fit the mass the registry holds',
@@ -111,7 +111,7 @@ testRules([
       },
     ],
     holds: [
-      { when: '28 kg of 70 as 41 %', rows: walked({ bws_pct: 41 }) },
+      { when: '28 kg of 70 as 41%', rows: walked({ bws_pct: 41 }) },
       { when: '70 kg of 70', rows: walked({ bws_kg: 70, bws_pct: 100 }) },
       { when: 'an unknown mass', rows: walked({ bws_pct: 60 }, { body_mass_kg: undefined }) },
     ],

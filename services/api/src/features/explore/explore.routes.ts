@@ -54,7 +54,7 @@ const statisticWords: Readonly<Record<Statistic, string>> = {
 };
 
 const methodOf = (statistic: Statistic, view: View): string =>
-  `${statisticWords[statistic]}, with sample SD and two-sided 95 % interval from Student's t distribution; first course of each person` +
+  `${statisticWords[statistic]}, with sample SD and two-sided 95% interval from Student's t distribution; first course of each person` +
   (view === 'registry' || statistic === 'change' ? '; people with both values.' : '; everyone with the value.');
 
 function notesOf(view: View, outcome: OutcomeOut): string[] {
