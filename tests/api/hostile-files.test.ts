@@ -10,7 +10,9 @@ import { afterAll, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { watchMemory } from '../../infra/bench/memory.ts';
 import type { Submission } from '../../packages/contract/src/index.ts';
 import type { TableKey } from '../../packages/dictionary/src/index.ts';
-import { readCsvText } from '../../packages/submission-files/src/index.ts';
+import { isFormulaLike, readCsvText } from '../../packages/submission-files/src/index.ts';
+import { makeWorkbook, workbookParts, type WorkbookDraft } from '../../packages/submission-files/src/test-support/make-workbook.ts';
+import { makeZip, type ZipDraft } from '../../packages/submission-files/src/test-support/make-zip.ts';
 import { makeApp } from '../../services/api/src/app.ts';
 import { checkSubmission } from '../../services/api/src/features/submissions/check-submission.ts';
 import { serverLimits } from '../../services/api/src/http/server-limits.ts';
@@ -139,6 +141,88 @@ describe('threat 32: a large or slow file', () => {
     slow.closeAllConnections();
     await new Promise((resolve) => slow.close(resolve));
     await pool.end();
+  });
+});
+
+/** What becomes of a workbook as it arrives: the answer, and megabytes above what the process held before. */
+async function sendWorkbook(bytes: Uint8Array): Promise<{ status: number; detail: string; memory: number }> {
+  const id = await openMonth();
+  const body = Buffer.from(bytes);
+  const grown = watchMemory(process.pid);
+  const answer = await coordinator.upload(`/api/submissions/${id}/workbook?fileName=month.xlsx`, body);
+  const { status } = answer;
+  const memory = grown();
+  expect((await coordinator.get(`/api/submissions/${id}`)).body.files).toEqual([]);
+  return { status, detail: String(answer.body.detail), memory };
+}
+
+const plain: WorkbookDraft = { sheets: [{ name: 'bouts', rows: [['bout_no'], [1]] }] };
+const withPart = (...parts: readonly ZipDraft[]): Uint8Array =>
+  makeZip([...workbookParts(plain).filter(({ name }) => !parts.some((part) => part.name === name)), ...parts]);
+const sheetPart = 'xl/worksheets/sheet1.xml';
+
+describe('threat 33: a workbook that unpacks to far more than it is', () => {
+  const blanks = Buffer.alloc(200 * MB, ' ');
+  const laughs = Array.from({ length: 9 }, (_, level) => `<!ENTITY l${level + 1} "${`&l${level};`.repeat(10)}">`).join('');
+  it.each([
+    ['a sheet of 200 MB of blanks', () => withPart({ name: sheetPart, content: blanks })],
+    ['the same, saying it were small', () => withPart({ name: sheetPart, content: blanks, claims: { size: 5_000 } })],
+    [
+      'an archive in an archive in an archive',
+      () => makeZip([{ name: 'a.zip', content: makeZip([{ name: 'b.zip', content: makeZip([{ name: 'c', content: blanks }]) }]) }]),
+    ],
+    [
+      'more shared texts than there may be',
+      () => makeWorkbook({ ...plain, sharedStrings: '<si><t>aaaaaaaaaaaaaaaaaaaa</t></si>'.repeat(1_000_001) }),
+    ],
+    [
+      'entities that grow to a billion',
+      () =>
+        withPart({
+          name: sheetPart,
+          content: `<!DOCTYPE a [<!ENTITY l0 "lol">${laughs}]><worksheet><sheetData><row r="1"><c r="A1" t="str"><v>&l9;</v></c></row></sheetData></worksheet>`,
+        }),
+    ],
+    [
+      'more parts than a workbook has',
+      () => withPart(...Array.from({ length: 1_001 }, (_, index) => ({ name: `xl/media/${index}.bin`, content: 'x' }))),
+    ],
+    [
+      '200,000 columns',
+      () =>
+        makeWorkbook({
+          sheets: [
+            { name: 'bouts', xml: `<worksheet><sheetData><row r="1">${'<c><v>1</v></c>'.repeat(200_000)}</row></sheetData></worksheet>` },
+          ],
+        }),
+    ],
+  ])('is refused before it has: %s', async (_, make) => {
+    const { status, memory } = await sendWorkbook(make());
+    expect(status).toBe(422);
+    expect(memory).toBeLessThan(150);
+  });
+});
+
+describe('threat 34: a workbook whose parts lead elsewhere', () => {
+  it.each([
+    ['out of it', { name: '../../evil.xml', content: 'x' }],
+    ['out of it, with the other slash', { name: '..\\..\\evil.xml', content: 'x' }],
+    ['to a drive', { name: 'C:\\evil.xml', content: 'x' }],
+    ['to the root', { name: '/etc/evil.xml', content: 'x' }],
+    ['to a link', { name: 'xl/link', content: '/etc/passwd', claims: { mode: 0o120777 } }],
+    ['to a NUL', { name: 'xl/a\0.xml', content: 'x' }],
+    ['to another name than the list says', { name: 'xl/a.xml', content: 'x', claims: { localName: '../a.xml' } }],
+  ])('is refused: %s', async (_, part) => {
+    expect((await sendWorkbook(withPart(part))).status).toBe(422);
+  });
+
+  it.each([
+    ['the same name', [sheetPart, sheetPart]],
+    ['a name that differs in its case', [sheetPart, 'xl/worksheets/SHEET1.xml']],
+  ])('is refused when two parts have %s', async (_, names) => {
+    const [first] = workbookParts(plain).filter(({ name }) => name === sheetPart);
+    const parts = names.map((name) => ({ ...first, name }));
+    expect((await sendWorkbook(makeZip([...workbookParts(plain).filter(({ name }) => name !== sheetPart), ...parts]))).status).toBe(422);
   });
 });
 
@@ -303,6 +387,14 @@ describe('threat 38: formulas for whoever opens the data later', () => {
     const checked = await uploadMonth(server, coordinator, site, month, { bouts: withColumn(formula) });
     expect(checked.preview).toBeNull();
     expect(errorsOf(checked).some((rule) => ['F06', 'F13'].includes(rule))).toBe(true);
+  });
+
+  it.each(formulas)('in the name of a file are not kept: %j', async (formula) => {
+    const id = await openMonth();
+    const answer = await coordinator.upload(placeFor(id, 'bouts', `${formula}.csv`), csvOf('bouts', [rowOf('bouts')])).expect(200);
+    const [file] = (answer.body as Submission).files;
+    expect(isFormulaLike(file?.fileName ?? '=')).toBe(false);
+    expect(file?.fileName).not.toContain(formula);
   });
 });
 
