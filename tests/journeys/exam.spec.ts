@@ -115,3 +115,25 @@ test('the sheet with its result prints on one page', async ({ page }) => {
 test('a blank sheet can be read on any screen', async ({ page }) => {
   await look(page, 'exam-blank');
 });
+
+/** Low windows, a telephone held sideways, a page at four times its size. */
+const lowWindows = [
+  [320, 568],
+  [1440, 600],
+  [700, 360],
+  [320, 256],
+] as const;
+for (const [width, height] of lowWindows)
+  test(`in a window of ${width} by ${height} the cell that is typed into is never covered`, async ({ page }) => {
+    await page.setViewportSize({ width, height });
+    await tabTo(page, cell(page, 'Light touch, right, C2'));
+    // Down the columns of sensation to the first of strength, whose keys take more lines.
+    for (const typed of [...sensory.repeat(4), ...right]) {
+      const isInFront = await focusedCell(page).evaluate((element) => {
+        const { left, top, width: wide, height: high } = element.getBoundingClientRect();
+        return element.contains(document.elementFromPoint(left + wide / 2, top + high / 2));
+      });
+      expect(isInFront, await focusedCell(page).getAttribute('data-cell')).toBe(true);
+      await page.keyboard.type(typed);
+    }
+  });

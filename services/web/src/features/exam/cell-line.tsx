@@ -1,5 +1,5 @@
-/** What the active cell is and holds, and the keys as buttons: for fingers, and to learn the keys by. Stays in sight. */
-import { memo } from 'react';
+/** What the active cell is and holds, and the keys as buttons: for fingers, and to learn the keys by. Stays in sight while the sheet is used. */
+import { memo, useEffect, useRef } from 'react';
 import type { RefObject } from 'react';
 import { Button } from 'react-aria-components/Button';
 import type { Act, Entry } from './entry.ts';
@@ -13,15 +13,22 @@ export interface CellLineProps {
   readonly reading: Reading;
   readonly act: (act: Act) => void;
   readonly followsRef: RefObject<boolean>;
+  /** What holds the cells: they keep clear of the keys in front of them. */
+  readonly roomIn: RefObject<HTMLElement | null>;
 }
 
-export function CellLine({ entry, reading, act, followsRef }: CellLineProps) {
+export function CellLine({ entry, reading, act, followsRef, roomIn }: CellLineProps) {
   const { active, question } = entry;
   const issues = reading.issues.filter(({ cell }) => cell === active);
   // A question has keys of its own, and needs the room.
-  if (question !== null) return null;
+  const isShown = question === null;
+  const keys = useRoomForKeys(roomIn, isShown);
+  if (!isShown) return null;
   return (
-    <div className="not-printed sticky bottom-0 z-2 grid gap-2 border-t-2 border-edge bg-sheet py-2">
+    <div
+      ref={keys}
+      className="not-printed z-2 grid gap-2 border-t-2 border-edge bg-sheet py-2 roomy:group-focus-within/sheet:sticky roomy:group-focus-within/sheet:bottom-0"
+    >
       <p className="min-h-6">
         <span className="font-semibold">{cellTitle(active)}</span>: {heldIn(entry)}
       </p>
@@ -35,6 +42,25 @@ export function CellLine({ entry, reading, act, followsRef }: CellLineProps) {
       <SoFar reading={reading} />
     </div>
   );
+}
+
+/** Tells the cells how high the keys are, and keeps the one that is typed into in front of them when they grow. */
+function useRoomForKeys(roomIn: RefObject<HTMLElement | null>, isShown: boolean): RefObject<HTMLDivElement | null> {
+  const keys = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    const [room, box] = [roomIn.current, keys.current];
+    if (room === null || box === null) return;
+    const observer = new ResizeObserver(() => {
+      room.style.setProperty('--keys-height', `${box.offsetHeight}px`);
+      room.querySelector('[data-cell]:focus')?.scrollIntoView({ block: 'nearest' });
+    });
+    observer.observe(box);
+    return () => {
+      observer.disconnect();
+      room.style.removeProperty('--keys-height');
+    };
+  }, [roomIn, isShown]);
+  return keys;
 }
 
 function heldIn({ active, sheet }: Entry): string {

@@ -36,6 +36,7 @@ export default function ExamPage() {
   const step = useMemo(() => (chosen === null ? null : whyOf(settled, chosen)), [settled, chosen]);
   const deciding = useMemo(() => (step === null ? noCells : new Set(step.cells)), [step]);
   const followsRef = useRef(false);
+  const grid = useRef<HTMLDivElement>(null);
   const { values } = reading.classification.nli;
   const level = values.length === 1 ? values[0] : undefined;
   const isBlank = isBlankSheet(sheet);
@@ -94,8 +95,10 @@ export default function ExamPage() {
         <div className="grid items-start gap-x-10 gap-y-8 px-4 py-6 md:px-8 lg:grid-cols-[minmax(0,36rem)_minmax(0,1fr)] print:grid-cols-[10fr_11fr] print:gap-x-6 print:gap-y-2 print:py-0 print:text-[8.5pt] print:leading-snug print:[&_.text-section]:text-[11pt] print:[&_.text-small]:text-[8pt] print:[&_.text-small]:leading-snug">
           <div className="grid min-w-0 gap-4">
             <OrderChoice order={entry.order} act={act} />
-            <ExamGrid entry={entry} act={act} issues={reading.issues} deciding={deciding} level={level} followsRef={followsRef} />
-            <CellLine entry={entry} reading={reading} act={act} followsRef={followsRef} />
+            <div ref={grid} className="group/sheet grid gap-4">
+              <ExamGrid entry={entry} act={act} issues={reading.issues} deciding={deciding} level={level} followsRef={followsRef} />
+              <CellLine entry={entry} reading={reading} act={act} followsRef={followsRef} roomIn={grid} />
+            </div>
             <RestOfExam
               nonKey={sheet.nonKey}
               earlierDeficit={sheet.earlierDeficit}

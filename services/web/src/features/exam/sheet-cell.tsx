@@ -16,7 +16,7 @@ export interface SheetCellProps {
 export const SheetCell = memo(function SheetCell({ cell, written, isActive, decides, issue, colSpan }: SheetCellProps) {
   const look = [
     'relative h-7 border border-hairline text-center text-small numbers focus-visible:-outline-offset-2 focus-visible:z-1',
-    'scroll-mt-24 scroll-mb-56 pointer-coarse:h-9 print:h-[4.4mm] print:text-[8pt]',
+    'scroll-mt-16 scroll-mb-2 roomy:scroll-mb-[calc(var(--keys-height,0px)+8px)] pointer-coarse:h-9 print:h-[4.4mm] print:text-[8pt]',
     decides ? 'bg-chosen font-semibold outline-2 -outline-offset-2 outline-lichen' : isActive ? 'bg-paper' : '',
     written === normalScore(cell) ? 'text-quiet' : 'font-semibold',
   ];
