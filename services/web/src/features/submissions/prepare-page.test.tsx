@@ -115,7 +115,7 @@ describe('the page that prepares a month', () => {
   });
 
   it('sends no file when the registry cannot replace codes', async () => {
-    const { asked } = open({ [`POST /api/sites/${site.id}/replaced-codes`]: refusal('codes-collide', 409) });
+    const { asked } = open({ [`POST /api/sites/${site.id}/replaced-codes`]: () => refusal('codes-collide') });
     await frame();
     await say({ kind: 'ready' });
     await say({ ...send(), replacedCodes: [{ from: 'S000000000000000000012', to: 'S00000000000000000002Z' }] });

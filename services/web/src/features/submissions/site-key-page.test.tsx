@@ -53,7 +53,7 @@ describe('the page of the site key', () => {
   });
 
   it('passes on why the registry did not', async () => {
-    open({ [replacing]: refusal('codes-collide', 409) });
+    open({ [replacing]: () => refusal('codes-collide') });
     await screen.findByTitle(`Site key of ${site.name}`);
     await say({ kind: 'ready' });
     await say({ kind: 'replace-codes', replacedCodes });
