@@ -80,3 +80,27 @@ describe('a client built without the preparing page', () => {
     rmSync(without, { recursive: true, force: true });
   });
 });
+
+describe('the client’s page', () => {
+  const page = '<!doctype html>\n<html lang="en-GB">\n<title>client</title>';
+
+  it.each([
+    ['yes', '<html data-demonstration lang="en-GB">'],
+    ['no', '<html lang="en-GB">'],
+  ])('says itself whether the data are invented (%s), at every address', async (demonstration, tag) => {
+    writeFileSync(join(folder, 'index.html'), page);
+    const other = await startTestServer({ WEB_DIST: folder, DEMONSTRATION: demonstration });
+    try {
+      const answer = await supertest(other.url).get('/explore').expect(200);
+      expect(answer.text).toContain(tag);
+      expect(answer.headers['content-type']).toMatch(/^text\/html/);
+      expect(answer.headers['cache-control']).toBe('no-cache');
+      await supertest(other.url)
+        .get('/explore')
+        .set('If-None-Match', answer.headers['etag'] as string)
+        .expect(304);
+    } finally {
+      await other.close();
+    }
+  });
+});

@@ -168,7 +168,7 @@ export function makeApp(context: Context, { sessionPool }: Pools): Express {
     throw new Refusal('not-found', 'There is nothing at this address, or it is not yours to see.');
   });
 
-  serveWeb(app, config.WEB_DIST);
+  serveWeb(app, { folder: config.WEB_DIST, demonstration: config.DEMONSTRATION });
   app.use(((error, request, response, _next) => {
     const problem = toProblem(error, String(request.id));
     if (problem.status >= 500) log.error({ ...errorFacts(error), request: request.id }, 'request failed');

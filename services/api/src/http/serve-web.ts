@@ -1,5 +1,6 @@
 /** The built client: hashed files for ever, pages always asked for anew, and the preparing page under a policy of its own. */
 import { existsSync, readFileSync } from 'node:fs';
+import { readFile } from 'node:fs/promises';
 import path from 'node:path';
 import express, { type Express, type RequestHandler } from 'express';
 import { z } from 'zod';
@@ -25,7 +26,14 @@ function servePreparing(folder: string): RequestHandler {
   };
 }
 
-export function serveWeb(app: Express, folder: string | undefined): void {
+export interface WebSettings {
+  /** Where the built client is; undefined where another server has it. */
+  readonly folder: string | undefined;
+  /** Said in the page itself, so that the line about invented data is there before any answer and moves nothing. */
+  readonly demonstration: boolean;
+}
+
+export function serveWeb(app: Express, { folder, demonstration }: WebSettings): void {
   if (!folder || !existsSync(path.join(folder, 'index.html'))) return;
   app.use('/assets', express.static(path.join(folder, 'assets'), { immutable: true, maxAge: '1y', fallthrough: false }));
   if (existsSync(path.join(folder, preparingPage))) {
@@ -36,8 +44,9 @@ export function serveWeb(app: Express, folder: string | undefined): void {
     });
   }
   app.use(express.static(folder, { index: false, maxAge: '1h' }));
-  app.get('/{*path}', (_request, response) => {
+  app.get('/{*path}', async (_request, response) => {
+    const page = await readFile(path.join(folder, 'index.html'), 'utf8');
     response.setHeader('Cache-Control', 'no-cache');
-    response.sendFile(path.join(folder, 'index.html'));
+    response.type('html').send(demonstration ? page.replace('<html', '<html data-demonstration') : page);
   });
 }

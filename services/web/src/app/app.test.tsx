@@ -39,6 +39,14 @@ describe('the frame', () => {
     expect(await screen.findByText(/Demonstration: invented data/)).toBeTruthy();
   });
 
+  it('labels them before the account is known where the page itself says so', async () => {
+    document.documentElement.setAttribute('data-demonstration', '');
+    fakeApi({ ...publicAnswers, 'GET /api/account': () => new Promise<Response>(() => undefined) });
+    renderRoutes(routes, '/');
+    expect(await screen.findByText(/Demonstration: invented data/)).toBeTruthy();
+    document.documentElement.removeAttribute('data-demonstration');
+  });
+
   it('says nothing of a demonstration where there is none', async () => {
     fakeApi(publicAnswers);
     renderRoutes(routes, '/');

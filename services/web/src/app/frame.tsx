@@ -11,6 +11,8 @@ import { Navigation } from './navigation.tsx';
 export function Frame() {
   const account = useAccount();
   const main = useFocusOnArrival();
+  // The page itself says so before the account is known (serve-web.ts of the API).
+  const isDemonstration = account?.demonstration ?? document.documentElement.hasAttribute('data-demonstration');
   const arriving = useNavigation().state === 'loading';
   return (
     <div className="mx-auto flex min-h-dvh max-w-[1200px] flex-col">
@@ -21,7 +23,7 @@ export function Frame() {
         Skip to the content
       </a>
       <header className="not-printed">
-        {account?.demonstration === true && (
+        {isDemonstration && (
           <p className="border-b border-hairline px-4 py-1 text-small md:px-8">
             <strong className="font-semibold text-amber">Demonstration: invented data.</strong> No person, clinic or result here is real.
           </p>
@@ -35,7 +37,14 @@ export function Frame() {
           <AccountMenu account={account} />
         </div>
       </header>
-      <main ref={main} id="main" tabIndex={-1} aria-busy={arriving} className="sheet flex-1 border-y border-hairline bg-sheet lg:border-x">
+      {/* While something is being fetched the footer stands below the window, so that what arrives does not push it away. */}
+      <main
+        ref={main}
+        id="main"
+        tabIndex={-1}
+        aria-busy={arriving}
+        className="sheet flex-1 border-y border-hairline bg-sheet has-[[data-waiting]]:min-h-dvh lg:border-x"
+      >
         <Outlet />
       </main>
       <footer className="not-printed px-4 py-6 text-small text-quiet md:px-8">

@@ -2,7 +2,7 @@
  * Rows and columns to read: a caption, the unit in the header, sorting kept in the address, a header that stays in sight,
  * copying as text and downloading as CSV. Sorts the rows it is given; paged lists keep the server's order (`isSortable={false}`).
  */
-import { useEffect, useId, useState } from 'react';
+import { useId } from 'react';
 import type { ReactNode } from 'react';
 import { useAddressParam } from '../lib/address-state.ts';
 import { toCsv, toTabSeparated } from '../lib/csv.ts';
@@ -11,6 +11,7 @@ import { formatCount, formatNumber } from '../lib/format.ts';
 import { saveFile } from '../lib/save-file.ts';
 import { announce } from './announcer.tsx';
 import { Button } from './button.tsx';
+import { ScrollFrame } from './scroll-frame.tsx';
 
 export interface Column<Row> {
   readonly key: string;
@@ -64,7 +65,6 @@ export function Table<Row>({
   fileName,
 }: TableProps<Row>) {
   const captionId = useId();
-  const [overflows, frame] = useOverflow();
   const [sortText, setSortText] = useAddressParam(`sort-${id}`);
   const sort = isSortable ? readSort(sortText, columns) : null;
   const ordered = sort === null ? rows : sorted(rows, columns, sort);
@@ -72,11 +72,7 @@ export function Table<Row>({
   if (rows.length === 0) return <div className="py-4 text-quiet">{empty}</div>;
   return (
     <div className="grid gap-2">
-      <div
-        ref={frame}
-        className="scrolls relative max-h-[80vh] overflow-auto"
-        {...(overflows && { tabIndex: 0, role: 'region', 'aria-labelledby': captionId })}
-      >
+      <ScrollFrame labelledBy={captionId}>
         <table className="w-full border-separate border-spacing-0">
           <caption id={captionId} className="pb-2 text-left font-semibold">
             {caption}
@@ -104,7 +100,7 @@ export function Table<Row>({
             ))}
           </tbody>
         </table>
-      </div>
+      </ScrollFrame>
       {fileName !== undefined && <Takeaway columns={columns.filter(({ isAct }) => isAct !== true)} rows={ordered} fileName={fileName} />}
     </div>
   );
@@ -249,19 +245,4 @@ function sorted<Row>(rows: readonly Row[], columns: readonly Column<Row>[], sort
     if (typeof left === 'number' && typeof right === 'number') return sign * (left - right);
     return sign * String(left).localeCompare(String(right), 'en', { numeric: true });
   });
-}
-
-/** Whether there is more than the frame shows: only then is it a stop for the keyboard, which must be able to scroll it. */
-function useOverflow(): readonly [overflows: boolean, frame: (element: HTMLDivElement | null) => void] {
-  const [frame, setFrame] = useState<HTMLDivElement | null>(null);
-  const [overflows, setOverflows] = useState(false);
-  useEffect(() => {
-    if (frame === null) return;
-    const observer = new ResizeObserver(() =>
-      setOverflows(frame.scrollWidth > frame.clientWidth || frame.scrollHeight > frame.clientHeight),
-    );
-    for (const element of [frame, ...frame.children]) observer.observe(element);
-    return () => observer.disconnect();
-  }, [frame]);
-  return [overflows, setFrame];
 }
