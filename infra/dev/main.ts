@@ -5,13 +5,12 @@
 import { join } from 'node:path';
 import { drawFreePort, loopback } from '../network/ports.ts';
 import { projectRoot } from '../project-root.ts';
-import { announcement } from '../start/announce.ts';
-import { addressOf, publicUrlOf } from '../start/environment.ts';
+import { announceAndStay } from '../start/announce-and-stay.ts';
+import { addressOf } from '../start/environment.ts';
 import { prepare } from '../start/prepare.ts';
 import { answers, untilReady } from '../start/ready.ts';
-import { removeRun, writeRun } from '../start/run-note.ts';
 import { runProduct } from '../start/run-product.ts';
-import { runSession, untilToldToEnd } from '../start/session.ts';
+import { runSession } from '../start/session.ts';
 import { supervise } from '../start/supervise.ts';
 
 await runSession(async (session) => {
@@ -44,15 +43,5 @@ await runSession(async (session) => {
   onStarted(() => client.stop());
   await untilReady(client, () => answers(address), signal);
 
-  const run = {
-    address: publicUrlOf(place),
-    mailAddress: addressOf(place.ports.mailPages),
-    providerAddress: addressOf(place.ports.provider),
-  };
-  writeRun(folder.path, run);
-  onStarted(async () => removeRun(folder.path));
-  report(announcement(run, folder.path));
-  await untilToldToEnd(session);
-  report('Ending …');
-  return 0;
+  return announceAndStay(session, place);
 }, 0);

@@ -3,13 +3,13 @@ import { createServer } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import express from 'express';
 import type { Express } from 'express';
-import helmet from 'helmet';
 import type Provider from 'oidc-provider';
 import { providerKeys } from './keys.ts';
 import type { FakeOidc, FakeOidcOptions } from './options.ts';
 import { errorPage } from './pages/error-page.ts';
 import { homePage } from './pages/home-page.ts';
 import { signInPage } from './pages/sign-in-page.ts';
+import { standInHeaders } from './pages/stand-in-headers.ts';
 import { stylesheet, stylesheetPath } from './pages/stylesheet.ts';
 import { authenticationClass, makeProvider } from './provider.ts';
 
@@ -19,24 +19,8 @@ function makePages(provider: Provider, options: FakeOidcOptions): Express {
   const registryOrigins = originsOf([...options.redirectUris, ...options.postLogoutRedirectUris]);
   const app = express();
   app.disable('x-powered-by');
-  app.use(
-    helmet({
-      contentSecurityPolicy: {
-        useDefaults: false,
-        directives: {
-          defaultSrc: ["'none'"],
-          styleSrc: ["'self'"],
-          imgSrc: ['data:'],
-          baseUri: ["'none'"],
-          frameAncestors: ["'none'"],
-          // A form here ends in a redirect to the registry, and browsers apply this list to redirects as well.
-          formAction: ["'self'", ...registryOrigins],
-        },
-      },
-      // Over plain http on the loopback interface this header would have no meaning.
-      strictTransportSecurity: false,
-    }),
-  );
+  // A form here ends in a redirect to the registry, and browsers apply the list of form targets to redirects as well.
+  app.use(standInHeaders(registryOrigins));
   app.get(stylesheetPath, (_request, response) => void response.type('css').send(stylesheet));
   app.get('/', (_request, response) => void response.send(homePage(options.people, registryOrigins)));
 

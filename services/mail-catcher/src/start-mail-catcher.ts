@@ -3,10 +3,9 @@ import { createServer } from 'node:http';
 import type { Server } from 'node:net';
 import type { AddressInfo } from 'node:net';
 import { buffer } from 'node:stream/consumers';
-import { stylesheet, stylesheetPath } from '@cairnstep/fake-oidc/stand-in-page';
+import { standInHeaders, stylesheet, stylesheetPath } from '@cairnstep/fake-oidc/stand-in-page';
 import express from 'express';
 import type { Express } from 'express';
-import helmet from 'helmet';
 import { SMTPServer } from 'smtp-server';
 import { openMailbox } from './mailbox.ts';
 import type { CaughtMail, Mailbox } from './mailbox.ts';
@@ -38,22 +37,7 @@ const largestMailBytes = 10_000_000;
 function makePages(mailbox: Mailbox): Express {
   const app = express();
   app.disable('x-powered-by');
-  app.use(
-    helmet({
-      contentSecurityPolicy: {
-        useDefaults: false,
-        directives: {
-          defaultSrc: ["'none'"],
-          styleSrc: ["'self'"],
-          imgSrc: ['data:'],
-          baseUri: ["'none'"],
-          frameAncestors: ["'none'"],
-          formAction: ["'self'"],
-        },
-      },
-      strictTransportSecurity: false,
-    }),
-  );
+  app.use(standInHeaders());
   app.use((_request, response, next) => {
     response.set('cache-control', 'no-store');
     next();

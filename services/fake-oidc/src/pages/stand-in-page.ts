@@ -5,6 +5,7 @@ import { stylesheetPath } from './stylesheet.ts';
 
 export { html } from './html.ts';
 export type { Html } from './html.ts';
+export { standInHeaders } from './stand-in-headers.ts';
 export { stylesheet, stylesheetPath } from './stylesheet.ts';
 
 export interface StandInPage {
