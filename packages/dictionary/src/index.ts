@@ -16,7 +16,7 @@ export type { Revision, RowChange } from './history.ts';
 export { holds, isRequired, mustBeEmpty } from './is-required.ts';
 export { findMeasure, measureOf, measures } from './measures.ts';
 export { dermatomes, keyMuscles, segmentKey, spinalLevels } from './neurological-levels.ts';
-export { pseudonymAlphabet, pseudonymPattern } from './pseudonym.ts';
+export { checkCharacterOf, pseudonymAlphabet, pseudonymPattern } from './pseudonym.ts';
 export { readAs } from './read-as.ts';
 export { measureInRow, rowProblems } from './row-problems.ts';
 export type { RowProblem, RowProblemKind } from './row-problems.ts';
@@ -49,3 +49,4 @@ export type {
   ValueType,
   Variable,
 } from './types.ts';
+export { keyWithoutUnit, unitSpellings } from './units-in-names.ts';

@@ -32,6 +32,13 @@ describe('columns of a clinic', () => {
     ]);
   });
 
+  it('are matched by every spelling of a unit that files may use', () => {
+    expect(matched('sessions', { 'Peak heart rate (bpm)': ['120'], 'Body mass (pounds)': ['150'] })).toEqual([
+      { header: 'Peak heart rate (bpm)', as: 'value', variable: 'hr_peak' },
+      { header: 'Body mass (pounds)', as: 'value', variable: 'body_mass_kg', unit: 'lb' },
+    ]);
+  });
+
   it('find the column of the dictionary under every key and name of it', () => {
     for (const { key: table, variables } of dictionary.tables) {
       for (const { key, type } of variables) {

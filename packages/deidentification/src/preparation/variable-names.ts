@@ -1,5 +1,5 @@
 /** Which variable of a table a clinic's header means, and in which unit. */
-import { tableOf } from '@cairnstep/dictionary';
+import { keyWithoutUnit, tableOf, unitSpellings } from '@cairnstep/dictionary';
 import type { TableKey, Variable } from '@cairnstep/dictionary';
 
 export interface NamedVariable {
@@ -15,19 +15,7 @@ export const foldName = (name: string): string =>
     .toLowerCase()
     .replace(/[^\p{L}\p{N}%]+/gu, '');
 
-/** Other spellings of units in headers, folded. */
-const spellings: Readonly<Record<string, readonly string[]>> = {
-  'm/s': ['mps', 'mpersec'],
-  'km/h': ['kph', 'kmhr'],
-  ft: ['feet', 'foot'],
-  m: ['metres', 'meters'],
-  lb: ['lbs', 'pounds'],
-  min: ['mins', 'minutes'],
-  s: ['sec', 'secs', 'seconds'],
-  h: ['hr', 'hrs', 'hours'],
-  '%': ['pct', 'percent'],
-};
-const writtenForms = (unit: string): string[] => [unit, ...(spellings[unit] ?? [])].map(foldName);
+const writtenForms = (unit: string): string[] => [unit, ...(unitSpellings[unit] ?? [])].map(foldName);
 
 export class VariableNames {
   private readonly named = new Map<string, NamedVariable>();
@@ -48,8 +36,7 @@ export class VariableNames {
   private declareUnits(variable: Variable): void {
     const { key, name, aliases = [], unit, acceptedUnits = [] } = variable;
     if (unit === undefined) return;
-    const ending = writtenForms(unit).find((form) => key.endsWith(`_${form}`));
-    const bases = [ending === undefined ? key : key.slice(0, -ending.length - 1), name, ...aliases];
+    const bases = [keyWithoutUnit(variable) ?? key, name, ...aliases];
     for (const base of bases) {
       this.declare(base, { variable });
       for (const form of writtenForms(unit)) this.declare(base + form, { variable });

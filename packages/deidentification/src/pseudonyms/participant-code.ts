@@ -1,5 +1,5 @@
 /** The code a participant has in the registry: the letter S, 100 bits in 20 characters, and a check character. */
-import { pseudonymAlphabet, pseudonymPattern } from '@cairnstep/dictionary';
+import { checkCharacterOf, pseudonymAlphabet, pseudonymPattern } from '@cairnstep/dictionary';
 
 const bodyLength = 20;
 const bitsPerCharacter = 5;
@@ -15,11 +15,8 @@ export async function codeFromBits(bytes: Uint8Array): Promise<string> {
   return body + (await checkCharacter(body));
 }
 
-/** The first byte of the SHA-256 of all that stands before it. */
-async function checkCharacter(body: string): Promise<string> {
-  const [first = 0] = new Uint8Array(await crypto.subtle.digest('SHA-256', new TextEncoder().encode(body)));
-  return pseudonymAlphabet.charAt(first & 31);
-}
+const checkCharacter = async (body: string): Promise<string> =>
+  checkCharacterOf(new Uint8Array(await crypto.subtle.digest('SHA-256', new TextEncoder().encode(body))));
 
 /** Whether a code has the shape of a participant code and its check character is right: a mistyped one rarely has. */
 export async function hasValidCheckCharacter(code: string): Promise<boolean> {

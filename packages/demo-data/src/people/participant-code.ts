@@ -1,14 +1,11 @@
 import { createHash } from 'node:crypto';
-import { pseudonymAlphabet } from '@cairnstep/dictionary';
+import { checkCharacterOf, pseudonymAlphabet } from '@cairnstep/dictionary';
 import type { Random } from '../random.ts';
 
 const characters = 20;
 
-/** The check character of a participant code, from the SHA-256 of everything before it. */
-export function checkCharacter(code: string): string {
-  const [first = 0] = createHash('sha256').update(code).digest();
-  return pseudonymAlphabet.charAt(first & 31);
-}
+/** The check character of a participant code, from everything before it. */
+export const checkCharacter = (code: string): string => checkCharacterOf(createHash('sha256').update(code).digest());
 
 /** A participant code as a site would draw it: S, 20 random characters and the check character. */
 export function participantCode(random: Random): string {

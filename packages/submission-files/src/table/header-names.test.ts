@@ -34,6 +34,14 @@ describe('HeaderNames', () => {
     tableOf('sessions').variables.forEach(({ key }, position) => expect(names.meaning(key)).toMatchObject({ position }));
   });
 
+  it('takes a unit at the end of a key for a unit, and a word there for a part of the name', () => {
+    const names = new HeaderNames('sessions');
+    expect(names.meaning('body mass')).toMatchObject({ kind: 'column', variable: { key: 'body_mass_kg' } });
+    expect(names.meaning('HR peak (/min)')).toMatchObject({ kind: 'column', variable: { key: 'hr_peak' } });
+    // The lowest pressure is not the minute of it.
+    for (const header of ['bp_min', 'BP min']) expect(names.meaning(header)).toEqual({ kind: 'undeclared' });
+  });
+
   it('does not look closer at a header longer than any name', () => {
     expect(new HeaderNames('bouts').meaning(`${' '.repeat(50_000)}(m)`)).toEqual({ kind: 'undeclared' });
   });

@@ -1,5 +1,5 @@
 /** Which column of a table a header means, and in which unit: by key, name or alias, however it is spaced or capitalised. */
-import { tableOf } from '@cairnstep/dictionary';
+import { keyWithoutUnit, tableOf, unitSpellings } from '@cairnstep/dictionary';
 import type { TableKey, Variable } from '@cairnstep/dictionary';
 
 /** Written number × `times` ÷ `dividedBy` = stored number; whole numbers, so that the factor is exact. */
@@ -22,24 +22,9 @@ export const foldName = (text: string): string =>
     .toLowerCase()
     .replace(/[\s_.\-\u200b-\u200d\u2060\ufeff\u00ad]+/g, '');
 
-/** Spellings of the units that the dictionary stores or accepts, as they stand in column names and in brackets. */
-const spellings: Readonly<Record<string, readonly string[]>> = {
-  'm/s': ['mps', 'm/sec', 'ms-1'],
-  'km/h': ['kmh', 'kph', 'km/hr'],
-  mph: ['mi/h', 'miles/h'],
-  m: ['metre', 'metres', 'meter', 'meters'],
-  ft: ['foot', 'feet'],
-  km: ['kilometre', 'kilometres', 'kilometer', 'kilometers'],
-  kg: ['kilogram', 'kilograms'],
-  lb: ['lbs', 'pound', 'pounds'],
-  s: ['sec', 'secs', 'second', 'seconds'],
-  min: ['mins', 'minute', 'minutes'],
-  h: ['hr', 'hrs', 'hour', 'hours'],
-  '%': ['pct', 'percent'],
-  'beats/min': ['bpm', '/min'],
-};
-
-const namesOfUnit = (unit: string): string[] => [unit, ...(spellings[unit] ?? [])].map(foldName);
+/** Folded. In a clinic's brackets a unit may stand without what is counted: `Heart rate (/min)`. */
+const namesOfUnit = (unit: string): string[] =>
+  [unit, ...(unitSpellings[unit] ?? []), ...(unit === 'beats/min' ? ['/min'] : [])].map(foldName);
 
 /** Longer headers name no column; they are not looked at any closer. */
 const longestHeader = 200;
@@ -53,13 +38,6 @@ interface Named {
 }
 
 const meaningOf = (named: Named, factor: UnitFactor): HeaderMeaning => ({ kind: 'column', ...named, factor });
-
-/** The unit's place at the end of a key: `distance_m` is the distance in m. */
-function keyWithoutUnit(variable: Variable): string | null {
-  const unit = variable.unit;
-  const suffix = unit === undefined ? undefined : namesOfUnit(unit).find((name) => variable.key.endsWith(`_${name}`));
-  return suffix === undefined ? null : variable.key.slice(0, -suffix.length - 1);
-}
 
 export class HeaderNames {
   /** Folded header → column, for headers that name no unit or the stored one. */
