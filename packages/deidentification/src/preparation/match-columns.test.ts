@@ -105,3 +105,20 @@ describe('columns of a clinic', () => {
     expect(matchColumns('sessions', file, lastMonth)).toEqual([lastMonth[0], lastMonth[2]]);
   });
 });
+
+describe('a column without a cell', () => {
+  it('is matched to a day when its header speaks of a date, without a question about how it is written', () => {
+    expect(matched('consents', { 'Signing date': ['2026-01-05'], 'Valid until date': [''] })).toContainEqual({
+      header: 'Valid until date',
+      as: 'study-day',
+      variable: 'valid_until_day',
+    });
+  });
+
+  it('that was taken for days of the registry is one of dates once it holds dates', () => {
+    const lastMonth = [{ header: 'valid_until_day', as: 'value', variable: 'valid_until_day' }] as const;
+    expect(matchColumns('consents', { headers: ['valid_until_day'], rows: [['31/12/2027']] }, lastMonth)).toEqual([
+      { header: 'valid_until_day', as: 'study-day', variable: 'valid_until_day', dateFormat: 'day/month/year' },
+    ]);
+  });
+});

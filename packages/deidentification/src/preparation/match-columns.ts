@@ -29,6 +29,8 @@ interface FileColumn {
   readonly words: readonly string[];
   /** The formats that all of its cells fit; numbers of days only where the header speaks of a date. */
   readonly formats: readonly DateFormat[];
+  /** Its cells are dates; or it has none, and its header speaks of one. */
+  readonly isOfDates: boolean;
 }
 
 /**
@@ -41,7 +43,7 @@ export function matchColumns(table: TableKey, file: TextTable, lastMonth: readon
     header.trim() === '' || file.headers.indexOf(header) !== file.headers.lastIndexOf(header) ? [] : [fileColumn(file, header, position)],
   );
   for (const column of columns)
-    for (const match of lastMonth) if (match.header === column.header) proposal.add(asWrittenNow(match, column));
+    for (const match of lastMonth) if (match.header === column.header) proposal.add(asWrittenNow(table, match, column));
   for (const propose of [byName, asParticipant, byDate, byLikeness]) for (const column of columns) propose(table, column, proposal);
   return file.headers.flatMap((header) => proposal.matches.find((match) => match.header === header) ?? []);
 }
@@ -55,7 +57,7 @@ function fileColumn(file: TextTable, header: string, position: number): FileColu
   }
   const { isDate } = columnTraits(header, 'unknown');
   const formats = fittingFormats(cells).filter((format) => isDate || !format.startsWith('serial'));
-  return { header, words: headerTokens(header), formats };
+  return { header, words: headerTokens(header), formats, isOfDates: cells.length === 0 ? isDate : formats.length > 0 };
 }
 
 /** Matches so far; each column and each variable gets one. */
@@ -96,21 +98,23 @@ function namesOf(table: TableKey): VariableNames {
 const withFormat = ({ formats }: FileColumn): { dateFormat?: DateFormat } =>
   formats.length === 1 && formats[0] !== undefined ? { dateFormat: formats[0] } : {};
 
-/** Dates may be written in another way than last month, as when a workbook follows a CSV file. */
-function asWrittenNow(match: ColumnMatch, { formats }: FileColumn): ColumnMatch {
-  const [only, ...others] = formats;
+/** Dates may be written in another way than last month, as when a workbook follows a CSV file; or stand where last month nothing did. */
+function asWrittenNow(table: TableKey, match: ColumnMatch, column: FileColumn): ColumnMatch {
+  const [only, ...others] = column.formats;
+  if (match.as === 'value' && column.isOfDates && dayVariables(table).some(({ key }) => key === match.variable))
+    return { header: match.header, as: 'study-day', variable: match.variable, ...withFormat(column) };
   const isRemembered = 'dateFormat' in match && match.dateFormat !== undefined;
   if (!isRemembered || only === undefined || others.length > 0) return match;
   return { ...match, dateFormat: only };
 }
 
 const byName: Propose = (table, column, proposal) => {
-  const { header, formats } = column;
+  const { header, isOfDates } = column;
   const named = namesOf(table).find(header);
   if (named === undefined || !proposal.isOpen(header)) return;
   const { variable, unit } = named;
   if (variable.type === 'pseudonym') proposal.add({ header, as: 'participant' });
-  else if (formats.length === 0) proposal.add({ header, as: 'value', variable: variable.key, ...(unit === undefined ? {} : { unit }) });
+  else if (!isOfDates) proposal.add({ header, as: 'value', variable: variable.key, ...(unit === undefined ? {} : { unit }) });
   else if (dayVariables(table).includes(variable)) proposal.add({ header, as: 'study-day', variable: variable.key, ...withFormat(column) });
 };
 
@@ -121,9 +125,9 @@ const asParticipant: Propose = (_, { header }, proposal) => {
 };
 
 const byDate: Propose = (table, column, proposal) => {
-  const { header, words, formats } = column;
+  const { header, words, isOfDates } = column;
   const has = (list: ReadonlySet<string>) => words.some((word) => list.has(word));
-  if (!proposal.isOpen(header) || formats.length === 0) return;
+  if (!proposal.isOpen(header) || !isOfDates) return;
   if (table === 'participants') {
     const as = has(birth) ? 'birth-date' : has(injury) ? 'injury-date' : has(index) ? 'index-date' : undefined;
     if (as !== undefined) proposal.add({ header, as, ...withFormat(column) });
@@ -141,8 +145,8 @@ const dayMeanings = ({ key, name, aliases = [] }: Variable): string[] =>
       .join(' '),
   );
 
-const byLikeness: Propose = (table, { header, formats }, proposal) => {
-  if (!proposal.isOpen(header) || formats.length > 0 || headerHits(header).some(({ strength }) => strength === 'block')) return;
+const byLikeness: Propose = (table, { header, isOfDates }, proposal) => {
+  if (!proposal.isOpen(header) || isOfDates || headerHits(header).some(({ strength }) => strength === 'block')) return;
   const [best, second] = tableOf(table)
     .variables.filter(({ key, type }) => type !== 'pseudonym' && proposal.isFree(key))
     .map(({ key, name, aliases = [] }) => ({

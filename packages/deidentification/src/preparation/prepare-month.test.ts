@@ -430,3 +430,27 @@ describe('matches that cannot be followed', () => {
     expect(prepared.clean[0]?.rows).toEqual([]);
   });
 });
+
+describe('a column that was empty when it was first seen', () => {
+  const consents = (validUntil: string): RawTable => ({
+    table: 'consents',
+    headers: ['MRN', 'consent_no', 'Signing date', 'Valid until date'],
+    rows: [['A1', '1', '05.03.2024', validUntil]],
+  });
+
+  it('is not left behind for good', async () => {
+    const matches = [
+      { header: 'MRN', as: 'participant' },
+      { header: 'consent_no', as: 'value', variable: 'consent_no' },
+      { header: 'Signing date', as: 'study-day', variable: 'signed_day' },
+      { header: 'Valid until date', as: 'left-out' },
+    ] as const;
+    const indexDates = new Map([['A1', '2024-03-01']]);
+    const first = await prepareMonth({ ...month([{ ...consents(''), matches }]), indexDates });
+    const next = await prepareMonth({ ...month([consents('31.12.2027')]), key: first.key });
+    const [table] = next.clean;
+    expect(table?.headers).toContain('valid_until_day');
+    // From 1 March 2024 three years of 365 days to 1 March 2027, and 305 to 31 December.
+    expect(table?.rows[0]?.[table.headers.indexOf('valid_until_day')]).toBe('1400');
+  });
+});

@@ -66,10 +66,18 @@ export async function prepareMonth(input: MonthInput): Promise<PreparedMonth> {
     matches: tables.map(({ matches, plan }) => ({ table: plan.raw.table, matches })),
     key: {
       ...book.close(),
-      matches: new Map([...key.matches, ...tables.map(({ matches, plan }) => [plan.raw.table, matches] as const)]),
+      matches: new Map([...key.matches, ...tables.map(({ matches, plan }) => [plan.raw.table, decided(plan.raw, matches)] as const)]),
       idLengths: people.idLengths.size === 0 ? key.idLengths : people.idLengths,
     },
   };
+}
+
+/** Nobody has decided to leave a column behind of which there was nothing to see: once it has cells, it is matched like a new one. */
+function decided({ headers, rows }: RawTable, matches: readonly ColumnMatch[]): readonly ColumnMatch[] {
+  return matches.filter((match) => {
+    const position = headers.indexOf(match.header);
+    return match.as !== 'left-out' || rows.some((row) => (row[position] ?? '').trim() !== '');
+  });
 }
 
 function lookThrough(raw: RawTable, { key, safeHeaders = new Set() }: MonthInput, log: ProblemLog): LookedThrough {

@@ -49,8 +49,11 @@ export function planTable(raw: RawTable, resolved: readonly ResolvedMatch[], wit
   }
 
   function withFormat({ match, position }: ResolvedMatch): DateColumn | undefined {
+    const cells = raw.rows.map((row) => row[position] ?? '');
+    // How nothing is written needs no answer.
+    if (cells.every((cell) => cell.trim() === '')) return { position, format: 'iso' };
     const stated = 'dateFormat' in match ? match.dateFormat : undefined;
-    const format = stated ?? onlyFormat(raw.rows.map((row) => row[position] ?? ''));
+    const format = stated ?? onlyFormat(cells);
     if (format !== undefined) return { position, format };
     log.add('ambiguous-date-format', { table, columnNumber: position + 1 }, 'Say how the dates of this column are written.');
     isReady = false;
