@@ -133,7 +133,7 @@ for (const [width, height] of lowWindows)
         const { left, top, width: wide, height: high } = element.getBoundingClientRect();
         return element.contains(document.elementFromPoint(left + wide / 2, top + high / 2));
       });
-      expect(isInFront, await focusedCell(page).getAttribute('data-cell')).toBe(true);
+      expect(isInFront, `${await focusedCell(page).getAttribute('data-cell')}`).toBe(true);
       await page.keyboard.type(typed);
     }
   });

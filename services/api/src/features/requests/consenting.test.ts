@@ -18,10 +18,8 @@ const form: RequestForm = {
   agreesToReturn: 'yes',
 };
 /** As the database gives a row: what is not known is null. */
-const row = {
-  ...Object.fromEntries(tableOf('consents').variables.map(({ key }) => [key, null])),
-  ...exampleRow('consents'),
-};
+const example = exampleRow('consents');
+const row = Object.fromEntries(tableOf('consents').variables.map(({ key }) => [key, example[key] ?? null]));
 const verdict = (more: Record<string, string | number | null> = {}, asked = form) => verdictOn({ ...row, ...more }, asked, today);
 
 describe('a stored consent', () => {

@@ -7,9 +7,9 @@ import { formatCount } from '../../lib/format.ts';
 import { saveFile } from '../../lib/save-file.ts';
 import { Button } from '../../ui/button.tsx';
 import { EmptyState } from '../../ui/empty-state.tsx';
+import { ExplainedItem } from '../../ui/explained-item.tsx';
 import { Page, Section } from '../../ui/page.tsx';
-import { Select } from '../../ui/select.tsx';
-import { TextField } from '../../ui/text-field.tsx';
+import { SearchFields } from '../../ui/search-fields.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { measureAddress, variableAddress } from './addresses.ts';
 import { ExamCells, isExamCell } from './exam-cells.tsx';
@@ -42,26 +42,19 @@ export default function DictionaryPage() {
       }
     >
       <Section>
-        <div role="search" className="not-printed grid max-w-2xl gap-4 sm:grid-cols-2">
-          <TextField
-            id="dictionary-search"
-            label="Search"
-            hint="Name, column, definition or code"
-            type="search"
-            value={query ?? ''}
-            onChange={setQuery}
-            autoComplete="off"
-            spellCheck="false"
-          />
-          <Select
-            id="dictionary-scope"
-            label="Show"
-            hint="One table, or the measures"
-            value={scope}
-            onChange={(chosen) => setShown(chosen === 'all' ? null : chosen)}
-            options={scopes.map((value) => ({ value, label: scopeWords(value) }))}
-          />
-        </div>
+        <SearchFields
+          id="dictionary"
+          hint="Name, column, definition or code"
+          words={query ?? ''}
+          onWords={setQuery}
+          choice={{
+            label: 'Show',
+            hint: 'One table, or the measures',
+            value: scope,
+            onChange: (chosen) => setShown(chosen === 'all' ? null : chosen),
+            options: scopes.map((value) => ({ value, label: scopeWords(value) })),
+          }}
+        />
         <p role="status" className="pt-4 text-quiet">
           {inWords(found.variables.length, found.measures.length)}
         </p>
@@ -219,19 +212,20 @@ function Entry({
 }) {
   const codeId = useId();
   return (
-    <li className="grid gap-x-6 border-b border-hairline py-2 break-inside-avoid sm:grid-cols-[minmax(0,15rem)_minmax(0,1fr)]">
-      <div>
-        <TextLink to={to} aria-describedby={codeId}>
-          {name}
-        </TextLink>
-        <code id={codeId} className="block text-small wrap-anywhere text-quiet">
-          {code}
-        </code>
-      </div>
-      <p className="text-small">
-        {definition}
-        {unit !== undefined && unit !== '' && <span className="text-quiet"> Unit: {unit}.</span>}
-      </p>
-    </li>
+    <ExplainedItem
+      name={
+        <>
+          <TextLink to={to} aria-describedby={codeId}>
+            {name}
+          </TextLink>
+          <code id={codeId} className="block text-small wrap-anywhere text-quiet">
+            {code}
+          </code>
+        </>
+      }
+    >
+      {definition}
+      {unit !== undefined && unit !== '' && <span className="text-quiet"> Unit: {unit}.</span>}
+    </ExplainedItem>
   );
 }

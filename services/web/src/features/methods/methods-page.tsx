@@ -4,11 +4,11 @@ import { useAddressChange, useAddressParam } from '../../lib/address-state.ts';
 import { formatCount } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { EmptyState } from '../../ui/empty-state.tsx';
+import { ExplainedItem } from '../../ui/explained-item.tsx';
 import { Page, Section } from '../../ui/page.tsx';
-import { Select } from '../../ui/select.tsx';
+import { SearchFields } from '../../ui/search-fields.tsx';
 import { Table } from '../../ui/table.tsx';
 import type { Column } from '../../ui/table.tsx';
-import { TextField } from '../../ui/text-field.tsx';
 import { TextLink } from '../../ui/text-link.tsx';
 import { methodAddress } from './addresses.ts';
 import { entries, findEntries, topics, topicWords } from './entries.ts';
@@ -44,26 +44,19 @@ export default function MethodsPage() {
       }
     >
       <Section>
-        <div role="search" className="not-printed grid max-w-2xl gap-4 sm:grid-cols-2">
-          <TextField
-            id="methods-search"
-            label="Search"
-            hint="Name, use or source"
-            type="search"
-            value={query ?? ''}
-            onChange={setQuery}
-            autoComplete="off"
-            spellCheck="false"
-          />
-          <Select
-            id="methods-question"
-            label="Question"
-            hint="What you want to know"
-            value={topic}
-            onChange={(chosen) => setAsked(chosen === 'all' ? null : chosen)}
-            options={[{ value: 'all', label: 'Every question' }, ...topics.map((value) => ({ value, label: topicWords[value] }))]}
-          />
-        </div>
+        <SearchFields
+          id="methods"
+          hint="Name, use or source"
+          words={query ?? ''}
+          onWords={setQuery}
+          choice={{
+            label: 'Question',
+            hint: 'What you want to know',
+            value: topic,
+            onChange: (chosen) => setAsked(chosen === 'all' ? null : chosen),
+            options: [{ value: 'all', label: 'Every question' }, ...topics.map((value) => ({ value, label: topicWords[value] }))],
+          }}
+        />
         <p role="status" className="pt-4 text-quiet">
           {formatCount(found.length, 'page')} of {entries.length}
         </p>
@@ -113,15 +106,9 @@ function TopicSection({ title, id, entries: shown }: { readonly title: string; r
     <Section title={title} id={id}>
       <ul>
         {shown.map(({ slug, title: name, summary }) => (
-          <li
-            key={slug}
-            className="grid gap-x-6 border-b border-hairline py-2 break-inside-avoid sm:grid-cols-[minmax(0,15rem)_minmax(0,1fr)]"
-          >
-            <div>
-              <TextLink to={methodAddress(slug)}>{name}</TextLink>
-            </div>
-            <p className="text-small">{summary}</p>
-          </li>
+          <ExplainedItem key={slug} name={<TextLink to={methodAddress(slug)}>{name}</TextLink>}>
+            {summary}
+          </ExplainedItem>
         ))}
       </ul>
     </Section>
