@@ -44,6 +44,12 @@ async function drawn(page: Page): Promise<void> {
   } while ((await settled(page)) > 0);
 }
 
-/** Waits for what is moving, and says how much it was. One that is cancelled has come to rest as well. */
+/**
+ * Waits for what is moving, and says how much it was. One that is cancelled has come to rest as well, and so has a stone that stays
+ * where its fall has put it.
+ */
 const settled = (page: Page): Promise<number> =>
-  page.evaluate(async () => (await Promise.allSettled(document.getAnimations().map(({ finished }) => finished))).length);
+  page.evaluate(async () => {
+    const moving = document.getAnimations().filter(({ playState }) => playState === 'running');
+    return (await Promise.allSettled(moving.map(({ finished }) => finished))).length;
+  });
