@@ -22,6 +22,8 @@ export { readWorkbookSheets } from './reading/workbook/read-workbook-sheets.ts';
 export type { SheetsOfWorkbook, TextSheet } from './reading/workbook/read-workbook-sheets.ts';
 export { exampleMark } from './table/example-cells.ts';
 export { isFormulaLike } from './table/formula-like.ts';
+export { countUnscreened } from './screening/count-unscreened.ts';
+export { TableScreen } from './screening/table-screen.ts';
 export { TableBuilder } from './table/table-builder.ts';
 export type { CellWatch, Mends, TableOptions } from './table/table-options.ts';
 export { columnLetters } from './table/header-row.ts';

@@ -1,9 +1,11 @@
 /** The files of a submission to typed tables: screened while they are read, with mended cells in their place. */
 import type { TableKey } from '@cairnstep/dictionary';
 import {
+  countUnscreened,
   defaultWorkbookLimits,
   readTable,
   readWorkbook,
+  TableScreen,
   type FindingLog,
   type Mends,
   type TypedTable,
@@ -15,7 +17,6 @@ import { asActor } from '../../database/as-actor.ts';
 import { tableOfFile, type FileKey } from './file-key.ts';
 import { readMends, type MendsByTable } from './mends.repository.ts';
 import { readSafeHeaders } from './safe-headers.repository.ts';
-import { TableScreen } from './screen-table.ts';
 import { readContent } from './read-content.ts';
 import type { FileRecord, SubmissionRecord } from './submissions.repository.ts';
 
@@ -34,10 +35,6 @@ const keptLimits = {
   unpackedBytes: 2 * defaultWorkbookLimits.unpackedBytes,
 };
 
-/** After these nobody has looked at all of the cells of a workbook. */
-const unscreened = ['F03', 'F05', 'F40', 'F41', 'F42', 'F43', 'F48'];
-const unscreenedIn = (log: FindingLog): number => log.incomplete.size + unscreened.reduce((sum, rule) => sum + log.count(rule), 0);
-
 class SubmissionReader {
   readonly tables: Partial<Record<TableKey, TypedTable>> = {};
   readonly rows = new Map<FileKey, ReadonlyMap<TableKey, number>>();
@@ -52,14 +49,14 @@ class SubmissionReader {
   ) {}
 
   async read(key: FileKey): Promise<void> {
-    const before = unscreenedIn(this.log);
+    const before = countUnscreened(this.log);
     const screens: TableScreen[] = [];
     const read = await asActor(this.context.database, registry, (tx) => {
       const content = readContent(tx, this.submissionId, key);
       return key === 'workbook' ? this.readSheets(content, screens) : this.readFile(key, content, screens);
     });
     const identifies = screens.map((screen) => screen.report(this.log)).includes(true);
-    if (identifies || unscreenedIn(this.log) > before) this.refused.push(key);
+    if (identifies || countUnscreened(this.log) > before) this.refused.push(key);
     const counting = key === 'workbook' ? this.filledSheets(read) : Object.values(read);
     this.rows.set(key, new Map(counting.map((table) => [table.key, table.length])));
     for (const table of counting) this.tables[table.key] = table;

@@ -1,7 +1,10 @@
-/** Screens a table for what identifies a person while it is read, with the detectors that the browser ran before it was sent. */
-import { identifierClasses, IdentifierScreen, identifierWords, showableHeader, type IdentifierFinding } from '@cairnstep/deidentification';
+/** Screens a table for what identifies a person while it is read: in the browser before it is sent, and again on the server. */
+import { identifierClasses, IdentifierScreen, identifierWords, showableHeader } from '@cairnstep/deidentification';
+import type { IdentifierFinding } from '@cairnstep/deidentification';
 import type { TableKey } from '@cairnstep/dictionary';
-import { columnLetters, type CellWatch, type FindingLog } from '@cairnstep/submission-files';
+import type { FindingLog } from '../finding-log.ts';
+import { columnLetters } from '../table/header-row.ts';
+import type { CellWatch } from '../table/table-options.ts';
 
 /**
  * Only rows are screened in which a cell is not just what the dictionary allows in its column: a code of a list, a participant code of the
