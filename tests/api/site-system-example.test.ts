@@ -71,29 +71,62 @@ async function run(changes: NodeJS.ProcessEnv): Promise<Ended> {
     (error: { code: number; stdout: string; stderr: string }) => ({ code: error.code, stdout: error.stdout, stderr: error.stderr }),
   );
 }
+/** For every rule that a run has named. */
+const reasonsFor = ({ stderr }: Ended, reason: string): Record<string, string> =>
+  Object.fromEntries([...stderr.matchAll(/REASON_[A-Z]\d+/g)].map(([name]) => [name, reason]));
 const statesOf = async (month: string): Promise<string[]> =>
-  (await server.database.owner.query('select status from submissions where month = $1', [month])).rows.map((row) => row.status);
+  (await server.database.owner.query('select status from submissions where month = $1 order by created_at', [month])).rows.map(
+    (row) => row.status,
+  );
 
 describe('the example for developers', () => {
   it('submits a month and prints its receipt', async () => {
     const ended = await run({ MONTH: '2026-01' });
-    expect(ended).toMatchObject({ code: 0, stderr: '' });
+    expect(ended).toMatchObject({ code: 0 });
+    expect(ended.stderr).toContain('participants: 1 added, 0 changed, 0 unchanged, 0 removed');
     expect(SubmissionReceipt.parse(JSON.parse(ended.stdout))).toMatchObject({ site, month: '2026-01', acceptedBy: 'Training records' });
     expect(await statesOf('2026-01')).toEqual(['accepted']);
   });
 
-  it('takes a reason for warnings, and commits nothing without one', async () => {
+  it('takes a reason for each rule that warns, and commits nothing without one', async () => {
     // A resting heart rate that is unusual, not impossible.
     await writeFile(join(folder, 'sessions.csv'), csvOf('sessions', [rowOf('sessions', { hr_rest: 120 })]));
-    const refused = await run({ MONTH: '2026-02' });
-    expect(refused.code).not.toBe(0);
-    expect(refused.stderr).toContain('Some rows call for a reason. Nothing was committed.');
+    const refused = await run({ MONTH: '2026-02', REASON: 'Whatever it is', REASON_F51: 'Another rule' });
+    expect(refused.code).toBe(1);
+    expect(refused.stdout).toBe('');
+    expect(refused.stderr).toMatch(/^F22, found 1: .+ say why in REASON_F22\.$/m);
+    expect(refused.stderr).toContain('Nothing was committed.');
     expect(await statesOf('2026-02')).toEqual(['checked']);
-    const ended = await run({ MONTH: '2026-02', REASON: 'Compared with the record at the clinic' });
+    const reason = 'Compared with the record: "120" is right';
+    const ended = await run({ MONTH: '2026-02', ...reasonsFor(refused, reason) });
     expect(ended).toMatchObject({ code: 0 });
-    expect(SubmissionReceipt.parse(JSON.parse(ended.stdout)).acknowledged.map((one) => one.reason)).toContain(
-      'Compared with the record at the clinic',
+    expect(SubmissionReceipt.parse(JSON.parse(ended.stdout)).acknowledged.map((one) => one.reason)).toContain(reason);
+  });
+
+  it('removes rows of the registry only when that is said', async () => {
+    await writeFile(join(folder, 'sessions.csv'), csvOf('sessions', [rowOf('sessions', { session_no: 2 })]));
+    const refused = await run({ MONTH: '2026-02' });
+    expect(refused.code).toBe(1);
+    expect(refused.stderr).toContain('sessions: 1 added, 0 changed, 0 unchanged, 1 removed');
+    expect(refused.stderr).toContain('set REMOVE=yes');
+    expect(await statesOf('2026-02')).toEqual(['accepted', 'checked']);
+    const ended = await run({ MONTH: '2026-02', ...reasonsFor(refused, 'Compared with the record'), REMOVE: 'yes' });
+    expect(ended).toMatchObject({ code: 0 });
+    expect(SubmissionReceipt.parse(JSON.parse(ended.stdout)).tables).toContainEqual(
+      expect.objectContaining({ table: 'sessions', added: 1, removed: 1 }),
     );
+  });
+
+  it('checks just the folder, whatever an earlier run left in the submission', async () => {
+    await writeFile(join(folder, 'sessions.csv'), csvOf('sessions', [rowOf('sessions', { hr_rest: 120 })]));
+    expect((await run({ MONTH: '2026-05' })).code).toBe(1);
+    await rm(join(folder, 'sessions.csv'));
+    const ended = await run({ MONTH: '2026-05' });
+    expect(ended).toMatchObject({ code: 0 });
+    expect(SubmissionReceipt.parse(JSON.parse(ended.stdout)).files.map(({ fileName }) => fileName)).toEqual([
+      'consents.csv',
+      'participants.csv',
+    ]);
   });
 
   it('stops at errors and shows them', async () => {

@@ -51,6 +51,10 @@ export default function DevelopersPage() {
               provider’s addresses: OpenID Connect.
             </p>
             <p>The example below is the file that the registry’s own tests run.</p>
+            <p>
+              It sends just the files of its folder, and commits only what somebody has looked at: it stops at errors, at a rule that warns
+              without a reason of its own, and at rows that would be removed.
+            </p>
           </>
         }
       >
@@ -72,9 +76,9 @@ export default function DevelopersPage() {
               Files leave the clinic de-identified, as from the preparing page. The registry screens them again and refuses what identifies.
             </li>
             <li>
-              The same rules as for people: a preview, a reason for every warning, a commit bound to the preview, a receipt. A month without
-              anything: <code className="wrap-anywhere">POST /api/sites/&#123;siteId&#125;/months/&#123;month&#125;/nothing-to-report</code>
-              .
+              The same rules as for people: a preview, a reason for each rule that warns, a commit bound to the preview, a receipt. A month
+              without anything:{' '}
+              <code className="wrap-anywhere">POST /api/sites/&#123;siteId&#125;/months/&#123;month&#125;/nothing-to-report</code>.
             </li>
           </ul>
           {isDemonstration && (
