@@ -1,13 +1,16 @@
-/** What becomes of each column of the clinic's files. Folded where everything is as last month and nothing needs mending. */
+/** What becomes of each column of the clinic's files. Folded where all were matched without a question. */
 import { memo, useState } from 'react';
 import { tableName } from '../features/submissions/table-names.ts';
 import { formatCount } from '../lib/format.ts';
 import { Button } from '../ui/button.tsx';
+import { Checkbox } from '../ui/checkbox.tsx';
 import { Section } from '../ui/page.tsx';
 import { ColumnEditor } from './column-editor.tsx';
+import { nameOfColumn, staysBehind } from './columns-behind.ts';
 import { FirstDays } from './first-days.tsx';
 import { describeMatch } from './meanings.ts';
 import { ProblemList } from './problem-list.tsx';
+import { hasToDecide } from './to-decide.ts';
 import type { Month } from './use-month.ts';
 import { WordsToExplain } from './words-to-explain.tsx';
 import type { ColumnPicture, PreparedPicture, TableColumns } from './worker/protocol.ts';
@@ -40,17 +43,7 @@ export function ColumnsSection({ month, prepared }: { readonly month: Month; rea
         />
         {firstDays.length > 0 && <FirstDays month={month} places={firstDays} />}
         {columns.map((each) => (
-          <TableOfColumns
-            key={each.source}
-            columns={each}
-            month={month}
-            open={open}
-            setOpen={setOpen}
-            needsALook={
-              each.columns.some(({ unknownWords }) => unknownWords.length > 0) ||
-              problems.some(({ table, columnNumber }) => table === each.table && columnNumber !== null)
-            }
-          />
+          <TableOfColumns key={each.source} columns={each} problems={problems} month={month} open={open} setOpen={setOpen} />
         ))}
       </div>
     </Section>
@@ -59,39 +52,55 @@ export function ColumnsSection({ month, prepared }: { readonly month: Month; rea
 
 interface TableOfColumnsProps {
   readonly columns: TableColumns;
+  readonly problems: PreparedPicture['problems'];
   readonly month: Month;
   readonly open: OpenEditor;
   readonly setOpen: (open: OpenEditor) => void;
-  readonly needsALook: boolean;
 }
 
-function TableOfColumns({ columns: { source, table, columns }, month, open, setOpen, needsALook }: TableOfColumnsProps) {
-  const sent = columns.filter(({ match }) => match.as !== 'left-out').length;
-  const isNew = columns.some((column) => column.isNew && column.isMatchable);
-  const [isFolded, setFolded] = useState(!isNew && !needsALook);
-  const isOpen = !isFolded || open?.startsWith(`${source}:`) === true;
+function TableOfColumns({ columns: all, problems, month, open, setOpen }: TableOfColumnsProps) {
+  const { source, table, columns } = all;
+  const [isOpen, setUnfolded] = useState<boolean | null>(null);
+  const [isBehindOnly, setBehindOnly] = useState(false);
+  const isEditedHere = open?.startsWith(`${source}:`) === true;
+  // It stays open once the question is settled: what has the focus must not vanish.
+  if (isOpen !== true && (isEditedHere || (isOpen === null && hasToDecide(all, problems)))) setUnfolded(true);
+  const behind = columns.filter((column) => staysBehind(column, table, problems));
+  const isMixed = behind.length > 0 && behind.length < columns.length;
+  const isEdited = ({ number }: ColumnPicture) => open === `${source}:${number}`;
+  const shown = isBehindOnly && isMixed ? columns.filter((column) => behind.includes(column) || isEdited(column)) : columns;
+
+  function fold(): void {
+    setUnfolded(isOpen !== true);
+    if (isEditedHere) setOpen(null);
+  }
+
   return (
     <div className="grid gap-2">
       <div className="flex flex-wrap items-baseline justify-between gap-x-6">
         <h3 className="font-semibold">{tableName(table)}</h3>
-        <Button variant="quiet" aria-expanded={isOpen} onPress={() => setFolded(isOpen)}>
-          {isOpen ? `Fold the columns of ${tableName(table)}` : `Show the columns of ${tableName(table)}`}
+        <Button variant="quiet" aria-expanded={isOpen === true} onPress={fold}>
+          {isOpen === true ? `Fold the columns of ${tableName(table)}` : `Show the columns of ${tableName(table)}`}
         </Button>
       </div>
-      <p className="text-quiet">
-        {formatCount(sent, 'column')} used, {columns.length - sent} {columns.length - sent === 1 ? 'stays' : 'stay'} behind
-        {newsOf(columns)}.
+      <p className="text-quiet wrap-anywhere">
+        {formatCount(columns.length - behind.length, 'column')} used, {behindWords(behind)}. {newsOf(columns)}
       </p>
-      {isOpen && (
+      {isOpen === true && isMixed && (
+        <Checkbox id={`behind-only-${source}`} value={isBehindOnly} onChange={setBehindOnly}>
+          Show only what stays behind of {tableName(table)}
+        </Checkbox>
+      )}
+      {isOpen === true && (
         <ul className="border-t border-hairline">
-          {columns.map((column) => (
+          {shown.map((column) => (
             <ColumnItem
               key={column.number}
               column={column}
               source={source}
               table={table}
               matchColumn={month.matchColumn}
-              isEdited={open === `${source}:${column.number}`}
+              isEdited={isEdited(column)}
               setOpen={setOpen}
             />
           ))}
@@ -101,10 +110,17 @@ function TableOfColumns({ columns: { source, table, columns }, month, open, setO
   );
 }
 
+const behindWords = (behind: readonly ColumnPicture[]): string =>
+  behind.length === 0
+    ? 'none stays behind'
+    : `${behind.length} ${behind.length === 1 ? 'stays' : 'stay'} behind: ${behind.map(nameOfColumn).join(', ')}`;
+
 function newsOf(columns: readonly ColumnPicture[]): string {
   const fresh = columns.filter(({ isNew, isMatchable }) => isNew && isMatchable).length;
-  if (fresh === 0) return ', as last month';
-  return fresh === columns.length ? '. Look them over: next month they are remembered' : `. ${fresh} not as last month`;
+  if (fresh === 0) return 'As last month.';
+  return fresh === columns.filter(({ isMatchable }) => isMatchable).length
+    ? 'New: next month they are remembered.'
+    : `${fresh} not as last month.`;
 }
 
 interface ColumnItemProps {
@@ -137,7 +153,7 @@ const ColumnItem = memo(function ColumnItem({ column, source, table, matchColumn
           <div className="justify-self-start">
             <Button
               variant="quiet"
-              aria-label={`Change what becomes of ${name}`}
+              {...(!isEdited && { 'aria-label': `Change what becomes of ${name}` })}
               aria-expanded={isEdited}
               onPress={() => setOpen(isEdited ? null : `${source}:${number}`)}
             >

@@ -96,6 +96,15 @@ describe('sending', () => {
     expect(obstacleToSending(older, true)).toBeNull();
   });
 
+  it('waits until somebody has looked at files that are mostly of another month, and says that first', () => {
+    const of = (inside: number) => ({ ...prepared, problems: [problem], rowsInMonth: { table: 'sessions' as const, inside, dated: 111 } });
+    expect(worthALook(of(0), key)[0]).toContain('another month: 0 of 111 rows of Sessions');
+    expect(worthALook(of(56), key)).toHaveLength(1);
+    const wrong = { ...ready, prepared: { ...of(0), problems: [] } };
+    expect(obstacleToSending(wrong, false)).toContain('looked at');
+    expect(obstacleToSending(wrong, true)).toBeNull();
+  });
+
   it('is not possible where a file would be sent without its rows', () => {
     expect(obstacleToSending({ ...ready, prepared: { ...prepared, emptyTables: ['bouts'] } }, true)).toContain('cannot be prepared');
     const unknown = { ...problem, kind: 'no-participant-column' as const };

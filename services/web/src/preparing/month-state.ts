@@ -1,5 +1,6 @@
 /** What the page knows of the month, and how it changes. */
-import { formatCount } from '../lib/format.ts';
+import { tableName } from '../features/submissions/table-names.ts';
+import { formatCount, formatShare } from '../lib/format.ts';
 import type { Sending } from './messages.ts';
 import type { KeyPicture, Picture, PreparedPicture, Progress, SourcePicture } from './worker/protocol.ts';
 
@@ -72,12 +73,16 @@ export const nameOf = ({ fileName, sheet }: Pick<SourcePicture, 'fileName' | 'sh
 /** Problems that keep a whole table from being prepared. */
 const stopping: ReadonlySet<string> = new Set(['no-participant-column', 'ambiguous-date-format']);
 
-/** A correction may bring rows of months before; where they are the most, the wrong file may have been dropped: told, and not in the way. */
+/** A correction may bring rows of months before; where they are the most, the wrong file has probably been dropped. */
 export const isOfAnotherMonth = ({ inside, dated }: NonNullable<PreparedPicture['rowsInMonth']>): boolean => inside * 2 < dated;
 
 /** What somebody should have looked at before anything is sent, in a few words each. */
-export function worthALook({ problems, lengthChange }: PreparedPicture, key: KeyPicture | null): string[] {
+export function worthALook({ problems, lengthChange, rowsInMonth }: PreparedPicture, key: KeyPicture | null): string[] {
   const things: string[] = [];
+  if (rowsInMonth !== null && isOfAnotherMonth(rowsInMonth))
+    things.push(
+      `files that look like those of another month: ${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)} are of the month prepared`,
+    );
   if (key?.lacking != null) things.push('a key that lacks participants of the registry, who would get a second code');
   if (lengthChange !== null && lengthChange.newLengths > 0) things.push('record numbers of a length that nobody had last month');
   if (problems.length > 0)

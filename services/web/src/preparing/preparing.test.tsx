@@ -130,10 +130,51 @@ describe('preparing a month inside the registry', () => {
       csvFile('participants.csv', 'MRN,Sex\r\n0048-2913,female\r\n'),
       csvFile('bouts.csv', 'MRN,Session date\r\n00482913,28/03/2024\r\n'),
     );
-    await screen.findByText(/2 columns used, 0 stay behind, as last month/);
+    await screen.findByText(/2 columns used, none stays behind. As last month/);
     expect(screen.getByRole('button', { name: 'Show the columns of Participants' })).toBeTruthy();
-    await screen.findByText(/Look them over: next month they are remembered/);
-    expect(screen.getByRole('button', { name: 'Fold the columns of Bouts' })).toBeTruthy();
+    await screen.findByText(/New: next month they are remembered/);
+    expect(screen.getByRole('button', { name: 'Show the columns of Bouts' })).toBeTruthy();
+  });
+
+  it('leads past folded columns to what has to be decided, and shows what stays behind alone', async () => {
+    const { fresh } = await keyFiles();
+    embed({ month: '2024-03' });
+    await openKey(fresh);
+    await screen.findByText(/is open:/);
+    drop('#files', ...sampleFiles());
+    const parts = within(await screen.findByRole('navigation', { name: 'Parts of this sheet' }));
+    expect(parts.getAllByRole('listitem').map(({ textContent }) => textContent)).toEqual([
+      'Columns: 1 thing to decide',
+      'Preview: 6 rows in 2 tables',
+      'Save and send: 1 thing to look at before',
+    ]);
+    Element.prototype.scrollIntoView = vi.fn();
+    fireEvent.click(parts.getByRole('link', { name: 'Save and send' }));
+    expect(document.activeElement).toBe(screen.getByRole('heading', { name: 'Save and send' }));
+
+    expect(screen.getByRole('button', { name: 'Show the columns of Participants' })).toBeTruthy();
+    expect(screen.getByText(/5 columns used, 2 stay behind: Surname, Notes/)).toBeTruthy();
+    expect(screen.getByRole('button', { name: 'Fold the columns of Sessions' })).toBeTruthy();
+    fireEvent.click(screen.getByText('Show only what stays behind of Sessions'));
+    expect(screen.getAllByRole('button', { name: /^Change what becomes of/ }).map((button) => button.getAttribute('aria-label'))).toEqual([
+      'Change what becomes of Status in Sessions',
+      'Change what becomes of Therapist',
+    ]);
+    await press('Change what becomes of Therapist');
+    await press('Close');
+    await screen.findByRole('button', { name: 'Change what becomes of Therapist' });
+  });
+
+  it('says first that the files look like those of another month, and waits until somebody says that this is meant', async () => {
+    const { used } = await keyFiles();
+    embed();
+    await openKey(used);
+    await screen.findByText(/is open:/);
+    drop('#files', csvFile('sessions.csv', sessionsCsv));
+    const title = await screen.findByText(/files of another month: 0 of 4 rows of Sessions are of November 2026/);
+    expect(title.compareDocumentPosition(screen.getByRole('heading', { name: 'Columns' }))).toBe(Node.DOCUMENT_POSITION_FOLLOWING);
+    expect(screen.getByText(/I have looked at files that look like those of another month: 0 of 4 rows/)).toBeTruthy();
+    expect(screen.getByText('Ages sent as 90').nextElementSibling?.textContent).toBe('none');
   });
 
   it('takes a word of the clinic for a code, and works the preview out again', async () => {

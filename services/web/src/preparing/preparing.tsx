@@ -5,7 +5,8 @@ import { ColumnsSection } from './columns-section.tsx';
 import { FilesSection } from './files-section.tsx';
 import { KeySection } from './key/key-section.tsx';
 import type { Task } from './messages.ts';
-import { isUnsaved } from './month-state.ts';
+import { isUnsaved, worthALook } from './month-state.ts';
+import { OverviewSection } from './overview-section.tsx';
 import { PreviewSection } from './preview-section.tsx';
 import { ReplaceCodesSection } from './replace-codes-section.tsx';
 import { SendSection } from './send-section.tsx';
@@ -41,6 +42,7 @@ export function Preparing({
   const { picture, prepared, isStale } = month.state;
   useSending(month, surroundings);
   useUnsaved(isUnsaved(month.state), surroundings);
+  const lastPart = surroundings === null ? 'Save' : 'Save and send';
 
   return (
     <>
@@ -51,6 +53,12 @@ export function Preparing({
           <FilesSection month={month} monthName={formatMonth(calendarMonth)} />
           {prepared !== null && (
             <>
+              <OverviewSection
+                prepared={prepared}
+                monthName={formatMonth(calendarMonth)}
+                lastPart={lastPart}
+                toLookAt={worthALook(prepared, picture?.key ?? null).length}
+              />
               <ColumnsSection month={month} prepared={prepared} />
               <PreviewSection
                 prepared={prepared}
@@ -58,7 +66,14 @@ export function Preparing({
                 monthName={formatMonth(calendarMonth)}
                 knowsTheRegistry={surroundings !== null}
               />
-              <SendSection month={month} prepared={prepared} site={site.code} calendarMonth={calendarMonth} surroundings={surroundings} />
+              <SendSection
+                title={lastPart}
+                month={month}
+                prepared={prepared}
+                site={site.code}
+                calendarMonth={calendarMonth}
+                surroundings={surroundings}
+              />
             </>
           )}
         </>

@@ -5,7 +5,6 @@ import { formatCount, formatNumber, formatShare } from '../lib/format.ts';
 import { Facts } from '../ui/facts.tsx';
 import { Notice } from '../ui/notice.tsx';
 import { Section } from '../ui/page.tsx';
-import { isOfAnotherMonth } from './month-state.ts';
 import { StayingBehind } from './staying-behind.tsx';
 import { TablePreview } from './table-preview.tsx';
 import type { PreparedPicture } from './worker/protocol.ts';
@@ -47,14 +46,6 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
             </p>
           </Notice>
         )}
-        {rowsInMonth !== null && isOfAnotherMonth(rowsInMonth) && (
-          <Notice
-            kind="warning"
-            title={`${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)} are of ${monthName}.`}
-          >
-            <p>Are these the right files? Nobody can tell later, because dates do not leave this page.</p>
-          </Notice>
-        )}
         <Facts
           facts={[
             { term: 'Rows', value: `${formatNumber(rows)} in ${formatCount(tables.length, 'table')}` },
@@ -66,7 +57,10 @@ export const PreviewSection = memo(function PreviewSection({ prepared, isStale, 
             { term: 'Rows that stay behind', value: rowsLeftBehind === 0 ? 'none' : formatNumber(rowsLeftBehind) },
             { term: 'People', value: formatNumber(people) },
             { term: knowsTheRegistry ? 'New to the registry' : 'New to the key file', value: formatNumber(newPeople) },
-            { term: 'Ages sent as 90', value: `${formatNumber(agesTopCoded)}, because the person is 90 or older` },
+            {
+              term: 'Ages sent as 90',
+              value: agesTopCoded === 0 ? 'none' : `${formatNumber(agesTopCoded)}, because the person is 90 or older`,
+            },
           ]}
         />
         {tables.map((table) => (

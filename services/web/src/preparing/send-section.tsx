@@ -13,6 +13,7 @@ import type { Month } from './use-month.ts';
 import type { PreparedPicture } from './worker/protocol.ts';
 
 export interface SendSectionProps {
+  readonly title: string;
   readonly month: Month;
   readonly prepared: PreparedPicture;
   readonly site: string;
@@ -22,7 +23,7 @@ export interface SendSectionProps {
   readonly surroundings: Surroundings | null;
 }
 
-export function SendSection({ month, prepared, site, calendarMonth, surroundings }: SendSectionProps) {
+export function SendSection({ title, month, prepared, site, calendarMonth, surroundings }: SendSectionProps) {
   /** What was looked at: when it is worked out anew, it has to be looked at anew. */
   const [lookedAt, setLookedAt] = useState<PreparedPicture | null>(null);
   const isLookedAt = lookedAt === prepared;
@@ -30,7 +31,7 @@ export function SendSection({ month, prepared, site, calendarMonth, surroundings
   const obstacle = obstacleToSending(month.state, isLookedAt);
   return (
     <Section
-      title={surroundings === null ? 'Save' : 'Save and send'}
+      title={title}
       id="send"
       note={
         <>

@@ -2,7 +2,8 @@
 import { identifierWords } from '@cairnstep/deidentification';
 import { tableName } from '../features/submissions/table-names.ts';
 import { formatCount } from '../lib/format.ts';
-import type { ColumnPicture, FindingPicture, PreparedPicture } from './worker/protocol.ts';
+import { isWithheld, nameOfColumn } from './columns-behind.ts';
+import type { FindingPicture, PreparedPicture } from './worker/protocol.ts';
 
 export function StayingBehind({ columns, problems, findings }: Pick<PreparedPicture, 'columns' | 'problems' | 'findings'>) {
   return (
@@ -13,13 +14,7 @@ export function StayingBehind({ columns, problems, findings }: Pick<PreparedPict
   );
 }
 
-const nameOfColumn = ({ header, number }: ColumnPicture): string => (header.trim() === '' ? `column ${number}` : header);
-
 type WithProblems = Pick<PreparedPicture, 'columns' | 'problems'>;
-
-/** Whether a column that was meant to be used stays behind, because its cells seem to identify people. */
-const isWithheld = (problems: PreparedPicture['problems'], table: string, header: string): boolean =>
-  problems.some((problem) => problem.kind === 'identifiers-in-column' && problem.table === table && problem.header === header);
 
 function LeftBehind({ columns, problems }: WithProblems) {
   const tables = columns
