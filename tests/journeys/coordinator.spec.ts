@@ -72,7 +72,7 @@ test('turns the clinic’s files into an accepted month, and the same files agai
   const receipt = JSON.parse(await readFile(await (await download).path(), 'utf8')) as { readonly digest: string; readonly month: string };
   expect(receipt.month).toBe(example.month);
   await expect(page.getByText(receipt.digest)).toBeVisible();
-  const mail = await mailTo('mira.okafor@', new RegExp(`${example.month} accepted`));
+  const mail = await mailTo('mira.okafor@', new RegExp(`${month} of Alder Ridge Rehabilitation \\(S01\\) is in the registry`));
   expect(mail.text).toContain(receipt.digest);
   expect(mail.text).toContain(page.url());
 

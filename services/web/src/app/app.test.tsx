@@ -36,7 +36,9 @@ describe('the frame', () => {
   it('labels invented data as invented, and only then', async () => {
     fakeApi({ ...publicAnswers, 'GET /api/account': { ...nobody, demonstration: true } });
     renderRoutes(routes, '/');
-    expect(await screen.findByText(/Demonstration: invented data/)).toBeTruthy();
+    const label = await screen.findByText(/Demonstration: invented data/);
+    // It is printed too, with a receipt or a report.
+    expect(label.closest('.not-printed')).toBeNull();
   });
 
   it('labels them before the account is known where the page itself says so', async () => {

@@ -22,13 +22,14 @@ export function Frame() {
       >
         Skip to the content
       </a>
-      <header className="not-printed">
+      {/* On paper only the label stays: nobody may take invented rows for real ones. */}
+      <header>
         {isDemonstration && (
           <p className="border-b border-hairline px-4 py-1 text-small md:px-8">
             <strong className="font-semibold text-amber">Demonstration: invented data.</strong> No person, clinic or result here is real.
           </p>
         )}
-        <div className="flex flex-wrap items-center justify-between gap-x-6 px-4 pt-4 md:px-8">
+        <div className="not-printed flex flex-wrap items-center justify-between gap-x-6 px-4 pt-4 md:px-8">
           <Link to="/" className="flex items-center gap-3 text-ink">
             <Mark size={36} />
             <span className="text-section leading-none font-bold tracking-tight">Cairnstep</span>

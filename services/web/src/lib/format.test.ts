@@ -86,6 +86,8 @@ describe('sizes and times', () => {
   it('write an instant by the clock asked for', () => {
     expect(format.formatInstant('2026-11-03T23:05:00.000Z', 'UTC')).toBe('3 November 2026, 23:05');
     expect(format.formatInstant('2026-11-03T23:05:00.000Z', 'Europe/Oslo')).toBe('4 November 2026, 00:05');
+    expect(format.formatInstantWithZone('2026-11-03T23:05:00.000Z', 'UTC')).toBe('3 November 2026, 23:05 UTC');
+    expect(format.formatInstantWithZone('2026-11-03T23:05:00.000Z', 'Europe/Oslo')).toBe('4 November 2026, 00:05 CET');
     expect(format.formatTime('2026-11-03T23:05:00.000Z', 'Europe/Oslo')).toBe('00:05');
   });
 });

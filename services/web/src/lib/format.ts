@@ -83,6 +83,14 @@ export function formatInstant(instant: string, timeZone?: string): string {
   return `${day}, ${formatTime(instant, timeZone)}`;
 }
 
+/** For what is printed and kept, where the reader's clock is not at hand: "3 November 2026, 14:05 CET". */
+export function formatInstantWithZone(instant: string, timeZone?: string): string {
+  const zone = new Intl.DateTimeFormat('en-GB', { timeZoneName: 'short', ...(timeZone !== undefined && { timeZone }) })
+    .formatToParts(new Date(instant))
+    .find(({ type }) => type === 'timeZoneName');
+  return `${formatInstant(instant, timeZone)} ${zone?.value ?? ''}`;
+}
+
 /** The time alone: "14:05". */
 export function formatTime(instant: string, timeZone?: string): string {
   return inWords(new Date(instant), { hour: '2-digit', minute: '2-digit', hourCycle: 'h23' }, timeZone);

@@ -12,6 +12,7 @@ import { coordinatorAddresses, lockSite } from '../people/sites.repository.ts';
 import { applyChanges, checkAgain } from './apply-changes.ts';
 import { tableOfFile, tablesOf } from './file-key.ts';
 import { lockOwnSubmission } from './lock-own-submission.ts';
+import { receiptMail } from './receipt-mail.ts';
 import { lockSubmission, readFiles, settle, supersedeEarlier, type SubmissionRecord } from './submissions.repository.ts';
 
 export async function accept(
@@ -74,18 +75,6 @@ async function recipientsOf(tx: Tx, actor: Actor, siteId: string, now: Date): Pr
   return account?.email ? [account.email] : [];
 }
 
-const receiptText = (receipt: SubmissionReceipt, address: string): string =>
-  [
-    `${receipt.site.name} (${receipt.site.code}), ${receipt.month}: accepted on ${receipt.acceptedAt}, committed by ${receipt.acceptedBy}.`,
-    '',
-    ...receipt.tables.map(
-      (one) => `${one.table}: ${one.added} new, ${one.changed} changed, ${one.unchanged} unchanged, ${one.removed} removed`,
-    ),
-    '',
-    `Digest of what was committed: ${receipt.digest}`,
-    `Receipt: ${address}`,
-  ].join('\n');
-
 export const commitSubmission = (
   { config, database, clock }: Context,
   actor: Actor,
@@ -102,8 +91,7 @@ export const commitSubmission = (
       await queueMail(tx, {
         event: `submission-accepted:${submissionId}`,
         recipient,
-        subject: `Cairnstep: ${receipt.month} accepted`,
-        body: receiptText(receipt, `${config.PUBLIC_URL}/submissions/${submissionId}/receipt`),
+        ...receiptMail(receipt, `${config.PUBLIC_URL}/submissions/${submissionId}/receipt`),
       });
     }
     await recordAudit(tx, actor, {

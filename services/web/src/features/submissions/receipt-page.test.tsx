@@ -22,6 +22,7 @@ it('tells who had what accepted when, by table, by file and with every warning t
   expect(await screen.findByRole('heading', { level: 1, name: 'Receipt of November 2026' })).toBeTruthy();
   const facts = within(screen.getByRole('region', { name: 'Accepted' }));
   expect(facts.getByText('Mara Lind')).toBeTruthy();
+  expect(facts.getByText(/^1 December 2026, \d\d:\d\d \S+$/)).toBeTruthy();
   expect(facts.getByText(receipt.digest)).toBeTruthy();
   expect(screen.getByRole('row', { name: 'Sessions 88 2 0 1' })).toBeTruthy();
   expect(screen.getByRole('row', { name: `Sessions sessions.csv 90 0 ${'ab'.repeat(32)}` })).toBeTruthy();

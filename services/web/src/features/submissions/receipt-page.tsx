@@ -3,7 +3,7 @@ import type { SubmissionReceipt } from '@cairnstep/contract';
 import { useQuery } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
 import { useParams } from 'react-router-dom';
-import { formatCount, formatInstant, formatMonth } from '../../lib/format.ts';
+import { formatCount, formatInstantWithZone, formatMonth } from '../../lib/format.ts';
 import { saveFile } from '../../lib/save-file.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Button, LinkButton } from '../../ui/button.tsx';
@@ -60,7 +60,7 @@ function Receipt({ receipt }: { readonly receipt: SubmissionReceipt }) {
         note={<p>The digest names just this content on top of what the registry held before. It is in the audit log too.</p>}
       >
         <dl className="grid max-w-2xl gap-x-6 gap-y-2 sm:grid-cols-[140px_minmax(0,1fr)]">
-          <Fact name="On">{formatInstant(receipt.acceptedAt)}</Fact>
+          <Fact name="On">{formatInstantWithZone(receipt.acceptedAt)}</Fact>
           <Fact name="By">{receipt.acceptedBy}</Fact>
           <Fact name="Submission">
             <code className="break-all">{receipt.submissionId}</code>
