@@ -18,6 +18,7 @@ export const SiteMonth = z.strictObject({
   /** The submission under way, else the accepted one. */
   submissionId: Id.nullable(),
   acceptedAt: Instant.nullable(),
+  /** Of the files of the accepted submission. After a correction the month holds more: tables it brought no file of stay. */
   rows: z.number().int().nullable(),
   /** Who said when that there was nothing to report; stays known when a submission took its place. */
   closed: z.strictObject({ at: Instant, by: z.string() }).nullable(),

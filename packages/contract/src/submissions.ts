@@ -8,7 +8,7 @@ export const Table = z.enum(tableKeys);
 
 /**
  * `open`: files may come and go. `checking`: the worker reads and checks them. `checked`: findings and a preview exist.
- * `accepted`: committed. `superseded`: a later submission of the same month was accepted. `discarded`: given up by its owner.
+ * `accepted`: committed. `superseded`: accepted, and corrected by a later submission of the same month. `discarded`: given up by its owner.
  */
 export const SubmissionStatus = z.enum(['open', 'checking', 'checked', 'accepted', 'superseded', 'discarded']);
 

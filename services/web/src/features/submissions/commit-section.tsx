@@ -81,7 +81,7 @@ function Commit({ submission, onStale }: { readonly submission: Submission; read
           {removed > 0 && (
             <p className="mt-2 font-semibold text-oxide">{formatCount(removed, 'row is', 'rows are')} removed from the registry.</p>
           )}
-          <p className="mt-2">An earlier submission of the month is replaced. You can correct the month later with another submission.</p>
+          <p className="mt-2">You can correct the month later with another submission.</p>
         </>
       }
       confirm={`Commit ${month}`}

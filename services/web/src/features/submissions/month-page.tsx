@@ -108,7 +108,7 @@ function columnsFor(site: Site, isCoordinator: boolean, opening: string | null, 
       cell: ({ acceptedAt, closed }) =>
         acceptedAt === null ? <span className="text-quiet">{closed === null ? 'not yet' : 'closed'}</span> : formatInstant(acceptedAt),
     },
-    { key: 'rows', header: 'Rows', value: ({ rows }) => rows, kind: 'number' },
+    { key: 'rows', header: 'Rows in the last submission', value: ({ rows }) => rows, kind: 'number' },
     {
       key: 'next',
       header: 'Next',

@@ -7,7 +7,7 @@ export interface NextStep {
   readonly month: Month;
   /** Opened before, with or without files. */
   readonly begun: boolean;
-  /** A month accepted or closed before is being replaced. */
+  /** A month accepted or closed before is being corrected. */
   readonly correction: boolean;
   /** The day it was due on has passed. */
   readonly late: boolean;

@@ -35,7 +35,14 @@ it('leads from accepted ones to their receipt and from others back into them', a
     `/submissions/${submissionId}/receipt`,
   );
   expect(screen.getByRole('link', { name: 'Submission of November 2026' }).getAttribute('href')).toContain('/submit/3c');
-  expect(screen.getByText('replaced by a later one')).toBeTruthy();
+  expect(screen.getByText('corrected by a later submission')).toBeTruthy();
+});
+
+it('leads to the headers below a long list, and keeps the site chosen', async () => {
+  open(coordinator, page({ ...line, status: 'accepted' }));
+  const link = await screen.findByRole('link', { name: 'Headers marked as safe' });
+  expect(link.getAttribute('href')).toBe('/submissions?site=S02#safe-headers');
+  expect((await screen.findByRole('region', { name: 'Headers marked as safe' })).id).toBe('safe-headers');
 });
 
 it('says where to begin while there is none', async () => {

@@ -1,6 +1,7 @@
 /** Every submission of a site, newest first, with the way to its receipt; and which headers of its files pass. */
 import type { listSubmissions, ResponseOf, Site } from '@cairnstep/contract';
 import { useQuery } from '@tanstack/react-query';
+import { useLocation } from 'react-router-dom';
 import { usePageNumber } from '../../lib/address-state.ts';
 import { formatInstant, formatMonth } from '../../lib/format.ts';
 import { Answer } from '../../ui/answer.tsx';
@@ -16,11 +17,19 @@ import { submissionsQuery } from './submissions.queries.ts';
 type Line = ResponseOf<typeof listSubmissions>['items'][number];
 
 export default function SubmissionsPage() {
+  const { search } = useLocation();
   return (
     <Page
       title="Submissions"
-      lead={<p>What the site sent, what became of it, and the receipts.</p>}
-      note={<p>A later submission of the same month takes the place of an accepted one; both receipts stay.</p>}
+      lead={
+        <>
+          <p>What the site sent, what became of it, and the receipts.</p>
+          <p className="text-base">
+            <TextLink to={{ search, hash: '#safe-headers' }}>Headers marked as safe</TextLink>
+          </p>
+        </>
+      }
+      note={<p>A later submission corrects a month that was accepted: tables it brings no file of stay as they are. Both receipts stay.</p>}
     >
       <ForChosenSite>
         {(site, account) => (
@@ -69,7 +78,7 @@ const states: Readonly<Record<Line['status'], string>> = {
   checking: 'being checked',
   checked: 'checked, not committed',
   accepted: 'accepted',
-  superseded: 'replaced by a later one',
+  superseded: 'corrected by a later submission',
   discarded: 'given up',
 };
 
@@ -84,7 +93,7 @@ const columns: readonly Column<Line>[] = [
     value: ({ settledAt }) => settledAt,
     cell: ({ settledAt }) => (settledAt === null ? <span className="text-quiet">not yet</span> : formatInstant(settledAt)),
   },
-  { key: 'rows', header: 'Rows', value: ({ rows }) => rows, kind: 'number' },
+  { key: 'rows', header: 'Rows sent', value: ({ rows }) => rows, kind: 'number' },
   { key: 'next', header: 'Open', value: () => null, cell: (line) => <Way line={line} />, isAct: true },
 ];
 

@@ -110,7 +110,7 @@ function leadOf({ status }: Submission, isCoordinator: boolean): string {
     case 'accepted':
       return 'This submission is in the registry.';
     case 'superseded':
-      return 'This submission was accepted, and a later one of the same month has taken its place.';
+      return 'This submission was accepted, and a later submission has corrected its month.';
     case 'discarded':
       return 'This submission was given up. The registry was not touched.';
     default:
