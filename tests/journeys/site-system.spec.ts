@@ -73,7 +73,7 @@ test('a month comes from a clinic’s own system, until an administrator disable
   await elsewhere.close();
 
   await signIn(page, 'Ruth Adeyemi');
-  await page.getByRole('link', { name: 'site systems' }).click();
+  await page.getByRole('navigation', { name: 'Pages' }).getByRole('link', { name: 'Site systems' }).click();
   await expect(page.getByRole('heading', { level: 1, name: 'Site systems' })).toBeVisible();
   await look(page, 'site-system-2-register');
   await page.getByRole('button', { name: `Disable ${system.label}` }).click();

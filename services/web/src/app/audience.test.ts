@@ -31,6 +31,14 @@ describe('who meets which page', () => {
     expect(navigationFor(undefined).every(({ audience }) => audience === 'anyone')).toBe(true);
   });
 
+  it('leads those who look after people to the systems of sites as well', () => {
+    const words = (role: 'steward' | 'administrator' | 'researcher') =>
+      navigationFor(signedInAs({ role, site: null })).map(({ nav }) => nav);
+    expect(words('steward')).toContain('Site systems');
+    expect(words('administrator')).toContain('Site systems');
+    expect(words('researcher')).not.toContain('Site systems');
+  });
+
   it('begins nowhere but the first page for a stranger, and at whom to ask without a role', () => {
     expect(startFor(nobody)).toBe('/');
     expect(startFor(signedInAs())).toBe('/whom-to-ask');

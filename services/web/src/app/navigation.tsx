@@ -3,7 +3,7 @@ import { useState } from 'react';
 import { NavLink, useLocation } from 'react-router-dom';
 import { navigationFor } from './audience.ts';
 
-/** The pages this person can open. On narrow screens it folds behind one button. */
+/** The pages this person can open. On narrow screens it folds behind one button; on wide ones a steward's thirteen fit one line. */
 export function Navigation({ account }: { readonly account: Account | undefined }) {
   const { pathname } = useLocation();
   const [openAt, setOpenAt] = useState<string | null>(null);
@@ -20,7 +20,7 @@ export function Navigation({ account }: { readonly account: Account | undefined 
       >
         {open ? 'Close' : 'Pages'}
       </button>
-      <ul id="pages" className={`w-full ${open ? 'grid pt-2' : 'hidden'} md:order-2 md:flex md:flex-wrap md:gap-x-6 md:pt-2 md:pb-0`}>
+      <ul id="pages" className={`w-full ${open ? 'grid pt-2' : 'hidden'} md:order-2 md:flex md:flex-wrap md:gap-x-3.5 md:pt-2 md:pb-0`}>
         {navigationFor(account).map(({ path, nav }) => (
           <li key={path}>
             <NavLink

@@ -82,6 +82,7 @@ export const pages: readonly PageEntry[] = [
   {
     path: '/site-systems',
     audience: ['administrator', 'steward'],
+    nav: 'Site systems',
     load: () => import('../features/site-systems/site-systems-page.tsx'),
   },
   {
