@@ -40,6 +40,12 @@ describe('a frame', () => {
     expect(screen.queryByText(/^More/)).toBeNull();
   });
 
+  it('that is higher than the window, but not too wide, stands at its full height', () => {
+    const frame = open({ width: 300, height: 2000 }, { width: 300, height: 2000 });
+    expect(frame.getAttribute('tabindex')).toBeNull();
+    expect(frame.className).not.toMatch(/overflow-|max-h-/);
+  });
+
   it('that holds more says where, until it has been scrolled there', () => {
     const frame = open({ width: 500, height: 900 });
     expect(screen.getByRole('region', { name: 'Months' })).toBe(frame);

@@ -1,8 +1,10 @@
 /**
- * Holds what may be wider or higher than its room, and says in words where there is more: a line stands at a side that is cut
- * off, and a short text under the frame. Only then it is a stop for the keyboard, which must be able to scroll it.
+ * Holds what may be wider than its room. What fits stands at its full height in the page, so that a head inside can stick to the
+ * window. What is wider scrolls here, and it is said in words where there is more: a line stands at a side that is cut off, and a
+ * short text under the frame. Only then it is a stop for the keyboard, which must be able to scroll it. On small screens its
+ * height is bounded too, so that its head and its sideways scrolling stay in reach.
  */
-import { useEffect, useState } from 'react';
+import { useLayoutEffect, useState } from 'react';
 import type { ReactNode } from 'react';
 
 export interface ScrollFrameProps {
@@ -18,7 +20,7 @@ export function ScrollFrame({ labelledBy, className = '', children }: ScrollFram
     <div className={`grid min-w-0 ${className}`}>
       <div
         ref={frame}
-        className={`scrolls relative -mx-px max-h-[80vh] min-w-0 overflow-auto border-x print:border-0 ${hidden.left ? 'border-l-edge' : 'border-l-transparent'} ${hidden.right ? 'border-r-edge' : 'border-r-transparent'}`}
+        className={`scrolls relative -mx-px min-w-0 border-x print:border-0 ${overflows ? 'max-h-[80vh] overflow-auto lg:max-h-none' : ''} ${hidden.left ? 'border-l-edge' : 'border-l-transparent'} ${hidden.right ? 'border-r-edge' : 'border-r-transparent'}`}
         {...(overflows && { tabIndex: 0, role: 'region', 'aria-labelledby': labelledBy })}
       >
         {children}
@@ -64,13 +66,15 @@ interface Sight {
 function useHiddenParts(): readonly [Sight, frame: (element: HTMLDivElement | null) => void] {
   const [frame, setFrame] = useState<HTMLDivElement | null>(null);
   const [sight, setSight] = useState<Sight>({ overflows: false, hidden: nothing });
-  useEffect(() => {
+  // Before anything is drawn: a wide table must not push the page aside first.
+  useLayoutEffect(() => {
     if (frame === null) return;
     const look = () => {
-      const overflows = frame.scrollWidth > frame.clientWidth || frame.scrollHeight > frame.clientHeight;
+      const overflows = frame.scrollWidth > frame.clientWidth;
       const hidden = hiddenPartsOf(frame);
       setSight((before) => (isSame(before, { overflows, hidden }) ? before : { overflows, hidden }));
     };
+    look();
     const observer = new ResizeObserver(look);
     for (const element of [frame, ...frame.children]) observer.observe(element);
     frame.addEventListener('scroll', look, { passive: true });

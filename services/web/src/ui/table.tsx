@@ -90,7 +90,8 @@ export function Table<Row>({
               ))}
             </tr>
           </thead>
-          <tbody>
+          {/* What takes the focus does not end up under the head that sticks. */}
+          <tbody className="[&_:is(a,button,input)]:scroll-mt-20">
             {ordered.map((row) => (
               <tr key={rowKey(row)} className="hover:bg-paper">
                 {columns.map((column) => (
