@@ -17,6 +17,7 @@ export interface FilesSectionProps {
 }
 
 export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps) {
+  const mended = submission.files.reduce((sum, file) => sum + file.mended, 0);
   return (
     <Section
       title="Files"
@@ -32,8 +33,8 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
             has and the file has not are removed, after you have seen them. People and consents are only added or changed.
           </p>
           <p>
-            Participant codes and study days only: no names, no record numbers, no dates. The registry looks again, and keeps no file with
-            any of them. Of a workbook only the cells are kept.
+            Participant codes and study days only: no names, no record numbers, no dates. A file with any of them is not sent: it is looked
+            through in your browser first, and by the registry again. Of a workbook only the cells are kept.
           </p>
         </>
       }
@@ -59,7 +60,7 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
         {isOpen && (
           <FileDrop
             label={`The files are already prepared: workbook or CSV files of ${formatMonth(submission.month)}`}
-            hint="Drop them here, all tables of the month at once or one by one."
+            hint={`All tables of the month at once, or one by one. Each is looked through here before it is sent.${mended > 0 ? ' A file that comes in the place of another takes with it the cells mended on this page.' : ''}`}
             accept={['.xlsx', '.csv']}
             multiple
             isDisabled={outgoing.isSending}
@@ -71,8 +72,8 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
             <TemplateLink site={submission.site} month={submission.month} />
           </div>
         )}
-        <OutgoingList outgoing={outgoing} held={submission.files.map(({ table }) => table ?? 'workbook')} />
-        <SentFiles submission={submission} isOpen={isOpen && !outgoing.isSending} onChoose={outgoing.add} />
+        <OutgoingList submission={submission} outgoing={outgoing} />
+        <SentFiles submission={submission} isOpen={isOpen && !outgoing.isSending} unsent={outgoing.files.length} onChoose={outgoing.add} />
       </div>
     </Section>
   );

@@ -1,21 +1,16 @@
-/** Files chosen in this browser that the registry does not have yet. */
+/** Files chosen in this browser: looked through here as soon as their table is known, and sent when the reader says so. */
 import type { Submission } from '@cairnstep/contract';
 import { showableFileName } from '@cairnstep/deidentification';
+import { useQueryClient } from '@tanstack/react-query';
 import { useCallback, useRef, useState } from 'react';
 import { useStayOnPage } from '../../lib/use-stay-on-page.ts';
+import { lookInWorker } from './look-in-worker.ts';
+import { mayBeSent } from './outgoing-file.ts';
+import type { OutgoingFile } from './outgoing-file.ts';
 import { recogniseFile } from './recognise-table.ts';
+import { safeHeadersQuery } from './safe-headers.queries.ts';
 import { useSendFile } from './submissions.queries.ts';
 import type { FileKey, TableKey } from './submissions.queries.ts';
-
-export interface OutgoingFile {
-  readonly id: number;
-  readonly file: File;
-  /** `null`: its name does not tell; the reader has to. */
-  readonly table: FileKey | null;
-  /** How much has left, from 0 to 1; `null` while it waits. */
-  readonly sent: number | null;
-  readonly error: unknown;
-}
 
 export interface Outgoing {
   readonly files: readonly OutgoingFile[];
@@ -23,8 +18,9 @@ export interface Outgoing {
   /** `table`: what the reader said the files are of; without it their names decide. */
   readonly add: (files: readonly File[], table?: FileKey) => void;
   readonly move: (id: number, table: TableKey) => void;
+  readonly lookAgain: (id: number) => void;
   readonly leaveOut: (id: number) => void;
-  /** One after the other; a file that fails stays here with its reason. Resolves to how many arrived. */
+  /** Those that may be sent, one after the other; a file that fails stays here with its reason. Resolves to how many arrived. */
   readonly send: () => Promise<number>;
   readonly stop: () => void;
 }
@@ -34,23 +30,49 @@ export function useOutgoingFiles({ id: submissionId, site, month }: Pick<Submiss
   const [control, setControl] = useState<AbortController | null>(null);
   const nextId = useRef(0);
   const { mutateAsync } = useSendFile(submissionId);
+  const cache = useQueryClient();
 
-  const add = useCallback((chosen: readonly File[], table?: FileKey) => {
-    const added = chosen.map((file) => ({
-      id: nextId.current++,
-      file,
-      table: table ?? recogniseFile(file.name),
-      sent: null,
-      error: null,
-    }));
-    // The same file chosen again takes the place of its earlier self.
-    setFiles((before) => [...before.filter(({ file }) => !chosen.some(({ name }) => name === file.name)), ...added]);
-  }, []);
   const change = useCallback(
     (id: number, to: Partial<OutgoingFile>) => setFiles((before) => before.map((file) => (file.id === id ? { ...file, ...to } : file))),
     [],
   );
-  const leaveOut = useCallback((id: number) => setFiles((before) => before.filter((file) => file.id !== id)), []);
+  const lookAt = useCallback(
+    async (id: number, file: File, table: FileKey) => {
+      // Moved to another table meanwhile, it has to be looked through as a file of that one.
+      const tell = (to: Partial<OutgoingFile>) =>
+        setFiles((before) => before.map((one) => (one.id === id && one.table === table ? { ...one, ...to } : one)));
+      try {
+        const { headers } = await cache.fetchQuery(safeHeadersQuery(site.id));
+        tell({ looked: await lookInWorker({ file, table, safeHeaders: headers.map(({ header }) => header) }) });
+      } catch (error) {
+        tell({ error });
+      }
+    },
+    [cache, site.id],
+  );
+  const add = useCallback(
+    (chosen: readonly File[], table?: FileKey) => {
+      const added = chosen.map((file) => ({
+        id: nextId.current++,
+        file,
+        table: table ?? recogniseFile(file.name),
+        looked: null,
+        sent: null,
+        error: null,
+      }));
+      // The same file chosen again takes the place of its earlier self.
+      setFiles((before) => [...before.filter(({ file }) => !chosen.some(({ name }) => name === file.name)), ...added]);
+      for (const one of added) if (one.table !== null) void lookAt(one.id, one.file, one.table);
+    },
+    [lookAt],
+  );
+  const lookAs = (id: number, table: FileKey | null) => {
+    const file = files.find((one) => one.id === id)?.file;
+    if (file === undefined || table === null) return;
+    change(id, { table, looked: null, error: null });
+    void lookAt(id, file, table);
+  };
+  const leaveOut = (id: number) => setFiles((before) => before.filter((file) => file.id !== id));
 
   useStayOnPage(control !== null);
 
@@ -58,7 +80,7 @@ export function useOutgoingFiles({ id: submissionId, site, month }: Pick<Submiss
     const sending = new AbortController();
     setControl(sending);
     let arrived = 0;
-    for (const { id, table, file } of files) {
+    for (const { id, table, file } of files.filter(mayBeSent)) {
       if (table === null || sending.signal.aborted) continue;
       change(id, { sent: 0, error: null });
       try {
@@ -79,20 +101,10 @@ export function useOutgoingFiles({ id: submissionId, site, month }: Pick<Submiss
     files,
     isSending: control !== null,
     add,
-    move: (id, table) => change(id, { table, error: null }),
+    move: lookAs,
+    lookAgain: (id) => lookAs(id, files.find((one) => one.id === id)?.table ?? null),
     leaveOut,
     send,
     stop: () => control?.abort(),
   };
-}
-
-/** What keeps these files from being sent, in words; `null` when nothing does. */
-export function obstacleOf(files: readonly OutgoingFile[]): string | null {
-  const without = files.find(({ table }) => table === null);
-  if (without !== undefined) return `Choose the table of ${without.file.name}.`;
-  const twice = files.find(({ id, table }) => files.some((other) => other.id !== id && other.table === table));
-  if (twice === undefined) return null;
-  return twice.table === 'workbook'
-    ? 'A month has one workbook. Leave out one of the two.'
-    : 'Two files are for the same table. Move one of them, or leave it out.';
 }

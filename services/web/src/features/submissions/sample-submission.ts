@@ -1,6 +1,7 @@
 /** A submission as tests meet it: one clinic, November 2026. Never part of the built client. */
 import type { Submission, SubmissionReceipt } from '@cairnstep/contract';
 import type { TableKey } from '@cairnstep/dictionary';
+import { writeTemplate } from '@cairnstep/submission-files';
 import { signedInAs, site } from '../../testing/fake-api.ts';
 
 export const submissionId = '2b1b7c2e-8a57-4a0b-9d0a-5d1f0a9b7c33';
@@ -74,3 +75,10 @@ export const receipt: SubmissionReceipt = {
   files: [{ table: 'sessions', fileName: 'sessions.csv', sha256: 'ab'.repeat(32), rows: 90 }],
   acknowledged: [{ rule: 'T04', count: 2, reason: 'Short steps are right for this person.' }],
 };
+
+/** The template as it is handed out: nothing in it but its example rows. */
+export async function sampleWorkbook(): Promise<File> {
+  const pieces: Uint8Array<ArrayBuffer>[] = [];
+  for await (const piece of writeTemplate({ site: site.name, month: '2026-11', participants: [] })) pieces.push(new Uint8Array(piece));
+  return new File(pieces, 'month.xlsx');
+}

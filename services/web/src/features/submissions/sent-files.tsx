@@ -4,17 +4,19 @@ import { FileTrigger } from 'react-aria-components/FileTrigger';
 import { formatBytes, formatCount } from '../../lib/format.ts';
 import { announce } from '../../ui/announcer.tsx';
 import { Button } from '../../ui/button.tsx';
+import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
 import { ErrorNotice } from '../../ui/error-notice.tsx';
+import { lossWords } from './send-files.tsx';
 import { useRemoveFile } from './submissions.queries.ts';
-import type { FileKey } from './submissions.queries.ts';
+import type { FileKey, SentFile } from './submissions.queries.ts';
 import { tableName, tables } from './table-names.ts';
-
-type SentFile = Submission['files'][number];
 
 export interface SentFilesProps {
   readonly submission: Submission;
   /** Files may come and go now. */
   readonly isOpen: boolean;
+  /** Files chosen, not sent yet. */
+  readonly unsent: number;
   readonly onChoose: (files: readonly File[], table: FileKey) => void;
 }
 
@@ -22,10 +24,12 @@ export interface SentFilesProps {
 const inOrder = (files: readonly SentFile[]): readonly SentFile[] =>
   [null, ...tables.map(({ key }) => key)].flatMap((key) => files.filter(({ table }) => table === key));
 
-export function SentFiles({ submission: { id, files }, isOpen, onChoose }: SentFilesProps) {
+export function SentFiles({ submission: { id, files }, isOpen, unsent, onChoose }: SentFilesProps) {
   const remove = useRemoveFile(id);
-  const takeOut = (file: FileKey, name: string) =>
-    remove.mutate(file, { onSuccess: () => announce(`${name.slice(0, 1).toUpperCase()}${name.slice(1)} was taken out.`) });
+  async function takeOut(file: FileKey, name: string): Promise<void> {
+    await remove.mutateAsync(file);
+    announce(`${name.slice(0, 1).toUpperCase()}${name.slice(1)} was taken out.`);
+  }
   const held = new Set(files.flatMap(({ table, tables: of }) => of ?? (table === null ? [] : [table])));
   const missing = tables.filter(({ key }) => !held.has(key)).map(({ name }) => name.toLowerCase());
   // What a workbook holds is known after the check.
@@ -54,14 +58,12 @@ export function SentFiles({ submission: { id, files }, isOpen, onChoose }: SentF
                         Replace
                       </Button>
                     </FileTrigger>
-                    <Button
-                      variant="quiet"
+                    <TakeOut
+                      name={name}
+                      mended={file.mended}
                       isPending={remove.isPending && remove.variables === key}
-                      onPress={() => takeOut(key, name)}
-                      aria-label={`Take out ${name}`}
-                    >
-                      Take out
-                    </Button>
+                      onTakeOut={() => takeOut(key, name)}
+                    />
                   </span>
                 )}
               </li>
@@ -69,11 +71,33 @@ export function SentFiles({ submission: { id, files }, isOpen, onChoose }: SentF
           })}
         </ul>
       )}
-      {isKnown && missing.length > 0 && (
-        <p className="text-quiet">{files.length === 0 ? 'No file yet.' : `No file yet for: ${missing.join(', ')}.`}</p>
-      )}
+      {files.length === 0 && unsent === 0 && <p className="text-quiet">No file yet.</p>}
+      {files.length > 0 && isKnown && missing.length > 0 && <p className="text-quiet">No file sent yet for: {missing.join(', ')}.</p>}
       {remove.isError && <ErrorNotice error={remove.error} />}
     </div>
+  );
+}
+
+interface TakeOutProps {
+  readonly name: string;
+  /** Cells mended on screen, which go with the file. */
+  readonly mended: number;
+  readonly isPending: boolean;
+  readonly onTakeOut: () => Promise<unknown>;
+}
+
+function TakeOut({ name, mended, isPending, onTakeOut }: TakeOutProps) {
+  const shared = { variant: 'quiet', isPending, 'aria-label': `Take out ${name}`, children: 'Take out' } as const;
+  if (mended === 0) return <Button {...shared} onPress={() => void onTakeOut().catch(() => undefined)} />;
+  return (
+    <ConfirmDialog
+      trigger={<Button {...shared} />}
+      title={`Take out ${name}?`}
+      consequence={<p>{lossWords(mended)}</p>}
+      confirm="Take it out"
+      danger
+      onConfirm={onTakeOut}
+    />
   );
 }
 

@@ -107,6 +107,9 @@ export function useCloseMonth(siteId: string) {
 /** A CSV file is of one table, the workbook of several. */
 export type FileKey = TableKey | 'workbook';
 
+/** A file that the registry has. */
+export type SentFile = Submission['files'][number];
+
 export const useRemoveFile = (submissionId: string) =>
   useChange((file: FileKey) =>
     file === 'workbook' ? call(removeSubmissionWorkbook, { submissionId }) : call(removeSubmissionFile, { submissionId, table: file }),

@@ -7,10 +7,23 @@ import { renderRoutes } from '../../testing/render.tsx';
 import { Announcer } from '../../ui/announcer.tsx';
 import MonthPage from './month-page.tsx';
 import ReceiptPage from './receipt-page.tsx';
-import { checked, coordinator, error, fileOf, receipt, sample, submissionId, therapist, warning } from './sample-submission.ts';
+import { fakeLookWorker } from './fake-look-worker.ts';
+import {
+  checked,
+  coordinator,
+  error,
+  fileOf,
+  receipt,
+  sample,
+  sampleWorkbook,
+  submissionId,
+  therapist,
+  warning,
+} from './sample-submission.ts';
 import SubmitPage from './submit-page.tsx';
 
 const path = `/api/submissions/${submissionId}`;
+const safeHeaders = `GET /api/sites/${sample().site.id}/safe-headers`;
 const places = { items: [], page: 1, pageSize: 50, total: 0 };
 
 const routes = [
@@ -32,9 +45,11 @@ function open(submission: Submission, answers: Readonly<Record<string, unknown>>
     'GET /api/account': coordinator,
     [`GET ${path}`]: submission,
     [`GET ${path}/findings`]: places,
+    [safeHeaders]: { headers: [] },
     ...answers,
   });
   fakeUpload();
+  fakeLookWorker();
   return { asked, router: renderRoutes(routes, address) };
 }
 
@@ -45,7 +60,7 @@ async function choose(...files: readonly File[]): Promise<void> {
   fireEvent.change(input, { target: { files } });
 }
 
-const csv = (name: string) => new File(['a,b\r\n'], name, { type: 'text/csv' });
+const csv = (name: string) => new File(['participant\r\n'], name, { type: 'text/csv' });
 const said = () =>
   screen
     .getAllByRole('status')
@@ -101,8 +116,12 @@ describe('files of a month', () => {
     const files = await screen.findByRole('list', { name: 'Files sent' });
     expect(files.textContent).toContain('2.4\u00A0kB, 1\u202F204 rows, 2 cells mended on screen, SHA-256 abababababab');
     expect(within(files).getAllByRole('listitem')).toHaveLength(1);
-    expect(screen.getByText(/^No file yet for: participants, consents, /).textContent).not.toMatch(/\bsessions\b/);
+    expect(screen.getByText(/^No file sent yet for: participants, consents, /).textContent).not.toMatch(/\bsessions\b/);
     await press('Take out the file of sessions');
+    const question = screen.getByRole('alertdialog', { name: 'Take out the file of sessions?' });
+    expect(question.textContent).toContain('2 cells mended on this page are lost with the old file.');
+    expect(asked.some(({ method }) => method === 'DELETE')).toBe(false);
+    await press('Take it out');
     expect(await screen.findByText('No file yet.')).toBeTruthy();
     expect(asked.some(({ method }) => method === 'DELETE')).toBe(true);
   });
@@ -113,7 +132,7 @@ describe('files of a month', () => {
       [`PUT ${path}/workbook`]: sample({ files: [sent] }),
       [`DELETE ${path}/workbook`]: sample(),
     });
-    await choose(new File(['PK'], 'month.xlsx'));
+    await choose(await sampleWorkbook());
     expect(screen.getByText(/a workbook: each of its sheets is a table/)).toBeTruthy();
     await press('Send 1 file');
     await waitFor(() => expect(puts(asked)).toEqual(['/workbook?fileName=month.xlsx']));

@@ -1,6 +1,7 @@
 /** From a file that was dropped to tables of text. */
 import { readCsvText, readWorkbookSheets } from '@cairnstep/submission-files';
 import type { CsvText, Delimiter, TextSheet, Unreadable } from '@cairnstep/submission-files';
+import { bytesOfFile } from '../../lib/bytes-of-file.ts';
 import type { Watch } from './serve.ts';
 
 export type ReadFile =
@@ -32,19 +33,13 @@ export async function readFile(file: File, watch: Watch, delimiter?: Delimiter):
   }
 }
 
-/** A stream is not iterable in every browser, so it is read by its reader. */
 async function* bytesOf(file: File, watch: Watch): AsyncGenerator<Uint8Array> {
-  const reader = file.stream().getReader();
   let read = 0;
-  for (;;) {
-    const { done, value } = await reader.read();
-    if (done) {
-      watch.tell({ what: `Reading ${file.name}`, bytes: null });
-      return;
-    }
-    yield value;
-    read += value.length;
+  for await (const piece of bytesOfFile(file)) {
+    yield piece;
+    read += piece.length;
     watch.tell({ what: `Reading ${file.name}`, bytes: { done: read, of: file.size } });
     await watch.pause();
   }
+  watch.tell({ what: `Reading ${file.name}`, bytes: null });
 }
