@@ -14,6 +14,7 @@ const key: KeyPicture = {
   secrets: 1,
   tables: [],
   isUnsaved: false,
+  changes: null,
   lacking: null,
   codesToReplace: 0,
 };
@@ -41,6 +42,7 @@ const prepared: PreparedPicture = {
   rowsLeftBehind: 0,
   people: 1,
   newPeople: 1,
+  newToKey: null,
   agesTopCoded: 0,
   lengthChange: null,
   rowsInMonth: { table: 'sessions', inside: 1, dated: 1 },
@@ -103,6 +105,15 @@ describe('sending', () => {
     const wrong = { ...ready, prepared: { ...of(0), problems: [] } };
     expect(obstacleToSending(wrong, false)).toContain('looked at');
     expect(obstacleToSending(wrong, true)).toBeNull();
+  });
+
+  it('waits, where nobody says whom the registry holds, until somebody has looked at a key that knows fewer than half of the people', () => {
+    const offline = { ...prepared, people: 5 };
+    expect(worthALook({ ...offline, newToKey: 2 }, key)).toEqual([]);
+    expect(worthALook({ ...offline, newToKey: 3 }, key)).toEqual([expect.stringContaining('knows 2 of the 5 people')]);
+    const stranger = { ...ready, prepared: { ...offline, newToKey: 5 } };
+    expect(obstacleToSending(stranger, false)).toContain('looked at');
+    expect(obstacleToSending(stranger, true)).toBeNull();
   });
 
   it('is not possible where a file would be sent without its rows', () => {

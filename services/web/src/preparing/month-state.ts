@@ -1,6 +1,6 @@
 /** What the page knows of the month, and how it changes. */
 import { tableName } from '../features/submissions/table-names.ts';
-import { formatCount, formatShare } from '../lib/format.ts';
+import { formatCount, formatNumber, formatShare } from '../lib/format.ts';
 import type { Sending } from './messages.ts';
 import type { KeyPicture, Picture, PreparedPicture, Progress, SourcePicture } from './worker/protocol.ts';
 
@@ -77,13 +77,17 @@ const stopping: ReadonlySet<string> = new Set(['no-participant-column', 'ambiguo
 export const isOfAnotherMonth = ({ inside, dated }: NonNullable<PreparedPicture['rowsInMonth']>): boolean => inside * 2 < dated;
 
 /** What somebody should have looked at before anything is sent, in a few words each. */
-export function worthALook({ problems, lengthChange, rowsInMonth }: PreparedPicture, key: KeyPicture | null): string[] {
+export function worthALook({ problems, lengthChange, rowsInMonth, people, newToKey }: PreparedPicture, key: KeyPicture | null): string[] {
   const things: string[] = [];
   if (rowsInMonth !== null && isOfAnotherMonth(rowsInMonth))
     things.push(
       `files that look like those of another month: ${formatShare(rowsInMonth.inside, rowsInMonth.dated)} rows of ${tableName(rowsInMonth.table)} are of the month prepared`,
     );
   if (key?.lacking != null) things.push('a key that lacks participants of the registry, who would get a second code');
+  if (newToKey !== null && newToKey * 2 > people)
+    things.push(
+      `a key that knows ${formatNumber(people - newToKey)} of the ${formatCount(people, 'person', 'people')} in the files, as in a first month: with an older key file the others get a second code`,
+    );
   if (lengthChange !== null && lengthChange.newLengths > 0) things.push('record numbers of a length that nobody had last month');
   if (problems.length > 0)
     things.push(`${formatCount(problems.length, 'thing')} to mend or to know; what cannot be read stays at the clinic`);

@@ -13,6 +13,7 @@ const prepared: PreparedPicture = {
   rowsLeftBehind: 1,
   people: 2,
   newPeople: 0,
+  newToKey: null,
   agesTopCoded: 0,
   lengthChange: null,
   rowsInMonth: null,

@@ -40,7 +40,9 @@ function whatWasPrepared({ site, calendarMonth, prepared, replacedCodes }: Omit<
     `Ages written as 90: ${agesTopCoded}`,
     ...(replacedCodes.length === 0
       ? []
-      : [`Codes to be replaced: ${replacedCodes.length}. Give replaced-codes.csv to the data steward before the tables are committed.`]),
+      : [
+          `Codes to be replaced: ${replacedCodes.length}. A coordinator gives replaced-codes.csv to the registry, on its page “Site key”, before the tables are sent.`,
+        ]),
     '',
   ].join('\r\n');
 }

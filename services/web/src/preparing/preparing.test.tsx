@@ -67,6 +67,8 @@ async function makeKeyFiles(): Promise<KeyFiles> {
   return { fresh: new File([file.text], file.name), used: new File([saved.file.text], saved.file.name) };
 }
 
+const savedNames = () => vi.mocked(saveFile).mock.calls.map(([name]) => name);
+
 function drop(within: string, ...files: readonly File[]): void {
   const input = document.querySelector(`${within} input[type=file]`);
   if (input === null) throw new Error(`nothing takes files in ${within}`);
@@ -105,7 +107,7 @@ describe('preparing a month inside the registry', () => {
     fireEvent.click(screen.getByText(/I have looked at/));
     await screen.findByText('Save the key file first.');
     await press('Save the key file');
-    await waitFor(() => expect(vi.mocked(saveFile).mock.calls.map(([name]) => name)).toEqual(['S01-site-key-r3.json']));
+    await waitFor(() => expect(savedNames()).toEqual([expect.stringMatching(/^S01-site-key-r3-2026-12-01-[0-9a-f]{4}\.json$/)]));
     await waitFor(() => expect(send).toHaveProperty('disabled', false));
     fireEvent.click(send);
     await waitFor(() => expect(ofKind('send')).toMatchObject([{ tables: [{ table: 'sessions', rows: 5 }], replacedCodes: [] }]));
@@ -215,6 +217,16 @@ describe('the site key', () => {
     expect(screen.getByText(/Open the site key first/)).toBeTruthy();
   });
 
+  it('shows the passphrase while it is typed only where that is asked for', async () => {
+    const { fresh } = await keyFiles();
+    embed();
+    expect(await screen.findByLabelText(/^Passphrase/)).toHaveProperty('type', 'password');
+    fireEvent.click(screen.getByText('Show what I type'));
+    expect(screen.getByLabelText(/^Passphrase/)).toHaveProperty('type', 'text');
+    await openKey(fresh, passphrase.toUpperCase());
+    await screen.findByText(/is open:/);
+  });
+
   it('asks for file and passphrase where they are missing', async () => {
     embed();
     await press('Open the key');
@@ -250,8 +262,8 @@ describe('the site key', () => {
     expect(saveFile).not.toHaveBeenCalled();
     fill(/^Word 5/, words[4] ?? '');
     await press('Make the key and save its file');
-    await screen.findByText(/The key file was saved as S01-site-key-r1.json/);
-    expect(vi.mocked(saveFile).mock.calls[0]?.[0]).toBe('S01-site-key-r1.json');
+    await screen.findByText(/The key file was saved as S01-site-key-r1-2026-12-01-[0-9a-f]{4}.json/);
+    expect(savedNames()).toEqual([expect.stringMatching(/^S01-site-key-r1-/)]);
   });
 
   it('alone shows what it holds, and tells the registry of codes that were joined once its file is saved', async () => {
@@ -322,19 +334,27 @@ describe('the site key', () => {
   });
 });
 
+function openFromDisk(): void {
+  render(
+    <I18nProvider locale="en-GB">
+      <Offline workroom={inProcessWorkroom()} today={today} />
+    </I18nProvider>,
+  );
+}
+
+async function begin(month: string): Promise<void> {
+  fill(/Code of your site/, 's01');
+  fill(/^Month/, month);
+  await press('Begin');
+}
+
 describe('the edition opened from disk', () => {
   it('asks for site and month, and saves cleaned files with a text that says what was prepared', async () => {
     const { used } = await keyFiles();
-    render(
-      <I18nProvider locale="en-GB">
-        <Offline workroom={inProcessWorkroom()} today={today} />
-      </I18nProvider>,
-    );
+    openFromDisk();
     await press('Begin');
     expect(within(await screen.findByRole('alert')).getAllByRole('link')).toHaveLength(2);
-    fill(/Code of your site/, 's01');
-    fill(/^Month/, '2026-11');
-    await press('Begin');
+    await begin('2026-11');
     await openKey(used);
     await screen.findByText(/is open:/);
     drop('#files', ...sampleFiles());
@@ -346,5 +366,27 @@ describe('the edition opened from disk', () => {
     const csv = saved.get('sessions.csv') as ArrayBuffer;
     const digest = Buffer.from(await crypto.subtle.digest('SHA-256', csv)).toString('hex');
     expect(saved.get('what-was-prepared.txt')).toContain(digest);
+  });
+
+  it('says that it cannot know the codes of the registry, and waits where the key knows few of the people', async () => {
+    const { fresh, used } = await keyFiles();
+    openFromDisk();
+    await begin('2024-03');
+    await openKey(used);
+    await screen.findByText(/is open:/);
+    drop('#files', ...sampleFiles());
+    await screen.findByText(/cannot know which codes the registry holds: use the newest key file/);
+    expect(screen.getByText(/knows 2 of the 2 people in these files/)).toBeTruthy();
+    expect(screen.queryByText(/I have looked at .*a key that knows/)).toBeNull();
+    expect(screen.getByText('The key file holds everything that later months need.')).toBeTruthy();
+    cleanup();
+    openFromDisk();
+    await begin('2024-03');
+    await openKey(fresh);
+    await screen.findByText(/is open:/);
+    drop('#files', ...sampleFiles());
+    await screen.findByText(/I have looked at a key that knows 0 of the 2 people in the files/);
+    expect(screen.getByText('Say that you have looked at what stands above.')).toBeTruthy();
+    expect(screen.getByText(/holds what its file does not: 2 new people; how columns of Participants, Sessions are read/)).toBeTruthy();
   });
 });

@@ -3,6 +3,7 @@ import { formatCount } from '../lib/format.ts';
 import { Button } from '../ui/button.tsx';
 import { Notice } from '../ui/notice.tsx';
 import { Section } from '../ui/page.tsx';
+import { changeWords } from './key/change-words.ts';
 import { KeyRefusal } from './key/key-refusal.tsx';
 import type { Surroundings } from './surroundings.ts';
 import { useAct } from './use-act.ts';
@@ -15,7 +16,8 @@ export interface ReplaceCodesSectionProps {
   readonly surroundings: Surroundings | null;
 }
 
-export function ReplaceCodesSection({ month, keyPicture: { isUnsaved, codesToReplace }, surroundings }: ReplaceCodesSectionProps) {
+export function ReplaceCodesSection({ month, keyPicture, surroundings }: ReplaceCodesSectionProps) {
+  const { isUnsaved, codesToReplace } = keyPicture;
   const { sending } = month.state;
   const saving = useAct();
   const telling = useAct();
@@ -33,7 +35,7 @@ export function ReplaceCodesSection({ month, keyPicture: { isUnsaved, codesToRep
       <div className="grid max-w-2xl justify-items-start gap-4">
         {isUnsaved && (
           <>
-            <p>The key has changed. Save its file on your site’s own storage, twice.</p>
+            <p>The key holds what its file does not: {changeWords(keyPicture).join('; ')}. Save it on your site’s own storage, twice.</p>
             <Button variant="primary" isPending={saving.isPending} onPress={() => void saving.run(month.saveKey)}>
               Save the key file
             </Button>

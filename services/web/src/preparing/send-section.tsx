@@ -2,7 +2,10 @@
 import { useState } from 'react';
 import { Button } from '../ui/button.tsx';
 import { Checkbox } from '../ui/checkbox.tsx';
+import { Notice } from '../ui/notice.tsx';
 import { Section } from '../ui/page.tsx';
+import { formatCount, formatNumber } from '../lib/format.ts';
+import { changeWords } from './key/change-words.ts';
 import { KeyRefusal } from './key/key-refusal.tsx';
 import { obstacleToSending, worthALook } from './month-state.ts';
 import { SaveFiles } from './save-files.tsx';
@@ -41,6 +44,7 @@ export function SendSection({ title, month, prepared, site, calendarMonth, surro
       }
     >
       <div className="grid max-w-2xl gap-6">
+        {prepared.newToKey !== null && <UnknownRegistry people={prepared.people} newToKey={prepared.newToKey} />}
         {things.length > 0 && (
           <Checkbox id="looked-at" value={isLookedAt} onChange={(isTicked) => setLookedAt(isTicked ? prepared : null)}>
             I have looked at {things.join(', at ')}.
@@ -57,10 +61,23 @@ export function SendSection({ title, month, prepared, site, calendarMonth, surro
   );
 }
 
+/** Without the registry an older key file is not told from the newest. */
+function UnknownRegistry({ people, newToKey }: { readonly people: number; readonly newToKey: number }) {
+  return (
+    <Notice title="This page cannot know which codes the registry holds: use the newest key file.">
+      <p>
+        The key file that was opened knows {formatNumber(people - newToKey)} of the {formatCount(people, 'person', 'people')} in these
+        files. Anybody else gets a new code here, though a newer key file may have one for them.
+      </p>
+    </Notice>
+  );
+}
+
 function SaveKey({ month }: { readonly month: Month }) {
   const { picture, savedAs } = month.state;
   const saving = useAct();
   const isUnsaved = picture?.key?.isUnsaved === true;
+  const changes = picture?.key == null ? [] : changeWords(picture.key);
   return (
     <div className="grid justify-items-start gap-2">
       <Button variant={isUnsaved ? 'primary' : 'secondary'} isPending={saving.isPending} onPress={() => void saving.run(month.saveKey)}>
@@ -68,9 +85,9 @@ function SaveKey({ month }: { readonly month: Month }) {
       </Button>
       <p className="text-quiet">
         {isUnsaved
-          ? 'This month has added to the key. Save it before anything is sent, on your site’s own storage, twice.'
+          ? `The key holds what its file does not: ${changes.join('; ')}. Save it before anything is sent, on your site’s own storage, twice.`
           : savedAs === null
-            ? 'The key file holds everything already.'
+            ? 'The key file holds everything that later months need.'
             : `Saved as ${savedAs}. Move it to your site’s own storage, and keep a second copy there.`}
       </p>
       <KeyRefusal refusal={saving.refusal} />

@@ -11,7 +11,7 @@ const advice: Partial<Record<RefusalCode, string>> = {
   'too-many-iterations': 'Do not use this copy. Open the other one that your site keeps, and tell the data steward.',
   'other-site': 'Choose the key file of the site named above. If you work for several sites, change the site first.',
   'cannot-be-opened':
-    'Type the six words again, in their order, with one blank between them. If they are right, this copy was altered or damaged: take the second copy that your site keeps. Nobody can recover a passphrase, neither we nor the registry.',
+    'Type the six words again, in their order. “Show what I type” lets you read them. If they are right, this copy was altered or damaged: take the second copy that your site keeps. Nobody can recover a passphrase, neither we nor the registry.',
   'different-keys': 'Only two copies of the same key file can become one. Check that both are of this site and of its present key.',
 };
 

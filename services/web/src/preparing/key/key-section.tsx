@@ -62,13 +62,7 @@ function ClosedKey({ month, site, held }: Pick<KeySectionProps, 'month' | 'site'
     );
   return (
     <div className="grid gap-8">
-      <OpenKeyForm
-        id="open-key"
-        label={`Key file of ${site}`}
-        hint="The newest one: its name ends with the highest number."
-        act="Open the key"
-        onOpen={month.openKey}
-      />
+      <OpenKeyForm id="open-key" label={`Key file of ${site}`} hint={newestKey} act="Open the key" onOpen={month.openKey} />
       <div className="grid max-w-2xl justify-items-start gap-3">
         <p>No key file yet? A site makes one before its first month.</p>
         <Button onPress={() => setMaking(true)}>Make a key</Button>
@@ -77,6 +71,10 @@ function ClosedKey({ month, site, held }: Pick<KeySectionProps, 'month' | 'site'
     </div>
   );
 }
+
+/** Names as they are given when a key file is saved: `S01-site-key-r3-2026-12-01-a1b2.json`. */
+const newestKey =
+  'The newest one: the highest number behind “r” in its name, the latest day. Two files with the same number and different endings are copies that went on separately: open one of them, then make one key of both.';
 
 function LostKey() {
   return (

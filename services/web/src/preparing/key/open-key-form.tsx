@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { Button } from '../../ui/button.tsx';
+import { Checkbox } from '../../ui/checkbox.tsx';
 import { FileDrop } from '../../ui/file-drop.tsx';
 import { Form } from '../../ui/form.tsx';
 import { TextField } from '../../ui/text-field.tsx';
@@ -20,6 +21,7 @@ export interface OpenKeyFormProps {
 export function OpenKeyForm({ id, label, hint, act, onOpen }: OpenKeyFormProps) {
   const [file, setFile] = useState<File | null>(null);
   const [passphrase, setPassphrase] = useState('');
+  const [isShown, setShown] = useState(false);
   const [attempt, setAttempt] = useState(0);
   const opening = useAct();
   const missing = [
@@ -35,9 +37,10 @@ export function OpenKeyForm({ id, label, hint, act, onOpen }: OpenKeyFormProps) 
     }
     setAttempt(0);
     void opening.run(async () => {
-      await onOpen(file, passphrase.trim().replace(/\s+/g, ' '));
+      await onOpen(file, passphrase);
       setFile(null);
       setPassphrase('');
+      setShown(false);
     });
   }
 
@@ -51,7 +54,7 @@ export function OpenKeyForm({ id, label, hint, act, onOpen }: OpenKeyFormProps) 
         id={`${id}-passphrase`}
         label="Passphrase"
         hint="The six words of this key file, with a blank between them."
-        type="password"
+        type={isShown ? 'text' : 'password'}
         autoComplete="off"
         spellCheck="false"
         value={passphrase}
@@ -59,6 +62,9 @@ export function OpenKeyForm({ id, label, hint, act, onOpen }: OpenKeyFormProps) 
         error={problems.find(({ fieldId }) => fieldId === `${id}-passphrase`)?.message}
         isRequired
       />
+      <Checkbox id={`${id}-shown`} value={isShown} onChange={setShown}>
+        Show what I type
+      </Checkbox>
       <KeyRefusal refusal={opening.refusal} />
       <div>
         <Button type="submit" variant="primary" isPending={opening.isPending}>

@@ -12,14 +12,19 @@ import {
 } from '@cairnstep/deidentification';
 import type { ReplacedCode, SiteKey } from '@cairnstep/deidentification';
 import { chainCodes } from './chain-codes.ts';
+import { hexadecimal } from './hexadecimal.ts';
+import { keyChanges } from './key-changes.ts';
 import type { Circumstances, KeyPicture, NewKey, SavedFile } from './protocol.ts';
 import { Refusal } from './refusal.ts';
+import { spellingsOf } from './spellings.ts';
 
 interface OpenedKey {
   readonly key: SiteKey;
   readonly passphrase: string;
   /** What the file holds, to tell whether the key has more. */
-  readonly saved: string;
+  readonly saved: SiteKey;
+  /** The file is locked with an earlier passphrase. */
+  readonly isRelocked: boolean;
 }
 
 /** What a month adds to the key, as long as it is neither saved nor given up. */
@@ -28,6 +33,8 @@ interface Addition {
   readonly replaced: readonly ReplacedCode[];
 }
 
+/** Characters of a digest by which two files are told apart. */
+const digestShown = 4;
 /** Bytes; no key file comes near it, and something larger need not be read to be refused. */
 const largestFile = 40_000_000;
 
@@ -35,6 +42,8 @@ export class KeyDesk {
   private opened: OpenedKey | null = null;
   private addition: Addition | null = null;
   private replaced: readonly ReplacedCode[] = [];
+  /** Codes of people whom the file did not know when it was opened, and that were saved since. */
+  private metHere: ReadonlySet<string> = new Set();
 
   constructor(private readonly circumstances: () => Circumstances) {}
 
@@ -51,12 +60,17 @@ export class KeyDesk {
     const { site, today } = this.circumstances();
     const normalisation = { ...usualNormalisation, stripLeadingZeros };
     const { key, file } = await createKeyFile({ site, keyId: today.slice(0, 7), mode, idType, normalisation }, passphrase);
-    this.take(key, passphrase);
+    this.take({ key, passphrase });
     return this.fileOf(key, file);
   }
 
-  async open(file: Blob, passphrase: string): Promise<void> {
-    this.take(await this.read(file, passphrase), passphrase);
+  async open(file: Blob, typed: string): Promise<void> {
+    this.take(await this.read(file, typed));
+  }
+
+  /** Whether nobody but this visit has brought the person into the key. */
+  wasMetHere(code: string): boolean {
+    return this.metHere.has(code);
   }
 
   /** Goes on with what a month has added, until it is saved or worked out again. */
@@ -72,14 +86,15 @@ export class KeyDesk {
     const { passphrase } = this.require();
     const { key, file } = await saveKeyFile(this.current, passphrase);
     this.replaced = this.codesToReplace;
-    this.opened = { key, passphrase, saved: contentOf(key) };
+    this.metHere = this.metUntilNow();
+    this.opened = { key, passphrase, saved: key, isRelocked: false };
     this.addition = null;
     return this.fileOf(key, file);
   }
 
   /** @returns codes of people whose rows have to be sent again, and how many codes were replaced */
-  async merge(file: Blob, passphrase: string): Promise<{ replaced: number; firstDaysMoved: readonly string[] }> {
-    const other = await this.read(file, passphrase);
+  async merge(file: Blob, typed: string): Promise<{ replaced: number; firstDaysMoved: readonly string[] }> {
+    const { key: other } = await this.read(file, typed);
     const { key, replaced, indexDatesMoved } = mergeKeys(this.key, other);
     this.change(key, replaced);
     return { replaced: replaced.length, firstDaysMoved: indexDatesMoved };
@@ -111,7 +126,7 @@ export class KeyDesk {
 
   /** The present file stays locked with the old passphrase; the key counts as unsaved until a file is locked with the new one. */
   changePassphrase(passphrase: string): void {
-    this.opened = { ...this.require(), passphrase, saved: '' };
+    this.opened = { ...this.require(), passphrase, isRelocked: true };
   }
 
   /** Codes of which the registry does not know yet that others took their place. */
@@ -127,11 +142,12 @@ export class KeyDesk {
 
   picture(): KeyPicture | null {
     if (this.opened === null) return null;
-    const { revision } = this.opened.key;
+    const { key, saved, isRelocked } = this.opened;
+    const changes = keyChanges(saved, this.current);
     const { mode, idType, normalisation, people, generations, matches } = this.current;
     return {
       keyId: generations[0].keyId,
-      revision,
+      revision: key.revision,
       mode,
       idType,
       stripLeadingZeros: normalisation.stripLeadingZeros,
@@ -139,15 +155,26 @@ export class KeyDesk {
       peopleWithFirstDay: [...people.values()].filter(({ indexDate }) => indexDate !== undefined).length,
       secrets: generations.length,
       tables: [...matches.keys()],
-      isUnsaved: contentOf(this.current) !== this.opened.saved,
+      isUnsaved: isRelocked || changes !== null,
+      changes,
       lacking: this.lacking(),
       codesToReplace: this.codesToReplace.length,
     };
   }
 
-  private async read(file: Blob, passphrase: string): Promise<SiteKey> {
+  /** @returns the key, and its passphrase as the file is locked with it */
+  private async read(file: Blob, typed: string): Promise<Pick<OpenedKey, 'key' | 'passphrase'>> {
     if (file.size > largestFile) throw new KeyFileRefusal('not-a-key-file');
-    return openKeyFile(await file.text(), passphrase, { site: this.circumstances().site });
+    const text = await file.text();
+    const { site } = this.circumstances();
+    for (const passphrase of spellingsOf(typed)) {
+      try {
+        return { key: await openKeyFile(text, passphrase, { site }), passphrase };
+      } catch (error) {
+        if (!(error instanceof KeyFileRefusal) || error.code !== 'cannot-be-opened') throw error;
+      }
+    }
+    throw new KeyFileRefusal('cannot-be-opened');
   }
 
   private get current(): SiteKey {
@@ -159,9 +186,10 @@ export class KeyDesk {
     return this.opened;
   }
 
-  private take(key: SiteKey, passphrase: string): void {
-    this.opened = { key, passphrase, saved: contentOf(key) };
+  private take({ key, passphrase }: Pick<OpenedKey, 'key' | 'passphrase'>): void {
+    this.opened = { key, passphrase, saved: key, isRelocked: false };
     this.addition = null;
+    this.metHere = new Set();
     this.replaced = this.leftToReplace(key);
   }
 
@@ -176,7 +204,15 @@ export class KeyDesk {
   private change(key: SiteKey, replaced: readonly ReplacedCode[]): void {
     this.opened = { ...this.require(), key };
     this.addition = null;
+    this.metHere = renamed(this.metHere, replaced);
     this.replaced = chainCodes(this.replaced, replaced);
+  }
+
+  private metUntilNow(): Set<string> {
+    const replaced = this.addition?.replaced ?? [];
+    const carriedOver = new Set(replaced.map(({ to }) => to));
+    const added = [...this.current.people.keys()].filter((code) => !this.key.people.has(code) && !carriedOver.has(code));
+    return new Set([...renamed(this.metHere, replaced), ...added]);
   }
 
   private normalised(recordNumbers: readonly string[]): string[] {
@@ -202,16 +238,14 @@ export class KeyDesk {
     return missing === 0 ? null : { missing, of: knownParticipants.length };
   }
 
-  /** The revision in the name tells two copies apart. */
-  private fileOf({ site, revision }: SiteKey, text: string): SavedFile {
-    return { name: `${site}-site-key-r${revision}.json`, text };
+  /** The number in the name says which file is the newest; two copies that went on separately differ in what stands behind it. */
+  private async fileOf({ site, revision }: SiteKey, text: string): Promise<SavedFile> {
+    const digest = hexadecimal(await crypto.subtle.digest('SHA-256', new TextEncoder().encode(text)));
+    return { name: `${site}-site-key-r${revision}-${this.circumstances().today}-${digest.slice(0, digestShown)}.json`, text };
   }
 }
 
-/** The content of a key as text that can be compared; the times it was saved are no content. */
-function contentOf({ revision: _, ...content }: SiteKey): string {
-  return JSON.stringify(content, (__, value: unknown) => {
-    if (value instanceof Map) return [...(value as Map<unknown, unknown>)];
-    return value instanceof Uint8Array ? [...value] : value;
-  });
+function renamed(codes: ReadonlySet<string>, replaced: readonly ReplacedCode[]): Set<string> {
+  const names = new Map(replaced.map(({ from, to }) => [from, to]));
+  return new Set([...codes].map((code) => names.get(code) ?? code));
 }

@@ -6,6 +6,7 @@ import type { TableKey } from '@cairnstep/dictionary';
 import { exampleMark } from '@cairnstep/submission-files';
 import type { PreparedTable } from '../messages.ts';
 import { columnsOf } from './column-pictures.ts';
+import { hexadecimal } from './hexadecimal.ts';
 import type { Circumstances, FindingPicture, FirstDayPlace, PreparedPicture, PreparedTablePicture, ProblemPicture } from './protocol.ts';
 import { Refusal } from './refusal.ts';
 import { rowsInMonth } from './rows-in-month.ts';
@@ -16,6 +17,15 @@ interface StatedDay {
   readonly table: TableKey;
   readonly line: number;
   readonly date: IsoDate;
+}
+
+interface WorkedOut {
+  readonly sources: readonly AssignedSource[];
+  readonly raw: readonly RawTable[];
+  readonly key: SiteKey;
+  readonly month: PreparedMonth;
+  readonly files: readonly PreparedTable[];
+  readonly wasMetHere: (code: string) => boolean;
 }
 
 const peopleShown = 50;
@@ -37,8 +47,16 @@ export class MonthDesk {
     this.stated = date === null ? others : [...others, { ...place, recordNumber, date }];
   }
 
-  /** Works out what would be sent. The result's key is to be saved before anything is. */
-  async prepare(sources: readonly AssignedSource[], key: SiteKey): Promise<{ picture: PreparedPicture; month: PreparedMonth }> {
+  /**
+   * Works out what would be sent. The result's key is to be saved before anything is.
+   *
+   * @param wasMetHere whether a person of the key was not in its file when that was opened
+   */
+  async prepare(
+    sources: readonly AssignedSource[],
+    key: SiteKey,
+    wasMetHere: (code: string) => boolean,
+  ): Promise<{ picture: PreparedPicture; month: PreparedMonth }> {
     const raw = sources.map(rawTableOf);
     const month = await prepareMonth({
       tables: raw,
@@ -50,7 +68,7 @@ export class MonthDesk {
       .filter(({ rows }) => rows.length > 0)
       .map((clean) => ({ table: clean.table, rows: clean.rows.length, csv: new TextEncoder().encode(cleanCsv(clean)).buffer }));
     this.prepared = { month, files };
-    return { picture: await this.picture(sources, raw, key, month, files), month };
+    return { picture: await this.picture({ sources, raw, key, month, files, wasMetHere }), month };
   }
 
   /** Something it follows from has changed. */
@@ -64,18 +82,16 @@ export class MonthDesk {
     return this.prepared.files.map((file) => ({ ...file, csv: file.csv.slice(0) }));
   }
 
-  private async picture(
-    sources: readonly AssignedSource[],
-    raw: readonly RawTable[],
-    key: SiteKey,
-    month: PreparedMonth,
-    files: readonly PreparedTable[],
-  ): Promise<PreparedPicture> {
+  private async picture({ sources, raw, key, month, files, wasMetHere }: WorkedOut): Promise<PreparedPicture> {
     const { clean, problems, findings, agesTopCoded, lengthChange, newParticipants } = month;
     const sourceOf = (table: string | null) => sources.find((source) => source.table === table);
     const people = new Set(clean.flatMap(({ rows }) => rows.map(([code = '']) => code)));
     const { knownParticipants: held, month: calendarMonth } = this.circumstances();
     const heldCodes = new Set(held);
+    const metFirst = new Set(newParticipants.map(({ code }) => code));
+    const earlierCodes = new Map(month.replacedCodes.map(({ from, to }) => [to, from]));
+    const isNewToKey = (code: string) => metFirst.has(code) || wasMetHere(earlierCodes.get(code) ?? code);
+    const newToKey = held === null ? [...people].filter(isNewToKey).length : null;
     const rowsInFiles = raw.reduce((sum, { rows }) => sum + rows.length, 0);
     const rowsOf = (table: TableKey) => raw.find((each) => each.table === table)?.rows.length ?? 0;
     return {
@@ -95,7 +111,8 @@ export class MonthDesk {
       emptyTables: clean.filter(({ rows, table }) => rows.length === 0 && rowsOf(table) > 0).map(({ table }) => table),
       rowsLeftBehind: rowsInFiles - clean.reduce((sum, { rows }) => sum + rows.length, 0),
       people: people.size,
-      newPeople: held === null ? newParticipants.length : [...people].filter((code) => !heldCodes.has(code)).length,
+      newPeople: newToKey ?? [...people].filter((code) => !heldCodes.has(code)).length,
+      newToKey,
       agesTopCoded,
       lengthChange,
       rowsInMonth: calendarMonth === null ? null : rowsInMonth(sources, calendarMonth),
@@ -174,5 +191,3 @@ async function tablePicture({ table, rows, csv }: PreparedTable, month: Prepared
     }),
   };
 }
-
-const hexadecimal = (bytes: ArrayBuffer): string => [...new Uint8Array(bytes)].map((byte) => byte.toString(16).padStart(2, '0')).join('');

@@ -16,6 +16,7 @@ import type {
 import type { TableKey } from '@cairnstep/dictionary';
 import type { Delimiter } from '@cairnstep/submission-files';
 import type { PreparedTable, ReplacedCodes } from '../messages.ts';
+import type { KeyChanges } from './key-changes.ts';
 import type { RowsInMonth } from './rows-in-month.ts';
 
 /** What the worker has to know of the site before anything else. */
@@ -53,6 +54,8 @@ export interface KeyPicture {
   readonly tables: readonly TableKey[];
   /** Holds something that its file does not. */
   readonly isUnsaved: boolean;
+  /** What that is; null where it is nothing but another passphrase, or nothing at all. */
+  readonly changes: KeyChanges | null;
   /** Participants of the registry that the key does not know; null when it knows all, or nobody can tell. */
   readonly lacking: { readonly missing: number; readonly of: number } | null;
   /** Codes that were replaced by a rotation, a merging or a joining, of which the registry does not know yet. */
@@ -168,6 +171,8 @@ export interface PreparedPicture {
   readonly people: number;
   /** People that the registry does not hold yet; where nobody can tell, that the key file did not. */
   readonly newPeople: number;
+  /** People whom the key file did not know when it was opened; null where the registry has said whom it holds. */
+  readonly newToKey: number | null;
   readonly agesTopCoded: number;
   readonly lengthChange: LengthChange | null;
   /** Null where no file says when training took place. */

@@ -73,10 +73,11 @@ describe('a month in the worker', () => {
     await room.ask('add-files', { files: sampleFiles() });
     const first = await room.ask('prepare', null);
     expect(first.picture.key).toMatchObject({ isUnsaved: true, people: 2, revision: 1 });
+    expect(first.picture.key?.changes).toMatchObject({ newPeople: 2, columns: ['participants', 'sessions'], hasOtherCodes: false });
     expect(column(first.prepared, 'Status').isNew).toBe(true);
     const [, sent] = (await room.ask('tables-to-send', null)).tables;
     const { file, picture } = await room.ask('save-key', null);
-    expect(file.name).toBe('S01-site-key-r2.json');
+    expect(file.name).toMatch(/^S01-site-key-r2-2026-12-01-[0-9a-f]{4}\.json$/);
     expect(picture.key).toMatchObject({ isUnsaved: false, revision: 2, peopleWithFirstDay: 2 });
     expect(text((await room.ask('tables-to-send', null)).tables[1]?.csv)).toBe(text(sent?.csv));
 
@@ -87,8 +88,24 @@ describe('a month in the worker', () => {
     const { prepared, picture: later } = await next.ask('prepare', null);
     expect(prepared).toMatchObject({ newPeople: 0, lengthChange: { ids: 2, newLengths: 0 } });
     expect(prepared.columns[0]?.columns.some(({ isNew }) => isNew)).toBe(false);
-    expect(later.key?.isUnsaved).toBe(false);
+    expect(later.key).toMatchObject({ isUnsaved: false, changes: null });
     expect(text((await next.ask('tables-to-send', null)).tables[0]?.csv)).toBe(text(sent?.csv));
+  });
+
+  it('tells without the registry whom the opened key file did not know, also after it was saved', async () => {
+    const { room, file } = await roomWithKey({ ...site, knownParticipants: null });
+    await room.ask('add-files', { files: sampleFiles() });
+    const newPeople = { people: 2, newPeople: 2, newToKey: 2 };
+    expect((await room.ask('prepare', null)).prepared).toMatchObject(newPeople);
+    const saved = await room.ask('save-key', null);
+    expect((await room.ask('prepare', null)).prepared).toMatchObject(newPeople);
+    await room.ask('rotate-key', { recordNumbers: ['0048-2913'] });
+    expect((await room.ask('prepare', null)).prepared).toMatchObject(newPeople);
+
+    await room.ask('open-key', { file: new Blob([saved.file.text]), passphrase });
+    expect((await room.ask('prepare', null)).prepared).toMatchObject({ people: 2, newToKey: 0 });
+    await room.ask('open-key', { file, passphrase });
+    expect((await room.ask('prepare', null)).prepared).toMatchObject(newPeople);
   });
 
   it('takes words, units and meanings of columns as they are chosen', async () => {
@@ -288,6 +305,23 @@ describe('the key in the worker', () => {
     await expect(opening(written.replace('1000000', '1000'))).rejects.toMatchObject({ code: 'too-few-iterations' });
     await expect(opening(written.replace('1000000', '1000000000'))).rejects.toMatchObject({ code: 'too-many-iterations' });
     expect((await opening(written)).key).toMatchObject({ revision: 1 });
+  });
+
+  it('is opened by its words however they are spaced and capitalised, and saved with them as they are', async () => {
+    const { room, file } = await roomWithKey();
+    await room.ask('open-key', { file, passphrase: `  ${passphrase.toUpperCase().replaceAll(' ', '  ')} ` });
+    const { file: saved } = await room.ask('save-key', null);
+    expect((await room.ask('open-key', { file: new Blob([saved.text]), passphrase })).key).toMatchObject({ revision: 2 });
+  });
+
+  it('has another name in each copy that was saved', async () => {
+    const { room: mine, file } = await roomWithKey();
+    const theirs = inProcessWorkroom();
+    await theirs.ask('begin', site);
+    await theirs.ask('open-key', { file, passphrase });
+    const [one, other] = [(await mine.ask('save-key', null)).file, (await theirs.ask('save-key', null)).file];
+    expect(one.name).not.toBe(other.name);
+    expect(one.name.slice(0, -9)).toBe(other.name.slice(0, -9));
   });
 
   it('that lacks people of the registry is told to be an older copy', async () => {

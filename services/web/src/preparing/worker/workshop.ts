@@ -104,7 +104,7 @@ export function workshop(): Answers {
     prepare: async (_, watch) => {
       const { month, shelf, keys } = at();
       watch.tell({ what: 'Working out what would be sent', bytes: null });
-      const { picture: prepared, month: result } = await month.prepare(shelf.assigned, keys.key);
+      const { picture: prepared, month: result } = await month.prepare(shelf.assigned, keys.key, (code) => keys.wasMetHere(code));
       keys.add({ key: result.key, replaced: result.replacedCodes });
       return { picture: picture(), prepared };
     },
