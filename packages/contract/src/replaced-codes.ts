@@ -9,17 +9,17 @@ const ParticipantCode = z.string().regex(pseudonymPattern, 'This is not a partic
 /** Codes of one batch. A site sees a few hundred people a year; its whole registry fits. */
 export const mostReplacedCodes = 20_000;
 
+export const CodePairs = z
+  .array(z.strictObject({ from: ParticipantCode, to: ParticipantCode }))
+  .min(1, 'Send at least one pair of codes')
+  .max(mostReplacedCodes, `Send at most ${mostReplacedCodes} pairs at a time`);
+
 export const replaceCodes = endpoint({
   method: 'POST',
   path: '/api/sites/:siteId/replaced-codes',
   summary: "Put new participant codes in the place of old ones, all or none, in the site's rows and their history",
   params: z.strictObject({ siteId: Id }),
-  body: z.strictObject({
-    codes: z
-      .array(z.strictObject({ from: ParticipantCode, to: ParticipantCode }))
-      .min(1, 'Send at least one pair of codes')
-      .max(mostReplacedCodes, `Send at most ${mostReplacedCodes} pairs at a time`),
-  }),
+  body: z.strictObject({ codes: CodePairs }),
   largestBody: 2_000_000,
   response: z.strictObject({
     /** Codes that the registry held and now holds under the new code. */

@@ -1,5 +1,5 @@
 /** The page around the site key, with messages as the preparing page would send them. */
-import { act, screen, waitFor } from '@testing-library/react';
+import { act, fireEvent, screen, waitFor, within } from '@testing-library/react';
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { ToPreparing } from '../../preparing/messages.ts';
 import { fakeApi, refusal, site } from '../../testing/fake-api.ts';
@@ -58,6 +58,34 @@ describe('the page of the site key', () => {
     await say({ kind: 'ready' });
     await say({ kind: 'replace-codes', replacedCodes });
     await waitFor(() => expect(lastSending()).toMatchObject({ state: 'failed' }));
+  });
+
+  const chooseFile = async (content: string): Promise<void> => {
+    await screen.findByText('File of replaced codes');
+    const input = document.querySelector<HTMLInputElement>('input[type="file"]');
+    if (input === null) throw new Error('There is no way to choose a file.');
+    fireEvent.change(input, { target: { files: [new File([content], 'replaced-codes.csv', { type: 'text/csv' })] } });
+  };
+
+  it('takes the file of the edition without the server, and tells how many codes were replaced', async () => {
+    const asked = open({ [replacing]: { replaced: 1, unknown: 2, joined: 0, rows: 3, earlierValues: 1 } });
+    await chooseFile(`from,to\r\n${replacedCodes[0]?.from},${replacedCodes[0]?.to}\r\n`);
+    fireEvent.click(await screen.findByRole('button', { name: 'Replace 1 code' }));
+    expect(asked.some(({ method }) => method === 'POST')).toBe(false);
+    fireEvent.click(within(await screen.findByRole('alertdialog')).getByRole('button', { name: 'Replace the codes' }));
+    expect(await screen.findByText(/The registry has replaced 1 code\. Of 2 codes it held no row\./)).toBeTruthy();
+    expect(asked.find(({ method }) => method === 'POST')?.body).toEqual({ codes: replacedCodes });
+    expect(screen.queryByRole('button', { name: 'Replace 1 code' })).toBeNull();
+  });
+
+  it('sends nothing of a file that holds anything but codes', async () => {
+    const asked = open();
+    await chooseFile('from,to\r\nOkafor,S00000000000000000002Z\r\n');
+    const problem = await screen.findByRole('alert');
+    expect(problem.textContent).toContain('Line 2 holds something other than participant codes.');
+    expect(problem.textContent).not.toContain('Okafor');
+    expect(screen.queryByRole('button', { name: /^Replace/ })).toBeNull();
+    expect(asked.some(({ method }) => method === 'POST')).toBe(false);
   });
 
   it('is not for a therapist', async () => {

@@ -12,6 +12,7 @@ import { PreparingFrame } from './preparing-frame.tsx';
 import type { PreparingAct } from './preparing-frame.tsx';
 import { useReplaceCodes } from './preparing.queries.ts';
 import type { SiteKnowledge } from './preparing.queries.ts';
+import { ReplacedCodesSection } from './replaced-codes-section.tsx';
 import { WithKnowledge } from './with-knowledge.tsx';
 import { wordsOfFailure } from './words-of-failure.ts';
 
@@ -33,7 +34,12 @@ export default function SiteKeyPage() {
         {(site, account) =>
           maySubmit(account, site) ? (
             <WithKnowledge key={site.id} siteId={site.id}>
-              {(knowledge) => <SiteKey site={site} knowledge={knowledge} />}
+              {(knowledge) => (
+                <>
+                  <SiteKey site={site} knowledge={knowledge} />
+                  <ReplacedCodesSection site={site} />
+                </>
+              )}
             </WithKnowledge>
           ) : (
             <Section>
