@@ -29,11 +29,18 @@ export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, 
   const [wasKept, setWasKept] = useState(false);
   const [attempt, setAttempt] = useState(0);
   const reason = drafts.of(rule) ?? acknowledgedReason ?? '';
-  const problem = attempt > 0 ? problemOf(reason) : undefined;
+  const [told, setTold] = useState<{ readonly reason: string; readonly problem: string } | null>(null);
+  const problem = attempt === 0 ? undefined : (problemOf(reason) ?? (told?.reason === reason ? told.problem : undefined));
 
-  function keep(): void {
+  async function keep(): Promise<void> {
     setAttempt(attempt + 1);
     if (problemOf(reason) !== undefined) return;
+    const { identifyingIn } = await import('./screen-reason.ts');
+    const kinds = identifyingIn(reason);
+    if (kinds.length > 0) {
+      setTold({ reason, problem: `It holds ${kinds.join(' and ')}. Nothing was sent. Say why these stand without it.` });
+      return;
+    }
     acknowledge.mutate(
       { rule, reason },
       {
@@ -60,7 +67,7 @@ export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, 
   }
   const fieldId = `reason-${rule}`;
   return (
-    <Form onSubmit={keep} attempt={attempt} problems={problem === undefined ? [] : [{ fieldId, message: problem }]}>
+    <Form onSubmit={() => void keep()} attempt={attempt} problems={problem === undefined ? [] : [{ fieldId, message: problem }]}>
       <TextArea
         id={fieldId}
         label="Why these stand"

@@ -250,6 +250,9 @@ describe('findings', () => {
     fireEvent.change(reason, { target: { value: 'ok' } });
     await press(/^Keep this reason/);
     expect(screen.getByRole('alert').textContent).toContain('Say in a few words why these stand');
+    fireEvent.change(reason, { target: { value: 'Ask jane.roe@clinic.example' } });
+    await press(/^Keep this reason/);
+    expect(await screen.findAllByText(/^It holds an e-mail address\. Nothing was sent\./)).toHaveLength(2);
     expect(asked.some(({ method }) => method === 'POST')).toBe(false);
     fireEvent.change(reason, { target: { value: 'Short steps are right.' } });
     await press(/^Keep this reason/);
