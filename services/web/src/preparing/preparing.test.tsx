@@ -69,6 +69,12 @@ async function makeKeyFiles(): Promise<KeyFiles> {
 
 const savedNames = () => vi.mocked(saveFile).mock.calls.map(([name]) => name);
 
+/** Where the focus is once something has ended; nothing is said to be under way any more. */
+function expectToGoOnAt(outcome: string | RegExp): void {
+  expect(screen.getByRole('group', { name: outcome })).toBe(document.activeElement);
+  for (const status of screen.getAllByRole('status')) expect(status.textContent).not.toContain('Under way');
+}
+
 function drop(within: string, ...files: readonly File[]): void {
   const input = document.querySelector(`${within} input[type=file]`);
   if (input === null) throw new Error(`nothing takes files in ${within}`);
@@ -114,9 +120,12 @@ describe('preparing a month inside the registry', () => {
 
     say({ kind: 'sending', state: 'failed', done: 0, of: 1, message: 'The registry did not answer.' });
     await screen.findByText('The registry did not answer.');
+    expectToGoOnAt('The registry did not answer.');
     await press('Send 5 rows in 1 table again');
     await waitFor(() => expect(ofKind('send')).toHaveLength(2));
     say({ kind: 'sending', state: 'done', done: 1, of: 1, message: null });
+    await screen.findByText('5 rows in 1 table were sent.');
+    expectToGoOnAt('5 rows in 1 table were sent.');
     await press('Go on to the check');
     expect(ofKind('finished')).toHaveLength(1);
     expect(ofKind('unsaved').map((message) => message.kind === 'unsaved' && message.isUnsaved)).toEqual([false, true, false]);
@@ -280,10 +289,12 @@ describe('the site key', () => {
     expect(await screen.findByRole('button', { name: 'Tell the registry' })).toHaveProperty('disabled', true);
     await press('Save the key file');
     await waitFor(() => expect(screen.getByRole('button', { name: 'Tell the registry' })).toHaveProperty('disabled', false));
+    await waitFor(() => expectToGoOnAt(/^The key file is saved as S01-site-key-r3-/));
     await press('Tell the registry');
     await waitFor(() => expect(ofKind('replace-codes')).toMatchObject([{ replacedCodes: [{}] }]));
     say({ kind: 'sending', state: 'done', done: 1, of: 1, message: null });
-    await screen.findByText(/The registry has replaced the codes/);
+    await screen.findByText(/The registry has replaced 1 code\./);
+    expectToGoOnAt('The registry has replaced 1 code.');
     await waitFor(() => expect(ofKind('unsaved').at(-1)).toEqual({ kind: 'unsaved', isUnsaved: false }));
   });
 
@@ -361,6 +372,7 @@ describe('the edition opened from disk', () => {
     fireEvent.click(await screen.findByText(/I have looked at/));
     await press('Save 2 cleaned files');
     await screen.findByText(/The cleaned files are saved/);
+    expectToGoOnAt('The cleaned files are saved.');
     const saved = new Map(vi.mocked(saveFile).mock.calls.map(([name, content]) => [name, content]));
     expect([...saved.keys()]).toEqual(['participants.csv', 'sessions.csv', 'what-was-prepared.txt']);
     const csv = saved.get('sessions.csv') as ArrayBuffer;

@@ -2,8 +2,8 @@ import { useState } from 'react';
 import { formatCount } from '../lib/format.ts';
 import { saveFile } from '../lib/save-file.ts';
 import { Button } from '../ui/button.tsx';
-import { Notice } from '../ui/notice.tsx';
 import { KeyRefusal } from './key/key-refusal.tsx';
+import { Outcome } from './outcome.tsx';
 import { preparedFiles } from './prepared-files.ts';
 import type { PreparedFile } from './prepared-files.ts';
 import { useAct } from './use-act.ts';
@@ -54,7 +54,7 @@ export function SaveFiles({ month, prepared, site, calendarMonth, obstacle }: Sa
         <KeyRefusal refusal={giving.refusal} />
       </div>
       {isDone && (
-        <Notice kind="success" title="The cleaned files are saved." urgent>
+        <Outcome kind="success" title="The cleaned files are saved.">
           <p>
             Your browser has put them where it puts downloads. Send the files of the tables on the month’s page of the registry; the text
             beside them says what was prepared. If your browser saved only the first, save the others one by one:
@@ -68,7 +68,7 @@ export function SaveFiles({ month, prepared, site, calendarMonth, obstacle }: Sa
               </li>
             ))}
           </ul>
-        </Notice>
+        </Outcome>
       )}
     </>
   );

@@ -1,8 +1,8 @@
 import { formatCount } from '../lib/format.ts';
 import { Button } from '../ui/button.tsx';
-import { Notice } from '../ui/notice.tsx';
 import { Progress } from '../ui/progress.tsx';
 import { KeyRefusal } from './key/key-refusal.tsx';
+import { Outcome } from './outcome.tsx';
 import type { Surroundings } from './surroundings.ts';
 import { useAct } from './use-act.ts';
 import type { Month } from './use-month.ts';
@@ -53,16 +53,16 @@ export function SendTables({ month, prepared: { tables }, surroundings, obstacle
         />
       )}
       {sending?.state === 'failed' && (
-        <Notice kind="error" title={sending.message ?? 'The sending failed.'} urgent>
+        <Outcome kind="error" title={sending.message ?? 'The sending failed.'}>
           <p>What was prepared is still here, and the key file is saved. You can send again.</p>
-        </Notice>
+        </Outcome>
       )}
       {isDone && (
-        <Notice kind="success" title={`${what} were sent.`} urgent>
+        <Outcome kind="success" title={`${what} were sent.`}>
           <Button variant="primary" onPress={() => surroundings.tell({ kind: 'finished' })}>
             Go on to the check
           </Button>
-        </Notice>
+        </Outcome>
       )}
     </>
   );

@@ -1,4 +1,5 @@
 import { useCallback, useState } from 'react';
+import { announce } from '../ui/announcer.tsx';
 import { WorkRefused } from './worker-client.ts';
 
 export interface Act {
@@ -19,6 +20,8 @@ export function useAct(): Act {
     } catch (error) {
       if (!(error instanceof WorkRefused)) throw error;
       setRefusal(error);
+      // The refusal speaks for itself; nothing is under way any more.
+      announce('');
     } finally {
       setPending(false);
     }

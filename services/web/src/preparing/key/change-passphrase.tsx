@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { Button } from '../../ui/button.tsx';
 import { Form } from '../../ui/form.tsx';
-import { Notice } from '../../ui/notice.tsx';
+import { Outcome } from '../outcome.tsx';
 import { useAct } from '../use-act.ts';
 import type { Month } from '../use-month.ts';
 import { DrawnWordsFields } from './drawn-words-fields.tsx';
@@ -36,7 +36,7 @@ export function ChangePassphrase({ month }: { readonly month: Month }) {
         new file is where it belongs.
       </p>
       {isChanged ? (
-        <Notice kind="success" title="The key has a new passphrase. Save the key file." urgent />
+        <Outcome kind="success" title="The key has a new passphrase. Save the key file." />
       ) : (
         <>
           <DrawnWordsFields drawn={drawn} problems={problems} />

@@ -1,8 +1,8 @@
 import { useState } from 'react';
 import { Button } from '../../ui/button.tsx';
 import { Form } from '../../ui/form.tsx';
-import { Notice } from '../../ui/notice.tsx';
 import { TextField } from '../../ui/text-field.tsx';
+import { Outcome } from '../outcome.tsx';
 import { useAct } from '../use-act.ts';
 import type { Month } from '../use-month.ts';
 import { KeyRefusal } from './key-refusal.tsx';
@@ -60,7 +60,7 @@ export function JoinNumbers({ month }: { readonly month: Month }) {
       />
       <KeyRefusal refusal={joining.refusal} />
       {done !== null && (
-        <Notice kind="success" title="Both record numbers lead to one code now. Save the key file." urgent>
+        <Outcome kind="success" title="Both record numbers lead to one code now. Save the key file.">
           <p>{replacedWords(done.replaced)}</p>
           {done.firstDayMoved !== null && (
             <p>
@@ -68,7 +68,7 @@ export function JoinNumbers({ month }: { readonly month: Month }) {
               <span className="font-mono wrap-anywhere">{done.firstDayMoved}</span>
             </p>
           )}
-        </Notice>
+        </Outcome>
       )}
       <div>
         <Button type="submit" isPending={joining.isPending}>

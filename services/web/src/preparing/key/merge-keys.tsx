@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { formatCount } from '../../lib/format.ts';
-import { Notice } from '../../ui/notice.tsx';
+import { Outcome } from '../outcome.tsx';
 import type { Month } from '../use-month.ts';
 import { OpenKeyForm } from './open-key-form.tsx';
 import { replacedWords } from './replaced-words.ts';
@@ -24,7 +24,7 @@ export function MergeKeys({ month }: { readonly month: Month }) {
       </p>
       <OpenKeyForm id="merge-key" label="The other copy of the key file" act="Make one key of both" onOpen={merge} />
       {merged !== null && (
-        <Notice kind="success" title="The two copies are one now. Save the key file." urgent>
+        <Outcome kind="success" title="The two copies are one now. Save the key file.">
           <p>{replacedWords(merged.replaced)}</p>
           {merged.firstDaysMoved.length > 0 && (
             <p>
@@ -33,7 +33,7 @@ export function MergeKeys({ month }: { readonly month: Month }) {
               <span className="font-mono wrap-anywhere">{merged.firstDaysMoved.join(', ')}</span>
             </p>
           )}
-        </Notice>
+        </Outcome>
       )}
     </>
   );

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { Button } from '../../ui/button.tsx';
-import { Notice } from '../../ui/notice.tsx';
 import { TextArea } from '../../ui/text-field.tsx';
+import { Outcome } from '../outcome.tsx';
 import { useAct } from '../use-act.ts';
 import type { Month } from '../use-month.ts';
 import { KeyRefusal } from './key-refusal.tsx';
@@ -44,9 +44,9 @@ export function RotateKey({ month }: { readonly month: Month }) {
       />
       <KeyRefusal refusal={rotating.refusal} />
       {carriedOver !== null && (
-        <Notice kind="success" title="The key has a new secret. Save the key file." urgent>
+        <Outcome kind="success" title="The key has a new secret. Save the key file.">
           <p>{replacedWords(carriedOver)} Older copies of the file must not be used any more.</p>
-        </Notice>
+        </Outcome>
       )}
       {isAsking ? (
         <div role="group" aria-labelledby="rotate-question" className="grid gap-3">
