@@ -35,12 +35,8 @@ export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, 
   async function keep(): Promise<void> {
     setAttempt(attempt + 1);
     if (problemOf(reason) !== undefined) return;
-    const { identifyingIn } = await import('./screen-reason.ts');
-    const kinds = identifyingIn(reason);
-    if (kinds.length > 0) {
-      setTold({ reason, problem: `It holds ${kinds.join(' and ')}. Nothing was sent. Say why these stand without it.` });
-      return;
-    }
+    const identifying = await identifyingProblem(reason);
+    if (identifying !== null) return setTold({ reason, problem: identifying });
     acknowledge.mutate(
       { rule, reason },
       {
@@ -87,6 +83,17 @@ export function ReasonForm({ submissionId, group: { rule, acknowledgedReason }, 
       </div>
     </Form>
   );
+}
+
+/** Why the reason does not leave this browser; null when it may. */
+async function identifyingProblem(reason: string): Promise<string | null> {
+  try {
+    const { identifyingIn } = await import('./screen-reason.ts');
+    const kinds = identifyingIn(reason);
+    return kinds.length === 0 ? null : `It holds ${kinds.join(' and ')}. Nothing was sent. Say why these stand without it.`;
+  } catch {
+    return 'It could not be looked through before sending: a part of this page did not load. Nothing was sent. Try again.';
+  }
 }
 
 function problemOf(reason: string): string | undefined {
