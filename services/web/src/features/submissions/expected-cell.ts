@@ -6,11 +6,15 @@ import type { SelectOption } from '../../ui/select.tsx';
 export const variableAt = (table: TableKey, column: string): Variable | undefined =>
   tableOf(table).variables.find(({ key }) => key === column);
 
-/** "Heart rate at the end: a whole number, 30 to 250 beats/min." */
-export function expectedWords(variable: Variable): string {
+/**
+ * "Heart rate at the end: a whole number, 30 to 250 beats/min."
+ *
+ * `mustBeFilled`: the rest of the row says that the cell may not stay empty, though in other rows it may.
+ */
+export function expectedWords(variable: Variable, mustBeFilled: boolean): string {
   const { type, name, unit, hard, measuredBy, missingCodes = [], required } = variable;
   const absence = missingCodes.length === 0 ? '' : `, or ${missingCodes.map(({ code, label }) => `${code} (${label})`).join(', ')}`;
-  const may = required.when === 'always' ? '' : ' May be empty.';
+  const may = required.when === 'always' || mustBeFilled ? '' : ' May be empty.';
   if (measuredBy !== undefined) return `${name}: a number or a grade, as the measure of the row has it${absence}.${may}`;
   switch (type) {
     case 'integer':
@@ -30,13 +34,16 @@ export function expectedWords(variable: Variable): string {
 export const emptyCell = '';
 
 /** The codes to choose from; null where something is typed. */
-export function codesOf({ type, codes = [], missingCodes = [], required }: Variable): readonly SelectOption[] | null {
+export function codesOf(
+  { type, codes = [], missingCodes = [], required }: Variable,
+  mustBeFilled: boolean,
+): readonly SelectOption[] | null {
   if (type !== 'code' && type !== 'flag') return null;
   const all = [...codes, ...missingCodes].map(({ code, label }) => ({
     value: code,
     label: label.toLowerCase() === code.toLowerCase() ? code : `${code}: ${label}`,
   }));
-  return required.when === 'always' ? all : [...all, { value: emptyCell, label: 'Leave the cell empty' }];
+  return required.when === 'always' || mustBeFilled ? all : [...all, { value: emptyCell, label: 'Leave the cell empty' }];
 }
 
 /** Why what was typed could not be read as a value of the column; null when it can, or when only its row could tell. */

@@ -110,21 +110,27 @@ export function FindingPlaces({ submission, caption, drafts }: FindingPlacesProp
   );
 }
 
+/** A cell that must be filled is filled. */
+const mustBeFilledRule = 'F20';
+
 /** One field for each cell, however many findings name it. */
 function mendColumn({ files }: Submission, drafts: MendDrafts, items: readonly Place[]): Column<Place> {
   const isKept = (key: TableKey) =>
     files.some(({ table, tables: of, refused }) => !refused && (table === key || (table === null && of?.includes(key) === true)));
   const first = new Map<string, number>();
-  for (const { id, table, line, column } of [...items].reverse()) first.set(`${table} ${line} ${column}`, id);
+  const cellOf = ({ table, line, column }: Place) => `${table} ${line} ${column}`;
+  for (const item of [...items].reverse()) first.set(cellOf(item), item.id);
+  const empty = new Set(items.filter(({ rule }) => rule === mustBeFilledRule).map(cellOf));
   return {
     key: 'mend-here',
     header: 'New value',
     value: () => null,
     isAct: true,
-    cell: ({ id, table, line, column }) => {
+    cell: (item) => {
+      const { id, table, line, column } = item;
       if (table === null || line === null || line < 2 || column === null || !isColumn(table, column) || !isKept(table)) return null;
-      if (first.get(`${table} ${line} ${column}`) !== id) return <span className="text-quiet">as above</span>;
-      return <MendCell place={{ table, line, column }} drafts={drafts} />;
+      if (first.get(cellOf(item)) !== id) return <span className="text-quiet">as above</span>;
+      return <MendCell place={{ table, line, column }} mustBeFilled={empty.has(cellOf(item))} drafts={drafts} />;
     },
   };
 }

@@ -4,7 +4,7 @@ import { describe, expect, it } from 'vitest';
 import { fakeApi, refusal } from '../../testing/fake-api.ts';
 import { renderRoutes } from '../../testing/render.tsx';
 import { Announcer } from '../../ui/announcer.tsx';
-import { checked, coordinator, error, sample, submissionId, therapist } from './sample-submission.ts';
+import { checked, coordinator, error, fileOf, sample, submissionId, therapist } from './sample-submission.ts';
 import SubmitPage from './submit-page.tsx';
 
 const path = `/api/submissions/${submissionId}`;
@@ -86,6 +86,27 @@ describe('a cell with a finding', () => {
     expect(document.activeElement).toBe(list);
     fireEvent.click(list);
     expect(screen.getAllByRole('option').map(({ textContent }) => textContent)).toContain('completed');
+  });
+
+  it('is not offered to be left empty where it was found empty and its row needs it', async () => {
+    const empty = [
+      finding({ rule: 'F20', line: 3, column: 'hr_rest', found: 'An empty cell.' }),
+      finding({ rule: 'F20', line: 4, column: 'surface', table: 'bouts', found: 'An empty cell.' }),
+      finding({ rule: 'F11', line: 5, column: 'surface', table: 'bouts', found: 'None of the codes.' }),
+    ];
+    const files = [...withErrors.files, fileOf('bouts')];
+    open({ [`GET ${path}/findings`]: { items: empty, page: 1, pageSize: 50, total: empty.length } }, { ...withErrors, files });
+    const codesAt = async (line: number) => {
+      await press(`Mend surface in line ${line} of bouts`);
+      fireEvent.click(screen.getByRole('button', { name: new RegExp(`New value of surface, line ${line}`) }));
+      const codes = screen.getAllByRole('option').map(({ textContent }) => textContent);
+      fireEvent.keyDown(screen.getByRole('listbox'), { key: 'Escape' });
+      return codes;
+    };
+    expect(await codesAt(4)).not.toContain('Leave the cell empty');
+    expect(screen.getByText(/It is empty now, and its row needs it\./).textContent).not.toContain('May be empty');
+    expect(await codesAt(5)).toContain('Leave the cell empty');
+    expect(screen.getByText(/May be empty\. What it holds now stands only in the file: look there\./)).toBeTruthy();
   });
 
   it('goes on to the next with Enter and takes back what was typed with Escape', async () => {

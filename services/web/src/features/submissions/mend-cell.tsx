@@ -10,10 +10,12 @@ import { tableName } from './table-names.ts';
 
 export interface MendCellProps {
   readonly place: CellPlace;
+  /** It was found empty where its row needs it. */
+  readonly mustBeFilled: boolean;
   readonly drafts: MendDrafts;
 }
 
-export function MendCell({ place, drafts }: MendCellProps) {
+export function MendCell({ place, mustBeFilled, drafts }: MendCellProps) {
   const draft = drafts.valueAt(place);
   const [isOpen, setOpen] = useState(false);
   const words = `${place.column} in line ${place.line} of ${tableName(place.table).toLowerCase()}`;
@@ -33,7 +35,7 @@ export function MendCell({ place, drafts }: MendCellProps) {
   return (
     // Keys go up from the field: Enter goes on to the next place, Escape takes the typed value back.
     <div data-mend-cell className="grid w-72 gap-1 px-1 py-2" onKeyDown={(event) => goOn(event, leave)}>
-      <Field place={place} drafts={drafts} value={draft} takesFocus={isOpen} />
+      <Field place={place} mustBeFilled={mustBeFilled} drafts={drafts} value={draft} takesFocus={isOpen} />
       <div>
         <Button variant="quiet" onPress={leave} aria-label={`Leave ${words} as it is`}>
           Leave as it is
@@ -43,7 +45,12 @@ export function MendCell({ place, drafts }: MendCellProps) {
   );
 }
 
-function Field({ place, drafts, value, takesFocus }: MendCellProps & { readonly value: string | undefined; readonly takesFocus: boolean }) {
+interface FieldProps extends MendCellProps {
+  readonly value: string | undefined;
+  readonly takesFocus: boolean;
+}
+
+function Field({ place, mustBeFilled, drafts, value, takesFocus }: FieldProps) {
   const input = useRef<HTMLInputElement>(null);
   const button = useRef<HTMLButtonElement>(null);
   useEffect(() => {
@@ -52,11 +59,11 @@ function Field({ place, drafts, value, takesFocus }: MendCellProps & { readonly 
   const { table, line, column } = place;
   const variable = variableAt(table, column);
   if (variable === undefined) return null;
-  const codes = codesOf(variable);
+  const codes = codesOf(variable, mustBeFilled);
   const shared = {
     id: `mend-${table}-${line}-${column}`,
     label: `New value of ${column}, line ${line}`,
-    hint: expectedWords(variable),
+    hint: `${expectedWords(variable, mustBeFilled)} ${mustBeFilled ? 'It is empty now, and its row needs it.' : 'What it holds now stands only in the file: look there.'}`,
     onChange: (written: string) => drafts.write(place, written),
   };
   if (codes !== null) return <Select {...shared} ref={button} value={value ?? null} options={codes} placeholder="Choose a code" />;
