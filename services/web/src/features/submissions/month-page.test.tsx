@@ -49,6 +49,14 @@ describe('the months of a site', () => {
     expect(asked.find(({ method }) => method === 'POST')?.body).toEqual({ siteId: site.id, month: '2026-11' });
   });
 
+  it('show what can be done with each beside its name where the window is narrow', async () => {
+    vi.stubGlobal('matchMedia', () => Object.assign(new EventTarget(), { matches: true }));
+    open();
+    const table = await screen.findByRole('table', { name: 'Months of North Harbour Clinic' });
+    const headers = within(table).getAllByRole('columnheader');
+    expect(headers.slice(0, 3).map(({ textContent }) => textContent)).toEqual(['Month', 'Next', 'State']);
+  });
+
   it('stand in a table with their state, the way to the receipt, and to a correction', async () => {
     open();
     const table = await screen.findByRole('table', { name: 'Months of North Harbour Clinic' });

@@ -4,6 +4,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useNavigate } from 'react-router-dom';
 import { formatDate, formatInstant, formatMonth, formatShare } from '../../lib/format.ts';
 import { monthStateWords } from '../../lib/month-states.ts';
+import { useNarrowWindow } from '../../lib/use-narrow-window.ts';
 import { Answer } from '../../ui/answer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ErrorNotice } from '../../ui/error-notice.tsx';
@@ -55,9 +56,11 @@ type MonthsProps = ResponseOf<typeof listMonths> & { readonly isCoordinator: boo
 function Months({ site, months, isCoordinator }: MonthsProps) {
   const open = useOpenSubmission();
   const navigate = useNavigate();
+  const isNarrow = useNarrowWindow();
   const openMonth = (month: string) =>
     open.mutate({ siteId: site.id, month }, { onSuccess: (submission) => void navigate(`/submit/${submission.id}`) });
   const opening = open.isPending ? open.variables.month : null;
+  const columns = columnsFor(site, isCoordinator, opening, openMonth);
   const past = months.filter(({ state }) => state !== 'not-yet-due');
   return (
     <>
@@ -84,7 +87,7 @@ function Months({ site, months, isCoordinator }: MonthsProps) {
           <Table
             id="months"
             caption={`Months of ${site.name}`}
-            columns={columnsFor(site, isCoordinator, opening, openMonth)}
+            columns={isNarrow ? actsSecond(columns) : columns}
             rows={months}
             rowKey={({ month }) => month}
             empty="The site has no month to submit yet."
@@ -120,6 +123,12 @@ function columnsFor(site: Site, isCoordinator: boolean, opening: string | null, 
     },
   ];
 }
+
+/** What can be done with a month stays in sight without moving the table sideways. */
+const actsSecond = (columns: readonly Column<Month>[]): readonly Column<Month>[] => {
+  const placeOf = ({ isRowHeader, isAct }: Column<Month>) => (isRowHeader === true ? 0 : isAct === true ? 1 : 2);
+  return [...columns].sort((a, b) => placeOf(a) - placeOf(b));
+};
 
 const wordsOf = ({ state, acceptedAt, closed }: Month): string => {
   const begunAgain = state === 'in-progress' || state === 'checking';

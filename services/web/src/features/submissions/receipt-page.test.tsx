@@ -24,7 +24,7 @@ it('tells who had what accepted when, by table, by file and with every warning t
   expect(facts.getByText('Mara Lind')).toBeTruthy();
   expect(facts.getByText(/^1 December 2026, \d\d:\d\d \S+$/)).toBeTruthy();
   expect(facts.getByText(receipt.digest)).toBeTruthy();
-  expect(screen.getByRole('row', { name: 'Sessions 88 2 0 1' })).toBeTruthy();
+  expect(screen.getByRole('row', { name: 'Sessions 1 2 88 0' })).toBeTruthy();
   expect(screen.getByRole('row', { name: `Sessions sessions.csv 90 0 ${'ab'.repeat(32)}` })).toBeTruthy();
   expect(await screen.findByRole('row', { name: `T04 ${warning.statement} 2 Short steps are right for this person.` })).toBeTruthy();
 });
