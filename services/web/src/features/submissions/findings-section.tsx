@@ -24,7 +24,7 @@ export interface FindingsSectionProps {
 export function FindingsSection({ submission, isCoordinator, drafts, mends }: FindingsSectionProps) {
   const { findings } = submission;
   if (findings.length === 0) return null;
-  const errors = findings.filter(({ severity }) => severity === 'error');
+  const errors = identifyingFirst(findings.filter(({ severity }) => severity === 'error'));
   const warnings = findings.filter(({ severity }) => severity === 'warning');
   // A file sent anew begins the findings anew, so reasons wait until the errors are mended.
   const takesReasons = isCoordinator && errors.length === 0;
@@ -64,6 +64,10 @@ export function FindingsSection({ submission, isCoordinator, drafts, mends }: Fi
     </>
   );
 }
+
+/** What tells who somebody is comes before everything else. */
+const identifyingFirst = (groups: readonly Group[]): readonly Group[] =>
+  [...groups].sort((a, b) => Number(b.rule === 'F50') - Number(a.rule === 'F50'));
 
 function warningTitle(submission: Submission, count: number): string {
   const open = openWarnings(submission).length;

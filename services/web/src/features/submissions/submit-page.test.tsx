@@ -228,6 +228,17 @@ describe('findings', () => {
     expect(Object.fromEntries(question)).toEqual({ table: 'sessions', severity: 'error', page: '2' });
   });
 
+  it('begin with what tells who somebody is', async () => {
+    const identifying = { ...error, rule: 'F50', statement: 'Nothing in a file identifies a person.' };
+    open(checked({ findings: [error, identifying, warning], preview: null }));
+    await screen.findByRole('heading', { name: identifying.statement });
+    expect(screen.getAllByRole('heading', { level: 4 }).map(({ textContent }) => textContent)).toEqual([
+      identifying.statement,
+      error.statement,
+      warning.statement,
+    ]);
+  });
+
   it('can be taken along as a list and in the cells of the files', async () => {
     open(withFindings);
     const link = async (name: RegExp) => (await screen.findByRole('link', { name })).getAttribute('href');
@@ -340,6 +351,23 @@ describe('the commit', () => {
     expect(asked.some(({ method }) => method === 'POST')).toBe(false);
     await press('Give it up');
     await waitFor(() => expect(router.state.location.pathname).toBe('/month'));
+  });
+});
+
+describe('a correction', () => {
+  it('is called one, and says that the accepted month stands until it is committed', async () => {
+    const before = {
+      month: '2026-11',
+      state: 'in-progress',
+      dueOn: '2026-12-15',
+      submissionId,
+      acceptedAt: '2026-12-01T09:00:00.000Z',
+      rows: 4,
+      closed: null,
+    };
+    open(sample(), { [`GET /api/sites/${sample().site.id}/months`]: { site: sample().site, months: [before] } });
+    expect(await heading('Correct November 2026')).toBeTruthy();
+    expect(screen.getByText(/has been accepted before\. This corrects it/)).toBeTruthy();
   });
 });
 

@@ -20,7 +20,7 @@ import { useMendDrafts } from './mend-drafts.ts';
 import { useOutgoingFiles } from './outgoing-files.ts';
 import { ReviewSection } from './review-section.tsx';
 import { stackSteps } from './stack-steps.ts';
-import { submissionQuery } from './submissions.queries.ts';
+import { monthsQuery, submissionQuery } from './submissions.queries.ts';
 
 export default function SubmitPage() {
   const { submissionId = '' } = useParams();
@@ -50,16 +50,28 @@ function Submit({ submission, isCutOff }: { readonly submission: Submission; rea
   const mends = useMendDrafts(submission);
   const unsent = outgoing.files.length;
   const month = formatMonth(submission.month);
+  const { data: known } = useQuery(monthsQuery(site.id));
+  const isCorrection = known?.months.find((one) => one.month === submission.month)?.acceptedAt != null;
   const isSettled = status === 'accepted' || status === 'superseded' || status === 'discarded';
   return (
     <Page
-      title={isSettled ? `Submission of ${month}` : `Submit ${month}`}
+      title={isSettled ? `Submission of ${month}` : `${isCorrection ? 'Correct' : 'Submit'} ${month}`}
       kicker={
         <>
           {site.name} ({site.code}), <TextLink to={`/month?site=${site.code}`}>all months</TextLink>
         </>
       }
-      lead={<p>{leadOf(submission, isCoordinator)}</p>}
+      lead={
+        <>
+          {isCorrection && !isSettled && (
+            <p>
+              {month} has been accepted before. This corrects it: what is committed here takes its place, and until then the accepted month
+              stands.
+            </p>
+          )}
+          <p>{leadOf(submission, isCoordinator)}</p>
+        </>
+      }
       note={
         <p>
           Begun by {submission.createdBy} on {formatInstant(submission.createdAt)}.
