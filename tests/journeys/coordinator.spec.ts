@@ -15,7 +15,27 @@ async function sendFiles(page: Page, { files }: ExampleMonth): Promise<void> {
   await page.getByRole('button', { name: 'Choose files' }).click();
   await (await window).setFiles([...files]);
   await page.getByRole('button', { name: `Send ${files.length} files` }).click();
-  await expect(page.getByRole('list', { name: 'Files not sent yet' })).toBeHidden();
+}
+
+const allArrived = (page: Page) => expect(page.getByRole('list', { name: 'Files not sent yet' })).toBeHidden();
+
+/** A file as the clinic has it, chosen as if it were prepared, does not leave the browser. */
+async function chooseRawFile(page: Page): Promise<void> {
+  const changes: string[] = [];
+  page.on('request', (request) => {
+    if (request.method() !== 'GET') changes.push(request.url());
+  });
+  const window = page.waitForEvent('filechooser');
+  await page.getByRole('button', { name: 'Choose files' }).click();
+  const buffer = Buffer.from('participant,surname\r\n00417723,Rosenquist\r\n');
+  await (await window).setFiles([{ name: 'participants.csv', mimeType: 'text/csv', buffer }]);
+  const list = page.getByRole('list', { name: 'Files not sent yet' });
+  await expect(list.getByText(/^Nothing of this file has left your browser\./)).toBeVisible();
+  await expect(list.getByText(/^Participants, line 2, column participant/)).toBeVisible();
+  await expect(list.getByRole('link', { name: 'Prepare the clinic’s files' })).toBeVisible();
+  await expect(page.getByRole('button', { name: /^Send / })).toBeHidden();
+  expect(changes).toEqual([]);
+  await page.getByRole('button', { name: 'Leave out participants.csv' }).click();
 }
 
 // Every page is looked at in four ways, which takes its time on a busy machine.
@@ -37,6 +57,7 @@ test('turns the clinic’s files into an accepted month, and the same files agai
     .click();
   await expect(page.getByRole('heading', { level: 1, name: `Submit ${month}` })).toBeVisible();
   await look(page, 'coordinator-2-no-files');
+  await chooseRawFile(page);
   const window = page.waitForEvent('filechooser');
   await page.getByRole('button', { name: 'Choose files' }).click();
   await (await window).setFiles([...example.files]);
@@ -79,8 +100,9 @@ test('turns the clinic’s files into an accepted month, and the same files agai
   await page.getByRole('link', { name: 'Months of the site' }).click();
   await expect(nextStep(page).getByText('Nothing is due')).toBeVisible();
   await page.getByRole('button', { name: `Correct ${month}` }).click();
-  await expect(page.getByRole('heading', { level: 1, name: `Submit ${month}` })).toBeVisible();
+  await expect(page.getByRole('heading', { level: 1, name: `Correct ${month}` })).toBeVisible();
   await sendFiles(page, example);
+  await allArrived(page);
   await page.getByRole('button', { name: `Check ${month}` }).click();
   await expect(page.getByText('The registry already holds just these rows. A commit would change nothing.')).toBeVisible();
   await page.getByRole('button', { name: 'Give up this submission' }).click();
@@ -108,6 +130,10 @@ test('reads by file, line and column what to mend, and nothing enters the regist
     .getByRole('button', { name: `Submit ${month}` })
     .click();
   await sendFiles(page, example);
+  const question = page.getByRole('alertdialog', { name: 'Send these files?' });
+  await expect(question).toContainText('column remarks');
+  await question.getByRole('button', { name: /^Send / }).click();
+  await allArrived(page);
   await page.getByRole('button', { name: `Check ${month}` }).click();
   await expect(page.getByRole('heading', { name: 'Findings', exact: true })).toBeVisible();
   await expect(page.getByText(/^\d+ errors and \d+ warnings found\./)).toBeVisible();
