@@ -366,7 +366,7 @@ test('renews the site key, and the registry holds the people under their new cod
   await expect(sheet.getByText('3 codes were replaced.')).toBeVisible();
   expect(await saveKey(page, sheet)).not.toBe(key);
   await sheet.getByRole('button', { name: 'Tell the registry' }).click();
-  await expect(sheet.getByText('The registry has replaced the codes.')).toBeVisible();
+  await expect(sheet.getByText('The registry has replaced 3 codes.')).toBeVisible();
   const now = new Set(await heldCodes(page));
   expect(held.filter((code) => !now.has(code))).toHaveLength(3);
   expect(now.size).toBe(held.length);

@@ -184,6 +184,7 @@ describe('preparing a month inside the registry', () => {
     drop('#files', csvFile('sessions.csv', sessionsCsv));
     const title = await screen.findByText(/files of another month: 0 of 4 rows of Sessions are of November 2026/);
     expect(title.compareDocumentPosition(screen.getByRole('heading', { name: 'Columns' }))).toBe(Node.DOCUMENT_POSITION_FOLLOWING);
+    expect(screen.getByText('The preview is ready. Take care: the files look like those of another month.')).toBeTruthy();
     expect(screen.getByText(/I have looked at files that look like those of another month: 0 of 4 rows/)).toBeTruthy();
     expect(screen.getByText('Ages sent as 90').nextElementSibling?.textContent).toBe('none');
   });
@@ -307,7 +308,7 @@ describe('the site key', () => {
     fireEvent.change(within(form).getByLabelText(/^Passphrase/), { target: { value: passphrase } });
     await press('Make one key of both');
     await screen.findByText(/The two copies are one now/);
-    await screen.findByText(/it knows 2 people/);
+    await screen.findByText(/it knows 2 people, 2 of them not yet in its file, and was saved 2 times/);
     expect(screen.getByText(/No code had to be replaced/)).toBeTruthy();
   });
 

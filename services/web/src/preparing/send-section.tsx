@@ -47,7 +47,7 @@ export function SendSection({ title, month, prepared, site, calendarMonth, surro
         {prepared.newToKey !== null && <UnknownRegistry people={prepared.people} newToKey={prepared.newToKey} />}
         {things.length > 0 && (
           <Checkbox id="looked-at" value={isLookedAt} onChange={(isTicked) => setLookedAt(isTicked ? prepared : null)}>
-            I have looked at {things.join(', at ')}.
+            I have looked at {things.join('; at ')}.
           </Checkbox>
         )}
         <SaveKey month={month} />

@@ -5,7 +5,7 @@ import { startTransition, useCallback, useEffect, useMemo, useReducer, useRef } 
 import { saveFile } from '../lib/save-file.ts';
 import { announce } from '../ui/announcer.tsx';
 import type { Sending } from './messages.ts';
-import { obstacleOf, reduceMonth, startState } from './month-state.ts';
+import { isOfAnotherMonth, obstacleOf, reduceMonth, startState } from './month-state.ts';
 import type { MonthState } from './month-state.ts';
 import { WorkRefused } from './worker-client.ts';
 import type { Workroom } from './worker-client.ts';
@@ -76,7 +76,9 @@ export function useMonth(workroom: Workroom, circumstances: Circumstances): Mont
         const worked = await ask('prepare', null, { signal });
         // The preview is large: drawn in slices, the page stays answerable meanwhile.
         startTransition(() => dispatch({ kind: 'prepared', ...worked }));
-        announce('The preview is ready.');
+        const { rowsInMonth } = worked.prepared;
+        const isWrongMonth = rowsInMonth !== null && isOfAnotherMonth(rowsInMonth);
+        announce(`The preview is ready.${isWrongMonth ? ' Take care: the files look like those of another month.' : ''}`);
       } catch (error) {
         if (underWay.current !== control) return;
         refuse(error);

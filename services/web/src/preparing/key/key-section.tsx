@@ -1,6 +1,6 @@
 /** The site key: opened, made, or open and told of. */
 import { useState } from 'react';
-import { formatCount } from '../../lib/format.ts';
+import { formatCount, formatNumber } from '../../lib/format.ts';
 import { Button } from '../../ui/button.tsx';
 import { Facts } from '../../ui/facts.tsx';
 import { Loading } from '../../ui/loading.tsx';
@@ -101,12 +101,14 @@ function OpenedKey({
   keyPicture,
   isWhole,
 }: Pick<KeySectionProps, 'month' | 'site' | 'isWhole'> & { readonly keyPicture: KeyPicture }) {
-  const { people, revision, lacking } = keyPicture;
+  const { people, revision, lacking, changes } = keyPicture;
+  const unsaved = changes?.newPeople ?? 0;
   const facts = <KeyFacts keyPicture={keyPicture} />;
   return (
     <div className="grid gap-6">
       <p>
-        The key of {site} is open: it knows {formatCount(people, 'person', 'people')} and was saved {formatCount(revision, 'time')}.
+        The key of {site} is open: it knows {formatCount(people, 'person', 'people')}
+        {unsaved > 0 && `, ${formatNumber(unsaved)} of them not yet in its file,`} and was saved {formatCount(revision, 'time')}.
       </p>
       {lacking !== null && (
         <Notice
