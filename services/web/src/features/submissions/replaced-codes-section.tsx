@@ -33,8 +33,8 @@ export function ReplacedCodesSection({ site }: { readonly site: Site }) {
     >
       <div className="grid max-w-2xl justify-items-start gap-4">
         <p>
-          A month that was prepared without the server may come with a file <code>replaced-codes.csv</code>. Give it to the registry before
-          the tables of that month.
+          A month that was prepared without the server may come with a file <code className="whitespace-nowrap">replaced-codes.csv</code>.
+          Give it to the registry before the tables of that month.
         </p>
         <FileDrop label="File of replaced codes" accept={['.csv']} onFiles={(files) => void take(files)} />
         {read !== null && 'fault' in read && (

@@ -7,6 +7,7 @@ import { announce } from '../../ui/announcer.tsx';
 import { Answer } from '../../ui/answer.tsx';
 import { Button } from '../../ui/button.tsx';
 import { ConfirmDialog } from '../../ui/confirm-dialog.tsx';
+import { Landing } from '../../ui/landing.tsx';
 import { Section } from '../../ui/page.tsx';
 import { Table } from '../../ui/table.tsx';
 import type { Column } from '../../ui/table.tsx';
@@ -28,6 +29,7 @@ export function SafeHeaders({ site, account }: { readonly site: Site; readonly a
         </>
       }
     >
+      <Landing name="safe-headers" label="Headers marked as safe" />
       <p className="mb-4 max-w-2xl">
         A file is refused when the header of a column announces what identifies a person, such as “mobile”. Where it means something else at
         this site, {mayMark ? 'mark it here' : 'ask a data steward to mark it'}.

@@ -1,4 +1,4 @@
-import { screen } from '@testing-library/react';
+import { fireEvent, screen, waitFor } from '@testing-library/react';
 import { expect, it } from 'vitest';
 import { fakeApi, signedInAs, site } from '../../testing/fake-api.ts';
 import { renderRoutes } from '../../testing/render.tsx';
@@ -42,7 +42,9 @@ it('leads to the headers below a long list, and keeps the site chosen', async ()
   open(coordinator, page({ ...line, status: 'accepted' }));
   const link = await screen.findByRole('link', { name: 'Headers marked as safe' });
   expect(link.getAttribute('href')).toBe('/submissions?site=S02#safe-headers');
-  expect((await screen.findByRole('region', { name: 'Headers marked as safe' })).id).toBe('safe-headers');
+  fireEvent.click(link);
+  const section = await screen.findByRole('region', { name: 'Headers marked as safe' });
+  await waitFor(() => expect(section.contains(document.activeElement)).toBe(true));
 });
 
 it('says where to begin while there is none', async () => {
