@@ -3,6 +3,8 @@ import type { TableKey } from '@cairnstep/dictionary';
 import { describe, expect, it } from 'vitest';
 import { FindingLog } from '../finding-log.ts';
 import { readTable } from '../reading/read-csv.ts';
+import { readWorkbook } from '../reading/workbook/read-workbook.ts';
+import { makeWorkbook } from '../test-support/make-workbook.ts';
 import { countUnscreened } from './count-unscreened.ts';
 import { TableScreen } from './table-screen.ts';
 
@@ -38,6 +40,26 @@ describe('the screen of a table', () => {
     expect((await screened('participants', { [header]: '' })).identifies).toBe(true);
     expect((await screened('participants', { [header]: '' }, [header])).identifies).toBe(false);
     expect((await screened('participants', { [header]: '12/05/1961' }, [header])).identifies).toBe(true);
+  });
+
+  it('finds the date in a cell of a workbook that a spreadsheet program has made one of', async () => {
+    const workbook = makeWorkbook({
+      sheets: [
+        {
+          name: 'bouts',
+          rows: [
+            ['bout_no', 'steps'],
+            [2, { xml: '<c r="@" s="1"><v>45000</v></c>' }],
+          ],
+        },
+      ],
+      styles: '<cellXfs><xf numFmtId="0"/><xf numFmtId="14"/></cellXfs>',
+    });
+    const log = new FindingLog();
+    const screen = new TableScreen('bouts', new Set());
+    await readWorkbook(workbook, log, undefined, () => ({ watch: screen }));
+    expect(screen.report(log)).toBe(true);
+    expect(log.byRule().find(({ id }) => id === 'F50')?.kept).toMatchObject([{ line: 2, column: 'steps' }]);
   });
 });
 

@@ -132,7 +132,9 @@ function OneFile({ submissionId, file: outgoingFile, outgoing, replaced }: OneFi
           words={`${file.name}: ${formatBytes(Math.round(file.size * sent))} of ${size}`}
         />
       )}
-      {replaced !== undefined && replaced.mended > 0 && <p className="max-w-2xl text-amber">{lossWords(replaced.mended)}</p>}
+      {replaced !== undefined && replaced.mended > 0 && !isStopped(outgoingFile) && (
+        <p className="max-w-2xl text-amber">{lossWords(replaced.mended)}</p>
+      )}
       {isLookedAt(outgoingFile) && <p className="text-quiet">Looking through {file.name}, here in your browser.</p>}
       {looked !== null && <LookOutcome submissionId={submissionId} looked={looked} />}
       {error !== null && <Failure error={error} lookAgain={() => outgoing.lookAgain(id)} />}

@@ -42,9 +42,9 @@ export function SendFiles({ outgoing: { files, isSending }, held, isDisabled, on
         <div className="grid gap-3">
           {doubts.length > 0 && (
             <div>
-              <p>Something in them might tell who somebody is:</p>
+              <p>Something in what you send might tell who somebody is:</p>
               <PlaceList places={doubts} />
-              <p>Send them only when you have looked, and it does not. The check asks for the reason once more.</p>
+              <p>Send it only when you have looked, and it does not. The check asks for the reason once more.</p>
             </div>
           )}
           {lost > 0 && <p>{lossWords(lost)}</p>}
