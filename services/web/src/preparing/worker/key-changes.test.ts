@@ -3,7 +3,7 @@ import { createKeyFile, joinLocalIds, rotateKey } from '@cairnstep/deidentificat
 import type { ColumnMatch, SiteKey } from '@cairnstep/deidentification';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { passphrase } from '../sample-month.ts';
-import { keyChanges } from './key-changes.ts';
+import { keyChanges as changesAfter, noActs } from './key-changes.ts';
 
 const known = 'S0000000000000000000A1';
 const other = 'S0000000000000000000B2';
@@ -24,7 +24,8 @@ beforeAll(async () => {
     ]),
   };
 });
-const nothing = { newPeople: 0, changedPeople: 0, columns: [], hasNewLength: false, hasOtherCodes: false };
+const nothing = { newPeople: 0, changedPeople: 0, columns: [], hasNewLength: false, hasOtherCodes: false, hasNewPassphrase: false };
+const keyChanges = (before: SiteKey, after: SiteKey) => changesAfter(before, after, noActs);
 
 describe('a key that holds no more than its file', () => {
   it('is not changed by being saved, by fewer people and columns, or by another order of them', () => {
@@ -69,5 +70,10 @@ describe('a key that holds more than its file', () => {
     const { key: one } = await joinLocalIds(saved, '0042', '0042');
     const { key: joined } = await joinLocalIds(one, '0042', '0043');
     expect(keyChanges(one, joined)).toEqual({ ...nothing, hasOtherCodes: true });
+  });
+
+  it('tells of an act on the key, whatever came of it', () => {
+    expect(changesAfter(saved, saved, { ...noActs, hasOtherCodes: true })).toEqual({ ...nothing, hasOtherCodes: true });
+    expect(changesAfter(saved, saved, { ...noActs, hasNewPassphrase: true })).toEqual({ ...nothing, hasNewPassphrase: true });
   });
 });

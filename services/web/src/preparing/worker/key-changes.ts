@@ -13,14 +13,21 @@ export interface KeyChanges {
   readonly hasNewLength: boolean;
   /** There is a new secret, or codes lead to other people than before. */
   readonly hasOtherCodes: boolean;
+  /** The file is locked with an earlier passphrase. */
+  readonly hasNewPassphrase: boolean;
 }
+
+/** What was done to the key itself: it asks for a file with a higher number, even where the content came out the same. */
+export type KeyActs = Pick<KeyChanges, 'hasOtherCodes' | 'hasNewPassphrase'>;
+
+export const noActs: KeyActs = { hasOtherCodes: false, hasNewPassphrase: false };
 
 /**
  * What was forgotten is no change: a file of few people or columns takes nothing away from the months after it.
  *
  * @returns null where the file holds all that later months need; how often it was saved is not among that
  */
-export function keyChanges(saved: SiteKey, current: SiteKey): KeyChanges | null {
+export function keyChanges(saved: SiteKey, current: SiteKey, acts: KeyActs): KeyChanges | null {
   const carriedOver = new Set(current.generations.flatMap(({ replacedBy }) => [...replacedBy.values()]));
   const isNew = (code: string) => !saved.people.has(code) && !carriedOver.has(code);
   const changes: KeyChanges = {
@@ -31,11 +38,14 @@ export function keyChanges(saved: SiteKey, current: SiteKey): KeyChanges | null 
       .map(([table]) => table),
     hasNewLength: [...current.idLengths.keys()].some((length) => !saved.idLengths.has(length)),
     hasOtherCodes:
+      acts.hasOtherCodes ||
       saved.generations.length !== current.generations.length ||
       current.generations.some((generation, age) => leadsElsewhere(saved.generations[age], generation, isNew)),
+    hasNewPassphrase: acts.hasNewPassphrase,
   };
-  const { newPeople, changedPeople, columns, hasNewLength, hasOtherCodes } = changes;
-  return newPeople > 0 || changedPeople > 0 || columns.length > 0 || hasNewLength || hasOtherCodes ? changes : null;
+  const { newPeople, changedPeople, columns, hasNewLength, hasOtherCodes, hasNewPassphrase } = changes;
+  const isAny = newPeople > 0 || changedPeople > 0 || columns.length > 0 || hasNewLength || hasOtherCodes || hasNewPassphrase;
+  return isAny ? changes : null;
 }
 
 function isChanged(before: KnownPerson | undefined, { indexDate, age, lastDay }: KnownPerson): boolean {

@@ -13,7 +13,8 @@ import {
 import type { ReplacedCode, SiteKey } from '@cairnstep/deidentification';
 import { chainCodes } from './chain-codes.ts';
 import { hexadecimal } from './hexadecimal.ts';
-import { keyChanges } from './key-changes.ts';
+import { keyChanges, noActs } from './key-changes.ts';
+import type { KeyActs } from './key-changes.ts';
 import type { Circumstances, KeyPicture, NewKey, SavedFile } from './protocol.ts';
 import { Refusal } from './refusal.ts';
 import { spellingsOf } from './spellings.ts';
@@ -23,8 +24,8 @@ interface OpenedKey {
   readonly passphrase: string;
   /** What the file holds, to tell whether the key has more. */
   readonly saved: SiteKey;
-  /** The file is locked with an earlier passphrase. */
-  readonly isRelocked: boolean;
+  /** Since the file was saved or opened. */
+  readonly acts: KeyActs;
 }
 
 /** What a month adds to the key, as long as it is neither saved nor given up. */
@@ -87,7 +88,7 @@ export class KeyDesk {
     const { key, file } = await saveKeyFile(this.current, passphrase);
     this.replaced = this.codesToReplace;
     this.metHere = this.metUntilNow();
-    this.opened = { key, passphrase, saved: key, isRelocked: false };
+    this.opened = { key, passphrase, saved: key, acts: noActs };
     this.addition = null;
     return this.fileOf(key, file);
   }
@@ -126,7 +127,8 @@ export class KeyDesk {
 
   /** The present file stays locked with the old passphrase; the key counts as unsaved until a file is locked with the new one. */
   changePassphrase(passphrase: string): void {
-    this.opened = { ...this.require(), passphrase, isRelocked: true };
+    const opened = this.require();
+    this.opened = { ...opened, passphrase, acts: { ...opened.acts, hasNewPassphrase: true } };
   }
 
   /** Codes of which the registry does not know yet that others took their place. */
@@ -142,8 +144,8 @@ export class KeyDesk {
 
   picture(): KeyPicture | null {
     if (this.opened === null) return null;
-    const { key, saved, isRelocked } = this.opened;
-    const changes = keyChanges(saved, this.current);
+    const { key, saved, acts } = this.opened;
+    const changes = keyChanges(saved, this.current, acts);
     const { mode, idType, normalisation, people, generations, matches } = this.current;
     return {
       keyId: generations[0].keyId,
@@ -155,7 +157,7 @@ export class KeyDesk {
       peopleWithFirstDay: [...people.values()].filter(({ indexDate }) => indexDate !== undefined).length,
       secrets: generations.length,
       tables: [...matches.keys()],
-      isUnsaved: isRelocked || changes !== null,
+      isUnsaved: changes !== null,
       changes,
       lacking: this.lacking(),
       codesToReplace: this.codesToReplace.length,
@@ -187,7 +189,7 @@ export class KeyDesk {
   }
 
   private take({ key, passphrase }: Pick<OpenedKey, 'key' | 'passphrase'>): void {
-    this.opened = { key, passphrase, saved: key, isRelocked: false };
+    this.opened = { key, passphrase, saved: key, acts: noActs };
     this.addition = null;
     this.metHere = new Set();
     this.replaced = this.leftToReplace(key);
@@ -202,7 +204,8 @@ export class KeyDesk {
   }
 
   private change(key: SiteKey, replaced: readonly ReplacedCode[]): void {
-    this.opened = { ...this.require(), key };
+    const opened = this.require();
+    this.opened = { ...opened, key, acts: { ...opened.acts, hasOtherCodes: true } };
     this.addition = null;
     this.metHere = renamed(this.metHere, replaced);
     this.replaced = chainCodes(this.replaced, replaced);

@@ -54,7 +54,7 @@ export interface KeyPicture {
   readonly tables: readonly TableKey[];
   /** Holds something that its file does not. */
   readonly isUnsaved: boolean;
-  /** What that is; null where it is nothing but another passphrase, or nothing at all. */
+  /** What that is; null where it is nothing. */
   readonly changes: KeyChanges | null;
   /** Participants of the registry that the key does not know; null when it knows all, or nobody can tell. */
   readonly lacking: { readonly missing: number; readonly of: number } | null;
