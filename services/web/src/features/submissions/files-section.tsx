@@ -1,6 +1,6 @@
 /** Read and prepare: the month's files, chosen, each given its table, and sent. */
 import type { Submission } from '@cairnstep/contract';
-import { formatMonth } from '../../lib/format.ts';
+import { formatCount, formatMonth } from '../../lib/format.ts';
 import { LinkButton } from '../../ui/button.tsx';
 import { FileDrop } from '../../ui/file-drop.tsx';
 import { Notice } from '../../ui/notice.tsx';
@@ -46,6 +46,14 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
             before you enter it here. The registry alerts nobody.
           </p>
         </Notice>
+        {isOpen && mended > 0 && (
+          <Notice title={`${formatCount(mended, 'cell')} ${mended === 1 ? 'was' : 'were'} mended on this page.`}>
+            <p>
+              A file that comes in the place of another, prepared here or sent as it is, takes the cells mended in that one with it. The
+              findings workbook holds them.
+            </p>
+          </Notice>
+        )}
         {isOpen && (
           <div className="grid justify-items-start gap-2">
             <h3 className="font-semibold">The files are as the clinic has them</h3>
@@ -60,7 +68,7 @@ export function FilesSection({ submission, outgoing, isOpen }: FilesSectionProps
         {isOpen && (
           <FileDrop
             label={`The files are already prepared: workbook or CSV files of ${formatMonth(submission.month)}`}
-            hint={`All tables of the month at once, or one by one. Each is looked through here before it is sent.${mended > 0 ? ' A file that comes in the place of another takes with it the cells mended on this page.' : ''}`}
+            hint="All tables of the month at once, or one by one. Each is looked through here before it is sent."
             accept={['.xlsx', '.csv']}
             multiple
             isDisabled={outgoing.isSending}

@@ -84,7 +84,7 @@ describe('a file chosen to be sent', () => {
   it('says which mended cells are lost with the file it replaces, and asks first', async () => {
     const { sent } = open(sample({ files: [{ ...fileOf('sessions'), mended: 3 }] }));
     await choose(prepared);
-    expect(screen.getByText(/A file that comes in the place of another takes with it the cells mended on this page/)).toBeTruthy();
+    expect(screen.getByText(/^A file that comes in the place of another, prepared here or sent as it is/)).toBeTruthy();
     expect(await screen.findByText(/^3 cells mended on this page are lost with the old file/)).toBeTruthy();
     await press('Send 1 file');
     expect(screen.getByRole('alertdialog').textContent).toContain('The findings workbook holds them');
