@@ -33,6 +33,8 @@ export const monthsQuery = (siteId: string) =>
   queryOptions({
     queryKey: [...everything, 'months', siteId],
     queryFn: ({ signal }) => call(listMonths, { siteId }, { signal }),
+    // A check that ends changes a month without an act of this browser.
+    staleTime: 0,
   });
 
 export const submissionsQuery = (siteId: string, page: number) =>
