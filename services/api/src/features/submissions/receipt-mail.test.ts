@@ -15,7 +15,7 @@ const receipt: SubmissionReceipt = {
 };
 
 it('says in words which month of which site is in the registry, since when, and what was taken in', () => {
-  const { subject, body } = receiptMail(receipt, 'https://registry.example/submissions/1/receipt');
+  const { subject, body } = receiptMail(receipt, 'https://cairnstep.example/submissions/1/receipt');
   expect(subject).toBe('Cairnstep: November 2026 of North Harbour Clinic (S01) is in the registry');
   expect(body.split('\n')).toEqual([
     'November 2026 of North Harbour Clinic (S01) is in the registry: accepted on 1 December 2026, 08:05 UTC, committed by Mara Lind.',
@@ -23,6 +23,6 @@ it('says in words which month of which site is in the registry, since when, and 
     'Adverse events: 2 new, 0 changed, 1 unchanged, 0 removed',
     '',
     `Digest of what was committed: ${receipt.digest}`,
-    'Receipt: https://registry.example/submissions/1/receipt',
+    'Receipt: https://cairnstep.example/submissions/1/receipt',
   ]);
 });

@@ -1,6 +1,6 @@
 #!/bin/sh
 # Submits one month of a clinic, from its own system, with curl alone.
-#   REGISTRY        address of the registry, such as https://registry.example
+#   REGISTRY        address of the registry, such as https://cairnstep.example
 #   TOKEN_ENDPOINT  of the identity provider: "token_endpoint" in its /.well-known/openid-configuration
 #   CLIENT_ID, CLIENT_SECRET  of the system; an administrator of the registry has registered the client id
 #   MONTH           such as 2026-11

@@ -16,7 +16,7 @@ const system: System = {
   addedBy: 'Ruth Adeyemi',
   lastUsedAt: null,
 };
-const tokens = { issuer: 'https://provider.example', audience: 'https://registry.example/api', scope: 'submissions' };
+const tokens = { issuer: 'https://provider.example', audience: 'https://cairnstep.example/api', scope: 'submissions' };
 
 function open(role: 'administrator' | 'steward', answers: Readonly<Record<string, unknown>> = {}, systems: readonly System[] = [system]) {
   const asked = fakeApi({
@@ -36,7 +36,7 @@ describe("the page of sites' systems", () => {
     open('steward');
     const row = await screen.findByRole('row', { name: /^Training records North Harbour Clinic \(S01\) records-7 active never/ });
     expect(within(row).getByText('by Ruth Adeyemi')).toBeTruthy();
-    expect(await screen.findByText('https://registry.example/api')).toBeTruthy();
+    expect(await screen.findByText('https://cairnstep.example/api')).toBeTruthy();
     expect(screen.queryByRole('button', { name: /^(Disable|Register the)/ })).toBeNull();
   });
 
