@@ -1,11 +1,9 @@
 /** The clinic's own files become files without identity, in this browser, and only those leave it. */
 import type { Submission } from '@cairnstep/contract';
-import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
-import { useNavigate, useParams } from 'react-router-dom';
+import { useNavigate } from 'react-router-dom';
 import { useAccount } from '../../lib/account.ts';
 import { formatMonth } from '../../lib/format.ts';
-import { Answer } from '../../ui/answer.tsx';
 import { LinkButton } from '../../ui/button.tsx';
 import { LeaveQuestion } from '../../ui/leave-question.tsx';
 import { NoPermission } from '../../ui/no-permission.tsx';
@@ -16,25 +14,13 @@ import { maySubmit } from './chosen-site.tsx';
 import { PreparingFrame } from './preparing-frame.tsx';
 import type { PreparingAct } from './preparing-frame.tsx';
 import type { SiteKnowledge } from './preparing.queries.ts';
-import { submissionQuery, useCheck } from './submissions.queries.ts';
+import { useCheck } from './submissions.queries.ts';
 import { usePreparedSending } from './use-prepared-sending.ts';
 import { WithKnowledge } from './with-knowledge.tsx';
+import { WithSubmission } from './with-submission.tsx';
 
 export default function PreparePage() {
-  const { submissionId = '' } = useParams();
-  const query = useQuery(submissionQuery(submissionId));
-  if (query.data === undefined) {
-    return (
-      <Page title="Prepare the clinic’s files">
-        <Section>
-          <Answer query={query} waiting="Reading the submission.">
-            {() => null}
-          </Answer>
-        </Section>
-      </Page>
-    );
-  }
-  return <Prepare key={submissionId} submission={query.data} />;
+  return <WithSubmission title="Prepare the clinic’s files">{(submission) => <Prepare submission={submission} />}</WithSubmission>;
 }
 
 function Prepare({ submission }: { readonly submission: Submission }) {

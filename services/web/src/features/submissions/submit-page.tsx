@@ -2,10 +2,8 @@
 import type { Submission } from '@cairnstep/contract';
 import { useQuery } from '@tanstack/react-query';
 import { useState } from 'react';
-import { useParams } from 'react-router-dom';
 import { useAccount } from '../../lib/account.ts';
 import { formatInstant, formatMonth } from '../../lib/format.ts';
-import { Answer } from '../../ui/answer.tsx';
 import { LinkButton } from '../../ui/button.tsx';
 import { StackProgress } from '../../ui/mark.tsx';
 import { Notice } from '../../ui/notice.tsx';
@@ -20,26 +18,15 @@ import { useMendDrafts } from './mend-drafts.ts';
 import { useOutgoingFiles } from './outgoing-files.ts';
 import { ReviewSection } from './review-section.tsx';
 import { stackSteps } from './stack-steps.ts';
-import { monthsQuery, submissionQuery } from './submissions.queries.ts';
+import { monthsQuery } from './submissions.queries.ts';
+import { WithSubmission } from './with-submission.tsx';
 
 export default function SubmitPage() {
-  const { submissionId = '' } = useParams();
-  const query = useQuery(submissionQuery(submissionId));
-  if (query.data === undefined) {
-    return (
-      <Page title="Submission">
-        <Section>
-          <Answer query={query} waiting="Reading the submission.">
-            {() => null}
-          </Answer>
-        </Section>
-      </Page>
-    );
-  }
-  return <Submit key={submissionId} submission={query.data} isCutOff={query.isRefetchError} />;
+  return (
+    <WithSubmission title="Submission">{(submission, isCutOff) => <Submit submission={submission} isCutOff={isCutOff} />}</WithSubmission>
+  );
 }
 
-/** `isCutOff`: the registry does not answer just now; what is shown may be old. */
 function Submit({ submission, isCutOff }: { readonly submission: Submission; readonly isCutOff: boolean }) {
   const { status, site } = submission;
   const account = useAccount();
