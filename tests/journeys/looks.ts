@@ -17,6 +17,8 @@ const sizes = [
  */
 export async function look(page: Page, name: string): Promise<void> {
   const before = page.viewportSize();
+  // A page that is still being fetched has nothing to look at.
+  await page.getByRole('heading', { level: 1 }).first().waitFor();
   for (const scheme of schemes) {
     await page.emulateMedia({ colorScheme: scheme });
     for (const size of sizes) {
