@@ -49,7 +49,6 @@ async function ensureDatabase(admin: Client, database: string): Promise<void> {
   if (rowCount === 0) await admin.query(`create database ${name} owner ${ownerRole} template template0 encoding 'UTF8'`);
   await admin.query(`revoke all on database ${name} from public`);
   await admin.query(`grant connect on database ${name} to ${loginRole}`);
-  await admin.query(`grant temporary on database ${name} to cairnstep_app`);
   // Rows of a submission arrive by COPY in a table of the transaction's own: COPY does not write where row-level security holds.
   await admin.query(`grant temporary on database ${name} to cairnstep_app`);
 }

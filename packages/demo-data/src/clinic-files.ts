@@ -11,7 +11,7 @@ import type { ClinicMonth, DemoCell, DemoFiles, DemoRow } from './types.ts';
 const dayLength = 86_400_000;
 
 /** Headers of the columns that hold a date where the registry keeps a study day. */
-const dateHeaders: Readonly<Record<string, string>> = {
+export const dateHeaders: Readonly<Record<string, string>> = {
   session_day: 'Session date',
   exam_day: 'Exam date',
   assessment_day: 'Assessment date',

@@ -13,3 +13,4 @@ export type {
 } from './types.ts';
 export { demoRegistry, demoSeed } from './registry.ts';
 export { demoCsv, typedRows } from './csv.ts';
+export { dateHeaders as clinicDateHeaders } from './clinic-files.ts';

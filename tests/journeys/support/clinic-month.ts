@@ -2,7 +2,7 @@
  * A month as an invented clinic has it in its own files: record numbers, names, dates, remarks and serial numbers beside what the
  * registry asks for. The people are those of an invented registry of another seed, each with the rows of their first month.
  */
-import { demoRegistry, typedRows } from '../../../packages/demo-data/src/index.ts';
+import { clinicDateHeaders as dateHeaders, demoRegistry, typedRows } from '../../../packages/demo-data/src/index.ts';
 import type { DemoRow } from '../../../packages/demo-data/src/index.ts';
 import { tableKeys, tableOf } from '../../../packages/dictionary/src/index.ts';
 import type { Row, TableKey } from '../../../packages/dictionary/src/index.ts';
@@ -22,16 +22,6 @@ export interface ClinicMonth {
 
 const seed = 41;
 const dayLength = 86_400_000;
-/** Columns of study days, as dates under these headers. */
-const dateHeaders: Readonly<Record<string, string>> = {
-  session_day: 'Session date',
-  exam_day: 'Exam date',
-  assessment_day: 'Assessment date',
-  event_day: 'Event date',
-  resolved_day: 'Resolved date',
-  signed_day: 'Signing date',
-  valid_until_day: 'Valid until date',
-};
 const ofPerson = ['Patient name', 'Date of birth', 'Phone', 'Date of injury', 'First training date', 'Remarks'];
 
 const dayAfter = (iso: string, days: number): string =>

@@ -1,7 +1,6 @@
 /** A site's key file as its coordinator has it from the months before. */
-import { createKeyFile, normaliseLocalId, saveKeyFile } from '../../../packages/deidentification/src/index.ts';
+import { adoptCodes, createKeyFile, saveKeyFile } from '../../../packages/deidentification/src/index.ts';
 import type { SiteKey } from '../../../packages/deidentification/src/index.ts';
-import { hmacKey, keyedHash } from '../../../packages/deidentification/src/pseudonyms/keyed-hash.ts';
 
 export const passphrase = 'bafo rina tuke sobi malu pegi';
 
@@ -23,21 +22,9 @@ export const keyFile = (text: string, name = 'site-key.json'): KeyFile => ({
  */
 export async function siteKey(site: string, codes: readonly string[]): Promise<{ readonly key: SiteKey; readonly file: string }> {
   const { key } = await createKeyFile({ site, keyId: '2026-01' }, passphrase);
-  const [{ secret }] = key.generations;
-  const hmac = await hmacKey(secret);
-  const remembered = new Map<string, string>();
-  for (const [index, code] of codes.entries()) {
-    const number = normaliseLocalId(`H${9_000_000 + index}`, key.normalisation);
-    const hash = await keyedHash(hmac, ['sci-gait-lookup', '1', site, key.idType, number]);
-    remembered.set(Buffer.from(hash.subarray(0, 16)).toString('base64'), code);
-  }
-  return saveKeyFile(
-    {
-      ...key,
-      revision: 10,
-      generations: [{ ...key.generations[0], codes: remembered }],
-      people: new Map(codes.map((code) => [code, { indexDate: '2025-03-03' }])),
-    },
-    passphrase,
+  const known = await adoptCodes(
+    key,
+    codes.map((code, index) => ({ localId: `H${9_000_000 + index}`, code, indexDate: '2025-03-03' })),
   );
+  return saveKeyFile({ ...known, revision: 10 }, passphrase);
 }
